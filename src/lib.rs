@@ -1,0 +1,18 @@
+//! What a warmer, drier or thirstier year does to a valley's own snow, reservoir and canals.
+//!
+//! `water` and `signs` need neither the standard library nor an allocator; everything that touches files or words is
+//! behind the `std` feature. `DEVELOPERS.md` has the map of the house and says what may import what.
+#![cfg_attr(not(feature = "std"), no_std)]
+
+pub mod picture;
+pub mod signs;
+pub mod water;
+
+#[cfg(feature = "std")]
+pub mod commands;
+#[cfg(feature = "std")]
+pub mod generator;
+#[cfg(feature = "std")]
+pub mod place;
+#[cfg(feature = "std")]
+pub mod words;

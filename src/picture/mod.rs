@@ -1,0 +1,1 @@
+//! What a person sees: drawing on a frame buffer. Draws values; computes none.

@@ -1,0 +1,1 @@
+//! A place folder in, checked values out: TOML and CSV, with every error at its line.

@@ -1,0 +1,1 @@
+//! What is read off a run: annual indicators, comparisons and skill scores.

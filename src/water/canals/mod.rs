@@ -1,0 +1,1 @@
+//! Who gets the water below the dam.

@@ -1,0 +1,1 @@
+//! What a crop asks for and uses: published single-coefficient curves, root zone and yield.

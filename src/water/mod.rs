@@ -1,0 +1,6 @@
+//! The physics and the works: pure, no input or output, no clock, no allocation inside a day, no words.
+
+pub mod canals;
+pub mod crop;
+pub mod evaporation;
+pub mod units;

@@ -1,0 +1,1 @@
+//! Languages, numbers, units and dates: every word that a person can see.

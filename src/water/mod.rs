@@ -7,3 +7,4 @@ pub mod dials;
 pub mod evaporation;
 pub mod units;
 pub mod valley;
+pub mod weather;

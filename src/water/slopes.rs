@@ -143,7 +143,7 @@ impl<const L: usize> Slopes<L> {
 
     /// One day over all bands. With `APART` the rows of even and of odd index are summed in the first and the second
     /// sum; without it all go into the first.
-    #[inline(always)]
+    #[inline(never)]
     pub fn day<const APART: bool>(
         &self,
         curve: impl PowerCurve<L>,

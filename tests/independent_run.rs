@@ -103,8 +103,7 @@ fn soil_fed_with_the_independent_outflow() {
     let (mut recharge, mut evaporation, mut store) = (Vec::new(), Vec::new(), Vec::new());
     for (water, e0) in water.iter().zip(&e0) {
         // The independent run has no snow cover over the soil.
-        let day =
-            constants.day(&mut soil_mm, curve, Lanes::splat(*water), Lanes::splat(*e0), Lanes::splat(0.0));
+        let day = constants.day(&mut soil_mm, curve, Lanes::splat(*water), Lanes::splat(*e0), Lanes::splat(0.0));
         recharge.push(day.recharge_mm.0[0]);
         evaporation.push(day.evaporation_mm.0[0]);
         store.push(soil_mm.0[0]);
@@ -126,8 +125,7 @@ fn ground_stores_fed_with_the_independent_recharge() {
     let mut got = [const { Vec::new() }; 5];
     for recharge in want.numbers("recharge_mm") {
         let day = ground.day(&mut stores, recharge);
-        let values =
-            [day.percolation_mm, day.quick_flow_mm, day.slow_flow_mm, stores.quick_mm, stores.slow_mm];
+        let values = [day.percolation_mm, day.quick_flow_mm, day.slow_flow_mm, stores.quick_mm, stores.slow_mm];
         for (column, value) in got.iter_mut().zip(values) {
             column.push(value);
         }
@@ -145,8 +143,7 @@ fn routing_fed_with_the_independent_flow() {
     let routed: Vec<f64> =
         want.numbers("q_gen_mm").into_iter().map(|generated| channel.day(&mut store, generated)).collect();
     assert_column("q_routed_mm", &routed, &want.numbers("q_routed_mm"), 1e-9, MM_FLOOR);
-    let inflow: Vec<f64> =
-        routed.iter().map(|mm| mm * 24.0 * deshielo::water::units::M3_PER_MM_KM2).collect();
+    let inflow: Vec<f64> = routed.iter().map(|mm| mm * 24.0 * deshielo::water::units::M3_PER_MM_KM2).collect();
     assert_column("inflow_m3", &inflow, &want.numbers("inflow_m3"), 1e-9, 1e-3);
 }
 

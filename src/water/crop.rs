@@ -1,1 +1,0 @@
-//! What a crop asks for and uses: published single-coefficient curves, root zone and yield.

@@ -15,14 +15,7 @@ pub fn readily_available_mm(total_available_mm: f64, depletion_share: f64) -> f6
 
 /// Depletion share on a day of other thirst than the table's 5 mm, kept within 0.1 and 0.8 (FAO-56 table 22, footnote).
 pub fn adjusted_depletion_share(depletion_share: f64, crop_evaporation_mm: f64) -> f64 {
-    let share = depletion_share + 0.04 * (5.0 - crop_evaporation_mm);
-    if share < 0.1 {
-        0.1
-    } else if share > 0.8 {
-        0.8
-    } else {
-        share
-    }
+    (depletion_share + 0.04 * (5.0 - crop_evaporation_mm)).clamp(0.1, 0.8)
 }
 
 /// Share of its full evaporation that a crop still reaches at a depletion in mm (FAO-56 eq. 84): 1 while the readily

@@ -1,6 +1,6 @@
 //! Degree-day snow: what falls as snow, what melts, what the pack holds and lets go in a day.
 //!
-//! Degree-day melt with a seasonal sine (Anderson 1973, NOAA Technical Memorandum NWS HYDRO-17), heat of rain
+//! Degree-day melt with a seasonal sine (Anderson 1973, Technical Memorandum NWS HYDRO-17), heat of rain
 //! `P·T/80` (latent heat of fusion over the specific heat of water), liquid holding and refreezing (Bergström 1976,
 //! SMHI Report RHO 7). The snow-covered share is a straight depletion curve: Anderson (1973) lets the covered share
 //! fall with snow water below a full-cover amount; a straight line is the simplest of his curves.

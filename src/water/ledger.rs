@@ -27,7 +27,6 @@ macro_rules! keyed {
         }
     };
 }
-pub(crate) use keyed;
 
 keyed! {
     /// A store of water.

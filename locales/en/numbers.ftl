@@ -4,6 +4,6 @@ number-decimal-mark = .
 number-thousands-mark = ,
 # The fewest digits of the whole part that are grouped.
 number-thousands-from = 4
-number-missing = —
+number-missing = –
 number-percent = { $n }%
 number-between = between { $a } and { $b }

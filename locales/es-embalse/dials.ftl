@@ -3,11 +3,11 @@
 dial-warming = Calentamiento
     .short = Calentamiento
     .unit = grados
-    .stands = Cada día y cada noche hace tanto más calor que en los años medidos. También lo sienten los cultivos, el suelo y el embalse: se va más agua al aire.
+    .stands = Cuántos grados más de calor hace, de día y de noche, que en los años medidos. También lo sienten los cultivos, el suelo y el embalse: se va más agua al aire.
 dial-reservoir-size = Tamaño del embalse
     .short = Tam. embalse
     .unit = por ciento
-    .stands = Cuánta más o cuánta menos agua cabe en el embalse arriba de la toma. Las cuentas de agua crecen o bajan igual.
+    .stands = Cuánta agua de más o de menos cabe en el embalse arriba de la toma. Las cuentas de agua crecen o bajan igual.
 dial-starting-storage = Agua al empezar el año
     .short = Al empezar
     .unit = por ciento de lleno

@@ -9,14 +9,14 @@ help-arguments = Qué se le da
 help-options = Opciones
 help-default = si no se indica: { $value }
 help-tell = Para ver en números lo que resulta, sin cambios y con sus cambios.
-help-check = Para revisar lugares y ajustes, con cada error en su renglón.
+help-check = Para revisar lugares y combinaciones, con cada error en su renglón.
 help-weather = Para hacer un registro largo del tiempo, o alargar uno corto.
 help-help = Esta ayuda.
 help-version = La versión del programa.
 
 help-place = La carpeta que describe un valle, o «demo» para el valle inventado.
 help-set = Una perilla y cuánto girarla, por ejemplo warming=2. Se puede repetir.
-help-setting = Un archivo con perillas y años.
+help-setting = Un archivo con una combinación de perillas y años.
 help-years = Qué años mostrar: all (todos), dry (secos), middling (regulares), wet (húmedos), un año, o un tramo como 1990..1999.
 help-daily = Con todos los días, no solo con los años.
 help-form = La forma de la respuesta: table (tabla), csv o json.
@@ -25,12 +25,12 @@ help-lang = Idioma: en, es, o una etiqueta completa como es-MX.
 help-locales = Una carpeta con más idiomas.
 help-out = El archivo donde queda la respuesta, en lugar de la pantalla.
 help-into = La carpeta donde quedan los archivos.
-help-paths = Qué revisar: carpetas de lugares o archivos de ajustes.
+help-paths = Qué revisar: carpetas de lugares o archivos de combinaciones.
 help-seed = El número con que empieza el azar. Con el mismo número sale el mismo tiempo.
 help-length = Cuántos años hacer.
 help-from = El primer año de agua que se hace.
 
-## Perillas y ajustes
+## Perillas y combinaciones
 
 error-dial-out-of-range = La perilla «{ $dial }» va de { $low } a { $high }. { $value } queda fuera.
 error-dial-step = La perilla «{ $dial }» se mueve de { $step } en { $step }. { $value } queda entre dos pasos.
@@ -41,8 +41,8 @@ error-dial-hidden = Este lugar no tiene la perilla «{ $dial }».
 error-dial-not-a-number = «{ $value }» no es un número para la perilla «{ $dial }». Escríbalo así: { $example }.
 error-dial-no-equals = «{ $text }» no dice cuánto girar. Escríbalo así: { $example }.
 error-dial-twice = La perilla «{ $dial }» aparece dos veces. Póngala una sola vez.
-error-setting-unknown = No hay ningún ajuste «{ $setting }».
-error-setting-unknown-nearest = No hay ningún ajuste «{ $setting }». ¿Quiso decir «{ $nearest }»?
+error-setting-unknown = No hay ninguna combinación «{ $setting }».
+error-setting-unknown-nearest = No hay ninguna combinación «{ $setting }». ¿Quiso decir «{ $nearest }»?
 error-years-unreadable = «{ $text }» no dice qué años. Escriba all, dry, middling, wet, un año, o un tramo como 1990..1999.
 error-years-outside = El registro tiene los años de agua de { $first } a { $last }. { $asked } no está.
 error-years-backward = El tramo { $text } va al revés. Ponga primero el año más antiguo.
@@ -58,7 +58,7 @@ error-option-unknown-nearest = No hay ninguna opción { $option }. ¿Quiso decir
 error-option-no-value = A la opción { $option } le falta su valor.
 error-option-twice = La opción { $option } aparece dos veces. Póngala una sola vez.
 error-option-number = La opción { $option } lleva un número entero, de { $low } a { $high }.
-error-argument-extra = «{ $text }» sale sobrando.
+error-argument-extra = «{ $text }» está de más.
 error-argument-missing = Falta algo: { $name }.
 error-not-unicode = Este texto no se puede leer como letras: { $text }
 error-see-help = Para ver la ayuda: { $command }
@@ -88,7 +88,7 @@ check-notes = { $n ->
     [one] { $path }: { $n } nota.
    *[other] { $path }: { $n } notas.
 }
-check-not-known = { $path } no es un lugar ni un ajuste; no hay qué revisar.
+check-not-known = { $path } no es un lugar ni una combinación; no hay qué revisar.
 
 ## weather
 

@@ -4,6 +4,6 @@ number-decimal-mark = .
 number-thousands-mark = { "\u202F" }
 # Cuántas cifras enteras hacen falta para agruparlas.
 number-thousands-from = 5
-number-missing = —
+number-missing = –
 number-percent = { $n }{ "\u202F" }%
 number-between = entre { $a } y { $b }

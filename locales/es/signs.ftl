@@ -4,7 +4,7 @@
 
 sign-precipitation-mm = Lluvia y nieve
     .short = Lluvia y nieve
-    .plain = Toda el agua que cayó del cielo en el año, como altura sobre el terreno.
+    .plain = Toda el agua que cayó del cielo en el año, medida como altura sobre el terreno.
 sign-snow-share = Parte que cayó como nieve
     .short = Parte de nieve
     .plain = De cada 100 partes de lluvia y nieve, cuántas cayeron como nieve.
@@ -15,7 +15,7 @@ sign-peak-swe-mm = Máximo de agua en la nieve
     .short = Más nieve
     .plain = Lo más que llegó a guardar la nieve en un día del año.
 sign-peak-swe-date = Día con más nieve
-    .short = Día más nieve
+    .short = Pico de nieve
     .plain = El día en que la nieve guardó más agua.
 sign-melt-out-date = Último día con nieve
     .short = Fin de nieve
@@ -30,7 +30,7 @@ sign-spring-volume-hm3 = Agua de primavera
     .short = En primavera
     .plain = Cuánta agua trajo el río en los meses de primavera que dice el lugar.
 sign-peak-flow-m3s = Caudal más alto
-    .short = Más caudal
+    .short = Caudal mayor
     .plain = El caudal más alto de un día del año.
 sign-peak-flow-date = Día del caudal más alto
     .short = Día del pico

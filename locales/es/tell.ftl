@@ -6,7 +6,7 @@ tell-place = Lugar
 tell-dials = Perillas
 tell-dial-line = { $dial }: { $value }
 tell-dials-at-rest = Todas las perillas están en reposo: todavía no hay cambios.
-tell-setting = Ajuste guardado: { $name }
+tell-setting = Combinación: { $name }
 
 tell-years-all = los { $n } años, de { $first } a { $last }
 tell-years-dry = años secos
@@ -49,7 +49,7 @@ tell-method-penman-monteith = Penman–Monteith (FAO-56)
 tell-method-hargreaves-samani = Hargreaves–Samani (1985)
 tell-method-oudin = Oudin y otros (2005)
 tell-method-given = una columna del registro
-tell-method-per-degree = Por cada grado más de calor, a los cultivos se les puede ir al aire cerca de { $percent } más de agua.
+tell-method-per-degree = Con { $degree } más de calor, los cultivos pueden perder al aire cerca de { $percent } más de agua.
 tell-rule = Cómo se reparte el agua: { $rule }
 tell-rule-seniority = por la fecha del derecho
 tell-rule-proportional = a todos la misma parte

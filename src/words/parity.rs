@@ -38,18 +38,23 @@ pub(super) fn is_too_deep(text: &str) -> bool {
     too_deep(text).is_some()
 }
 
-/// The line on which braces nest too deep to be a message, if any.
+/// The line on which braces and calls nest too deep to be a message, if any.
 fn too_deep(text: &str) -> Option<usize> {
     let mut depth = 0_usize;
     for (index, line) in text.lines().enumerate() {
-        // A line at the margin starts a new message or is a comment, whatever was left open before it.
-        if !line.starts_with([' ', '}', '{']) {
+        // The parser gives up an open brace at a comment or at the start of a message, and nowhere else.
+        if line.starts_with('#') || starts_message(line) {
             depth = 0;
+        }
+        if line.starts_with('#') {
+            continue;
         }
         for byte in line.bytes() {
             match byte {
                 b'{' => depth += 1,
-                b'}' => depth = depth.saturating_sub(1),
+                // A parenthesis calls a function within braces and is plain text outside.
+                b'(' if depth > 0 => depth += 1,
+                b'}' | b')' => depth = depth.saturating_sub(1),
                 _ => {}
             }
             if depth > DEEPEST_NESTING {
@@ -58,6 +63,12 @@ fn too_deep(text: &str) -> Option<usize> {
         }
     }
     None
+}
+
+fn starts_message(line: &str) -> bool {
+    let name = line.split('=').next().unwrap_or_default().trim_end_matches(' ');
+    let letters = |byte: u8| byte.is_ascii_alphanumeric() || byte == b'-' || byte == b'_';
+    name.len() < line.len() && !name.is_empty() && name.bytes().all(letters)
 }
 
 fn shapes_of(resource: &Resource<&str>) -> Vec<(String, Shape)> {
@@ -148,7 +159,12 @@ mod tests {
 
     #[test]
     fn a_bomb_of_braces_is_refused_before_it_is_parsed() {
-        let (found, errors) = shapes(&format!("one = {}", "{".repeat(1_000_000)));
+        for bomb in ["{", "{\n", "{ $n ->\n[one] ", "{ F(", "{ $n ->\n *[a-b] "] {
+            let (found, errors) = shapes(&format!("one = {}", bomb.repeat(100_000)));
+            assert!(found.is_empty(), "{bomb}");
+            assert_eq!(errors.len(), 1, "{bomb}");
+        }
+        let (found, errors) = shapes(&format!("one = {{ {}", "F(".repeat(100_000)));
         assert!(found.is_empty());
         assert_eq!(errors, [SyntaxError { line: 1 }]);
     }

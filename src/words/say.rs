@@ -20,7 +20,8 @@ const MOST_ERRORS_KEPT: usize = 64;
 pub enum Value<'a> {
     /// Text as it is: a name, or a quantity that was written already.
     Text(Cow<'a, str>),
-    /// A number with at most that many decimals; written in the style of the region, and selects the plural.
+    /// An amount with at most that many decimals; written in the style of the region, and selects the plural. A year is
+    /// a name and goes in as the text of [`Words::year`].
     Number(f64, u8),
     /// A number that was written already, and still selects the plural.
     Counted {

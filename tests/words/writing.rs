@@ -40,7 +40,7 @@ fn marks_and_gaps_by_region() {
         assert_eq!(words.number(1_234_567.0, 0), gapped(seven), "{tag}");
         assert_eq!(words.percent(18.0, 0), gapped(percent), "{tag}");
         assert_eq!(words.number(-7.0, 0), "\u{2212}7", "{tag}: the true minus");
-        assert_eq!(words.number(f64::NAN, 1), "—", "{tag}");
+        assert_eq!(words.number(f64::NAN, 1), "–", "{tag}");
         assert_eq!(words.year(2026), "2026", "{tag}");
     }
 }

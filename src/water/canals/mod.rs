@@ -36,6 +36,7 @@ mod river;
 mod rotation;
 mod seniority;
 mod state;
+mod width;
 
 pub use date::PriorityDate;
 pub use gate::{Gate, MinimumPlace, RiverSetup, SharingRule};

@@ -3,9 +3,9 @@
 use std::borrow::Cow;
 use std::sync::{Mutex, OnceLock, PoisonError};
 
-use fluent_bundle::concurrent::FluentBundle;
-use fluent_bundle::types::{FluentNumber, FluentNumberOptions};
-use fluent_bundle::{FluentArgs, FluentResource, FluentValue};
+use fluent::concurrent::FluentBundle;
+use fluent::types::{FluentNumber, FluentNumberOptions};
+use fluent::{FluentArgs, FluentResource, FluentValue};
 use unic_langid::LanguageIdentifier;
 
 use super::language::{Choice, Fallback};

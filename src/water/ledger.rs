@@ -2,31 +2,10 @@
 //!
 //! All in m³. The reservoir's store is its active content: dead storage neither comes nor goes.
 
+use super::keyed::keyed;
 use super::lanes::most;
 use super::units::M3_PER_MM_KM2;
 use super::works::Evening;
-
-/// Declares an enumeration with its list and stable keys.
-macro_rules! keyed {
-    ($(#[$meta:meta])* $name:ident, $count:ident { $($(#[$doc:meta])* $variant:ident => $key:literal,)+ }) => {
-        $(#[$meta])*
-        #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord, Hash)]
-        pub enum $name { $($(#[$doc])* $variant,)+ }
-
-        /// How many there are.
-        pub const $count: usize = [$($key),+].len();
-
-        impl $name {
-            /// All of them, in the order in which people read them.
-            pub const ALL: [$name; $count] = [$($name::$variant),+];
-
-            /// The stable key that files use.
-            pub const fn key(self) -> &'static str {
-                match self { $($name::$variant => $key,)+ }
-            }
-        }
-    };
-}
 
 keyed! {
     /// A store of water.

@@ -9,6 +9,7 @@ pub mod dials;
 pub mod evaporation;
 pub mod fields;
 pub mod ground;
+pub(crate) mod keyed;
 pub mod lake;
 pub mod lanes;
 pub mod ledger;

@@ -11,6 +11,16 @@
 //!   chances, depths and, mildly, temperature;
 //! * humidity and wind, simply, if asked for.
 //!
+//! | to | call |
+//! |---|---|
+//! | invent days from a recipe | [`generate`], or [`Generator::new`] once and [`Generator::generate`] for many seeds |
+//! | learn a recipe from a record | [`fit`]; [`fit_at`] where the site is known and the record has radiation |
+//! | write a recipe down, or read one | [`Recipe`] is `Serialize` and `Deserialize`; [`Recipe::check`] finds all its faults |
+//! | know what a recipe leads to | [`Recipe::expected_precipitation`] |
+//! | start from somewhere | [`invented::tresnubes`], [`invented::valle_del_sur`] |
+//!
+//! Errors ([`GeneratorError`], [`RecipeFault`], [`FitError`]) and remarks ([`FitNote`]) are data without words.
+//!
 //! # The trap of generators that know only days
 //!
 //! Days drawn by month alone average out: a year has some hundred wet days, so yearly totals hardly differ, and droughts

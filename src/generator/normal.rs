@@ -115,7 +115,7 @@ mod tests {
 
     #[test]
     fn published_check_values() {
-        // Wichura (1988), p. 478: three check values to ten significant figures; from memory.
+        // Wichura (1988): the paper's three check values; from memory.
         for (probability, deviate) in
             [(0.25, -0.674_489_750_196_081_7), (0.001, -3.090_232_306_167_813_5), (1e-20, -9.262_340_089_798_408)]
         {

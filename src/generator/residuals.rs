@@ -1,6 +1,6 @@
 //! The day-to-day memory of temperature and sunshine: standardised residuals with lag-one matrices.
 //!
-//! Richardson (1981, Water Resources Research 17(1):182–190, equations 5–7, after Matalas 1967): with the residuals of
+//! Richardson (1981, Water Resources Research 17(1):182–190, after Matalas 1967): with the residuals of
 //! maximum temperature, minimum temperature and radiation in x, `x(today) = A x(yesterday) + B e`, e three independent
 //! normal deviates, `A = M1 M0⁻¹` and `B Bᵀ = M0 − A M1ᵀ`.
 

@@ -1,4 +1,4 @@
-//! Wet and dry days: a two-state Markov chain of first order (Richardson 1981, equations 1–2).
+//! Wet and dry days: a two-state Markov chain of first order (as in Richardson 1981).
 
 /// A chain of wet and dry days with constant chances.
 #[derive(Debug, Clone, Copy, PartialEq)]

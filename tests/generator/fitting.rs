@@ -3,6 +3,7 @@
 use crate::sample::{self, mean, monthly, spread, totals};
 use chrono::Datelike;
 use deshielo::generator::{FitError, FitNote, GeneratorDay, Recipe, Site, YearIndex, fit, fit_at, invented};
+use proptest::prelude::*;
 
 #[test]
 fn recipes_are_recovered_from_their_own_weather() {
@@ -158,6 +159,67 @@ fn dry_summers_are_fitted_without_wild_curves() {
     let days = sample::years(&recipe, 50, 3);
     assert!(days.iter().all(|day| day.tmax_c < 50.0 && day.tmin_c > -25.0));
     assert!(days.iter().map(|day| day.precipitation_mm).fold(0.0, f64::max) < 250.0);
+}
+
+#[test]
+fn radiation_above_the_clear_sky_is_left_out_and_told() {
+    let truth = invented::tresnubes();
+    let mut record = sample::years(&truth, 4, 21);
+    for day in record.iter_mut().step_by(10) {
+        day.solar_mj_m2 = Some(60.0);
+    }
+    let site = Site { latitude_degrees: 39.5, elevation_m: 2300.0 };
+    let (recipe, report) = fit_at(&record, 10, Some(site)).unwrap();
+    let wrong = record.len().div_ceil(10);
+    assert!(report.notes.contains(&FitNote::RadiationAboveClearSky { days: wrong }), "{:?}", report.notes);
+    let (found, wanted) = (recipe.radiation.unwrap(), truth.radiation.unwrap());
+    // 800 dry days with a memory of a quarter from day to day: a mean is known to 0.9 sqrt(1.7 / 800) = 0.04.
+    let off = found.dry_clear_log_odds.mean - wanted.dry_clear_log_odds.mean;
+    assert!(off.abs() < 4.0 * 0.04, "{off}");
+    // A column that never changes is no measurement.
+    record.iter_mut().for_each(|day| day.wind_2m_ms = Some(2.0));
+    let (recipe, report) = fit_at(&record, 10, Some(site)).unwrap();
+    assert!(recipe.wind.is_none());
+    assert!(report.notes.contains(&FitNote::LeftOut { field: "wind_2m_ms", days: record.len() }));
+}
+
+proptest! {
+    #![proptest_config(ProptestConfig::with_cases(48))]
+
+    /// Whatever stands in a record, fitting gives a recipe that runs, or an error; it never panics.
+    #[test]
+    fn any_record_is_fitted_or_refused(
+        years in 3i32..20,
+        start_month in 1u32..=12,
+        seed: u64,
+        scale in prop::sample::select(vec![0.0, 1e-9, 0.01, 1.0, 25.4, 1e6, 1e300]),
+        warmth in prop::sample::select(vec![0.0, 1e-6, 1.0, 50.0, 1e200]),
+        gaps in 0.0..0.01f64,
+        dry_months in prop::collection::btree_set(1u32..=12, 0..10),
+        extras: bool,
+    ) {
+        let mut record = sample::years(&invented::tresnubes(), years, seed);
+        for (at, day) in record.iter_mut().enumerate() {
+            day.precipitation_mm *= if dry_months.contains(&day.date.month()) { 0.0 } else { scale };
+            (day.tmin_c, day.tmax_c) = (day.tmin_c * warmth, day.tmax_c * warmth);
+            if !extras || at % 3 == 0 {
+                (day.solar_mj_m2, day.relative_humidity_percent, day.wind_2m_ms) = (None, Some(0.0), Some(0.0));
+            }
+        }
+        let mut count = 0.0;
+        record.retain(|_| {
+            count += gaps;
+            let keep = count < 1.0;
+            count -= f64::from(!keep);
+            keep
+        });
+        let site = Site { latitude_degrees: 39.5, elevation_m: 2300.0 };
+        if let Ok((recipe, _)) = fit_at(&record, start_month, Some(site)) {
+            prop_assert_eq!(recipe.check(), Ok(()));
+            let days = sample::years(&recipe, 2, seed);
+            prop_assert!(days.iter().all(|day| day.tmin_c < day.tmax_c && day.precipitation_mm.is_finite()));
+        }
+    }
 }
 
 #[test]

@@ -143,7 +143,7 @@ fn residuals_have_the_correlations_of_the_recipe() {
     recipe.temperature.tmin_wet_c.mean -= 40.0;
     let days = sample::years(&recipe, YEARS, 77);
     let sun = recipe.radiation.clone().unwrap();
-    let clear_sky = deshielo_clear_sky(&days, &recipe);
+    let clear_sky = clear_sky_of_each_day(&days, &recipe);
     let residuals: Vec<[f64; 3]> = days
         .iter()
         .zip(clear_sky)
@@ -172,7 +172,7 @@ fn residuals_have_the_correlations_of_the_recipe() {
 }
 
 /// The clear sky of each day, read from a run whose sky is always clear.
-fn deshielo_clear_sky(days: &[GeneratorDay], recipe: &Recipe) -> Vec<f64> {
+fn clear_sky_of_each_day(days: &[GeneratorDay], recipe: &Recipe) -> Vec<f64> {
     let mut clear = recipe.clone();
     let sun = clear.radiation.as_mut().unwrap();
     sun.dry_clear_log_odds = SeasonalCurve::flat(20.0);

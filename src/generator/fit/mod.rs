@@ -99,7 +99,7 @@ pub enum FitNote {
     },
     /// Yearly totals differ no more than days alone explain; no year index acts on precipitation.
     TotalsSpreadNoMoreThanDays,
-    /// Yearly totals differ more than the year index can make them.
+    /// Yearly totals, or numbers of wet days, differ more than the year index can make them.
     TotalsSpreadTooWide,
     /// The estimated memory from year to year was outside what is possible; the nearest possible value was taken.
     YearMemoryOutside {

@@ -136,7 +136,7 @@ impl Search<'_> {
             return with(root(|shift| totals_beyond(shift, 0.0)), 0.0);
         }
         let depth_shift = root(|shift| totals_beyond(wetness_shift, shift));
-        if depth_shift >= LARGEST_SHIFT {
+        if depth_shift >= LARGEST_SHIFT || wetness_shift >= LARGEST_SHIFT {
             notes.push(FitNote::TotalsSpreadTooWide);
         }
         with(wetness_shift, depth_shift)

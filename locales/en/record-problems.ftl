@@ -44,9 +44,9 @@ problem-record-column-twice = The header has the name “{ $column }” twice.
     .remedy = Give each column its own name.
 problem-record-column-empty = The column “{ $column }” has no values at all.
     .remedy = Take the column out of place.toml, or check the mark for missing values.
-problem-record-measure-twice = The columns “{ $other }” and “{ $column }” are both said to be { $measure }.
+problem-record-measure-twice = The columns “{ $other }” and “{ $column }” are both said to be “{ $measure }”.
     .remedy = Keep the one that the valley should use.
-problem-record-unit = The column “{ $column }” is { $measure }, and { $unit } is not a unit for that.
+problem-record-unit = The column “{ $column }” is “{ $measure }”, and “{ $unit }” is not a unit for that.
     .remedy = Use one of these units: { $units }.
 
 ## Dates
@@ -76,6 +76,11 @@ problem-record-days-missing = { $days ->
     .remedy = Add a row for each day. Leave its cells empty where nothing was measured.
 problem-record-leap-day-missing = The leap day has no row: { $date }.
     .remedy = Add it. A record needs every day of the calendar.
+problem-record-not-daily = { $count ->
+        [one] { $count } of the { $rows } rows is more than a day after the row before.
+       *[other] { $count } of the { $rows } rows are more than a day after the row before. This is not a daily record.
+    }
+    .remedy = Use a record with one row for each day. Months or weeks cannot be read.
 
 ## Numbers
 
@@ -102,8 +107,8 @@ problem-record-gap-refused = { $days ->
     }
     .remedy = Fill in the values, or say in place.toml how this column may be filled.
 problem-record-gap-long = { $days ->
-        [one] The column “{ $column }” has no value on { $days } day from here on. The longest gap to fill is { $limit }.
-       *[other] The column “{ $column }” has no value on { $days } days from here on. The longest gap to fill is { $limit }.
+        [one] The column “{ $column }” has no value on { $days } day from here on. Longest gap that is filled, in days: { $limit }.
+       *[other] The column “{ $column }” has no value on { $days } days from here on. Longest gap that is filled, in days: { $limit }.
     }
     .remedy = Use another station for these days, or start the record after them.
 problem-record-gap-at-end = { $days ->
@@ -116,6 +121,8 @@ problem-record-gap-no-mean = { $days ->
        *[other] The column “{ $column }” has no value on { $days } days, and none in that month of any year.
     }
     .remedy = Fill in the values. There is no mean to fill them with.
+problem-record-filled-across = The filled value puts “{ $column }” over “{ $other }” on this day.
+    .remedy = Leave both cells of this day empty, so that both are filled. Or write the missing value.
 
 ## Temperature
 
@@ -149,10 +156,10 @@ problem-record-dew-over-warmest = { $count ->
 ## Rain, snow and evaporation
 
 problem-record-precipitation-inches = The column “{ $column }” adds up to { $year } mm in a mean year. Are these inches?
-    .remedy = Say in (inches) for it in place.toml if that is its unit.
-problem-record-precipitation-little = The column “{ $column }” adds up to { $year } { $unit } in a mean year. That is a desert.
+    .remedy = Say “in” for it in place.toml if that is its unit.
+problem-record-precipitation-little = In a mean year the column “{ $column }” adds up to { $year } { $unit }. That is a desert.
     .remedy = Check the unit, and that every row is one day.
-problem-record-precipitation-much = The column “{ $column }” adds up to { $year } { $unit } in a mean year. No valley is that wet.
+problem-record-precipitation-much = In a mean year the column “{ $column }” adds up to { $year } { $unit }. No valley is that wet.
     .remedy = Check the unit in place.toml. Millimeters may be given as inches, or tenths as whole ones.
 problem-record-precipitation-adds-up = The column “{ $column }” only rises. It looks like a gauge that adds up over the year.
     .remedy = Write the rain and snow of each day: each reading less the one before.
@@ -169,14 +176,14 @@ problem-record-snow-negative = { $count ->
     }
     .remedy = Write 0 or leave the cell empty.
 problem-record-evaporation-little = The column “{ $column }” adds up to { $year } mm in a mean year. Are these inches?
-    .remedy = Say in (inches) for it in place.toml if that is its unit.
+    .remedy = Say “in” for it in place.toml if that is its unit.
 
 ## Sun, wind and humidity
 
 problem-record-humidity-share = The column “{ $column }” never goes over { $highest }. It looks like shares, not percent.
-    .remedy = Say share for its unit in place.toml.
+    .remedy = Say “share” for its unit in place.toml.
 problem-record-humidity-percent = The column “{ $column }” goes up to { $highest }. It looks like percent, not shares.
-    .remedy = Say % for its unit in place.toml.
+    .remedy = Say “%” for its unit in place.toml.
 problem-record-humidity-crossed = { $count ->
         [one] On { $count } day “{ $column }” is over “{ $other }”: { $lowest } and { $highest }.
        *[other] On { $count } days “{ $column }” is over “{ $other }”. The first: { $lowest } and { $highest }.
@@ -199,7 +206,7 @@ problem-record-flow-negative = { $count ->
         [one] The flow in “{ $column }” is below zero on { $count } day: { $text }.
        *[other] The flow in “{ $column }” is below zero on { $count } days. The first: { $text }.
     }
-    .remedy = Leave the cell empty. If the flow was computed from a reservoir, say computed_inflow in place.toml.
+    .remedy = Leave the cell empty. If the flow was computed from a reservoir, say “computed_inflow” in place.toml.
 problem-record-inflow-negative = { $count ->
         [one] The inflow in “{ $column }” is below zero on { $count } day: { $text }. It is kept as it is.
        *[other] The inflow in “{ $column }” is below zero on { $count } days. The first: { $text }. They are kept as they are.

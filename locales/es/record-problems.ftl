@@ -44,9 +44,9 @@ problem-record-column-twice = El nombre «{ $column }» está dos veces en el en
     .remedy = Póngale a cada columna su propio nombre.
 problem-record-column-empty = La columna «{ $column }» no tiene ningún dato.
     .remedy = Quítela de place.toml, o revise la marca de dato faltante.
-problem-record-measure-twice = Las columnas «{ $other }» y «{ $column }» están puestas las dos como { $measure }.
+problem-record-measure-twice = Las columnas «{ $other }» y «{ $column }» están puestas las dos como «{ $measure }».
     .remedy = Deje la que debe usar el valle.
-problem-record-unit = La columna «{ $column }» es { $measure }, y { $unit } no es una unidad para eso.
+problem-record-unit = La columna «{ $column }» es «{ $measure }», y «{ $unit }» no es una unidad para eso.
     .remedy = Use una de estas unidades: { $units }.
 
 ## Fechas
@@ -76,6 +76,11 @@ problem-record-days-missing = { $days ->
     .remedy = Agregue un renglón por día. Si no se midió nada, deje vacías sus celdas.
 problem-record-leap-day-missing = Falta el renglón del día bisiesto: { $date }.
     .remedy = Agréguelo. El registro necesita todos los días del calendario.
+problem-record-not-daily = { $count ->
+        [one] De { $rows } renglones, { $count } está a más de un día del anterior.
+       *[other] De { $rows } renglones, { $count } están a más de un día del anterior. Este registro no es diario.
+    }
+    .remedy = Use un registro con un renglón por día. No se leen meses ni semanas.
 
 ## Números
 
@@ -102,8 +107,8 @@ problem-record-gap-refused = { $days ->
     }
     .remedy = Complete los datos, o indique en place.toml cómo se puede rellenar esta columna.
 problem-record-gap-long = { $days ->
-        [one] Desde aquí falta { $days } día de datos en la columna «{ $column }». El hueco más largo que se rellena es de { $limit }.
-       *[other] Desde aquí faltan { $days } días de datos en la columna «{ $column }». El hueco más largo que se rellena es de { $limit }.
+        [one] Desde aquí falta { $days } día de datos en la columna «{ $column }». Hueco más largo que se rellena, en días: { $limit }.
+       *[other] Desde aquí faltan { $days } días de datos en la columna «{ $column }». Hueco más largo que se rellena, en días: { $limit }.
     }
     .remedy = Tome otra estación para esos días, o empiece el registro después de ellos.
 problem-record-gap-at-end = { $days ->
@@ -116,6 +121,8 @@ problem-record-gap-no-mean = { $days ->
        *[other] Faltan { $days } días de datos en la columna «{ $column }», y ese mes no tiene datos en ningún año.
     }
     .remedy = Complete los datos. No hay promedio con qué rellenarlos.
+problem-record-filled-across = Al rellenar este día, «{ $column }» queda por encima de «{ $other }».
+    .remedy = Deje vacías las dos celdas de este día para que se rellenen juntas. O escriba el dato que falta.
 
 ## Temperatura
 
@@ -149,10 +156,10 @@ problem-record-dew-over-warmest = { $count ->
 ## Lluvia, nieve y evaporación
 
 problem-record-precipitation-inches = La columna «{ $column }» suma { $year } mm en un año promedio. ¿Serán pulgadas?
-    .remedy = Si son pulgadas, ponga in en place.toml.
-problem-record-precipitation-little = La columna «{ $column }» suma { $year } { $unit } en un año promedio. Es lo que cae en un desierto.
+    .remedy = Si son pulgadas, ponga «in» en place.toml.
+problem-record-precipitation-little = En un año promedio la columna «{ $column }» suma { $year } { $unit }. Es lo que cae en un desierto.
     .remedy = Revise la unidad, y que cada renglón sea un día.
-problem-record-precipitation-much = La columna «{ $column }» suma { $year } { $unit } en un año promedio. En ningún valle cae tanto.
+problem-record-precipitation-much = En un año promedio la columna «{ $column }» suma { $year } { $unit }. En ningún valle cae tanto.
     .remedy = Revise la unidad en place.toml. Pueden ser milímetros puestos como pulgadas, o décimas como enteros.
 problem-record-precipitation-adds-up = La columna «{ $column }» solo sube. Parece un pluviómetro que va sumando todo el año.
     .remedy = Escriba la lluvia y la nieve de cada día: cada lectura menos la anterior.
@@ -169,14 +176,14 @@ problem-record-snow-negative = { $count ->
     }
     .remedy = Escriba 0 o deje vacía la celda.
 problem-record-evaporation-little = La columna «{ $column }» suma { $year } mm en un año promedio. ¿Serán pulgadas?
-    .remedy = Si son pulgadas, ponga in en place.toml.
+    .remedy = Si son pulgadas, ponga «in» en place.toml.
 
 ## Sol, viento y humedad
 
 problem-record-humidity-share = La columna «{ $column }» nunca pasa de { $highest }. Parecen fracciones, no porcentajes.
-    .remedy = Ponga share como su unidad en place.toml.
+    .remedy = Ponga «share» como su unidad en place.toml.
 problem-record-humidity-percent = La columna «{ $column }» llega a { $highest }. Parecen porcentajes, no fracciones.
-    .remedy = Ponga % como su unidad en place.toml.
+    .remedy = Ponga «%» como su unidad en place.toml.
 problem-record-humidity-crossed = { $count ->
         [one] En { $count } día, «{ $column }» es mayor que «{ $other }»: { $lowest } y { $highest }.
        *[other] En { $count } días, «{ $column }» es mayor que «{ $other }». El primero: { $lowest } y { $highest }.
@@ -199,7 +206,7 @@ problem-record-flow-negative = { $count ->
         [one] El caudal de «{ $column }» está bajo cero en { $count } día: { $text }.
        *[other] El caudal de «{ $column }» está bajo cero en { $count } días. El primero: { $text }.
     }
-    .remedy = Deje vacía la celda. Si el caudal se calculó con el agua guardada, ponga computed_inflow en place.toml.
+    .remedy = Deje vacía la celda. Si el caudal se calculó con el agua guardada, ponga «computed_inflow» en place.toml.
 problem-record-inflow-negative = { $count ->
         [one] La entrada de agua de «{ $column }» está bajo cero en { $count } día: { $text }. Se deja como está.
        *[other] La entrada de agua de «{ $column }» está bajo cero en { $count } días. El primero: { $text }. Se dejan como están.

@@ -238,6 +238,12 @@ fn dates() -> Vec<Broken> {
             &[("problem-record-days-missing", 5, 1), ("problem-record-days-missing", 8, 1)],
         ),
         broken(
+            "months and not days",
+            plain(),
+            rows(&["2001-01-01", "2001-02-01", "2001-03-01", "2001-04-01", "2001-05-01", "2001-06-01"]),
+            &[("problem-record-not-daily", 3, 1)],
+        ),
+        broken(
             "a calendar without leap days",
             plain(),
             rows(&["2004-02-28", "2004-03-01"]),

@@ -14,7 +14,9 @@ fn record(columns: &[(Measure, MeasureUnit)], days: u64, row: impl Fn(u64) -> Ve
     let first = NaiveDate::from_ymd_opt(2001, 1, 1).unwrap();
     let mut text = format!("date,{}\n", names[..columns.len()].join(","));
     for day in 0..days {
-        let cells: Vec<String> = row(day).iter().map(|value| format!("{value}")).collect();
+        // NaN stands for a cell left empty.
+        let cells = row(day).into_iter().map(|value| if value.is_nan() { String::new() } else { value.to_string() });
+        let cells: Vec<String> = cells.collect();
         text.push_str(&format!("{},{}\n", first + Days::new(day), cells.join(",")));
     }
     (plan, text)
@@ -102,6 +104,13 @@ fn temperatures() -> Vec<Broken> {
             &[("problem-record-out-of-bounds", 102, 12)],
         ),
         case(
+            "a filled warmest below a measured coldest",
+            &[(Tmin, C), (Tmax, C)],
+            5,
+            |day| vec![if day == 2 { 12.0 } else { 0.0 }, if day == 2 { f64::NAN } else { 10.0 }],
+            &[("problem-record-filled-across", 4, 15)],
+        ),
+        case(
             "a stuck sensor",
             &[(Tmean, C)],
             60,
@@ -114,7 +123,7 @@ fn temperatures() -> Vec<Broken> {
 fn rain_and_snow() -> Vec<Broken> {
     use Measure::{Precipitation as P, ReferenceEvaporation, SnowWater};
     use MeasureUnit::{Inch, Millimetre as Mm};
-    let wet = |day: u64| day % 4 == 0;
+    let wet = |day: u64| day.is_multiple_of(4);
     vec![
         case(
             "inches given as mm",

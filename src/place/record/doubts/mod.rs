@@ -101,9 +101,14 @@ fn about(table: &Table, column: &Readings, row: usize, severity: Severity, messa
     problem.with("column", shown(&column.plan.name))
 }
 
-/// Rounded for a message: two decimals at most.
+/// Rounded to about three figures for a message.
 fn rounded(value: f64) -> f64 {
-    libm::round(value * 100.0) / 100.0
+    let scale = match libm::fabs(value) {
+        size if size >= 100.0 => 1.0,
+        size if size >= 10.0 => 10.0,
+        _ => 100.0,
+    };
+    libm::round(value * scale) / scale
 }
 
 fn note_out_of_bounds(table: &Table, column: &Readings, notes: &mut Notes) {

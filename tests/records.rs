@@ -398,16 +398,30 @@ proptest! {
         }
     }
 
+    /// Nor do bytes that never were a record, under plans that fit nothing.
     #[test]
-    fn nor_do_bytes_that_never_were_a_record(bytes in prop::collection::vec(any::<u8>(), 0..300)) {
-        let plan = RecordPlan::new(
-            "noise",
-            one_column("a", DateOrder::YearMonthDay),
-            columns([("b", Measure::Flow, MeasureUnit::M3PerS)]),
-        );
-        let mut text = b"a,b\n".to_vec();
-        text.extend(bytes);
-        let mut problems = Vec::new();
-        prop_assert!(read_record(&plan, &text, &mut problems).is_some() || !problems.is_empty());
+    fn nor_does_any_plan(
+        bytes in prop::collection::vec(any::<u8>(), 0..300),
+        cells in "([0-9]{1,4}[-/,;.\" ]{0,2}){0,60}",
+        delimiter: Option<char>,
+        comment: Option<char>,
+        mark in ".{0,5}",
+        parts: bool,
+    ) {
+        let date = if parts {
+            DatePlan::Parts { year: "a".into(), month: "b".into(), day: "c".into() }
+        } else {
+            DatePlan::YearAndDay { year: "a".into(), day_of_year: "b".into() }
+        };
+        let mut plan = RecordPlan::new("noise", date, columns([("c", Measure::Flow, MeasureUnit::M3PerS)]));
+        (plan.delimiter, plan.comment, plan.missing) = (delimiter, comment, vec![mark]);
+        let between = delimiter.unwrap_or(',');
+        for noise in [bytes, cells.into_bytes()] {
+            let mut text = format!("a{between}b{between}c\n2001{between}1{between}1\n").into_bytes();
+            text.extend(noise);
+            let mut problems = Vec::new();
+            let record = read_record(&plan, &text, &mut problems);
+            prop_assert_eq!(record.is_none(), problems.iter().any(|problem| problem.severity == Severity::Error));
+        }
     }
 }

@@ -2,3 +2,4 @@
 
 pub mod crop_table;
 pub mod problem;
+pub mod record;

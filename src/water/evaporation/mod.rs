@@ -1,24 +1,19 @@
-//! Reference evaporation.
-#![allow(missing_docs)]
-#[derive(Clone, Copy, Debug, PartialEq)]
-pub struct PenmanMonteithTraits {
-    pub elevation_m: f64,
-    pub krs: f64,
-}
-#[derive(Clone, Copy, Debug, PartialEq)]
-pub enum Method {
-    PenmanMonteith(PenmanMonteithTraits),
-    HargreavesSamani,
-    Oudin,
-    Given,
-}
-#[derive(Clone, Copy, Debug, PartialEq)]
-pub struct EvaporationDay {
-    pub tmin_c: f64,
-    pub tmax_c: f64,
-    pub tmean_c: f64,
-    pub vapour_pressure_kpa: f64,
-    pub wind_2m_ms: f64,
-    pub solar_mj_m2: f64,
-    pub given_mm: f64,
-}
+//! Reference evaporation: how much water a field of well-watered short grass gives to the air in a day.
+//!
+//! Each file holds one published piece as small pure functions; [`reference_evaporation_mm`] is the daily form that a
+//! run calls. What depends only on latitude and date is in a [`SkyTable`], what depends only on elevation in
+//! [`PenmanMonteithTraits`]; both are built once.
+
+pub mod air;
+mod daily;
+mod hargreaves_samani;
+mod oudin;
+mod penman_monteith;
+pub mod radiation;
+pub mod sun;
+
+pub use daily::{EvaporationDay, Method, percent_per_degree, reference_evaporation_mm};
+pub use hargreaves_samani::hargreaves_samani_mm;
+pub use oudin::{LATENT_HEAT_OF_VAPORISATION_MJ_KG, oudin_mm};
+pub use penman_monteith::{PenmanMonteithInputs, PenmanMonteithTraits, WIND_WHEN_MISSING_MS, penman_monteith_mm};
+pub use sun::SkyTable;

@@ -1,0 +1,98 @@
+//! Sharing by priority date.
+//!
+//! In order of dates each right takes what it wants from the natural flow as far as older rights leave room; a gate
+//! wants no more than its decreed rate, the reservoir wants its room, the minimum wants its flow at the river's end.
+//! Then, in the same order, each gate draws on its own account for what is still missing. The decreed rate limits
+//! natural flow only; the canal limits the sum. Of two rights of one date the one further upstream comes first.
+//!
+//! Stored water loses a share of itself on its way from the dam to the gate: the account is debited for what leaves the
+//! dam, which also is what uses the outlet.
+//!
+//! Source: common practice, no source.
+
+use super::bounds::{least, positive};
+use super::day::{Morning, Shared};
+use super::reaches::Reaches;
+use super::river::GateRule;
+use super::{River, RiverDay, RiverInput, RiverState};
+
+/// Stored water let go for one gate, and what of it arrives, m³.
+#[inline(always)]
+pub(super) fn draw(gate: &GateRule, short_m3: f64, held_m3: f64, available_m3: f64) -> (f64, f64) {
+    let most = least(held_m3, available_m3);
+    let wanted = short_m3 * gate.release_per_arriving;
+    // What is missing arrives exactly, not but for rounding.
+    if wanted <= most { (wanted, short_m3) } else { (most, most * gate.arriving_share) }
+}
+
+impl River {
+    /// Shares the day's water by date.
+    #[inline(always)]
+    pub(super) fn share_by_date(
+        &self,
+        state: &mut RiverState,
+        input: &RiverInput,
+        morning: &Morning,
+        out: &mut RiverDay,
+    ) -> Shared {
+        let n = self.gates.len();
+        let end = n + 1;
+        let mut reaches = Reaches::new(&mut out.room_m3[..n + 2]);
+        let reservoir_want = self.reservoir_want_m3(input, morning);
+        let minimum_want = if self.minimum_at_dam { 0.0 } else { input.minimum_m3 };
+        let (mut reservoir_take, mut reserved) = (0.0, 0.0);
+        if morning.any_wish {
+            let natural_take = &mut out.natural_take_m3[..n];
+            for &position in &self.date_order {
+                let position = usize::from(position);
+                if position == 0 {
+                    reservoir_take = reaches.claim(0, reservoir_want);
+                } else if position == end {
+                    reserved = reaches.claim(end, minimum_want);
+                } else {
+                    let want = least(out.wish_m3[position - 1], self.gates[position - 1].decreed_m3);
+                    natural_take[position - 1] = reaches.claim(position, want);
+                }
+            }
+        } else if self.minimum_before_reservoir {
+            reserved = reaches.claim(end, minimum_want);
+            reservoir_take = reaches.claim(0, reservoir_want);
+        } else {
+            reservoir_take = reaches.claim(0, reservoir_want);
+            reserved = reaches.claim(end, minimum_want);
+        }
+        let natural_end_m3 = reaches.unclaimed_at_end_m3() + reserved;
+
+        let mut outlet_left = self.outlet_left_m3(morning, reservoir_take);
+        let (mut released, mut arriving) = (0.0, 0.0);
+        if morning.any_wish {
+            let mut available = least(outlet_left, input.stored_limit_m3);
+            for &position in &self.date_order {
+                let Some(i) = usize::from(position).checked_sub(1).filter(|&i| i < n) else { continue };
+                let short = positive(out.wish_m3[i] - out.natural_take_m3[i]);
+                let (debited, arrived) = draw(&self.gates[i], short, state.account_m3[i], available);
+                state.account_m3[i] -= debited;
+                available -= debited;
+                released += debited;
+                arriving += arrived;
+                out.stored_take_m3[i] = debited;
+                out.canal_m3[i] = out.natural_take_m3[i] + arrived;
+            }
+            outlet_left = positive(outlet_left - released);
+            let mut total = 0.0;
+            for (canal, drawn) in out.canal_m3[..n].iter().zip(&mut state.drawn_this_year_m3[..n]) {
+                *drawn += canal;
+                total += canal;
+            }
+            out.canal_total_m3 = total;
+        }
+        Shared {
+            reservoir_take_m3: reservoir_take,
+            reserved_at_end_m3: reserved,
+            stored_release_m3: released,
+            stored_arriving_m3: arriving,
+            natural_end_m3,
+            outlet_left_m3: outlet_left,
+        }
+    }
+}

@@ -134,12 +134,12 @@ pub(super) fn priority_from_text(text: &str) -> Option<PriorityDate> {
 
 fn whole_year(year: f64) -> Option<PriorityDate> {
     let inside = year % 1.0 == 0.0 && RIGHT_YEARS.contains(&(year as i32));
-    inside.then_some(PriorityDate::On { year: year as i16, month: 1, day: 1 })
+    inside.then_some(PriorityDate::On { year: year as i32, month: 1, day: 1 })
 }
 
 fn priority_on(date: NaiveDate) -> Option<PriorityDate> {
     RIGHT_YEARS.contains(&date.year()).then_some(PriorityDate::On {
-        year: date.year() as i16,
+        year: date.year(),
         month: date.month() as u8,
         day: date.day() as u8,
     })

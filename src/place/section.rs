@@ -75,6 +75,11 @@ impl<'a> Section<'a> {
         self.table.get(key).map(|entry| &entry.value)
     }
 
+    /// The value of a key that is asked for elsewhere.
+    pub fn peek(&self, key: &str) -> Option<&'a Value> {
+        self.table.get(key).map(|entry| &entry.value)
+    }
+
     /// A table inside this one.
     pub fn section(&self, key: &'static str) -> Section<'a> {
         let name = if self.name.is_empty() { key.to_owned() } else { format!("{}.{key}", self.name) };

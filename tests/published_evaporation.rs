@@ -124,6 +124,11 @@ fn numbers(value: &Value) -> Vec<f64> {
     value.as_array().map_or_else(|| vec![number(value)], |items| items.iter().map(number).collect())
 }
 
+/// Whether a value is that close to its target; one that is not a number never is.
+fn within(value: f64, target: f64, tolerance: f64) -> bool {
+    (value - target).abs() <= tolerance
+}
+
 /// FAO-56 examples 10 to 12 are one story: 22°54′ south, 15 May, 220 h of sunshine in the month.
 fn example_10_solar() -> f64 {
     let latitude = radians(-22.9);
@@ -236,14 +241,14 @@ fn every_published_value_is_met() {
         assert_eq!(ours.len(), expected.len(), "{id}");
         for (value, target) in ours.iter().zip(&expected) {
             let tolerance = if *target == 0.0 { 1e-9 } else { rel_tol * target.abs() };
-            if !((value - target).abs() <= tolerance) {
+            if !within(*value, *target, tolerance) {
                 faults.push(format!("{id}: {value} is not {target} ± {tolerance}"));
             }
         }
         if let (Some(printed), Some(hold)) = (check.get("printed"), check.get("hold_printed_to")) {
             for (value, target) in ours.iter().zip(numbers(printed)) {
                 // The last digit's half unit is itself a decimal fraction, hence the hair.
-                if !((value - target).abs() <= number(hold) * 1.000_000_1) {
+                if !within(*value, target, number(hold) * 1.000_000_1) {
                     faults.push(format!("{id}: {value} is not the printed {target}"));
                 }
             }

@@ -1,3 +1,3 @@
 //! A place folder in, checked values out: TOML and CSV, with every error at its line.
 
-pub mod problem;
+pub mod crop_table;

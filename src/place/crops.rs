@@ -14,7 +14,7 @@ pub(super) const FALLOW: &str = "fallow";
 
 /// A crop as a place knows it.
 #[derive(Clone, Debug, PartialEq)]
-pub struct Crop {
+pub struct PlaceCrop {
     /// Key that the place's fields use.
     pub key: String,
     /// Its name, where the place describes the crop itself; the built-in crops have theirs in `locales`.
@@ -27,7 +27,7 @@ pub struct Crop {
 
 /// The crops that fields may name.
 pub(super) struct Crops {
-    own: Vec<Crop>,
+    own: Vec<PlaceCrop>,
     southern: bool,
 }
 
@@ -47,13 +47,15 @@ impl Crops {
     }
 
     /// The crop that a field at `at` names; tells where there is none.
-    pub fn find(&self, section: &Section<'_>, key: &str, at: &Location) -> Option<Crop> {
+    pub fn find(&self, section: &Section<'_>, key: &str, at: &Location) -> Option<PlaceCrop> {
         if let Some(crop) = self.own.iter().find(|crop| crop.key == key) {
             return Some(crop.clone());
         }
-        if let Some(row) = crop_table::crop(key) {
-            let planting = if self.southern { half_a_year_later(row.planting) } else { row.planting };
-            return Some(Crop { key: key.to_owned(), name: None, traits: row.traits, planting });
+        if let Some(row) = crop_table::built_in_crop(key) {
+            let (month, day) = row.season_start(self.southern);
+            // Months differ in length: what starts on a 31st here may have none half a year later.
+            let planting = (1..=day).rev().find_map(|day| MonthDay::new(month, day))?;
+            return Some(PlaceCrop { key: key.to_owned(), name: None, traits: row.traits, planting });
         }
         let known = self.own.iter().map(|crop| crop.key.clone());
         let nearest = nearest(key, known.chain(crop_table::CROPS.iter().map(|row| row.key.to_owned())));
@@ -63,7 +65,7 @@ impl Crops {
     }
 }
 
-fn own_crop(section: &Section<'_>) -> Crop {
+fn own_crop(section: &Section<'_>) -> PlaceCrop {
     let coefficient = |base| section.need_number(base, PLAIN, Limits(0.0, 2.0)).value;
     let stages = section.numbers("stage_days", PLAIN, Limits(0.0, 366.0));
     if stages.is_none() {
@@ -83,7 +85,7 @@ fn own_crop(section: &Section<'_>) -> Crop {
     if planting.is_none() {
         section.tell_missing("planting");
     }
-    Crop {
+    PlaceCrop {
         key: key(section),
         name: Some(need_names(section, "name")),
         traits: CropTraits {
@@ -109,25 +111,4 @@ pub(super) fn key(section: &Section<'_>) -> String {
         section.sheet.tell(Problem::error(at, "problem-key-letters").with("value", key));
     }
     key.to_owned()
-}
-
-/// The same time of the growing year on the other half of the earth.
-fn half_a_year_later(day: MonthDay) -> MonthDay {
-    let month = (day.month + 5) % 12 + 1;
-    // Months differ in length: the 31st has none in half of them.
-    (1..=day.day).rev().find_map(|day| MonthDay::new(month, day)).unwrap_or(day)
-}
-
-#[cfg(test)]
-mod tests {
-    use super::*;
-
-    #[test]
-    fn seasons_are_turned_round() {
-        let md = |month, day| MonthDay::new(month, day).unwrap();
-        assert_eq!(half_a_year_later(md(4, 15)), md(10, 15));
-        assert_eq!(half_a_year_later(md(10, 31)), md(4, 30));
-        assert_eq!(half_a_year_later(md(8, 31)), md(2, 29));
-        assert_eq!(half_a_year_later(md(12, 1)), md(6, 1));
-    }
 }

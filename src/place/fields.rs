@@ -2,7 +2,7 @@
 
 use heapless::Vec as FixedVec;
 
-use super::crops::{Crop, Crops, FALLOW};
+use super::crops::{Crops, FALLOW, PlaceCrop};
 use super::dated::month_day;
 use super::problem::{Location, Problem};
 use super::section::{Limits, Number, Section, unknown_choice};
@@ -92,7 +92,7 @@ fn field(section: &Section<'_>, crops: &Crops) -> Option<ReadField> {
 }
 
 /// A crop as it is grown on a field.
-pub(super) fn on_field(crop: &Crop, refill_to_share: f64, off_season_coefficient: f64) -> CropOnField {
+pub(super) fn on_field(crop: &PlaceCrop, refill_to_share: f64, off_season_coefficient: f64) -> CropOnField {
     CropOnField {
         traits: crop.traits,
         planting: crop.planting,

@@ -7,7 +7,7 @@ use std::cell::RefCell;
 
 use super::problem::{Location, Problem};
 use super::tree::{Entry, Kind, Sheet, Table, Value};
-use super::unit_suffix::{UnitSuffix, Units};
+use super::unit_suffix::{OTHER_SUFFIXES, UnitSuffix, Units};
 
 static NOTHING: Table = Table { entries: Vec::new(), span: 0..0 };
 
@@ -39,6 +39,7 @@ pub(super) struct Section<'a> {
     /// Whether the file has this table.
     pub present: bool,
     asked: RefCell<Vec<(&'static str, Option<Units>)>>,
+    missing: RefCell<Vec<String>>,
     rest_is_free: bool,
 }
 
@@ -50,7 +51,7 @@ impl<'a> Section<'a> {
     }
 
     fn new(sheet: &'a Sheet<'a>, name: String, table: &'a Table, at: Location, present: bool) -> Self {
-        Self { sheet, name, table, at, present, asked: RefCell::new(Vec::new()), rest_is_free: false }
+        Self { sheet, name, table, at, present, asked: RefCell::default(), missing: RefCell::default(), rest_is_free: false }
     }
 
     /// Entries in the order of the file, for tables whose keys are free; none of them is then unknown.
@@ -119,11 +120,11 @@ impl<'a> Section<'a> {
         Section::new(self.sheet, name, &NOTHING, at, false)
     }
 
-    /// Tells that `key` is missing, unless the whole table is or the text is broken.
+    /// Tells that `key` is missing, unless the whole table is or the text is broken. It is told at the end, and not at
+    /// all when a misspelt key turns out to be meant for it.
     pub fn tell_missing(&self, key: &str) {
         if self.present && !self.sheet.broken {
-            let problem = Problem::error(self.at.clone(), "problem-key-missing").with("key", key);
-            self.sheet.tell(problem.with("table", self.name.clone()));
+            self.missing.borrow_mut().push(key.to_owned());
         }
     }
 
@@ -183,16 +184,9 @@ impl<'a> Section<'a> {
     /// A number that the file must give.
     pub fn need_number(&self, base: &'static str, units: Units, limits: Limits) -> Number {
         self.number(base, units, limits).unwrap_or_else(|| {
-            if !self.has_without_unit(base) {
-                self.tell_missing(&format!("{base}{}", units[0].suffix));
-            }
+            self.tell_missing(&format!("{base}{}", units[0].suffix));
             Number { value: f64::NAN, at: self.at.clone(), stated: false }
         })
-    }
-
-    /// Whether the file has this key with a wrong unit or none; then that is told and not that the key is missing.
-    fn has_without_unit(&self, base: &str) -> bool {
-        self.table.entries.iter().any(|entry| lacks_unit(&entry.key, base))
     }
 
     /// The value of `key` as text.
@@ -267,45 +261,56 @@ impl<'a> Section<'a> {
         found.map(|(_, choice)| (*choice, at))
     }
 
-    /// Says that every key not asked for is unknown.
-    fn tell_unknown(&self) {
+    /// Says that every key not asked for is unknown, then what is missing.
+    fn conclude(&self) {
         let asked = self.asked.borrow();
-        for entry in &self.table.entries {
-            let known = asked.iter().any(|(base, units)| match units {
-                None => entry.key == *base,
-                Some(units) => units.iter().any(|unit| is_with_suffix(&entry.key, base, unit.suffix)),
-            });
-            if known {
+        let names: Vec<String> = asked.iter().flat_map(|(base, units)| written(base, *units)).collect();
+        let mut explained: Vec<String> = Vec::new();
+        for entry in self.table.entries.iter().filter(|entry| !self.rest_is_free && !names.contains(&entry.key)) {
+            let problem = |message| Problem::error(self.key_at(entry), message).with("key", entry.key.clone());
+            let in_other_unit: Vec<String> = asked
+                .iter()
+                .filter(|(base, units)| units.is_some_and(|units| is_without_unit(&entry.key, base, units)))
+                .flat_map(|(base, units)| written(base, *units))
+                .collect();
+            if !in_other_unit.is_empty() {
+                self.sheet.tell(problem("problem-key-unit").with("choices", in_other_unit.join(", ")));
+                explained.extend(in_other_unit);
                 continue;
             }
-            let at = self.key_at(entry);
-            let without_unit = asked.iter().find_map(|(base, units)| {
-                units.filter(|units| !units[0].suffix.is_empty() && lacks_unit(&entry.key, base)).map(|u| (base, u))
+            let nearest = nearest(&entry.key, names.iter().cloned());
+            explained.push(nearest.clone());
+            self.sheet.tell(if self.name.is_empty() {
+                problem("problem-table-unknown").with("nearest", nearest)
+            } else {
+                problem("problem-key-unknown").with("nearest", nearest).with("table", self.name.clone())
             });
-            if let Some((base, units)) = without_unit {
-                let ways: Vec<String> = units.iter().map(|unit| format!("{base}{}", unit.suffix)).collect();
-                let problem = Problem::error(at, "problem-key-unit").with("key", entry.key.clone());
-                self.sheet.tell(problem.with("choices", ways.join(", ")));
-                continue;
-            }
-            let names = asked.iter().flat_map(|(base, units)| match units {
-                None => vec![(*base).to_owned()],
-                Some(units) => units.iter().map(|unit| format!("{base}{}", unit.suffix)).collect(),
-            });
-            let nearest = nearest(&entry.key, names);
-            let message = if self.name.is_empty() { "problem-table-unknown" } else { "problem-key-unknown" };
-            let problem = Problem::error(at, message).with("key", entry.key.clone()).with("nearest", nearest);
-            self.sheet.tell(if self.name.is_empty() { problem } else { problem.with("table", self.name.clone()) });
+        }
+        for key in self.missing.borrow().iter().filter(|key| !explained.contains(key)) {
+            let problem = Problem::error(self.at.clone(), "problem-key-missing").with("key", key.clone());
+            self.sheet.tell(problem.with("table", self.name.clone()));
         }
     }
+}
+
+/// Every way to write a key.
+fn written(base: &str, units: Option<Units>) -> Vec<String> {
+    match units {
+        None => vec![base.to_owned()],
+        Some(units) => units.iter().map(|unit| format!("{base}{}", unit.suffix)).collect(),
+    }
+}
+
+/// Whether `key` is `base` without a unit, or with one that this value cannot have.
+fn is_without_unit(key: &str, base: &str, units: Units) -> bool {
+    let Some(rest) = key.strip_prefix(base) else { return false };
+    !units[0].suffix.is_empty() && (rest.is_empty() || OTHER_SUFFIXES.contains(&rest))
 }
 
 impl Drop for Section<'_> {
     /// A table is judged when nobody will ask it any more, whichever way its reader returned.
     fn drop(&mut self) {
-        if !self.rest_is_free {
-            self.tell_unknown();
-        }
+        self.conclude();
     }
 }
 
@@ -334,15 +339,6 @@ pub(super) fn nearest(word: &str, names: impl Iterator<Item = String>) -> String
         }
     }
     best.map(|(_, name)| name).unwrap_or_default()
-}
-
-fn is_with_suffix(key: &str, base: &str, suffix: &str) -> bool {
-    key.strip_suffix(suffix) == Some(base)
-}
-
-/// Whether `key` is `base` with no unit, or with one that nobody asked for.
-fn lacks_unit(key: &str, base: &str) -> bool {
-    key.strip_prefix(base).is_some_and(|rest| rest.is_empty() || rest.starts_with('_'))
 }
 
 /// A bound as people would write it, six significant digits.

@@ -101,6 +101,16 @@ pub(super) const SOIL_HOLDS: Units = &[unit("_mm_per_m", 1.0), unit("_in_per_ft"
 /// Seepage through a canal's bed, m/day.
 pub(super) const SEEPAGE: Units = &[unit("_m_day", 1.0), unit("_ft_day", M_PER_FOOT)];
 
+/// Ends of keys that are units, right or wrong for the key at hand; with them a key is told to lack its right unit and
+/// not to be unknown.
+pub(super) const OTHER_SUFFIXES: [&str; 48] = [
+    "_share", "_percent", "_days", "_day", "_hours", "_m", "_ft", "_feet", "_km", "_miles", "_mi", "_km2", "_m2", "_ha",
+    "_acres", "_ac", "_square_miles", "_hm3", "_m3", "_acre_feet", "_acre_ft", "_ac_ft", "_af", "_m3s", "_m3_s", "_cms",
+    "_cfs", "_ft3s", "_ft3_s", "_ls", "_l_s", "_litres_per_second", "_m3_day", "_acre_feet_day", "_mm", "_in",
+    "_inches", "_cm", "_mm_day", "_in_day", "_c", "_f", "_c_per_km", "_f_per_1000ft", "_c_per_100m", "_mm_c_day",
+    "_in_f_day", "_mm_per_m",
+];
+
 #[cfg(test)]
 mod tests {
     use super::*;

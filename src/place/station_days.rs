@@ -65,7 +65,7 @@ struct Columns {
     given: bool,
 }
 
-/// Reads `[evaporation]`; `lowest_field_m` is where the reference is worked out unless the place says otherwise.
+/// Reads `[evaporation]`; the reference is worked out at the station unless the place says otherwise.
 pub(super) fn evaporation(
     root: &Section<'_>,
     record: Option<&ReadRecord>,

@@ -12,8 +12,8 @@ use super::evaporation::Method;
 
 /// Most elevation bands of a valley.
 pub const MOST_BANDS: usize = 32;
-/// Most gates on the river: canals and towns together.
-pub const MOST_GATES: usize = 24;
+pub use super::canals::MOST_GATES;
+
 /// Most fields of a canal.
 pub const MOST_FIELDS: usize = 8;
 /// Most points of the reservoir's table.
@@ -178,7 +178,7 @@ pub struct Band {
 }
 
 /// A reservoir on the river.
-#[derive(Clone, Debug, PartialEq, Serialize, Deserialize)]
+#[derive(Clone, Debug, PartialEq)]
 pub struct Reservoir {
     /// Rising points of the survey table, at least two, from the bottom.
     pub table: Vec<LakePoint, MOST_LAKE_POINTS>,

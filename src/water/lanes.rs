@@ -1,0 +1,118 @@
+//! A few numbers that go through the same arithmetic side by side: elevation bands of one run, or many runs of a band.
+//!
+//! Plain arrays, no intrinsics: the compiler turns the loops into vector instructions where the target has them, and
+//! every lane gets the same bits as it would alone.
+
+use core::ops::{Add, Mul, Sub};
+
+/// `L` numbers side by side.
+#[derive(Clone, Copy, Debug, PartialEq)]
+#[repr(align(16))]
+pub struct Lanes<const L: usize>(pub [f64; L]);
+
+/// The smaller of two numbers that are not NaN; one instruction, unlike `f64::min`, which must look for NaN.
+#[inline(always)]
+pub fn least(a: f64, b: f64) -> f64 {
+    if a < b { a } else { b }
+}
+
+/// The larger of two numbers that are not NaN.
+#[inline(always)]
+pub fn most(a: f64, b: f64) -> f64 {
+    if a > b { a } else { b }
+}
+
+/// Square root, correctly rounded on every target.
+#[inline(always)]
+pub fn square_root(x: f64) -> f64 {
+    #[cfg(feature = "std")]
+    {
+        x.sqrt()
+    }
+    #[cfg(not(feature = "std"))]
+    {
+        libm::sqrt(x)
+    }
+}
+
+impl<const L: usize> Lanes<L> {
+    /// The same number in every lane.
+    #[inline(always)]
+    pub const fn splat(x: f64) -> Self {
+        Lanes([x; L])
+    }
+
+    /// `f` of every lane.
+    #[inline(always)]
+    pub fn map(self, f: impl Fn(f64) -> f64) -> Self {
+        let mut out = self;
+        for lane in &mut out.0 {
+            *lane = f(*lane);
+        }
+        out
+    }
+
+    /// `f` of the lanes of both.
+    #[inline(always)]
+    pub fn zip(self, other: Self, f: impl Fn(f64, f64) -> f64) -> Self {
+        let mut out = self;
+        for (lane, other) in out.0.iter_mut().zip(other.0) {
+            *lane = f(*lane, other);
+        }
+        out
+    }
+
+    /// The smaller, lane by lane.
+    #[inline(always)]
+    pub fn least(self, other: Self) -> Self {
+        self.zip(other, least)
+    }
+
+    /// The larger, lane by lane.
+    #[inline(always)]
+    pub fn most(self, other: Self) -> Self {
+        self.zip(other, most)
+    }
+
+    /// Zero where negative.
+    #[inline(always)]
+    pub fn positive(self) -> Self {
+        self.map(|x| most(x, 0.0))
+    }
+
+    /// Square root, lane by lane.
+    #[inline(always)]
+    pub fn square_root(self) -> Self {
+        self.map(square_root)
+    }
+}
+
+impl<const L: usize> Default for Lanes<L> {
+    fn default() -> Self {
+        Self::splat(0.0)
+    }
+}
+
+impl<const L: usize> Add for Lanes<L> {
+    type Output = Self;
+    #[inline(always)]
+    fn add(self, other: Self) -> Self {
+        self.zip(other, |a, b| a + b)
+    }
+}
+
+impl<const L: usize> Sub for Lanes<L> {
+    type Output = Self;
+    #[inline(always)]
+    fn sub(self, other: Self) -> Self {
+        self.zip(other, |a, b| a - b)
+    }
+}
+
+impl<const L: usize> Mul for Lanes<L> {
+    type Output = Self;
+    #[inline(always)]
+    fn mul(self, other: Self) -> Self {
+        self.zip(other, |a, b| a * b)
+    }
+}

@@ -25,6 +25,22 @@ pub struct PlaceCrop {
     pub planting: MonthDay,
 }
 
+impl PlaceCrop {
+    /// What stands on a field whose crop is not known, so that reading can go on; it was told.
+    pub(super) fn unknown(key: &str) -> Self {
+        let traits = CropTraits {
+            coefficient_initial: f64::NAN,
+            coefficient_mid: f64::NAN,
+            coefficient_end: f64::NAN,
+            stage_days: [0; 4],
+            root_depth_m: f64::NAN,
+            depletion_share: f64::NAN,
+            yield_response: None,
+        };
+        Self { key: key.to_owned(), name: None, traits, planting: MonthDay { month: 1, day: 1 } }
+    }
+}
+
 /// The crops that fields may name.
 pub(super) struct Crops {
     own: Vec<PlaceCrop>,

@@ -1,13 +1,11 @@
 //! Fields under a canal, and what the canal loses on the way to them.
 
-use heapless::Vec as FixedVec;
-
 use super::crops::{Crops, FALLOW, PlaceCrop};
 use super::dated::month_day;
 use super::problem::{Location, Problem};
 use super::section::{Limits, Number, Section, unknown_choice};
 use super::text::Text;
-use super::unit_suffix::{AREA_HA, CANAL_LENGTH, DEPTH_MM, METRES, PLAIN, SEEPAGE, SHARE, SOIL_HOLDS};
+use super::unit_suffix::{AREA_HA, CANAL_LENGTH, DEPTH_MM_DAY, METRES, PLAIN, SEEPAGE, SHARE, SOIL_HOLDS};
 use crate::water::crop::{SOIL_TEXTURES, soil_texture};
 use crate::water::units::SECONDS_PER_DAY;
 use crate::water::valley::{CropOnField, Field, MOST_FIELDS};
@@ -68,18 +66,21 @@ pub(super) fn read(canal: &Section<'_>, crops: &Crops) -> Vec<ReadField> {
     if sections.is_empty() {
         canal.tell_missing("field");
     }
-    sections.iter().filter_map(|section| field(section, crops)).collect()
+    sections.iter().map(|section| field(section, crops)).collect()
 }
 
-fn field(section: &Section<'_>, crops: &Crops) -> Option<ReadField> {
+fn field(section: &Section<'_>, crops: &Crops) -> ReadField {
     let area = section.need_number("area", AREA_HA, Limits(0.000_1, 2.0e6));
     let efficiency = efficiency(section);
     let soil = soil(section);
     let refill = section.number_or("refill_to", SHARE, Limits(0.0, 1.0), 0.0).value;
     let off_season = section.number_or("off_season_coefficient", PLAIN, Limits(0.0, 1.2), 0.2).value;
-    let most_watering = section.number_or("most_watering", DEPTH_MM, Limits(0.1, 300.0), 10.0).value;
+    let most_watering = section.number_or("most_watering", DEPTH_MM_DAY, Limits(0.1, 300.0), 10.0).value;
     let planting = section.get("planting").and_then(|value| month_day(section, "planting", value));
-    let crop = section.need_text("crop").and_then(|(key, at)| crops.find(section, key, &at))?;
+    let named = section.need_text("crop");
+    let crop = named.as_ref().and_then(|(key, at)| crops.find(section, key, at));
+    // The area of a field whose crop is unknown still counts where areas are compared.
+    let crop = crop.unwrap_or_else(|| PlaceCrop::unknown(named.map_or("", |(key, _)| key)));
     let field = Field {
         area_ha: area.value,
         crop: CropOnField { planting: planting.unwrap_or(crop.planting), ..on_field(&crop, refill, off_season) },
@@ -88,7 +89,7 @@ fn field(section: &Section<'_>, crops: &Crops) -> Option<ReadField> {
         soil_holds_mm_per_m: soil,
         most_watering_mm_day: most_watering,
     };
-    Some(ReadField { field, names: FieldNames { crop: crop.key, crop_name: crop.name } })
+    ReadField { field, names: FieldNames { crop: crop.key, crop_name: crop.name } }
 }
 
 /// A crop as it is grown on a field.

@@ -8,7 +8,6 @@ use super::rights_file::RightsFile;
 use super::section::{Limits, Number, Section, nearest};
 use super::slopes::share;
 use super::text::{Text, need_names};
-use super::tree::Kind;
 use super::unit_suffix::{DAILY_M3, DAYS, FLOW_M3S, PLAIN, SHARE, VOLUME_HM3};
 use crate::water::calendar::{MonthDay, Season};
 use crate::water::canals::{PriorityDate, SharingRule};
@@ -121,8 +120,7 @@ fn gate(section: &Section<'_>, rule: SharingRule, rights: &RightsFile, crops: Op
     if !is_town && season.is_none() && section.peek("opens").is_none() && section.peek("closes").is_none() {
         section.tell_missing("opens");
     }
-    let over_new_year =
-        section.peek("season_over_new_year").map(|_| section.flag_or("season_over_new_year", false));
+    let over_new_year = section.peek("season_over_new_year").map(|_| section.flag_or("season_over_new_year", false));
     let season = season.inspect(|(season, at)| check_season(section, *season, at));
     let conveyance_loss_share = match crops {
         Some(_) => loss(section, &capacity),
@@ -266,9 +264,4 @@ pub(super) fn rule(sharing: &Section<'_>) -> SharingRule {
         sharing.tell_missing("rule");
     }
     sharing.choice("rule", &rules).map_or(SharingRule::Proportional, |(rule, _)| rule)
-}
-
-/// Whether a value of the file is a table; used where a key may be either.
-pub(super) fn is_table(section: &Section<'_>, key: &str) -> bool {
-    section.peek(key).is_some_and(|value| matches!(value.kind, Kind::Table(_)))
 }

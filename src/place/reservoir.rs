@@ -26,8 +26,6 @@ pub(super) struct ReadReservoir {
     pub reservoir: Reservoir,
     /// Where the outlet's capacity stands.
     pub outlet: Number,
-    /// Where the reservoir stands.
-    pub at: Location,
 }
 
 /// Reads `[reservoir]`, if there is one.
@@ -78,7 +76,7 @@ pub(super) fn read(root: &Section<'_>, source: Source<'_>) -> Option<ReadReservo
         serves_minimum: section.flag_or("serves_minimum", true),
         hedging: hedging(&section.section("hedging")),
     };
-    Some(ReadReservoir { reservoir, outlet, at: section.at.clone() })
+    Some(ReadReservoir { reservoir, outlet })
 }
 
 /// The level–area–volume table: three lists of one length, here or in a file.
@@ -193,13 +191,13 @@ fn dated(
             continue;
         };
         let Some(day) = month_day(&point, date_key, day) else { continue };
-        if let Some((before, ..)) = points.last()
-            && *before >= day
-        {
-            section.sheet.tell(Problem::error(point.at.clone(), "problem-dates-order").with("key", key));
+        if points.iter().any(|(known, ..)| *known == day) {
+            section.sheet.tell(Problem::error(point.at.clone(), "problem-date-twice").with("key", key));
         }
         points.push((day, amount.value, amount.at));
     }
+    // People start such a list in any month; the water wants it from January.
+    points.sort_by_key(|(day, ..)| *day);
     points
 }
 
@@ -245,4 +243,3 @@ pub(super) fn minimum(root: &Section<'_>) -> ReadMinimum {
     let rate_m3s = rates.into_iter().map(|(day, rate, _)| (day, rate)).take(MOST_RULE_POINTS).collect();
     ReadMinimum { minimum: RiverMinimum { at, right_date, rate_m3s }, largest }
 }
-

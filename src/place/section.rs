@@ -9,7 +9,7 @@ use super::problem::{Location, Problem};
 use super::tree::{Entry, Kind, Sheet, Table, Value};
 use super::unit_suffix::{OTHER_SUFFIXES, UnitSuffix, Units};
 
-static NOTHING: Table = Table { entries: Vec::new(), span: 0..0 };
+static NOTHING: Table = Table { entries: Vec::new() };
 
 /// A number that was asked for.
 #[derive(Clone, Debug)]
@@ -51,7 +51,16 @@ impl<'a> Section<'a> {
     }
 
     fn new(sheet: &'a Sheet<'a>, name: String, table: &'a Table, at: Location, present: bool) -> Self {
-        Self { sheet, name, table, at, present, asked: RefCell::default(), missing: RefCell::default(), rest_is_free: false }
+        Self {
+            sheet,
+            name,
+            table,
+            at,
+            present,
+            asked: RefCell::default(),
+            missing: RefCell::default(),
+            rest_is_free: false,
+        }
     }
 
     /// Entries in the order of the file, for tables whose keys are free; none of them is then unknown.

@@ -58,22 +58,22 @@ fn tell_length(section: &Section<'_>, key: &str, found: usize, wanted: usize) {
     section.sheet.tell(problem.with("found", found).with("wanted", wanted));
 }
 
-/// Reads `[rain_snow]`.
-pub(super) fn rain_snow(root: &Section<'_>) -> RainSnow {
+/// Reads `[rain_snow]`; `humidity` is whether the record has any.
+pub(super) fn rain_snow(root: &Section<'_>, humidity: bool) -> RainSnow {
     let section = root.section("rain_snow");
     let snow = section.number_or("all_snow_below", CELSIUS, Limits(-10.0, 10.0), 0.0);
     let rain = section.number_or("all_rain_above", CELSIUS, Limits(-10.0, 10.0), 3.0);
     if snow.value >= rain.value {
         let at = if rain.stated { rain.at } else { snow.at };
-        section.sheet.tell(
-            Problem::error(at, "problem-rain-snow-order").with("snow", snow.value).with("rain", rain.value),
-        );
+        section
+            .sheet
+            .tell(Problem::error(at, "problem-rain-snow-order").with("snow", snow.value).with("rain", rain.value));
     }
-    RainSnow {
-        all_snow_below_c: snow.value,
-        all_rain_above_c: rain.value,
-        wet_bulb: section.flag_or("wet_bulb", false),
+    let wet_bulb = section.flag_or("wet_bulb", false);
+    if let (true, false, Some(value)) = (wet_bulb, humidity, section.peek("wet_bulb")) {
+        section.sheet.tell(Problem::error(section.value_at(value), "problem-wet-bulb-humidity"));
     }
+    RainSnow { all_snow_below_c: snow.value, all_rain_above_c: rain.value, wet_bulb }
 }
 
 /// Reads `[snow]`.

@@ -34,8 +34,7 @@ impl SmallTable {
         let first = lines.peek().map_or("", |(_, line)| line);
         let delimiter = ['\t', ';'].into_iter().find(|mark| first.contains(*mark)).unwrap_or(',');
         let (header_line, header) = lines.next().map_or((0, Vec::new()), |(line, text)| (line, cells(text, delimiter)));
-        let mut table =
-            Self { file, decimal_comma: delimiter != ',', header, header_line, rows: Vec::new() };
+        let mut table = Self { file, decimal_comma: delimiter != ',', header, header_line, rows: Vec::new() };
         for (line, text) in lines {
             let row = cells(text, delimiter);
             if row.len() != table.header.len() {

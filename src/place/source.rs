@@ -16,7 +16,7 @@ pub enum Source<'a> {
     /// A folder with `place.toml` in it.
     Folder(&'a Path),
     /// File names, as `place.toml` says them, with their texts.
-    Embedded(&'a [(&'static str, &'static str)]),
+    Embedded(&'a [(&'a str, &'a str)]),
 }
 
 impl Source<'_> {

@@ -13,7 +13,7 @@ use crate::water::evaporation::radiation::{
     COASTAL_SOLAR_RANGE_COEFFICIENT, INTERIOR_SOLAR_RANGE_COEFFICIENT, solar_from_sunshine_mj_m2,
 };
 use crate::water::evaporation::{EvaporationDay, Method, PenmanMonteithTraits, SkyTable};
-use crate::water::valley::EvaporationTraits;
+use crate::water::valley::{EvaporationTraits, Valley};
 use crate::water::weather::StationDay;
 
 /// A published way to reference evaporation, by its key.
@@ -107,15 +107,20 @@ pub(super) fn evaporation(
     (traits, EvaporationNote { choice: method, best_available: choice.is_none() })
 }
 
-fn columns(record: &ReadRecord) -> Columns {
+/// Whether the record says anything of the air's water.
+pub(super) fn has_humidity(record: &ReadRecord) -> bool {
     let has = |measure| record.column(measure).is_some();
-    let humidity = has(Measure::RelativeHumidityMean)
+    has(Measure::RelativeHumidityMean)
         || (has(Measure::RelativeHumidityMin) && has(Measure::RelativeHumidityMax))
         || has(Measure::DewPoint)
-        || has(Measure::VapourPressure);
+        || has(Measure::VapourPressure)
+}
+
+fn columns(record: &ReadRecord) -> Columns {
+    let has = |measure| record.column(measure).is_some();
     Columns {
         extremes: has(Measure::TemperatureMin) && has(Measure::TemperatureMax),
-        air: humidity && (has(Measure::Solar) || has(Measure::Sunshine)),
+        air: has_humidity(record) && (has(Measure::Solar) || has(Measure::Sunshine)),
         given: has(Measure::ReferenceEvaporation),
     }
 }
@@ -156,10 +161,10 @@ fn check(section: &Section<'_>, choice: EvaporationChoice, columns: Columns, at:
 pub(super) fn station_days(
     record: &ReadRecord,
     calendar: &[CalendarDay],
-    latitude_deg: f64,
+    valley: &Valley,
     wind_height_m: f64,
 ) -> Vec<StationDay> {
-    let sky = SkyTable::at_latitude(latitude_deg);
+    let sky = SkyTable::at_latitude(valley.latitude_deg);
     let column = |measure| record.column(measure).map(|column| column.values.as_slice());
     let columns = WeatherColumns {
         tmin: column(Measure::TemperatureMin),
@@ -181,23 +186,20 @@ pub(super) fn station_days(
         .enumerate()
         .map(|(day, date)| {
             let (tmin_c, tmax_c) = (value(columns.tmin, day), value(columns.tmax, day));
-            let mean_c = value(columns.tmean, day);
-            StationDay {
-                precipitation_mm: value(precipitation, day),
-                air: EvaporationDay {
-                    tmin_c,
-                    tmax_c,
-                    tmean_c: if mean_c.is_nan() { (tmin_c + tmax_c) / 2.0 } else { mean_c },
-                    vapour_pressure_kpa: columns.vapour_pressure_kpa(day, tmin_c, tmax_c),
-                    wind_2m_ms: match wind {
-                        // The logarithmic profile is 1 at 2 m only up to rounding of its constants.
-                        Some(_) if wind_height_m != 2.0 => wind_at_2m_ms(value(wind, day), wind_height_m),
-                        _ => value(wind, day),
-                    },
-                    solar_mj_m2: columns.solar_mj_m2(day, date.day_of_year, sky.as_ref()),
-                    given_mm: value(given, day),
+            let air = EvaporationDay {
+                tmin_c,
+                tmax_c,
+                tmean_c: value(columns.tmean, day),
+                vapour_pressure_kpa: columns.vapour_pressure_kpa(day, tmin_c, tmax_c),
+                wind_2m_ms: match wind {
+                    // The logarithmic profile is 1 at 2 m only up to rounding of its constants.
+                    Some(_) if wind_height_m != 2.0 => wind_at_2m_ms(value(wind, day), wind_height_m),
+                    _ => value(wind, day),
                 },
-            }
+                solar_mj_m2: columns.solar_mj_m2(day, date.day_of_year, sky.as_ref()),
+                given_mm: value(given, day),
+            };
+            StationDay::at_station(valley, date.month_index(), value(precipitation, day), air)
         })
         .collect()
 }

@@ -55,8 +55,6 @@ pub(super) struct Entry {
 pub(super) struct Table {
     /// Entries in the order of the file.
     pub entries: Vec<Entry>,
-    /// Bytes of its heading, or of the braces.
-    pub span: Range<usize>,
 }
 
 impl Table {
@@ -95,7 +93,7 @@ impl<'t> Sheet<'t> {
                 sheet.problems.get_mut().push(problem);
             }
         }
-        (sheet, table(document.get_ref(), 0..0))
+        (sheet, table(document.get_ref()))
     }
 
     /// Where these bytes stand.
@@ -138,20 +136,20 @@ fn has_decimal_comma(line: &str) -> bool {
     }
 }
 
-fn table(from: &DeTable<'_>, span: Range<usize>) -> Table {
+fn table(from: &DeTable<'_>) -> Table {
     let mut entries: Vec<Entry> = from
         .iter()
         .map(|(key, value)| Entry {
             key: key.get_ref().to_string(),
             key_span: key.span(),
-            value: Value { span: value.span(), kind: kind(value.get_ref(), value.span()) },
+            value: Value { span: value.span(), kind: kind(value.get_ref()) },
         })
         .collect();
     entries.sort_by_key(|entry| entry.key_span.start);
-    Table { entries, span }
+    Table { entries }
 }
 
-fn kind(value: &DeValue<'_>, span: Range<usize>) -> Kind {
+fn kind(value: &DeValue<'_>) -> Kind {
     let finite = |number: f64| if number.is_finite() { Kind::Number(number) } else { Kind::Other };
     match value {
         DeValue::String(text) => Kind::Text(text.to_string()),
@@ -169,10 +167,10 @@ fn kind(value: &DeValue<'_>, span: Range<usize>) -> Kind {
         DeValue::Array(values) => Kind::List(
             values
                 .iter()
-                .map(|value| Value { span: value.span(), kind: kind(value.get_ref(), value.span()) })
+                .map(|value| Value { span: value.span(), kind: kind(value.get_ref()) })
                 .collect(),
         ),
-        DeValue::Table(entries) => Kind::Table(table(entries, span)),
+        DeValue::Table(entries) => Kind::Table(table(entries)),
     }
 }
 
@@ -184,8 +182,7 @@ mod tests {
     fn several_slips_are_told_together_and_reading_goes_on() {
         let text = "[place]\nlatitude_deg = 39,5\n[climb\nx = 1\nx = 2\nname = \"open\n";
         let (sheet, _) = Sheet::parse("place.toml", text);
-        let told: Vec<_> =
-            sheet.problems.borrow().iter().map(|problem| (problem.message, problem.at.line)).collect();
+        let told: Vec<_> = sheet.problems.borrow().iter().map(|problem| (problem.message, problem.at.line)).collect();
         assert_eq!(
             told,
             [("problem-decimal-comma", 2), ("problem-bracket", 3), ("problem-key-twice", 5), ("problem-quote", 6)]

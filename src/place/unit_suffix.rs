@@ -67,11 +67,8 @@ pub(super) const AREA_HA: Units = &[
     unit("_square_miles", M2_PER_SQUARE_MILE / M2_PER_HECTARE),
 ];
 /// Volumes of water in store, hm³.
-pub(super) const VOLUME_HM3: Units = &[
-    unit("_hm3", 1.0),
-    unit("_acre_feet", M3_PER_ACRE_FOOT / M3_PER_HM3),
-    unit("_m3", 1.0 / M3_PER_HM3),
-];
+pub(super) const VOLUME_HM3: Units =
+    &[unit("_hm3", 1.0), unit("_acre_feet", M3_PER_ACRE_FOOT / M3_PER_HM3), unit("_m3", 1.0 / M3_PER_HM3)];
 /// Flows, m³/s.
 pub(super) const FLOW_M3S: Units =
     &[unit("_m3s", 1.0), unit("_cfs", M3S_PER_FT3S), unit("_litres_per_second", 1.0 / LITRES_PER_M3)];
@@ -94,8 +91,7 @@ pub(super) const LAPSE: Units =
 /// Share of precipitation added per 100 m of climb.
 pub(super) const GRADIENT: Units = &[unit("_per_100m", 1.0), unit("_per_1000ft", 0.1 / M_PER_FOOT)];
 /// Degree-day factors, mm/°C/day.
-pub(super) const DEGREE_DAY: Units =
-    &[unit("_mm_c_day", 1.0), unit("_in_f_day", MM_PER_INCH * FAHRENHEIT_PER_CELSIUS)];
+pub(super) const DEGREE_DAY: Units = &[unit("_mm_c_day", 1.0), unit("_in_f_day", MM_PER_INCH * FAHRENHEIT_PER_CELSIUS)];
 /// Water held by a depth of soil, mm per m.
 pub(super) const SOIL_HOLDS: Units = &[unit("_mm_per_m", 1.0), unit("_in_per_ft", MM_PER_INCH / M_PER_FOOT)];
 /// Seepage through a canal's bed, m/day.
@@ -104,11 +100,54 @@ pub(super) const SEEPAGE: Units = &[unit("_m_day", 1.0), unit("_ft_day", M_PER_F
 /// Ends of keys that are units, right or wrong for the key at hand; with them a key is told to lack its right unit and
 /// not to be unknown.
 pub(super) const OTHER_SUFFIXES: [&str; 48] = [
-    "_share", "_percent", "_days", "_day", "_hours", "_m", "_ft", "_feet", "_km", "_miles", "_mi", "_km2", "_m2", "_ha",
-    "_acres", "_ac", "_square_miles", "_hm3", "_m3", "_acre_feet", "_acre_ft", "_ac_ft", "_af", "_m3s", "_m3_s", "_cms",
-    "_cfs", "_ft3s", "_ft3_s", "_ls", "_l_s", "_litres_per_second", "_m3_day", "_acre_feet_day", "_mm", "_in",
-    "_inches", "_cm", "_mm_day", "_in_day", "_c", "_f", "_c_per_km", "_f_per_1000ft", "_c_per_100m", "_mm_c_day",
-    "_in_f_day", "_mm_per_m",
+    "_share",
+    "_percent",
+    "_days",
+    "_day",
+    "_hours",
+    "_m",
+    "_ft",
+    "_feet",
+    "_km",
+    "_miles",
+    "_mi",
+    "_km2",
+    "_m2",
+    "_ha",
+    "_acres",
+    "_ac",
+    "_square_miles",
+    "_hm3",
+    "_m3",
+    "_acre_feet",
+    "_acre_ft",
+    "_ac_ft",
+    "_af",
+    "_m3s",
+    "_m3_s",
+    "_cms",
+    "_cfs",
+    "_ft3s",
+    "_ft3_s",
+    "_ls",
+    "_l_s",
+    "_litres_per_second",
+    "_m3_day",
+    "_acre_feet_day",
+    "_mm",
+    "_in",
+    "_inches",
+    "_cm",
+    "_mm_day",
+    "_in_day",
+    "_c",
+    "_f",
+    "_c_per_km",
+    "_f_per_1000ft",
+    "_c_per_100m",
+    "_mm_c_day",
+    "_in_f_day",
+    "_mm_per_m",
 ];
 
 #[cfg(test)]

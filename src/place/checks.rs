@@ -6,6 +6,7 @@ use super::bands::ReadBands;
 use super::dated::season_days;
 use super::gates::ReadGate;
 use super::problem::{Location, Problem};
+use super::record::{Measure, ReadRecord};
 use super::reservoir::{ReadMinimum, ReadReservoir};
 use super::section::{Number, Section};
 use crate::water::calendar::{CalendarDay, MonthDay, Season};
@@ -13,23 +14,28 @@ use crate::water::canals::SharingRule;
 use crate::water::lake::Vessel;
 use crate::water::units::{M2_PER_HECTARE, M2_PER_KM2, M3_PER_HM3, M3_PER_MM_HECTARE, SECONDS_PER_DAY};
 use crate::water::valley::{Climb, Field, Purpose, Reservoir};
-use crate::water::weather::StationDay;
 
 /// Feet in a metre, nearly: two heights in this relation were written in two units.
 const FEET_LIKE: std::ops::RangeInclusive<f64> = 2.9..=3.7;
 /// More water than any field takes on its hottest day, mm/day (common practice, no source).
 const GREATEST_NEED_MM_DAY: f64 = 12.0;
 
-/// Largest surface of the lake, at capacity, km².
+/// Largest surface of the lake, at capacity, km²; NaN where the reservoir could not be read.
 pub(super) fn largest_lake_km2(reservoir: &Reservoir) -> f64 {
+    if reservoir.table.len() < 2 || reservoir.capacity_hm3 <= reservoir.dead_hm3 {
+        return f64::NAN;
+    }
     Vessel::new(reservoir, 0.0).area_m2(reservoir.capacity_hm3 * M3_PER_HM3) / M2_PER_KM2
 }
 
 /// Bands, lake and fields beside the stated area of the whole valley.
 pub(super) fn areas(root: &Section<'_>, stated: Option<&Number>, bands: &ReadBands, lake_km2: f64, fields_km2: f64) {
+    let Some(stated) = stated else { return };
+    if bands.bands.is_empty() || root.sheet.broken {
+        return;
+    }
     let bands_km2: f64 = bands.bands.iter().map(|band| band.area_km2).sum();
     let found = bands_km2 + lake_km2 + fields_km2;
-    let Some(stated) = stated else { return };
     // Half a hundredth covers the rounding of areas read off a map.
     if (found - stated.value).abs() > 0.005 * stated.value {
         root.sheet.tell(
@@ -82,24 +88,37 @@ pub(super) fn station(root: &Section<'_>, station: &Number, bands: &ReadBands, c
     }
 }
 
-/// Whether the record's warm half-year is that of the latitude.
-pub(super) fn hemisphere(root: &Section<'_>, latitude: &Number, calendar: &[CalendarDay], days: &[StationDay]) {
+/// Whether the record's warm half-year is that of the latitude; what the record says is believed.
+pub(super) fn is_southern(
+    root: &Section<'_>,
+    latitude: &Number,
+    calendar: &[CalendarDay],
+    record: Option<&ReadRecord>,
+) -> bool {
+    let stated = latitude.value < 0.0;
+    let column = |measure| record.and_then(|record| record.column(measure)).map(|column| column.values.as_slice());
+    let (low, high) = (column(Measure::TemperatureMin), column(Measure::TemperatureMax));
+    let (Some(low), Some(high)) = (low.or(column(Measure::TemperatureMean)), high.or(column(Measure::TemperatureMean)))
+    else {
+        return stated;
+    };
     let mean = |months: [u8; 3]| {
-        let days = calendar.iter().zip(days).filter(|(date, _)| months.contains(&date.month_day.month));
-        let (sum, count) = days.fold((0.0, 0usize), |(sum, count), (_, day)| (sum + day.mean_temperature_c, count + 1));
-        if count < 60 { f64::NAN } else { sum / count as f64 }
+        let days = calendar.iter().zip(low.iter().zip(high)).filter(|(day, _)| months.contains(&day.month_day.month));
+        let (sum, count) = days.fold((0.0, 0usize), |(sum, count), (_, (low, high))| (sum + low + high, count + 1));
+        if count < 60 { f64::NAN } else { sum / (2 * count) as f64 }
     };
     let (june, december) = (mean([6, 7, 8]), mean([12, 1, 2]));
-    let warmer_in_june = june - december;
     // Near the equator seasons say little; elsewhere three degrees leave no doubt.
-    if warmer_in_june * latitude.value.signum() < -3.0 {
+    if (june - december) * latitude.value.signum() < -3.0 {
         root.sheet.tell(
             Problem::error(latitude.at.clone(), "problem-latitude-sign")
                 .with("value", latitude.value)
                 .with("june", june)
                 .with("december", december),
         );
+        return !stated;
     }
+    stated
 }
 
 /// Gates beside each other, the reservoir and the rule.
@@ -215,6 +234,7 @@ pub(super) fn outlet(root: &Section<'_>, reservoir: Option<&ReadReservoir>, mini
 
 /// Irrigated area of a valley, km².
 pub(super) fn fields_km2(gates: &[ReadGate]) -> f64 {
-    let hectares: f64 = gates.iter().flat_map(|gate| &gate.fields).map(|read| read.field.area_ha).sum();
-    hectares * M2_PER_HECTARE / M2_PER_KM2
+    let areas = gates.iter().flat_map(|gate| &gate.fields).map(|read| read.field.area_ha);
+    // An empty `sum` is −0, which people would read as a minus sign.
+    areas.fold(0.0, |sum, area| sum + area) * M2_PER_HECTARE / M2_PER_KM2
 }

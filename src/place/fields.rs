@@ -157,7 +157,8 @@ pub(super) fn loss(canal: &Section<'_>, capacity: &Number) -> f64 {
     match (stated, described.present) {
         (Some(stated), true) => {
             tell_either(canal, stated.at, "loss_share", "losses");
-            f64::NAN
+            // Read all the same, so that the mistakes in it are told too.
+            f64::NAN * described_loss(&described, capacity)
         }
         (Some(stated), false) => stated.value,
         (None, true) => described_loss(&described, capacity),

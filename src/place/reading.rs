@@ -104,7 +104,6 @@ fn spring_months(section: &Section<'_>) -> Option<(u8, u8)> {
 
 fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     let about = about(root);
-    let southern = about.latitude.value < 0.0;
     let station = {
         let section = root.section("station");
         section.tell_if_absent();
@@ -113,6 +112,8 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     let (climb, gradient) = slopes::climb(root);
     let (weather, wind_height_m) = weather(root, source);
     let record = weather.as_ref().map(|named| &named.record);
+    let calendar = calendar(root, &about, weather.as_ref());
+    let southern = checks::is_southern(root, &about.latitude, &calendar, record);
     let humidity = record.is_none_or(has_humidity);
     let (evaporation, evaporation_note) = evaporation(root, record, station.value);
 
@@ -127,6 +128,11 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     let reservoir = reservoir::read(root, source);
     let minimum = reservoir::minimum(root);
     let (start, settling) = slopes::start(root);
+    let whole_years = whole_water_years(&calendar, about.water_year_start_month);
+    if settling.value > whole_years as f64 && whole_years > 0 {
+        let problem = Problem::error(settling.at.clone(), "problem-settling-long");
+        root.sheet.tell(problem.with("value", settling.value).with("years", whole_years));
+    }
 
     let mut bands = bands::read(root);
     let lake_km2 = reservoir.as_ref().map_or(0.0, |read| checks::largest_lake_km2(&read.reservoir));
@@ -137,7 +143,6 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     checks::gates(root, &read_gates, reservoir.as_ref(), rule, southern);
     checks::outlet(root, reservoir.as_ref(), &minimum);
 
-    let calendar = calendar(root, &about, &settling, weather.as_ref());
     let comparisons = Comparisons::read(root, source, &read_gates);
 
     let (gates, names) = finished_gates(read_gates);
@@ -165,7 +170,6 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     let dials = dial_plan::read(root, &valley);
     let weather = weather?;
     let days = station_days(&weather.record, &calendar, &valley, wind_height_m);
-    checks::hemisphere(root, &about.latitude, &calendar, &days);
     Some(Place {
         folder: match source {
             Source::Folder(folder) => Some(folder.to_owned()),
@@ -195,7 +199,10 @@ fn take_out(root: &Section<'_>, bands: &mut bands::ReadBands, lake_km2: f64, fie
     let total: f64 = bands.bands.iter().map(|band| band.area_km2).sum();
     let lake = if bands.holds_lake { lake_km2 } else { 0.0 };
     let inside = lake + if bands.holds_fields { fields_km2 } else { 0.0 };
-    if inside >= total && inside > 0.0 {
+    if inside.is_nan() || total == 0.0 {
+        return;
+    }
+    if inside >= total {
         let problem = Problem::error(bands.at.clone(), "problem-areas-inside");
         root.sheet.tell(problem.with("inside", inside).with("found", total));
         return;
@@ -247,29 +254,25 @@ fn finished_gates(
 }
 
 /// The days of the record, which must have a whole water year at least.
-fn calendar(root: &Section<'_>, about: &About, settling: &Number, weather: Option<&NamedRecord>) -> Vec<CalendarDay> {
+fn calendar(root: &Section<'_>, about: &About, weather: Option<&NamedRecord>) -> Vec<CalendarDay> {
     let Some(weather) = weather else { return Vec::new() };
-    let count = weather.record.days;
-    let nothing = CalendarDay::new(weather.record.first_date, about.water_year_start_month);
-    let mut calendar = vec![nothing; count];
+    let first = CalendarDay::new(weather.record.first_date, about.water_year_start_month);
+    let mut calendar = vec![first; weather.record.days];
     fill_calendar(weather.record.first_date, about.water_year_start_month, &mut calendar);
-    let starts = calendar.iter().enumerate().filter(|(_, day)| day.day_of_water_year == 1).map(|(index, _)| index);
-    let starts: Vec<usize> = starts.collect();
-    // A water year is whole when the next one starts in the record, or would start the day after it.
-    let ends_whole = weather
-        .record
-        .first_date
-        .checked_add_days(chrono::Days::new(count as u64))
-        .is_some_and(|after| CalendarDay::new(after, about.water_year_start_month).day_of_water_year == 1);
-    let whole_years = (starts.len() + usize::from(ends_whole)).saturating_sub(1);
-    if whole_years == 0 {
+    if whole_water_years(&calendar, about.water_year_start_month) == 0 {
         let problem = Problem::error(weather.at.clone(), "problem-record-short");
-        root.sheet.tell(problem.with("days", count));
-    } else if settling.value > whole_years as f64 {
-        let problem = Problem::error(settling.at.clone(), "problem-settling-long");
-        root.sheet.tell(problem.with("value", settling.value).with("years", whole_years));
+        root.sheet.tell(problem.with("days", calendar.len()));
     }
     calendar
+}
+
+/// How many water years the record has from their first day to their last.
+fn whole_water_years(calendar: &[CalendarDay], start_month: u8) -> usize {
+    let starts = calendar.iter().filter(|day| day.day_of_water_year == 1).count();
+    let after = calendar.last().and_then(|last| last.date(start_month).succ_opt());
+    // The year under way at the end is whole only when the day after the record starts another.
+    let ends_whole = after.is_some_and(|after| CalendarDay::new(after, start_month).day_of_water_year == 1);
+    (starts + usize::from(ends_whole)).saturating_sub(1)
 }
 
 /// The records that a run is compared with.

@@ -79,6 +79,7 @@ pub(super) fn weather(root: &Section<'_>, source: Source<'_>) -> (Option<NamedRe
         columns_section.tell_if_absent();
     }
     let mut columns = Vec::new();
+    let mut declared = 0;
     let mut wind_height_m = 2.0;
     for measure in WEATHER {
         let Some(value) = columns_section.get(measure.key()) else { continue };
@@ -86,6 +87,7 @@ pub(super) fn weather(root: &Section<'_>, source: Source<'_>) -> (Option<NamedRe
         if measure == Measure::Wind {
             wind_height_m = column.number_or("height", super::unit_suffix::METRES, Limits(0.5, 200.0), 2.0).value;
         }
+        declared += 1;
         columns.extend(column_plan(&column, measure));
     }
     let has = |measure: Measure| columns_section.peek(measure.key()).is_some();
@@ -99,7 +101,9 @@ pub(super) fn weather(root: &Section<'_>, source: Source<'_>) -> (Option<NamedRe
             columns_section.tell_missing(lacking);
         }
     }
-    (read(&section, source, columns), wind_height_m)
+    let all_readable = columns.len() == declared;
+    // The record is looked through for its own mistakes even when it lacks a column that could not be read.
+    (read(&section, source, columns).filter(|_| all_readable), wind_height_m)
 }
 
 /// Reads one comparison record: `file`, date and one `column` in `unit`.

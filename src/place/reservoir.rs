@@ -62,7 +62,7 @@ pub(super) fn read(root: &Section<'_>, source: Source<'_>) -> Option<ReadReservo
     }
     let active = capacity.value - dead.value;
     let flood_space = dated(&section, "flood_space", "date", "space", VOLUME_HM3, VOLUME);
-    if let Some((_, space, at)) = flood_space.iter().find(|(_, space, _)| *space > active) {
+    if let Some((_, space, at)) = flood_space.iter().find(|(_, space, _)| active > 0.0 && *space > active) {
         let problem = Problem::error(at.clone(), "problem-flood-space");
         section.sheet.tell(problem.with("space", *space).with("active", active));
     }

@@ -164,12 +164,9 @@ fn kind(value: &DeValue<'_>) -> Kind {
                 .map_or(Kind::Other, Kind::Date),
             _ => Kind::Other,
         },
-        DeValue::Array(values) => Kind::List(
-            values
-                .iter()
-                .map(|value| Value { span: value.span(), kind: kind(value.get_ref()) })
-                .collect(),
-        ),
+        DeValue::Array(values) => {
+            Kind::List(values.iter().map(|value| Value { span: value.span(), kind: kind(value.get_ref()) }).collect())
+        }
         DeValue::Table(entries) => Kind::Table(table(entries)),
     }
 }

@@ -82,8 +82,9 @@ fn fill(
 ) {
     let Some(area) = bounds(all, 0.0) else { return };
     let mut cells = [[0; TILE + 1]; TILE];
+    let mut touched = [UNTOUCHED; TILE];
     through_tiles(canvas, area, paint, |tile| {
-        let mut signed = Signed { tile, cells: &mut cells };
+        let mut signed = Signed { tile, cells: &mut cells, touched: &mut touched };
         draw(&mut signed);
         signed.finish(which);
     });
@@ -96,7 +97,11 @@ const ONE: f64 = 65_536.0;
 struct Signed<'t> {
     tile: &'t mut Tile,
     cells: &'t mut [[i32; TILE + 1]; TILE],
+    /// For each row the first cell that gained or lost, and the first beyond the last.
+    touched: &'t mut [(usize, usize); TILE],
 }
+
+const UNTOUCHED: (usize, usize) = (TILE + 1, 0);
 
 impl Signed<'_> {
     /// Adds one directed edge of a closed outline. Areas to its right count, downward edges positive.
@@ -129,8 +134,9 @@ impl Signed<'_> {
     /// A piece of an edge within one row that runs from `x0` to `x1` while it goes `rise` rows down.
     fn row_piece(&mut self, row: usize, x0: f64, x1: f64, rise: f64) {
         let width = self.tile.width as f64;
-        let cells = &mut self.cells[row];
+        let (cells, touched) = (&mut self.cells[row], &mut self.touched[row]);
         let mut add = |column: usize, area: f64| {
+            *touched = (touched.0.min(column), touched.1.max(column + 1));
             let rounded = area * ONE;
             let rounded = if rounded < 0.0 { rounded - 0.5 } else { rounded + 0.5 };
             cells[column] = cells[column].saturating_add(rounded as i32);
@@ -142,7 +148,8 @@ impl Signed<'_> {
             return add(0, rise);
         }
         let run = x1 - x0;
-        let (first, last) = (libm::floor(x0.max(0.0)) as usize, libm::floor(x1.min(width)) as usize);
+        // A cast rounds down, and takes what is below zero as zero.
+        let (first, last) = (x0 as usize, x1.min(width) as usize);
         if run <= 0.0 || (first == last && x0 >= 0.0 && x1 <= width) {
             let inside = 1.0 - ((x0 + x1) / 2.0 - first as f64);
             add(first, rise * inside);
@@ -151,37 +158,44 @@ impl Signed<'_> {
             }
             return;
         }
+        let per_run = 0.5 / run;
         // How much of the strip from the piece's left end to x lies to the right of the piece.
         let reached = |x: f64| {
             let passed = (x - x0).max(0.0).min(run);
-            passed * passed / (2.0 * run) + (x - x1).max(0.0)
+            passed * passed * per_run + (x - x1).max(0.0)
         };
-        let mut before = 0.0;
+        let (mut left, mut before) = (reached(first as f64), 0.0);
         for column in first..=last.min(TILE - 1) {
-            let covered = reached(column as f64 + 1.0) - reached(column as f64);
+            let right = reached(column as f64 + 1.0);
+            let covered = right - left;
             add(column, rise * (covered - before));
-            before = covered;
+            (left, before) = (right, covered);
         }
         add(last.min(TILE - 1) + 1, rise * (1.0 - before));
     }
 
     fn finish(self, which: Between) {
         for row in 0..self.tile.height {
-            let cells = &mut self.cells[row];
+            let (first, beyond) = core::mem::replace(&mut self.touched[row], UNTOUCHED);
+            if first >= beyond {
+                continue;
+            }
             let mut sum = 0i32;
-            for (column, cell) in cells.iter_mut().enumerate() {
-                sum = sum.saturating_add(*cell);
-                *cell = 0;
+            let mut coverage = |cell: &mut i32| {
+                sum = sum.saturating_add(core::mem::take(cell));
                 let area = match which {
                     Between::Either => sum.saturating_abs(),
                     Between::FirstHigher => sum.saturating_neg(),
                     Between::SecondHigher => sum,
                 };
-                if area > 127 && column < self.tile.width {
-                    let coverage = (area.min(ONE as i32) * 255 + 32_768) >> 16;
-                    self.tile.raise(column, row, coverage as u8);
-                }
-            }
+                ((area.clamp(0, ONE as i32) * 255 + 32_768) >> 16) as u8
+            };
+            let cells = &mut self.cells[row];
+            let ends_empty = cells[first..beyond].iter().fold(0i32, |sum, cell| sum.saturating_add(*cell)) == 0;
+            // Beyond the last change the coverage stays as it is, often none at all.
+            let beyond = if ends_empty { beyond } else { TILE + 1 };
+            self.tile.set_row(row, first.min(self.tile.width), cells[first..beyond].iter_mut().map(&mut coverage));
+            cells[first..].fill(0);
         }
     }
 }

@@ -8,7 +8,7 @@ use embedded_graphics::geometry::{OriginDimensions, Point, Size};
 use embedded_graphics::pixelcolor::Rgb565;
 use embedded_graphics::primitives::Rectangle;
 
-use super::paint::{Paint, mix};
+use super::paint::{Paint, Ready, mix};
 
 /// One piece of text as it was drawn, told to the [`Witness`].
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -119,10 +119,10 @@ impl<'a> Canvas<'a> {
             return self.fill(area, colour);
         }
         let Some((left, top, right, bottom)) = edges(overlap(self.clip, area)) else { return };
+        let paint = paint.ready();
         for y in top..bottom {
             for x in left..right {
-                let (colour, coverage) = paint.at(x, y);
-                self.mix_at(x, y, colour, coverage);
+                self.mix_at(x, y, paint.colour(), paint.share(x, y));
             }
         }
     }
@@ -136,7 +136,7 @@ impl<'a> Canvas<'a> {
     }
 
     /// Paints a row of coverage that starts at (x, y); what lies outside the clip is left out.
-    pub fn blend_row(&mut self, x: i32, y: i32, coverage: &[u8], paint: Paint) {
+    pub(super) fn blend_row(&mut self, x: i32, y: i32, coverage: &[u8], paint: &Ready) {
         let Some((left, top, right, bottom)) = edges(self.clip) else { return };
         if y < top || y >= bottom {
             return;
@@ -145,16 +145,14 @@ impl<'a> Canvas<'a> {
         let keep = usize::try_from(right.saturating_sub(x)).unwrap_or(0).min(coverage.len());
         let Some(row) = coverage.get(skip..keep) else { return };
         let start = x + skip as i32;
-        match paint {
-            Paint::Solid(colour) => {
-                for (at, &cover) in (start..).zip(row) {
-                    self.mix_at(at, y, colour, cover);
-                }
-            }
-            _ => {
-                for (at, &cover) in (start..).zip(row).filter(|(_, cover)| **cover > 0) {
-                    let (colour, share) = paint.at(at, y);
-                    self.mix_at(at, y, colour, times(share, cover));
+        let (first, colour) = (self.index(start, y), paint.colour());
+        let pixels = self.pixels[first..first + row.len()].iter_mut();
+        if paint.is_solid() {
+            pixels.zip(row).for_each(|(pixel, &cover)| lay(pixel, colour, cover));
+        } else {
+            for ((pixel, &cover), at) in pixels.zip(row).zip(start..) {
+                if cover > 0 {
+                    lay(pixel, colour, times(paint.share(at, y), cover));
                 }
             }
         }
@@ -175,11 +173,16 @@ impl<'a> Canvas<'a> {
     #[inline]
     fn mix_at(&mut self, x: i32, y: i32, colour: Rgb565, coverage: u8) {
         let at = self.index(x, y);
-        match coverage {
-            0 => {}
-            255 => self.pixels[at] = colour,
-            _ => self.pixels[at] = mix(self.pixels[at], colour, coverage),
-        }
+        lay(&mut self.pixels[at], colour, coverage);
+    }
+}
+
+#[inline]
+fn lay(pixel: &mut Rgb565, colour: Rgb565, coverage: u8) {
+    match coverage {
+        0 => {}
+        255 => *pixel = colour,
+        _ => *pixel = mix(*pixel, colour, coverage),
     }
 }
 
@@ -262,7 +265,7 @@ mod tests {
         canvas.within(inner, |canvas| {
             canvas.fill(Rectangle::new(Point::new(-5, -5), Size::new(99, 7)), Rgb565::WHITE);
             canvas.blend(0, 3, Rgb565::WHITE, 255);
-            canvas.blend_row(-2, 3, &[255; 9], Paint::Solid(Rgb565::WHITE));
+            canvas.blend_row(-2, 3, &[255; 9], &Paint::Solid(Rgb565::WHITE).ready());
         });
         assert_eq!(canvas.clip(), canvas.frame());
         let lit: heapless::Vec<usize, 16> = (0..16).filter(|&i| pixels[i] == Rgb565::WHITE).collect();
@@ -273,7 +276,7 @@ mod tests {
     fn an_empty_frame_and_far_places_do_nothing() {
         let mut canvas = Canvas::new(&mut [], 0, 7).unwrap();
         canvas.fill(Rectangle::new(Point::new(i32::MAX, i32::MIN), Size::new(u32::MAX, u32::MAX)), Rgb565::WHITE);
-        canvas.blend_row(i32::MIN, 0, &[9; 40], Paint::Solid(Rgb565::WHITE));
+        canvas.blend_row(i32::MIN, 0, &[9; 40], &Paint::Solid(Rgb565::WHITE).ready());
         assert_eq!(canvas.rows().count(), 0);
     }
 }

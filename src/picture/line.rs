@@ -197,11 +197,12 @@ fn piece(tile: &mut Tile, from: Spot, to: Spot, radius: f64, (start, stop): (End
     let (before, after) = (side, if stop == End::Joined { 0.0 } else { side });
     let full_to = radius - slope.reach();
     let (top, bottom) = (from.y.min(to.y) - side, from.y.max(to.y) + side);
+    let (per_ux, per_uy) = (1.0 / ux, -1.0 / uy);
     for row in tile.row_span(top, bottom) {
         let dy = tile.middle(0, row).y - from.y;
         // Where on this row the piece can be: between its sides, and between its ends.
-        let across = crossing(-uy, ux * dy, -side, side);
-        let along = crossing(ux, uy * dy, -before, length + after);
+        let across = crossing(per_uy, ux * dy, -side, side);
+        let along = crossing(per_ux, uy * dy, -before, length + after);
         let (left, right) = (across.0.max(along.0) + from.x, across.1.min(along.1) + from.x);
         if left.is_nan() || left > right {
             continue;
@@ -225,12 +226,12 @@ fn piece(tile: &mut Tile, from: Spot, to: Spot, radius: f64, (start, stop): (End
     }
 }
 
-/// The x between which `low <= rate·x + rest <= high`; everything or nothing where x does not matter.
-fn crossing(rate: f64, rest: f64, low: f64, high: f64) -> (f64, f64) {
-    if rate.abs() < 1e-12 {
+/// The x between which `low <= x / per_rate + rest <= high`; everything or nothing where x does not matter.
+fn crossing(per_rate: f64, rest: f64, low: f64, high: f64) -> (f64, f64) {
+    if per_rate.abs() > 1e12 {
         return if rest >= low && rest <= high { (f64::MIN, f64::MAX) } else { (1.0, 0.0) };
     }
-    let (one, other) = ((low - rest) / rate, (high - rest) / rate);
+    let (one, other) = ((low - rest) * per_rate, (high - rest) * per_rate);
     if one < other { (one, other) } else { (other, one) }
 }
 

@@ -6,7 +6,7 @@
 
 use super::Spot;
 use super::canvas::{Canvas, edges, overlap};
-use super::paint::Paint;
+use super::paint::{Paint, Ready};
 
 use embedded_graphics::geometry::{Point, Size};
 use embedded_graphics::primitives::Rectangle;
@@ -119,7 +119,18 @@ impl Tile {
         }
     }
 
-    fn lay(&self, canvas: &mut Canvas<'_>, paint: Paint) {
+    /// Raises a row's coverage from `column` on, for a row in which nothing was raised before.
+    pub(super) fn set_row(&mut self, row: usize, column: usize, coverage: impl Iterator<Item = u8>) {
+        let cells = &mut self.coverage[row][column..self.width];
+        let mut beyond = column;
+        for (cell, coverage) in cells.iter_mut().zip(coverage) {
+            *cell = coverage;
+            beyond += 1;
+        }
+        self.touched[row] = (column as u8, beyond as u8);
+    }
+
+    fn lay(&self, canvas: &mut Canvas<'_>, paint: &Ready) {
         for row in 0..self.height {
             let (first, beyond) = self.touched[row];
             if first < beyond {
@@ -141,7 +152,8 @@ impl Tile {
 
 fn span(from: f64, to: f64, limit: usize) -> core::ops::Range<usize> {
     // A cast takes what is below zero, and what is no number, as zero.
-    let (first, beyond) = (from as usize, libm::ceil(to) as usize);
+    let (first, whole) = (from as usize, to as usize);
+    let beyond = if to > whole as f64 { whole.saturating_add(1) } else { whole };
     first.min(limit)..beyond.min(limit)
 }
 
@@ -155,13 +167,14 @@ pub(super) fn through_tiles(
     let Some((left, top, right, bottom)) = edges(overlap(whole_pixels(bounds), canvas.clip())) else { return };
     let mut tile =
         Tile { left, top, width: 0, height: 0, coverage: [[0; TILE]; TILE], touched: [(TILE as u8, 0); TILE] };
+    let paint = paint.ready();
     for y in (top..bottom).step_by(TILE) {
         for x in (left..right).step_by(TILE) {
             (tile.left, tile.top) = (x, y);
             tile.width = TILE.min((right - x) as usize);
             tile.height = TILE.min((bottom - y) as usize);
             draw(&mut tile);
-            tile.lay(canvas, paint);
+            tile.lay(canvas, &paint);
             tile.empty();
         }
     }

@@ -56,13 +56,59 @@ pub enum Paint {
 }
 
 impl Paint {
-    /// Colour and coverage at the pixel (x, y).
-    #[inline]
-    pub fn at(&self, x: i32, y: i32) -> (Rgb565, u8) {
+    /// The same made ready for many pixels.
+    pub(super) fn ready(self) -> Ready {
         match self {
-            Self::Solid(colour) => (*colour, 255),
-            Self::Wash { colour, share } => (*colour, *share),
-            Self::Hatch(hatch) => (hatch.colour, hatch.coverage(x, y)),
+            Self::Solid(colour) => Ready::Even(colour, 255),
+            Self::Wash { colour, share } => Ready::Even(colour, share),
+            Self::Hatch(hatch) => {
+                let mut steps = [0; u8::MAX as usize];
+                for (step, cell) in steps.iter_mut().take(usize::from(hatch.period())).enumerate() {
+                    *cell = hatch.step_coverage(step as i32);
+                }
+                Ready::Stripes(hatch, steps)
+            }
+        }
+    }
+}
+
+/// A paint with its stripes worked out.
+#[allow(clippy::large_enum_variant)]
+pub(super) enum Ready {
+    Even(Rgb565, u8),
+    /// The coverage for each step along the period.
+    Stripes(Hatch, [u8; u8::MAX as usize]),
+}
+
+impl Ready {
+    pub(super) fn colour(&self) -> Rgb565 {
+        match self {
+            Self::Even(colour, _) => *colour,
+            Self::Stripes(hatch, _) => hatch.colour,
+        }
+    }
+
+    pub(super) fn is_solid(&self) -> bool {
+        matches!(self, Self::Even(_, 255))
+    }
+
+    /// How much of the pixel (x, y) is painted, 0 to 255.
+    #[inline]
+    pub(super) fn share(&self, x: i32, y: i32) -> u8 {
+        match self {
+            Self::Even(_, share) => *share,
+            Self::Stripes(hatch, steps) => {
+                let period = i32::from(hatch.period());
+                let at = |step: i32| steps[step.rem_euclid(period) as usize];
+                match hatch.pattern {
+                    Pattern::Rising => at(x.wrapping_add(y)),
+                    Pattern::Falling => at(x.wrapping_sub(y)),
+                    Pattern::Crossed => at(x.wrapping_add(y)).max(at(x.wrapping_sub(y))),
+                    Pattern::Level => at(y),
+                    Pattern::Upright => at(x),
+                    Pattern::Dots => hatch.dot(x, y),
+                }
+            }
         }
     }
 }
@@ -81,40 +127,36 @@ impl From<Hatch> for Paint {
 
 impl Hatch {
     /// How much of the pixel (x, y) the stripes cover, 0 to 255.
-    pub fn coverage(&self, x: i32, y: i32) -> u8 {
-        let period = i32::from(self.period_px.max(2));
-        let rising = || self.slanted(x.wrapping_add(y).rem_euclid(period), period);
-        let falling = || self.slanted(x.wrapping_sub(y).rem_euclid(period), period);
+    pub fn coverage(self, x: i32, y: i32) -> u8 {
+        Paint::Hatch(self).ready().share(x, y)
+    }
+
+    fn period(&self) -> u8 {
+        self.period_px.max(2)
+    }
+
+    /// Coverage `step` pixels along the period from the middle (slanted) or the first row or column of a stripe.
+    fn step_coverage(&self, step: i32) -> u8 {
         match self.pattern {
-            Pattern::Rising => rising(),
-            Pattern::Falling => falling(),
-            Pattern::Crossed => rising().max(falling()),
-            Pattern::Level => self.straight(y.rem_euclid(period)),
-            Pattern::Upright => self.straight(x.rem_euclid(period)),
-            Pattern::Dots => {
-                let cell = (period + 1) / 2;
-                let (cell_x, cell_y) = (x.div_euclid(cell), y.div_euclid(cell));
-                if cell_x.wrapping_add(cell_y).rem_euclid(2) != 0 {
-                    return 0;
-                }
-                let middle = f64::from(cell) / 2.0;
-                let (dx, dy) =
-                    (f64::from(x.rem_euclid(cell)) + 0.5 - middle, f64::from(y.rem_euclid(cell)) + 0.5 - middle);
-                to_coverage(self.width_px / 2.0 + 0.5 - libm::sqrt(dx * dx + dy * dy))
+            Pattern::Level | Pattern::Upright | Pattern::Dots => to_coverage(self.width_px - f64::from(step)),
+            Pattern::Rising | Pattern::Falling | Pattern::Crossed => {
+                // Exact by area for stripes at 45°.
+                let from_middle = f64::from(step.min(i32::from(self.period()) - step)) * SQRT_HALF;
+                let (half, slope) = (self.width_px / 2.0, Slope::new(SQRT_HALF, SQRT_HALF));
+                to_coverage(slope.half_plane(from_middle + half) - slope.half_plane(from_middle - half))
             }
         }
     }
 
-    /// Coverage `step` pixels along x from the middle of a stripe at 45°, exact by area.
-    fn slanted(&self, step: i32, period: i32) -> u8 {
-        let from_middle = f64::from(step.min(period - step)) * SQRT_HALF;
-        let half = self.width_px / 2.0;
-        let slope = Slope::new(SQRT_HALF, SQRT_HALF);
-        to_coverage(slope.half_plane(from_middle + half) - slope.half_plane(from_middle - half))
-    }
-
-    fn straight(&self, step: i32) -> u8 {
-        to_coverage(self.width_px - f64::from(step))
+    fn dot(&self, x: i32, y: i32) -> u8 {
+        let cell = (i32::from(self.period()) + 1) / 2;
+        let (cell_x, cell_y) = (x.div_euclid(cell), y.div_euclid(cell));
+        if cell_x.wrapping_add(cell_y).rem_euclid(2) != 0 {
+            return 0;
+        }
+        let from_middle = |at: i32| f64::from(at.rem_euclid(cell)) + 0.5 - f64::from(cell) / 2.0;
+        let (dx, dy) = (from_middle(x), from_middle(y));
+        to_coverage(self.width_px / 2.0 + 0.5 - libm::sqrt(dx * dx + dy * dy))
     }
 }
 

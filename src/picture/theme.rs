@@ -170,7 +170,7 @@ impl Theme {
         Paint::Hatch(Hatch { pattern: Pattern::Dots, period_px: 4, width_px: 1.6, colour: self.snow_edge })
     }
 
-    /// Level stripes that stand for a range in which the model's answer lies.
+    /// Fine falling stripes that stand for a range in which the model's answer lies.
     pub const fn range_hatch(&self) -> Paint {
         Paint::Hatch(Hatch { pattern: Pattern::Falling, period_px: 4, width_px: 0.8, colour: self.rule })
     }

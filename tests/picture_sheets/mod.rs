@@ -3,7 +3,7 @@
 use deshielo::picture::area::{Between, between, polygon};
 use deshielo::picture::chart::{
     BarPair, DayMark, EndLabel, Field, LinePair, Months, Plot, bar_pair, contour, day_cursor, end_labels, level_axis,
-    line_pair, month_axis, nice_steps, shade, swatch, swatch_as_it_was, swatch_with_changes, year_strip,
+    level_steps, line_pair, month_axis, shade, swatch, swatch_as_it_was, swatch_with_changes, year_strip,
 };
 use deshielo::picture::lettering::{Across, SIZES_PX, draw, draw_in, measure, paragraph};
 use deshielo::picture::line::{polyline, segment};
@@ -171,7 +171,7 @@ fn year(shift: f64, scale: f64) -> impl Iterator<Item = f64> + Clone {
     (0..365).map(move |day| {
         let t = (f64::from(day) + shift - 215.0) / 70.0;
         let hump = 1.0 / (1.0 + t * t * t * t);
-        let ripple = if day % 90 < 40 { 0.0 } else { f64::from(day % 90 - 40) * 0.0008 };
+        let ripple = if day % 90 < 40 { 0.0 } else { f64::from((day % 90 - 40) * (90 - day % 90)) * 0.00005 };
         scale * (0.08 + 0.86 * hump + ripple * hump)
     })
 }
@@ -202,7 +202,7 @@ pub fn charts(canvas: &mut Canvas<'_>, theme: &Theme) {
     let plot =
         Plot { area: area(left, top, (right - left) as u32, (high / 4) as u32), across: (0.0, 365.0), up: (0.0, 5.2) };
     draw(canvas, "embalse, hm³", Point::new(margin, rule + margin), small, theme.quiet, Align::LEFT.cap_top());
-    let steps = nice_steps(0.0, 5.2, if large { 6 } else { 4 }).unwrap();
+    let steps = level_steps(&plot, small).unwrap();
     let write = |value: f64| {
         let mut text = heapless::String::<8>::new();
         std::fmt::Write::write_fmt(&mut text, format_args!("{value:.0}")).unwrap();
@@ -244,7 +244,7 @@ pub fn charts(canvas: &mut Canvas<'_>, theme: &Theme) {
             _ => DayMark::Cut,
         });
         year_strip(canvas, &strip, days, theme);
-        let bar = area(half, y, (wide - half - margin - if large { 60 } else { 36 }) as u32, high);
+        let bar = area(half, y, (wide - half - margin - if large { 60 } else { 40 }) as u32, high);
         let (was, now) = [(1.0, 1.0), (0.95, 0.7), (0.8, 0.35)][i];
         bar_pair(canvas, bar, BarPair { was: Some(was), now, fill: theme.water }, theme);
         let share = format!("{:.0} %", now * 100.0);

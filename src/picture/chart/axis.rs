@@ -6,7 +6,7 @@ use embedded_graphics::primitives::Rectangle;
 use super::super::canvas::Canvas;
 use super::super::lettering::{Align, Face, draw, measure};
 use super::super::theme::Theme;
-use super::{Plot, Steps};
+use super::{Plot, Steps, nice_steps};
 
 /// The months of a chart, in order.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -57,6 +57,13 @@ pub fn month_axis(canvas: &mut Canvas<'_>, plot: &Plot, months: Months<'_>, face
 fn initial(name: &str) -> &str {
     let end = name.char_indices().nth(1).map_or(name.len(), |(at, _)| at);
     &name[..end]
+}
+
+/// Round values for the side of the plot, as many as have room for their numbers in `face`, at most seven. `None` where
+/// the plot has no range or no height.
+pub fn level_steps(plot: &Plot, face: Face) -> Option<Steps> {
+    let room = plot.area.size.height / (face.line_px() as u32).max(1);
+    nice_steps(plot.up.0, plot.up.1, (room as usize + 1).min(7))
 }
 
 /// Draws the scale at the left edge of the plot: hairlines at the steps and their numbers, written by `write`, right

@@ -41,7 +41,7 @@ impl Field<'_> {
     }
 
     /// The places where values hold, with a border all round: 0 is the left or top edge, 1 the first middle, and so on
-    /// to the far edge. The border takes the value of the cell beside it, so that contours reach the edges.
+    /// to the far edge, so that contours reach the edges.
     fn place(&self, column: usize, row: usize) -> Spot {
         let share = |at: usize, of: usize| ((at as f64 - 0.5) / of.max(1) as f64).clamp(0.0, 1.0);
         let Rectangle { top_left, size } = self.area;
@@ -51,10 +51,24 @@ impl Field<'_> {
         )
     }
 
-    /// The value at such a place.
+    /// The value at such a place. On the border the field is carried on straight, or where it cannot be, level.
     fn value(&self, column: usize, row: usize) -> f64 {
-        let inner = |at: usize, of: usize| at.saturating_sub(1).min(of.saturating_sub(1));
-        self.values[inner(row, self.rows()) * self.columns + inner(column, self.columns)]
+        let at = |column: usize, row: usize| self.values[row * self.columns + column];
+        let (x, beside_x) = inner(column, self.columns);
+        let (y, beside_y) = inner(row, self.rows());
+        let here = at(x, y);
+        let carried = here + (here - at(beside_x, y)) / 2.0 + (here - at(x, beside_y)) / 2.0;
+        if carried.is_finite() { carried } else { here }
+    }
+}
+
+/// For a place of the border or the middles: the nearest middle, and on the border the middle behind that.
+fn inner(at: usize, count: usize) -> (usize, usize) {
+    let last = count.saturating_sub(1);
+    match at {
+        0 => (0, last.min(1)),
+        _ if at > count => (last, last.saturating_sub(1)),
+        _ => (at - 1, at - 1),
     }
 }
 

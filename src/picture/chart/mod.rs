@@ -11,7 +11,7 @@ mod lines;
 mod steps;
 mod strip;
 
-pub use axis::{Months, level_axis, month_axis};
+pub use axis::{Months, level_axis, level_steps, month_axis};
 pub use bars::{BarPair, bar_pair};
 pub use contour::{Field, contour, shade};
 pub use labels::{EndLabel, MOST_LABELS, end_labels};
@@ -39,13 +39,13 @@ impl Plot {
     /// both edges have the same value, everything lies on the left one.
     pub fn x(&self, value: f64) -> f64 {
         let left = f64::from(self.area.top_left.x);
-        left + share(value, self.across) * f64::from(self.area.size.width)
+        left + along(value, self.across, self.area.size.width)
     }
 
     /// The y of a value up the side, in pixels of the frame; likewise.
     pub fn y(&self, value: f64) -> f64 {
         let bottom = f64::from(self.area.top_left.y) + f64::from(self.area.size.height);
-        bottom - share(value, self.up) * f64::from(self.area.size.height)
+        bottom - along(value, self.up, self.area.size.height)
     }
 
     /// The place of a pair of values.
@@ -60,8 +60,9 @@ impl Plot {
     }
 }
 
-fn share(value: f64, (from, to): (f64, f64)) -> f64 {
-    if to == from { 0.0 } else { (value - from) / (to - from) }
+fn along(value: f64, (from, to): (f64, f64), length: u32) -> f64 {
+    // Multiplied first: where a day is a whole number of pixels wide, it stays so.
+    if to == from { 0.0 } else { (value - from) * f64::from(length) / (to - from) }
 }
 
 #[cfg(test)]

@@ -12,6 +12,7 @@ use embedded_graphics::pixelcolor::Rgb565;
 use embedded_graphics::primitives::Rectangle;
 
 use super::canvas::{Canvas, TextMark, hull};
+use super::paint::Paint;
 use super::shape::frame;
 pub use wrap::{Lines, lines, paragraph, paragraph_height};
 
@@ -274,6 +275,7 @@ fn width_px(text: &str, face: Face) -> u32 {
 fn draw_from(canvas: &mut Canvas<'_>, text: &str, x: i32, baseline: i32, face: Face, colour: Rgb565) -> Drawn {
     let mut ink = Rectangle::new(Point::new(x, baseline), Size::zero());
     let mut missing = 0;
+    let paint = Paint::Solid(colour).ready();
     let end = walk(text, face, x, |mark| {
         let area = mark.area(face, baseline);
         ink = hull(ink, area);
@@ -281,7 +283,7 @@ fn draw_from(canvas: &mut Canvas<'_>, text: &str, x: i32, baseline: i32, face: F
             Mark::Letter(glyph, _) => {
                 let corner = area.top_left;
                 glyph.rows(|row, cells| {
-                    canvas.blend_row(corner.x, corner.y.saturating_add(row as i32), cells, colour.into());
+                    canvas.blend_row(corner.x, corner.y.saturating_add(row as i32), cells, &paint);
                 });
             }
             Mark::Missing(_) => {

@@ -2,7 +2,7 @@
 
 use super::Spot;
 use super::canvas::Canvas;
-use super::mask::{TILE, Tile, bounds, through_tiles};
+use super::mask::{TILE, Tile, bounds, keep, through_tiles};
 use super::paint::Paint;
 
 /// Which parts between two lines are filled.
@@ -52,23 +52,45 @@ pub fn between(
     which: Between,
     paint: impl Into<Paint>,
 ) {
-    fill(canvas, first.clone().chain(second.clone()), paint.into(), which, |tile| {
-        let mut before: Option<(Spot, Spot)> = None;
-        for pair in first.clone().zip(second.clone()) {
-            let whole = pair.0.is_finite() && pair.1.is_finite();
-            match (before, whole) {
-                (Some(from), true) => {
-                    tile.edge(from.0, pair.0);
-                    tile.edge(pair.1, from.1);
+    let paint = paint.into();
+    match (keep(first.clone()), keep(second.clone())) {
+        (Some(one), Some(other)) => lay(canvas, one.iter().copied(), other.iter().copied(), which, paint),
+        _ => lay(canvas, first, second, which, paint),
+    }
+}
+
+fn lay(
+    canvas: &mut Canvas<'_>,
+    first: impl Iterator<Item = Spot> + Clone,
+    second: impl Iterator<Item = Spot> + Clone,
+    which: Between,
+    paint: Paint,
+) {
+    fill(canvas, first.clone().chain(second.clone()), paint, which, |tile| {
+        let (left, right) = tile.tile.columns();
+        let mut pairs = first.clone().zip(second.clone());
+        let Some(mut from) = pairs.next() else { return };
+        let mut open = false;
+        for to in pairs {
+            let xs = [from.0.x, from.1.x, to.0.x, to.1.x];
+            let beside = xs.iter().all(|&x| x <= left) || xs.iter().all(|&x| x >= right);
+            let whole = [from.0, from.1, to.0, to.1].iter().all(|spot| spot.is_finite());
+            // A stretch beside the tile is closed by itself and adds nothing to it.
+            if whole && !beside {
+                if !open {
+                    tile.edge(from.1, from.0);
                 }
-                (None, true) => tile.edge(pair.1, pair.0),
-                (Some(last), false) => tile.edge(last.0, last.1),
-                (None, false) => {}
+                tile.edge(from.0, to.0);
+                tile.edge(to.1, from.1);
+                open = true;
+            } else if open {
+                tile.edge(from.0, from.1);
+                open = false;
             }
-            before = whole.then_some(pair);
+            from = to;
         }
-        if let Some(last) = before {
-            tile.edge(last.0, last.1);
+        if open {
+            tile.edge(from.0, from.1);
         }
     });
 }
@@ -191,11 +213,10 @@ impl Signed<'_> {
                 ((area.clamp(0, ONE as i32) * 255 + 32_768) >> 16) as u8
             };
             let cells = &mut self.cells[row];
-            let ends_empty = cells[first..beyond].iter().fold(0i32, |sum, cell| sum.saturating_add(*cell)) == 0;
+            self.tile.set_row(row, first, cells[first..beyond].iter_mut().map(&mut coverage));
             // Beyond the last change the coverage stays as it is, often none at all.
-            let beyond = if ends_empty { beyond } else { TILE + 1 };
-            self.tile.set_row(row, first.min(self.tile.width), cells[first..beyond].iter_mut().map(&mut coverage));
-            cells[first..].fill(0);
+            let rest = coverage(&mut 0);
+            self.tile.fill_row(row, beyond, rest);
         }
     }
 }

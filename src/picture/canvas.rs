@@ -146,11 +146,17 @@ impl<'a> Canvas<'a> {
         let Some(row) = coverage.get(skip..keep) else { return };
         let start = x + skip as i32;
         let (first, colour) = (self.index(start, y), paint.colour());
-        let pixels = self.pixels[first..first + row.len()].iter_mut();
+        let pixels = &mut self.pixels[first..first + row.len()];
         if paint.is_solid() {
-            pixels.zip(row).for_each(|(pixel, &cover)| lay(pixel, colour, cover));
+            for (pixels, row) in pixels.chunks_mut(16).zip(row.chunks(16)) {
+                if row.iter().fold(255, |all, cover| all & cover) == 255 {
+                    pixels.fill(colour);
+                } else {
+                    pixels.iter_mut().zip(row).for_each(|(pixel, &cover)| lay(pixel, colour, cover));
+                }
+            }
         } else {
-            for ((pixel, &cover), at) in pixels.zip(row).zip(start..) {
+            for ((pixel, &cover), at) in pixels.iter_mut().zip(row).zip(start..) {
                 if cover > 0 {
                     lay(pixel, colour, times(paint.share(at, y), cover));
                 }

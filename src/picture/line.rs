@@ -2,7 +2,7 @@
 
 use super::Spot;
 use super::canvas::Canvas;
-use super::mask::{Slope, Tile, bounds, through_tiles, to_coverage};
+use super::mask::{Slope, Tile, bounds, keep, through_tiles, to_coverage};
 use super::paint::Paint;
 
 /// The look of a line.
@@ -59,8 +59,16 @@ pub fn polyline(
     stroke: Stroke,
     paint: impl Into<Paint>,
 ) {
+    let paint = paint.into();
+    match keep(points.clone()) {
+        Some(kept) => lay(canvas, kept.iter().copied(), stroke, paint),
+        None => lay(canvas, points, stroke, paint),
+    }
+}
+
+fn lay(canvas: &mut Canvas<'_>, points: impl Iterator<Item = Spot> + Clone, stroke: Stroke, paint: Paint) {
     let Some(area) = bounds(points.clone(), stroke.radius() + 1.0) else { return };
-    through_tiles(canvas, area, paint.into(), |tile| {
+    through_tiles(canvas, area, paint, |tile| {
         let mut rest = points.clone();
         while let Some(start) = rest.find(|spot| spot.is_finite()) {
             let run = core::iter::once(start).chain(rest.clone().take_while(|spot| spot.is_finite()));
@@ -198,18 +206,20 @@ fn piece(tile: &mut Tile, from: Spot, to: Spot, radius: f64, (start, stop): (End
     let full_to = radius - slope.reach();
     let (top, bottom) = (from.y.min(to.y) - side, from.y.max(to.y) + side);
     let (per_ux, per_uy) = (1.0 / ux, -1.0 / uy);
-    for row in tile.row_span(top, bottom) {
+    for row in tile.rows_between(top, bottom) {
         let dy = tile.middle(0, row).y - from.y;
         // Where on this row the piece can be: between its sides, and between its ends.
         let across = crossing(per_uy, ux * dy, -side, side);
         let along = crossing(per_ux, uy * dy, -before, length + after);
-        let (left, right) = (across.0.max(along.0) + from.x, across.1.min(along.1) + from.x);
-        if left.is_nan() || left > right {
+        let columns = tile.columns_between(across.0.max(along.0) + from.x, across.1.min(along.1) + from.x);
+        if columns.is_empty() {
             continue;
         }
-        for column in tile.column_span(left - 0.5, right + 0.5) {
-            let dx = tile.middle(column, row).x - from.x;
-            let (t, d) = (dx * ux + dy * uy, dx * -uy + dy * ux);
+        let first = tile.middle(columns.start, row).x - from.x;
+        let (first_t, first_d) = (first * ux + dy * uy, dy * ux - first * uy);
+        for (cell, step) in tile.row_cells(row, columns).iter_mut().zip(0..) {
+            let step = f64::from(step);
+            let (t, d) = (first_t + step * ux, first_d - step * uy);
             let share = if t < 0.0 && start == End::Round {
                 round_share(t * t + d * d, radius)
             } else if t > length && stop != End::Square {
@@ -221,7 +231,7 @@ fn piece(tile: &mut Tile, from: Spot, to: Spot, radius: f64, (start, stop): (End
                 let over = if stop == End::Square { slope.half_plane(t - length) } else { 0.0 };
                 sides * (begun - over)
             };
-            tile.raise(column, row, to_coverage(share));
+            *cell = (*cell).max(to_coverage(share));
         }
     }
 }

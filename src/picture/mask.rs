@@ -102,6 +102,16 @@ impl Tile {
         span(from - f64::from(self.top), to - f64::from(self.top), self.height)
     }
 
+    /// The tile's columns whose middles lie from `from` to `to`, in frame pixels.
+    pub(super) fn columns_between(&self, from: f64, to: f64) -> core::ops::Range<usize> {
+        middles(from - f64::from(self.left), to - f64::from(self.left), self.width)
+    }
+
+    /// The tile's rows whose middles lie from `from` to `to`, in frame pixels.
+    pub(super) fn rows_between(&self, from: f64, to: f64) -> core::ops::Range<usize> {
+        middles(from - f64::from(self.top), to - f64::from(self.top), self.height)
+    }
+
     /// The middle of a pixel of this tile, in the frame.
     pub(super) fn middle(&self, column: usize, row: usize) -> Spot {
         Spot::new(f64::from(self.left) + column as f64 + 0.5, f64::from(self.top) + row as f64 + 0.5)
@@ -119,15 +129,34 @@ impl Tile {
         }
     }
 
-    /// Raises a row's coverage from `column` on, for a row in which nothing was raised before.
+    /// Sets a row's coverage from `column` on, for a row in which nothing was raised before.
     pub(super) fn set_row(&mut self, row: usize, column: usize, coverage: impl Iterator<Item = u8>) {
-        let cells = &mut self.coverage[row][column..self.width];
+        let column = column.min(self.width);
         let mut beyond = column;
-        for (cell, coverage) in cells.iter_mut().zip(coverage) {
-            *cell = coverage;
-            beyond += 1;
+        // The iterator is gone through to its end: it empties the sums that it reads.
+        for (coverage, at) in coverage.zip(column..) {
+            if at < self.width {
+                self.coverage[row][at] = coverage;
+                beyond = at + 1;
+            }
         }
         self.touched[row] = (column as u8, beyond as u8);
+    }
+
+    /// Sets the rest of such a row from `column` on to one coverage.
+    pub(super) fn fill_row(&mut self, row: usize, column: usize, coverage: u8) {
+        if coverage > 0 && column < self.width {
+            self.coverage[row][column..self.width].fill(coverage);
+            self.touched[row].1 = self.width as u8;
+        }
+    }
+
+    /// The coverage of some of a row's pixels, to be raised in place.
+    pub(super) fn row_cells(&mut self, row: usize, columns: core::ops::Range<usize>) -> &mut [u8] {
+        let (first, beyond) = &mut self.touched[row];
+        *first = (*first).min(columns.start as u8);
+        *beyond = (*beyond).max(columns.end as u8);
+        &mut self.coverage[row][columns]
     }
 
     fn lay(&self, canvas: &mut Canvas<'_>, paint: &Ready) {
@@ -155,6 +184,12 @@ fn span(from: f64, to: f64, limit: usize) -> core::ops::Range<usize> {
     let (first, whole) = (from as usize, to as usize);
     let beyond = if to > whole as f64 { whole.saturating_add(1) } else { whole };
     first.min(limit)..beyond.min(limit)
+}
+
+fn middles(from: f64, to: f64, limit: usize) -> core::ops::Range<usize> {
+    // Casts as in `span`; half a pixel more rounds to the nearest middle.
+    let (first, beyond) = (span(0.0, from - 0.5, limit).end, ((to + 0.5) as usize).min(limit));
+    first.min(beyond)..beyond
 }
 
 /// Draws through tiles over the part of `bounds` (left, top, right, bottom) that the clip lets through.
@@ -188,6 +223,19 @@ fn whole_pixels((left, top, right, bottom): (f64, f64, f64, f64)) -> Rectangle {
     let extent = |from: i32, to: i32| u32::try_from(i64::from(to) - i64::from(from)).unwrap_or(0);
     Rectangle::new(corner, Size::new(extent(corner.x, far.x), extent(corner.y, far.y)))
 }
+
+/// The places of an iterator worked out once, where they are few enough to be kept; each tile goes through them again,
+/// and a chart has to turn every value into a place.
+pub(super) fn keep(points: impl Iterator<Item = Spot>) -> Option<heapless::Vec<Spot, MOST_KEPT>> {
+    let mut kept = heapless::Vec::new();
+    for spot in points {
+        kept.push(spot).ok()?;
+    }
+    Some(kept)
+}
+
+/// A leap year and some: 8 kilobytes.
+const MOST_KEPT: usize = 512;
 
 /// The smallest box around the finite ones of some places, widened by `margin`; `None` where there are none.
 pub(super) fn bounds(points: impl Iterator<Item = Spot>, margin: f64) -> Option<(f64, f64, f64, f64)> {

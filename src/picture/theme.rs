@@ -7,7 +7,7 @@
 use embedded_graphics::pixelcolor::Rgb565;
 
 use super::colour::rgb;
-use super::paint::{Hatch, Paint, Pattern};
+use super::paint::{Hatch, Paint, Pattern, mix};
 
 /// One set of colours.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -175,6 +175,13 @@ impl Theme {
         Paint::Hatch(Hatch { pattern: Pattern::Falling, period_px: 4, width_px: 0.8, colour: self.rule })
     }
 
+    /// A colour between lack (0) and plenty (1), for fields of shares: ever more water, ever further in lightness from
+    /// where it began. What lies beyond counts as 0 or 1.
+    pub fn ramp(&self, share: f64) -> Rgb565 {
+        // The cast takes what is no number as nothing.
+        mix(self.lack_pale, self.water, (share.clamp(0.0, 1.0) * 255.0 + 0.5) as u8)
+    }
+
     /// Every pair of text and ground that views may use, by name.
     pub const fn text_pairs(&self) -> [(&'static str, Rgb565, Rgb565); 25] {
         [
@@ -229,7 +236,7 @@ impl Theme {
 
 #[cfg(test)]
 mod tests {
-    use super::super::colour::{Deficiency, contrast, difference};
+    use super::super::colour::{Deficiency, contrast, difference, luminance};
     use super::*;
 
     const NAMES: [&str; 3] = ["light", "dark", "sunlight"];
@@ -255,6 +262,21 @@ mod tests {
             for (what, one) in [("water", theme.water), ("lack", theme.lack), ("rule", theme.rule)] {
                 let found = contrast(one, theme.paper);
                 assert!(found >= 3.0, "{name}: {what} on paper has {found:.2}");
+            }
+        }
+    }
+
+    #[test]
+    fn the_ramp_goes_one_way_and_its_fifths_can_be_told_apart() {
+        for (name, theme) in NAMES.into_iter().zip(Theme::ALL) {
+            let light: [f64; 6] = core::array::from_fn(|i| luminance(theme.ramp(i as f64 / 5.0)));
+            assert!(light.is_sorted() || light.iter().rev().is_sorted(), "{name}: {light:?}");
+            for eye in [None].into_iter().chain(Deficiency::ALL.map(Some)) {
+                for fifth in 0..5 {
+                    let (one, next) = (theme.ramp(f64::from(fifth) / 5.0), theme.ramp(f64::from(fifth + 1) / 5.0));
+                    let found = difference(one, next, eye);
+                    assert!(found >= 5.0, "{name}: fifth {fifth} differs from the next by {found:.1} for {eye:?}");
+                }
             }
         }
     }

@@ -7,7 +7,7 @@ use deshielo::picture::chart::{
 };
 use deshielo::picture::lettering::{Across, SIZES_PX, draw, draw_in, measure, paragraph};
 use deshielo::picture::line::{polyline, segment};
-use deshielo::picture::paint::{Pattern, mix};
+use deshielo::picture::paint::Pattern;
 use deshielo::picture::shape::{arrow, bead, diamond, disc, ring, rounded_box, rounded_frame, triangle};
 use deshielo::picture::{Align, Canvas, Face, Hatch, Paint, Spot, Stroke, Theme};
 use embedded_graphics::geometry::{OriginDimensions, Point, Size};
@@ -285,9 +285,7 @@ pub fn charts(canvas: &mut Canvas<'_>, theme: &Theme) {
             columns: 13,
             values: &values,
         };
-        shade(canvas, &field, |value| {
-            mix(theme.lack_pale, theme.water, ((value - 0.2) * 300.0).clamp(0.0, 255.0) as u8)
-        });
+        shade(canvas, &field, |value| theme.ramp((value - 0.2) / 0.85));
         contour(canvas, &field, 0.6, Stroke::solid(3.0), theme.ink);
         ring(canvas, field.middle(4, 3), 8.0, 2.0, theme.ink);
         disc(canvas, field.middle(4, 3), 6.0, theme.paper);

@@ -3,7 +3,7 @@
 use deshielo::picture::area::{Between, between, polygon};
 use deshielo::picture::chart::{
     BarPair, DayMark, EndLabel, Field, LinePair, Months, Plot, bar_pair, contour, day_cursor, end_labels, level_axis,
-    level_steps, line_pair, month_axis, shade, swatch, swatch_as_it_was, swatch_with_changes, year_strip,
+    level_steps, line_pair, month_axis, range_band, shade, swatch, swatch_as_it_was, swatch_with_changes, year_strip,
 };
 use deshielo::picture::lettering::{Across, SIZES_PX, draw, draw_in, measure, paragraph};
 use deshielo::picture::line::{polyline, segment};
@@ -199,8 +199,11 @@ pub fn charts(canvas: &mut Canvas<'_>, theme: &Theme) {
     let left = margin + measure("000", small).width as i32 + 6;
     let right = wide - margin - measure("sin cambios", small).width as i32 - 8;
     let top = rule + margin + small.px() as i32 * 2;
-    let plot =
-        Plot { area: area(left, top, (right - left) as u32, (high / 4) as u32), across: (0.0, 365.0), up: (0.0, 5.2) };
+    let plot = Plot {
+        area: area(left, top, (right - left) as u32, (high / if large { 5 } else { 4 }) as u32),
+        across: (0.0, 365.0),
+        up: (0.0, 5.2),
+    };
     draw(canvas, "embalse, hm³", Point::new(margin, rule + margin), small, theme.quiet, Align::LEFT.cap_top());
     let steps = level_steps(&plot, small).unwrap();
     let write = |value: f64| {
@@ -273,6 +276,22 @@ pub fn charts(canvas: &mut Canvas<'_>, theme: &Theme) {
     swatch_with_changes(canvas, area(x, y + box_high as i32, box_high * 3, 6), width, theme.water);
     y += box_high as i32 + margin + 4;
 
+    let band = Plot {
+        area: area(half, if large { y } else { y - 10 }, (wide - half - margin) as u32, if large { 70 } else { 24 }),
+        across: (0.0, 365.0),
+        up: (0.0, 5.6),
+    };
+    let least = year(8.0, 3.6);
+    let most = year(0.0, 5.2);
+    range_band(canvas, &band, least, most, theme.water, theme);
+    line_pair(
+        canvas,
+        &band,
+        year(0.0, 4.9),
+        year(4.0, 4.4),
+        LinePair { area: None, ..LinePair::water(width, theme) },
+        theme,
+    );
     if large {
         let values: Vec<f64> = (0..13 * 7)
             .map(|i| {
@@ -280,20 +299,16 @@ pub fn charts(canvas: &mut Canvas<'_>, theme: &Theme) {
                 0.9 - 0.09 * warm + 0.06 * wet + 0.004 * warm * wet
             })
             .collect();
-        let field = Field {
-            area: area(half, y, (wide - half - margin) as u32, (high - y - margin) as u32),
-            columns: 13,
-            values: &values,
-        };
+        let field = Field { area: area(margin, y, 200, (high - y - margin) as u32), columns: 13, values: &values };
         shade(canvas, &field, |value| theme.ramp((value - 0.2) / 0.85));
         contour(canvas, &field, 0.6, Stroke::solid(3.0), theme.ink);
         ring(canvas, field.middle(4, 3), 8.0, 2.0, theme.ink);
         disc(canvas, field.middle(4, 3), 6.0, theme.paper);
-        let note = "La línea separa los años con agua de los años sin agua. El punto es el lugar de ahora.";
+        let note = "La línea separa los años con agua de los años sin agua.";
         paragraph(
             canvas,
             note,
-            area(margin, y, (half - margin * 3) as u32, (high - y) as u32),
+            area(margin + 212, y, (half - margin * 2 - 212) as u32, (high - y) as u32),
             small,
             theme.quiet,
             Across::Left,

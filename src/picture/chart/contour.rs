@@ -101,7 +101,7 @@ pub fn contour(canvas: &mut Canvas<'_>, field: &Field<'_>, level: f64, stroke: S
         let pieces = pieces_of_square(field, column, row, level);
         pieces.into_iter().flatten().flat_map(move |(from, to)| [from, to, gap])
     });
-    polyline(canvas, pieces, stroke.with_round_ends(), paint);
+    canvas.within(field.area, |canvas| polyline(canvas, pieces, stroke.with_round_ends(), paint));
 }
 
 /// The at most two pieces of the contour between four neighbouring places of the field with its border.

@@ -67,6 +67,22 @@ pub fn line_pair(
     polyline(canvas, was, as_it_was(look.width_px), theme.ink);
 }
 
+/// Draws the range in which the answer lies, from `low` to `high` day by day: a thin wash of `colour` under fine
+/// stripes. Days count as in [`line_pair`]; draw the range first.
+pub fn range_band(
+    canvas: &mut Canvas<'_>,
+    plot: &Plot,
+    low: impl Iterator<Item = f64> + Clone,
+    high: impl Iterator<Item = f64> + Clone,
+    colour: Rgb565,
+    theme: &Theme,
+) {
+    let place = |(day, value): (usize, f64)| plot.spot(plot.across.0 + day as f64 + 0.5, value);
+    let (low, high) = (low.enumerate().map(place), high.enumerate().map(place));
+    between(canvas, high.clone(), low.clone(), Between::Either, Paint::Wash { colour, share: 60 });
+    between(canvas, high, low, Between::Either, theme.range_hatch());
+}
+
 /// A short piece of the solid line for a legend, in the middle of `area`.
 pub fn swatch_with_changes(canvas: &mut Canvas<'_>, area: Rectangle, width_px: f64, colour: Rgb565) {
     let (from, to) = ends(area, width_px);

@@ -15,7 +15,7 @@ pub use axis::{Months, level_axis, level_steps, month_axis};
 pub use bars::{BarPair, bar_pair};
 pub use contour::{Field, contour, shade};
 pub use labels::{EndLabel, MOST_LABELS, end_labels};
-pub use lines::{LinePair, as_it_was, day_cursor, line_pair, swatch_as_it_was, swatch_with_changes};
+pub use lines::{LinePair, as_it_was, day_cursor, line_pair, range_band, swatch_as_it_was, swatch_with_changes};
 pub use steps::{Steps, nice_steps};
 pub use strip::{DayMark, swatch, year_strip};
 

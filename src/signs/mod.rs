@@ -1,1 +1,14 @@
-//! What is read off a run: annual indicators, comparisons and skill scores.
+//! What is read off a run: annual indicators, comparisons and skill scores. Reads water; changes nothing.
+
+mod canal;
+mod many;
+mod read;
+mod sign;
+pub mod skill;
+mod year;
+
+pub use canal::CanalSigns;
+pub use many::{Performance, Spread, performance, spread};
+pub use read::{YearReport, read_run};
+pub use sign::{SIGNS, Sign, SignKind};
+pub use year::{YearReader, YearSigns};

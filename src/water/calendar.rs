@@ -79,6 +79,12 @@ impl CalendarDay {
         usize::from(self.month_day.month - 1)
     }
 
+    /// Whether the next day starts another water year.
+    pub fn is_last_of_water_year(self, water_year_start_month: u8) -> bool {
+        let tomorrow = self.date(water_year_start_month).succ_opt();
+        tomorrow.is_some_and(|date| CalendarDay::new(date, water_year_start_month).day_of_water_year == 1)
+    }
+
     /// The date on the calendar.
     pub fn date(self, water_year_start_month: u8) -> NaiveDate {
         let later = water_year_start_month > 1 && self.month_day.month >= water_year_start_month;

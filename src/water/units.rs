@@ -17,6 +17,10 @@ pub const M2_PER_ACRE: f64 = SQUARE_FEET_PER_ACRE * M_PER_FOOT * M_PER_FOOT;
 pub const M3_PER_ACRE_FOOT: f64 = M2_PER_ACRE * M_PER_FOOT;
 /// Cubic metres per second in one cubic foot per second.
 pub const M3S_PER_FT3S: f64 = M_PER_FOOT * M_PER_FOOT * M_PER_FOOT;
+/// Kilometres in a mile (international foot).
+pub const KM_PER_MILE: f64 = 5_280.0 * M_PER_FOOT / 1_000.0;
+/// Metres per second in one mile per hour.
+pub const MS_PER_MPH: f64 = KM_PER_MILE * 1_000.0 / 3_600.0;
 /// Square metres in a hectare.
 pub const M2_PER_HECTARE: f64 = 10_000.0;
 /// Square metres in a square kilometre.
@@ -29,6 +33,8 @@ pub const M3_PER_HM3: f64 = 1.0e6;
 pub const M3_PER_MM_KM2: f64 = 1_000.0;
 /// Cubic metres in one millimetre of water over one hectare.
 pub const M3_PER_MM_HECTARE: f64 = 10.0;
+/// Cubic metres in a megalitre.
+pub const M3_PER_MEGALITRE: f64 = 1_000.0;
 /// Litres in a cubic metre.
 pub const LITRES_PER_M3: f64 = 1_000.0;
 /// Fahrenheit degrees in one Celsius degree, for differences of temperature.

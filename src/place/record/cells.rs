@@ -84,12 +84,11 @@ pub(super) fn recognise_delimiter(header: &str, wanted: &[&str]) -> Option<char>
     let mut best = None;
     for delimiter in [',', ';', '\t', '|'] {
         let mut cells = Vec::new();
-        if split_cells(header, delimiter, &mut cells).is_err() {
-            continue;
-        }
+        // A quotation mark left open hides the cells behind it, but not those before.
+        let hidden = usize::from(split_cells(header, delimiter, &mut cells).is_err());
         let found = cells.iter().filter(|cell| wanted.contains(&plain_name(&cell.text))).count();
-        let merit = (found, cells.len());
-        if cells.len() > 1 && best.is_none_or(|(_, so_far)| merit > so_far) {
+        let merit = (found, cells.len() + hidden);
+        if merit.1 > 1 && best.is_none_or(|(_, so_far)| merit > so_far) {
             best = Some((delimiter, merit));
         }
     }

@@ -9,6 +9,9 @@ use super::plan::DateOrder;
 use super::table::Table;
 use crate::place::problem::Problem;
 
+/// Steps from row to row that it takes to say that a file is not of days.
+const FEWEST_STEPS: usize = 5;
+
 /// Notes dates that could not be read. Where another order of year, month and day fits the file, that one mistake is
 /// noted in place of them all, and the dates are read again in it so that the rest can still be checked.
 pub(super) fn settle_dates(
@@ -18,8 +21,7 @@ pub(super) fn settle_dates(
     notes: &mut Notes,
 ) {
     if let DateCells::One(cell, declared) = date_cells {
-        let readable = faults.iter().all(|(_, fault)| matches!(fault, DateFault::Unreadable | DateFault::NoSuchDay));
-        let suspect = if faults.is_empty() { !is_daily(&table.dates) } else { readable };
+        let suspect = !faults.is_empty() || !is_daily(&table.dates);
         let other = if suspect { better_order(table, cell, declared, faults.len()) } else { None };
         if let Some((order, dates, other_faults)) = other {
             // The first date that gives the order away: one that could not be read, or the one that breaks the days.
@@ -115,6 +117,14 @@ fn note_holes(table: &Table, sorted: &[(NaiveDate, usize)], newest_first: bool, 
     for date in &table.dates {
         undated_before.push(undated);
         undated += usize::from(date.is_none());
+    }
+    let steps = sorted.windows(2).filter(|pair| pair[1].0 > pair[0].0).count();
+    let wide = sorted.windows(2).filter(|pair| (pair[1].0 - pair[0].0).num_days() > 1).count();
+    if steps >= FEWEST_STEPS && wide * 2 > steps {
+        // Months or weeks: one mistake, not a hole behind every row.
+        let problem = Problem::error(table.at_date(sorted[1].1), "problem-record-not-daily");
+        notes.add(problem.with("count", wide).with("rows", table.lines.len()));
+        return;
     }
     for pair in sorted.windows(2) {
         let ((before, row_before), (after, row)) = (pair[0], pair[1]);

@@ -2,6 +2,7 @@
 
 use chrono::{Datelike, NaiveDate};
 
+use super::measure::Measure;
 use super::notes::{Notes, shown};
 use super::plan::{GapFill, GapRule};
 use super::table::{CellState, Readings, Table};
@@ -60,6 +61,28 @@ pub(super) fn close_gaps(table: &mut Table, index: usize, notes: &mut Notes) -> 
         table.columns[index].values[row] = value;
     }
     gaps
+}
+
+/// Notes days on which filling one column of a pair put it on the wrong side of the other.
+pub(super) fn check_filled_pairs(table: &Table, notes: &mut Notes) {
+    let pairs = [
+        (Measure::TemperatureMin, Measure::TemperatureMax),
+        (Measure::RelativeHumidityMin, Measure::RelativeHumidityMax),
+    ];
+    for (low, high) in pairs {
+        let find = |measure| table.columns.iter().find(|column| column.plan.measure == measure);
+        let (Some(low), Some(high)) = (find(low), find(high)) else { continue };
+        for row in 0..table.lines.len() {
+            let filled = if low.states[row] == CellState::Missing { low } else { high };
+            // Days measured on both sides were judged before.
+            if filled.states[row] == CellState::Missing && low.values[row] > high.values[row] {
+                let problem = Problem::error(table.at(filled, row), "problem-record-filled-across")
+                    .with("column", shown(&low.plan.name))
+                    .with("other", shown(&high.plan.name));
+                notes.add(problem);
+            }
+        }
+    }
 }
 
 fn refusal(at: Location, message: &'static str, name: &str, days: usize, rule: GapRule) -> Problem {

@@ -134,6 +134,7 @@ fn read_noted(plan: &RecordPlan, bytes: &[u8], notes: &mut Notes) -> Option<Read
     doubts::doubt(&table, notes);
     let gaps: Vec<gaps::Gaps> =
         (0..table.columns.len()).map(|index| gaps::close_gaps(&mut table, index, notes)).collect();
+    gaps::check_filled_pairs(&table, notes);
     let first_date = (*table.dates.first()?)?;
     let columns = table.columns.into_iter().zip(gaps).map(|(readings, gaps)| Column {
         name: readings.plan.name.clone(),

@@ -39,6 +39,21 @@ pub enum Encoding {
     Latin1,
 }
 
+impl Encoding {
+    /// The key that a place file writes for it.
+    pub fn key(self) -> &'static str {
+        match self {
+            Encoding::Utf8 => "utf-8",
+            Encoding::Latin1 => "latin-1",
+        }
+    }
+
+    /// The encoding that `key` names; capitals do not count.
+    pub fn from_key(key: &str) -> Option<Self> {
+        [Encoding::Utf8, Encoding::Latin1].into_iter().find(|encoding| encoding.key().eq_ignore_ascii_case(key))
+    }
+}
+
 /// Where the date of a row is.
 #[derive(Clone, Debug, PartialEq, Eq)]
 pub enum DatePlan {
@@ -194,6 +209,8 @@ mod tests {
         }
         assert_eq!(DateOrder::from_key("day-month-year"), Some(DateOrder::DayMonthYear));
         assert_eq!(DateOrder::from_key("year/day/month"), None);
+        assert_eq!(Encoding::from_key("Latin-1"), Some(Encoding::Latin1));
+        assert_eq!(Encoding::from_key("utf-7"), None);
         for how in GapFill::ALL {
             assert_eq!(GapFill::from_key(how.key()), Some(how));
         }

@@ -36,6 +36,9 @@ mod river;
 mod rotation;
 mod seniority;
 mod state;
+mod width;
+#[cfg(test)]
+mod worked;
 
 pub use date::PriorityDate;
 pub use gate::{Gate, MinimumPlace, RiverSetup, SharingRule};

@@ -15,7 +15,7 @@ use super::{River, RiverDay, RiverInput, RiverState};
 
 impl River {
     /// Shares the day's water by one fraction.
-    pub(super) fn share_by_fraction(
+    pub(super) fn share_by_fraction<const WIDTH: usize>(
         &self,
         state: &mut RiverState,
         input: &RiverInput,
@@ -23,52 +23,67 @@ impl River {
         out: &mut RiverDay,
     ) -> Shared {
         let n = self.gates.len();
-        let flow = &mut out.room_m3[..n + 2];
-        let mut reserved = 0.0;
-        if !self.minimum_at_dam {
-            reserved = least(flow[n + 1], input.minimum_m3);
-            flow[n + 1] -= reserved;
-        }
+        let entering = &out.entering_m3[1..n + 1];
         let wish = &out.wish_m3[..n];
-        let arriving_share = self.mean_arriving_share(wish);
+        let arriving_share = if self.any_stored_loss { self.mean_arriving_share(wish) } else { 1.0 };
         let most = least(least(state.pool_m3, positive(self.outlet_m3 - morning.natural_m3)), input.stored_limit_m3);
         let most_arriving = most * arriving_share;
 
-        // A reach limits the fraction only where it is tighter than all before; the last one adds no wish.
+        // The flow below each gate with nothing taken; it limits the fraction where it is tighter than all above.
         let mut fraction = 1.0;
-        let mut wished = 0.0;
-        for (flow, wish) in flow[1..].iter().zip(wish.iter().chain(&[0.0])) {
+        let (mut flow, mut wished) = (morning.natural_m3, 0.0);
+        for (entering, wish) in entering.iter().zip(wish) {
+            flow += entering;
             wished += wish;
-            let carried = flow + most_arriving;
-            if fraction * wished > carried {
-                fraction = carried / wished;
+            if fraction * wished > flow + most_arriving {
+                fraction = (flow + most_arriving) / wished;
             }
         }
-        let mut slack = flow[0];
-        wished = 0.0;
-        for (flow, wish) in flow[1..].iter().zip(wish.iter().chain(&[0.0])) {
+        flow += out.entering_m3[n + 1];
+        let reserved = if self.minimum_at_dam { 0.0 } else { least(flow, input.minimum_m3) };
+        let end_flow = flow - reserved;
+        if fraction * wished > end_flow + most_arriving {
+            fraction = (end_flow + most_arriving) / wished;
+        }
+
+        // What the tightest reach has left, or lacks.
+        let total = fraction * wished;
+        let mut slack = least(morning.natural_m3, end_flow - total);
+        (flow, wished) = (morning.natural_m3, 0.0);
+        for (entering, wish) in entering.iter().zip(wish) {
+            flow += entering;
             wished += wish;
             slack = least(slack, flow - fraction * wished);
         }
         let needed = positive(-slack);
-        let (released, arriving) =
-            if needed <= most_arriving { (needed / arriving_share, needed) } else { (most, most_arriving) };
+        let (released, arriving) = if needed == 0.0 {
+            (0.0, 0.0)
+        } else if needed <= most_arriving {
+            (needed / arriving_share, needed)
+        } else {
+            (most, most_arriving)
+        };
         // The division above may round up past what there is.
         let released = least(released, most);
         let reservoir_take = least(positive(slack), self.reservoir_want_m3(input, morning));
         state.pool_m3 -= released;
 
-        let total = fraction * wished;
-        let stored_share = if total > 0.0 { arriving / total } else { 0.0 };
-        let released_share = if total > 0.0 { released / total } else { 0.0 };
-        for (i, wish) in wish.iter().enumerate() {
-            let canal = fraction * wish;
-            out.canal_m3[i] = canal;
-            out.natural_take_m3[i] = positive(canal - canal * stored_share);
-            out.stored_take_m3[i] = canal * released_share;
-            state.drawn_this_year_m3[i] += canal;
+        if morning.any_wish {
+            let stored_share = if total > 0.0 { arriving / total } else { 0.0 };
+            let released_share = if total > 0.0 { released / total } else { 0.0 };
+            let wish = &out.wish_m3;
+            let natural = &mut out.natural_take_m3;
+            let stored = &mut out.stored_take_m3;
+            let canal = &mut out.canal_m3;
+            for i in 0..WIDTH {
+                let flow = fraction * wish[i];
+                canal[i] = flow;
+                natural[i] = positive(flow - flow * stored_share);
+                stored[i] = flow * released_share;
+            }
+            self.note_canals::<WIDTH>(state, out);
+            out.canal_total_m3 = total;
         }
-        out.canal_total_m3 = total;
         out.fraction = Some(fraction);
         Shared {
             reservoir_take_m3: reservoir_take,
@@ -76,21 +91,17 @@ impl River {
             stored_release_m3: released,
             stored_arriving_m3: arriving,
             // Zero or more by the choice of the fraction, but for its rounding.
-            natural_end_m3: positive(flow[n + 1] - total + arriving - reservoir_take) + reserved,
+            natural_end_m3: positive(end_flow - total + arriving - reservoir_take) + reserved,
             outlet_left_m3: positive(self.outlet_left_m3(morning, reservoir_take) - released),
         }
     }
 
     /// The share of stored water that arrives: one less the mean of the gates' loss shares, weighted by wish.
-    #[inline(always)]
     fn mean_arriving_share(&self, wish_m3: &[f64]) -> f64 {
-        if !self.any_stored_loss {
-            return 1.0;
-        }
         let (mut wished, mut lost) = (0.0, 0.0);
-        for (wish, gate) in wish_m3.iter().zip(&self.gates) {
+        for (wish, loss) in wish_m3.iter().zip(&self.stored_loss_share) {
             wished += wish;
-            lost += wish * gate.stored_loss_share;
+            lost += wish * loss;
         }
         if wished > 0.0 { 1.0 - lost / wished } else { 1.0 }
     }

@@ -1,58 +1,39 @@
-//! How much natural flow a position along the river may still take.
+//! How much natural flow a position along the river may take.
 //!
-//! A claimant may take no more than the smallest flow in the reach at its position or in any reach further down: with
-//! fewer reaches looked at, an upstream junior could take water that a senior below has been given. There is a reach
-//! below every position, the dam and the river's end included; without the one at the dam the reservoir would store
-//! returns that enter below it.
+//! Nobody may take more than the flow in the reach at the own position or in any reach further down, for what is taken
+//! upstream is missing below. There is a reach below every position, the dam and the river's end included; without the
+//! one at the dam the reservoir would store returns that enter below it.
 //!
-//! Source: common practice, no source. Nonnegative flow in every reach is a set of nested limits, for which taking the
+//! What is kept is not the flow in each reach but the unclaimed part of the water that comes in at each position: natural
+//! flow at the dam, returns further down. What a position may take is the sum of that at and above it, and a claim is met
+//! from the water that comes in nearest above it first. The two reckonings agree: the running smallest flow downstream
+//! rises along the river by just these parts, and a claim lowers it from its position on by what is taken, and further
+//! up to its new value at most. Nothing falls below zero here, not even by rounding.
+//!
+//! Source: common practice, no source. That no reach runs dry below zero is a set of nested limits, for which taking the
 //! most in order of dates gives the largest outcome for each right in turn.
 
-use super::bounds::least;
+use super::MOST_POSITIONS;
 
-/// The smallest flow from each position down to the river's end, m³, kept current while claims are met.
-///
-/// Only that running minimum is kept, not the flows: a claim lowers it by the same amount from its position down, and
-/// further up to the new minimum at most, since upstream flows have not changed. It never falls below zero, not even
-/// by rounding, as no claim exceeds it.
-pub(super) struct Reaches<'a> {
-    room_m3: &'a mut [f64],
-}
+/// The unclaimed part of the water that comes in at each position, m³.
+pub(super) struct Reaches<'a>(pub(super) &'a mut [f64; MOST_POSITIONS]);
 
-impl<'a> Reaches<'a> {
-    /// Starts from the flows in each reach, which must not fall from one to the next: natural flow and what has come
-    /// in so far.
-    pub(super) fn new(flow_m3: &'a mut [f64]) -> Self {
-        Self { room_m3: flow_m3 }
-    }
-
-    /// Takes what a position wants as far as there is room, and returns it.
+impl Reaches<'_> {
+    /// Takes what a position wants as far as there is water for it, and returns it.
     #[inline(always)]
     pub(super) fn claim(&mut self, position: usize, want_m3: f64) -> f64 {
-        let (above, below) = self.room_m3.split_at_mut(position);
-        let take = least(below[0], want_m3);
-        if take > 0.0 {
-            for room in below.iter_mut() {
-                *room -= take;
+        let mut met = 0.0;
+        let mut left = want_m3;
+        for unclaimed in self.0[..=position].iter_mut().rev() {
+            if left <= *unclaimed {
+                *unclaimed -= left;
+                return want_m3;
             }
-            let smallest = below[0];
-            for room in above.iter_mut().rev() {
-                // Room does not grow upstream, so the rest is no larger.
-                if *room <= smallest {
-                    break;
-                }
-                *room = smallest;
-            }
-            take
-        } else {
-            0.0
+            met += *unclaimed;
+            left -= *unclaimed;
+            *unclaimed = 0.0;
         }
-    }
-
-    /// Flow at the river's end that nobody has claimed, m³.
-    #[inline(always)]
-    pub(super) fn unclaimed_at_end_m3(&self) -> f64 {
-        self.room_m3[self.room_m3.len() - 1]
+        met
     }
 }
 
@@ -61,7 +42,8 @@ mod tests {
     use super::*;
 
     /// The same claims on plain flows, searching every reach every time.
-    fn naive(mut flow: Vec<f64>, claims: &[(usize, f64)]) -> Vec<f64> {
+    fn searched(entering: &[f64], claims: &[(usize, f64)]) -> Vec<f64> {
+        let mut flow: Vec<f64> = (0..entering.len()).map(|j| entering[..=j].iter().sum()).collect();
         let mut takes = Vec::new();
         for &(position, want) in claims {
             let room = flow[position..].iter().copied().fold(f64::INFINITY, f64::min);
@@ -73,13 +55,19 @@ mod tests {
     }
 
     #[test]
-    fn running_minimum_agrees_with_a_search() {
-        let flow = [60.0, 60.0, 85.0, 85.0, 110.0];
-        let claims = [(3, 40.0), (1, 30.0), (4, 25.0), (0, 70.0), (2, 90.0)];
-        let mut room = flow;
-        let mut reaches = Reaches::new(&mut room);
-        let takes: Vec<f64> = claims.iter().map(|&(position, want)| reaches.claim(position, want)).collect();
-        assert_eq!(takes, naive(flow.to_vec(), &claims));
-        assert_eq!(takes, [40.0, 30.0, 25.0, 15.0, 0.0]);
+    fn parts_agree_with_a_search_of_the_flows() {
+        // All volumes are whole, so both are exact.
+        let entering = [60.0, 0.0, 25.0, 0.0, 25.0, 7.0];
+        let claims = [(3, 40.0), (1, 30.0), (5, 25.0), (4, 3.0), (0, 70.0), (2, 90.0)];
+        for turn in 0..claims.len() {
+            let mut order = claims;
+            order.rotate_left(turn);
+            let mut unclaimed = [0.0; MOST_POSITIONS];
+            unclaimed[..6].copy_from_slice(&entering);
+            let mut reaches = Reaches(&mut unclaimed);
+            let takes: Vec<f64> = order.iter().map(|&(position, want)| reaches.claim(position, want)).collect();
+            assert_eq!(takes, searched(&entering, &order));
+            assert_eq!(unclaimed.iter().sum::<f64>(), 117.0 - takes.iter().sum::<f64>());
+        }
     }
 }

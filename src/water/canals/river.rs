@@ -2,8 +2,9 @@
 
 use core::fmt;
 
-use super::accounts::{Shares, content_m3};
-use super::{MOST_GATES, MOST_POSITIONS, MinimumPlace, RiverSetup, RiverState, SharingRule};
+use super::accounts::Shares;
+use super::width::sum;
+use super::{Gate, MOST_GATES, MOST_POSITIONS, MinimumPlace, RiverSetup, RiverState, SharingRule};
 
 /// An unowned share of the reservoir below this is rounding and counts as none.
 const SMALLEST_POOL_SHARE: f64 = 1e-12;
@@ -31,20 +32,15 @@ impl core::error::Error for RiverFault {}
 /// What a day needs to know of a gate.
 #[derive(Clone, Debug)]
 pub(super) struct GateRule {
-    pub(super) canal_m3: f64,
     pub(super) decreed_m3: f64,
-    pub(super) yearly_limit_m3: f64,
     /// Share of stored water let go at the dam that arrives at the gate, and one over it.
     pub(super) arriving_share: f64,
     pub(super) release_per_arriving: f64,
-    /// Share of the return store that comes back in a day.
-    pub(super) daily_return_share: f64,
     pub(super) return_share: f64,
     /// Cycle over turn: the turn carries the whole cycle's demand.
     pub(super) cycle_per_turn: f64,
     /// First day after this gate's turn, counted from the cycle's start.
     pub(super) turn_end: u32,
-    pub(super) stored_loss_share: f64,
 }
 
 /// A river ready for a run.
@@ -52,13 +48,17 @@ pub(super) struct GateRule {
 pub struct River {
     pub(super) rule: SharingRule,
     pub(super) gates: heapless::Vec<GateRule, MOST_GATES>,
+    pub(super) canal_m3: [f64; MOST_GATES],
+    pub(super) yearly_limit_m3: [f64; MOST_GATES],
+    pub(super) stored_loss_share: [f64; MOST_GATES],
+    /// Share of the return store that comes back in a day.
+    pub(super) daily_return_share: [f64; MOST_GATES],
+    pub(super) return_above: [u8; MOST_GATES],
     pub(super) shares: Shares,
     pub(super) active_m3: f64,
     pub(super) outlet_m3: f64,
     /// Positions in order of dates.
     pub(super) date_order: heapless::Vec<u8, MOST_POSITIONS>,
-    /// Gates by where their water comes back, upstream first, each with that position.
-    pub(super) return_order: heapless::Vec<(u8, u8), MOST_GATES>,
     pub(super) minimum_at_dam: bool,
     pub(super) minimum_before_reservoir: bool,
     pub(super) pool_serves_minimum: bool,
@@ -85,17 +85,9 @@ impl River {
                 turn_end += u32::from(gate.turn_days);
                 let arriving_share = 1.0 - gate.stored_loss_share;
                 GateRule {
-                    canal_m3: gate.canal_m3,
                     decreed_m3: gate.decreed_m3,
-                    yearly_limit_m3: gate.yearly_limit_m3,
                     arriving_share,
                     release_per_arriving: 1.0 / arriving_share,
-                    // expm1 keeps its digits where the stay is long.
-                    daily_return_share: if gate.return_days > 0.0 {
-                        -libm::expm1(-1.0 / gate.return_days)
-                    } else {
-                        1.0
-                    },
                     return_share: gate.return_share,
                     cycle_per_turn: if gate.turn_days > 0 {
                         f64::from(cycle_days) / f64::from(gate.turn_days)
@@ -103,7 +95,6 @@ impl River {
                         0.0
                     },
                     turn_end,
-                    stored_loss_share: gate.stored_loss_share,
                 }
             })
             .collect();
@@ -115,18 +106,30 @@ impl River {
         };
         let mut date_order: heapless::Vec<u8, MOST_POSITIONS> = (0..n as u8 + 2).collect();
         date_order.sort_unstable_by_key(|&position| (date(usize::from(position)), position));
-        let mut return_order: heapless::Vec<(u8, u8), MOST_GATES> =
-            setup.gates.iter().enumerate().map(|(i, gate)| (gate.return_above, i as u8)).collect();
-        return_order.sort_unstable();
+        let mut return_above = [0; MOST_GATES];
+        for (slot, gate) in return_above.iter_mut().zip(&setup.gates) {
+            *slot = gate.return_above;
+        }
+        let per_gate = |value: fn(&Gate) -> f64| {
+            let mut values = [0.0; MOST_GATES];
+            for (slot, gate) in values.iter_mut().zip(&setup.gates) {
+                *slot = value(gate);
+            }
+            values
+        };
 
         Ok(Self {
             rule: setup.rule,
             gates,
+            canal_m3: per_gate(|gate| gate.canal_m3),
+            yearly_limit_m3: per_gate(|gate| gate.yearly_limit_m3),
+            stored_loss_share: per_gate(|gate| gate.stored_loss_share),
+            daily_return_share: per_gate(daily_return_share),
+            return_above,
             shares: shares(setup),
             active_m3: setup.active_m3,
             outlet_m3: setup.outlet_m3,
             date_order,
-            return_order,
             minimum_at_dam: setup.minimum_place == MinimumPlace::Dam,
             minimum_before_reservoir: setup.rule != SharingRule::Seniority || setup.minimum_date < setup.reservoir_date,
             pool_serves_minimum: setup.pool_serves_minimum,
@@ -147,7 +150,7 @@ impl River {
         for (held, share) in state.account_m3.iter_mut().zip(&self.shares.share) {
             *held = share_of_active * (share * self.active_m3);
         }
-        state.pool_m3 = share_of_active * self.shares.pool_capacity_m3;
+        state.pool_m3 = share_of_active * self.pool_capacity_m3();
     }
 
     /// The most that a gate's account may hold, m³; zero where it has none, and under one-pool rules.
@@ -157,12 +160,12 @@ impl River {
 
     /// The most that the pool may hold, m³.
     pub fn pool_capacity_m3(&self) -> f64 {
-        self.shares.pool_capacity_m3
+        self.shares.pool_share * self.active_m3
     }
 
     /// All stored water of a state, m³.
     pub fn content_m3(&self, state: &RiverState) -> f64 {
-        content_m3(&state.account_m3[..self.gates.len()], state.pool_m3)
+        sum::<MOST_GATES>(&state.account_m3) + state.pool_m3
     }
 
     /// Days of one full rotation; zero where no gate has a turn.
@@ -177,25 +180,33 @@ impl River {
     }
 }
 
+/// Share of a return store that comes back in a day: 1 − exp(−1/T), the exact daily form of a linear store.
+fn daily_return_share(gate: &Gate) -> f64 {
+    // expm1 keeps its digits where the stay is long.
+    if gate.return_days > 0.0 { -libm::expm1(-1.0 / gate.return_days) } else { 1.0 }
+}
+
 /// Storage shares and capacities; under one-pool rules the pool has all of it.
 fn shares(setup: &RiverSetup) -> Shares {
-    let active_m3 = setup.active_m3;
+    let capacity = |share: f64| if share > 0.0 { share * setup.active_m3 } else { f64::INFINITY };
     let mut shares = Shares {
-        share: heapless::Vec::new(),
-        capacity_m3: heapless::Vec::new(),
+        share: [0.0; MOST_GATES],
+        capacity_m3: [f64::INFINITY; MOST_GATES],
         pool_share: 1.0,
-        pool_capacity_m3: active_m3,
+        pool_capacity_m3: setup.active_m3,
         per_share: 1.0,
     };
     if setup.rule == SharingRule::Seniority {
-        let owned: f64 = setup.gates.iter().map(|gate| gate.storage_share).sum();
+        let mut owned = 0.0;
+        for (i, gate) in setup.gates.iter().enumerate() {
+            owned += gate.storage_share;
+            shares.share[i] = gate.storage_share;
+            shares.capacity_m3[i] = capacity(gate.storage_share);
+        }
         let unowned = 1.0 - owned;
         shares.pool_share = if unowned >= SMALLEST_POOL_SHARE { unowned } else { 0.0 };
-        shares.pool_capacity_m3 = shares.pool_share * active_m3;
+        shares.pool_capacity_m3 = capacity(shares.pool_share);
         shares.per_share = 1.0 / (owned + shares.pool_share);
-        shares.share = setup.gates.iter().map(|gate| gate.storage_share).collect();
-        shares.capacity_m3 =
-            shares.share.iter().map(|&s| if s > 0.0 { s * active_m3 } else { f64::INFINITY }).collect();
     }
     shares
 }

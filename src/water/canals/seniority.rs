@@ -28,7 +28,7 @@ pub(super) fn draw(gate: &GateRule, short_m3: f64, held_m3: f64, available_m3: f
 impl River {
     /// Shares the day's water by date.
     #[inline(always)]
-    pub(super) fn share_by_date(
+    pub(super) fn share_by_date<const WIDTH: usize>(
         &self,
         state: &mut RiverState,
         input: &RiverInput,
@@ -37,7 +37,7 @@ impl River {
     ) -> Shared {
         let n = self.gates.len();
         let end = n + 1;
-        let mut reaches = Reaches::new(&mut out.room_m3[..n + 2]);
+        let mut reaches = Reaches(&mut out.entering_m3);
         let reservoir_want = self.reservoir_want_m3(input, morning);
         let minimum_want = if self.minimum_at_dam { 0.0 } else { input.minimum_m3 };
         let (mut reservoir_take, mut reserved) = (0.0, 0.0);
@@ -61,7 +61,6 @@ impl River {
             reservoir_take = reaches.claim(0, reservoir_want);
             reserved = reaches.claim(end, minimum_want);
         }
-        let natural_end_m3 = reaches.unclaimed_at_end_m3() + reserved;
 
         let mut outlet_left = self.outlet_left_m3(morning, reservoir_take);
         let (mut released, mut arriving) = (0.0, 0.0);
@@ -79,19 +78,14 @@ impl River {
                 out.canal_m3[i] = out.natural_take_m3[i] + arrived;
             }
             outlet_left = positive(outlet_left - released);
-            let mut total = 0.0;
-            for (canal, drawn) in out.canal_m3[..n].iter().zip(&mut state.drawn_this_year_m3[..n]) {
-                *drawn += canal;
-                total += canal;
-            }
-            out.canal_total_m3 = total;
+            out.canal_total_m3 = self.note_canals::<WIDTH>(state, out);
         }
         Shared {
             reservoir_take_m3: reservoir_take,
             reserved_at_end_m3: reserved,
             stored_release_m3: released,
             stored_arriving_m3: arriving,
-            natural_end_m3,
+            natural_end_m3: self.natural_end_m3::<WIDTH>(morning, out, reservoir_take),
             outlet_left_m3: outlet_left,
         }
     }

@@ -2,7 +2,8 @@
 
 use super::{MOST_GATES, MOST_POSITIONS};
 
-/// What is carried from one day to the next. Gates are counted from 0 here; entries beyond the last gate are not used.
+/// What is carried from one day to the next. Gates are counted from 0; entries beyond the last gate must be zero, and
+/// stay so.
 #[derive(Clone, Debug, PartialEq)]
 pub struct RiverState {
     /// Stored water in each gate's account, m³. Under one-pool rules the first day moves it into the pool.
@@ -44,11 +45,12 @@ pub struct RiverInput<'a> {
     pub stored_limit_m3: f64,
     /// Day of the rotation, 0 on the day on which the canals open.
     pub rotation_day: u32,
-    /// What each gate asks for at its head, m³, counted from 0; entries beyond the last gate are not read.
+    /// What each gate asks for at its head, m³, counted from 0; entries beyond the last gate do not matter.
     pub demand_m3: &'a [f64; MOST_GATES],
 }
 
-/// What came of one day, m³. Gates are counted from 0; entries beyond the last gate are not written.
+/// What came of one day, m³. Gates are counted from 0; entries beyond the last gate are zero, as long as a day is used
+/// with one river only.
 ///
 /// The terms close: `inflow + rain + content_start + return_flow_total = evaporation + canal_total + river_loss +
 /// river_out + content`, to rounding; see [`RiverDay::residual_m3`].
@@ -107,8 +109,10 @@ pub struct RiverDay {
     pub content_start_m3: f64,
     /// Active content in the evening.
     pub content_m3: f64,
-    /// Room left at each position while natural flow is shared out; scratch that saves clearing an array every day.
-    pub(super) room_m3: [f64; MOST_POSITIONS],
+    /// Unclaimed water by where it comes in, while natural flow is shared out; here so that it need not be made anew.
+    pub(super) entering_m3: [f64; MOST_POSITIONS],
+    /// Whether any entry of wishes, takes and canal flows may differ from zero.
+    pub(super) takes_written: bool,
 }
 
 impl RiverDay {
@@ -117,6 +121,18 @@ impl RiverDay {
         let came = input.inflow_m3 + input.lake_rain_m3 + self.content_start_m3 + self.return_flow_total_m3;
         let went = self.evaporation_m3 + self.canal_total_m3 + self.river_loss_m3 + self.river_out_m3 + self.content_m3;
         came - went
+    }
+
+    /// Clears what gates wished for and got. Most of the year there is nothing to clear.
+    #[inline(always)]
+    pub(super) fn clear_takes(&mut self) {
+        if self.takes_written {
+            self.wish_m3 = [0.0; MOST_GATES];
+            self.natural_take_m3 = [0.0; MOST_GATES];
+            self.stored_take_m3 = [0.0; MOST_GATES];
+            self.canal_m3 = [0.0; MOST_GATES];
+            self.takes_written = false;
+        }
     }
 }
 
@@ -149,7 +165,8 @@ impl Default for RiverDay {
             minimum_met: true,
             content_start_m3: 0.0,
             content_m3: 0.0,
-            room_m3: [0.0; MOST_POSITIONS],
+            entering_m3: [0.0; MOST_POSITIONS],
+            takes_written: false,
         }
     }
 }

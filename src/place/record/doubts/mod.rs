@@ -21,6 +21,7 @@ const STUCK_DAYS: usize = 20;
 
 /// Notes every doubt about the values of `table`.
 pub(super) fn doubt(table: &Table, notes: &mut Notes) {
+    let mut wrong_scale = false;
     for column in &table.columns {
         if !column.plan.measure.accepts(column.plan.unit) {
             // Already noted; values in a wrong kind of unit say nothing.
@@ -40,12 +41,14 @@ pub(super) fn doubt(table: &Table, notes: &mut Notes) {
             Measure::Wind => air::doubt_wind(table, column, &measured, notes),
             _ => false,
         };
-        if !other_unit {
+        if other_unit {
+            wrong_scale |= column.plan.measure.is_temperature();
+        } else {
             note_out_of_bounds(table, column, notes);
             note_stuck(table, column, notes);
         }
     }
-    temperature::doubt_pairs(table, notes);
+    temperature::doubt_pairs(table, wrong_scale, notes);
     air::doubt_pairs(table, notes);
 }
 
@@ -98,9 +101,14 @@ fn about(table: &Table, column: &Readings, row: usize, severity: Severity, messa
     problem.with("column", shown(&column.plan.name))
 }
 
-/// Rounded for a message: two decimals at most.
+/// Rounded to about three figures for a message.
 fn rounded(value: f64) -> f64 {
-    libm::round(value * 100.0) / 100.0
+    let scale = match libm::fabs(value) {
+        size if size >= 100.0 => 1.0,
+        size if size >= 10.0 => 10.0,
+        _ => 100.0,
+    };
+    libm::round(value * scale) / scale
 }
 
 fn note_out_of_bounds(table: &Table, column: &Readings, notes: &mut Notes) {

@@ -49,14 +49,15 @@ pub(super) fn doubt_unit(table: &Table, column: &Readings, measured: &Measured, 
     }
 }
 
-/// Notes what is wrong between the temperature columns.
-pub(super) fn doubt_pairs(table: &Table, notes: &mut Notes) {
+/// Notes what is wrong between the temperature columns. Where one of them has the wrong scale (`wrong_scale`), a wide
+/// range of the day says nothing new.
+pub(super) fn doubt_pairs(table: &Table, wrong_scale: bool, notes: &mut Notes) {
     let find = |measure| table.columns.iter().find(|column| column.plan.measure == measure);
     let (tmin, tmax) = (find(Measure::TemperatureMin), find(Measure::TemperatureMax));
     if let (Some(tmin), Some(tmax)) = (tmin, tmax) {
         let same_kind = tmin.plan.measure.accepts(tmin.plan.unit) && tmax.plan.measure.accepts(tmax.plan.unit);
         if same_kind {
-            doubt_range(table, tmin, tmax, notes);
+            doubt_range(table, tmin, tmax, wrong_scale, notes);
         }
     }
     if let Some(tmean) = find(Measure::TemperatureMean) {
@@ -73,7 +74,7 @@ pub(super) fn doubt_pairs(table: &Table, notes: &mut Notes) {
     }
 }
 
-fn doubt_range(table: &Table, tmin: &Readings, tmax: &Readings, notes: &mut Notes) {
+fn doubt_range(table: &Table, tmin: &Readings, tmax: &Readings, wrong_scale: bool, notes: &mut Notes) {
     let crossed = rows_where(tmin, |row, low| low > tmax.values[row]);
     let both = tmin.measured().filter(|(row, _)| !tmax.values[*row].is_nan());
     let (days, range_sum) =
@@ -90,13 +91,15 @@ fn doubt_range(table: &Table, tmin: &Readings, tmax: &Readings, notes: &mut Note
         notes.add(problem);
     }
     let celsius = tmin.plan.unit == MeasureUnit::Celsius && tmax.plan.unit == MeasureUnit::Celsius;
-    if celsius && days >= super::ALMOST_A_YEAR_DAYS && range_sum / days as f64 > WIDEST_MEAN_RANGE_C {
-        if let Some((first, _)) = tmin.measured().next() {
-            let problem = about(table, tmin, first, Severity::Warning, "problem-record-range-wide")
-                .with("other", shown(&tmax.plan.name))
-                .with("range", rounded(range_sum / days as f64));
-            notes.add(problem);
-        }
+    let mean_range = range_sum / days.max(1) as f64;
+    let wide = days >= super::ALMOST_A_YEAR_DAYS && mean_range > WIDEST_MEAN_RANGE_C;
+    if celsius && wide && !wrong_scale {
+        // The pair as a whole is meant: its first day stands for it.
+        let first = tmin.measured().next().map_or(0, |(row, _)| row);
+        let problem = about(table, tmin, first, Severity::Warning, "problem-record-range-wide")
+            .with("other", shown(&tmax.plan.name))
+            .with("range", rounded(mean_range));
+        notes.add(problem);
     }
 }
 

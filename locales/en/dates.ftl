@@ -1,0 +1,45 @@
+# Months and dates. Never a date of numbers only: 9/5 is another day to somebody in the room.
+
+month-1 = January
+    .short = Jan
+    .letter = J
+month-2 = February
+    .short = Feb
+    .letter = F
+month-3 = March
+    .short = Mar
+    .letter = M
+month-4 = April
+    .short = Apr
+    .letter = A
+month-5 = May
+    .short = May
+    .letter = M
+month-6 = June
+    .short = Jun
+    .letter = J
+month-7 = July
+    .short = Jul
+    .letter = J
+month-8 = August
+    .short = Aug
+    .letter = A
+month-9 = September
+    .short = Sep
+    .letter = S
+month-10 = October
+    .short = Oct
+    .letter = O
+month-11 = November
+    .short = Nov
+    .letter = N
+month-12 = December
+    .short = Dec
+    .letter = D
+
+date-short = { $month } { $day }
+date-in-sentence = { $month } { $day }
+date-in-sentence-long = { $month } { $day }
+date-long = { $month } { $day }, { $year }
+date-range-in-month = { $month } { $a } to { $b }
+date-range = { $month_a } { $a } to { $month_b } { $b }

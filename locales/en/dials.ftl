@@ -1,0 +1,45 @@
+# The ten dials: name, short form (14 characters at most), the word for its unit, and what it stands for.
+
+dial-warming = Warming
+    .short = Warming
+    .unit = degrees
+    .stands = Every day and every night is this much warmer than in the measured years. Crops, soil and the lake feel it too: they give more water to the air.
+dial-winter-precipitation = Winter rain and snow
+    .short = Winter water
+    .unit = percent
+    .stands = How much more or less rain and snow falls in the six cold months. The storms come on the same days as before.
+dial-summer-precipitation = Summer rain
+    .short = Summer rain
+    .unit = percent
+    .stands = How much more or less rain falls in the six warm months. The storms come on the same days as before.
+dial-diversion = Water that canals ask for
+    .short = Canal demand
+    .unit = percent
+    .stands = How much more or less water every canal asks for and can carry. The rights stay as they are: a right does not grow by wanting more.
+dial-canal-lining = Canal lining
+    .short = Lining
+    .unit = percent
+    .stands = How much of the water that canals lose today is kept in by lining. Less water then comes back to the river through the ground.
+dial-crop-mix = Change of crop
+    .short = Crop mix
+    .unit = percent
+    .stands = How much of the land of one crop changes to another crop, or rests. The place says which crops.
+dial-river-minimum = River minimum
+    .short = For the river
+    .unit = percent
+    .stands = How much more or less water has to stay in the river for fish and plants.
+dial-reservoir-size = Reservoir size
+    .short = Reservoir size
+    .unit = percent
+    .stands = How much more or less room for water the reservoir has above its outlet. The water accounts grow or shrink with it.
+dial-starting-storage = Water at the start
+    .short = Start storage
+    .unit = percent full
+    .stands = How full the reservoir is on the first day of the water year. Every year begins so. At rest, each year begins with what the year before left.
+dial-town-growth = Town growth
+    .short = Town growth
+    .unit = percent
+    .stands = How much more water the town uses for homes, schools and shops.
+
+dial-at-rest = as it was
+dial-carry-over = what the year before left

@@ -1,0 +1,112 @@
+# What is read off a run: name, short form (14 characters at most) and one plain sentence. The unit is not part of a name.
+
+## One year
+
+sign-precipitation-mm = Rain and snow
+    .short = Rain and snow
+    .plain = All the water that fell from the sky in the year, as depth over the land.
+sign-snow-share = Share that fell as snow
+    .short = Snow share
+    .plain = Of each 100 parts of rain and snow, how many fell as snow.
+sign-survey-swe-mm = Snow water on survey day
+    .short = On survey day
+    .plain = How much water the snow held on the day when it is measured each year.
+sign-peak-swe-mm = Most snow water
+    .short = Most snow
+    .plain = The most water that the snow held on any day of the year.
+sign-peak-swe-date = Day of most snow
+    .short = Peak snow day
+    .plain = The day on which the snow held the most water.
+sign-melt-out-date = Last day of snow
+    .short = Last snow
+    .plain = The last day with snow before the first week of bare ground.
+sign-half-volume-date = Day when half the water is past
+    .short = Half-water day
+    .plain = The first day by which half of the year's river water has gone by.
+sign-centre-of-volume-day = Middle of the flow
+    .short = Flow middle
+    .plain = The middle day of the year's flow, counted from the start of the water year; big flows weigh more.
+sign-spring-volume-hm3 = Spring water
+    .short = Spring water
+    .plain = How much water the river brought in the spring months that the place names.
+sign-peak-flow-m3s = Highest flow
+    .short = Highest flow
+    .plain = The highest flow of any day in the year.
+sign-peak-flow-date = Day of the highest flow
+    .short = Peak flow day
+    .plain = The day on which the river ran highest.
+sign-low-flow-7day-m3s = Lowest week
+    .short = Lowest week
+    .plain = The mean flow of the seven days in a row with the least water.
+sign-fill-date = Day the reservoir fills
+    .short = Fill date
+    .plain = The first day on which the reservoir is full, or so close that it makes no difference.
+sign-carryover-hm3 = Carryover
+    .short = Carryover
+    .plain = Water that can still be used on the last day of the water year, saved for the next.
+sign-spill-hm3 = Spill
+    .short = Spill
+    .plain = Water that went over the spillway because it did not fit in the reservoir or through the outlet.
+sign-flood-release-hm3 = Released to keep room for floods
+    .short = Flood release
+    .plain = Water let go on purpose so that a flood can fit.
+sign-crop-evaporation-hm3 = Water used by crops
+    .short = Crop water
+    .plain = Water that the crops gave to the air.
+sign-yield-share = Harvest
+    .short = Harvest
+    .plain = Of the harvest with all the water needed, how much is left with the water that arrived.
+sign-river-minimum-days-met = Days with enough water in the river
+    .short = River days
+    .plain = On how many days the river had at least the water it must have.
+sign-supply-ratio = Share of the water asked for that arrived
+    .short = Share met
+    .plain = Of each 100 parts of water asked for at the head gates, how many arrived.
+
+## One canal, one year
+
+sign-canal-name = Canal
+    .short = Canal
+    .plain = The name of the canal.
+sign-canal-right-year = Year of the right
+    .short = Right since
+    .plain = The year of its water right: the older goes first.
+sign-canal-supply-ratio = Share that arrived
+    .short = Share met
+    .plain = Of each 100 parts that this canal asked for at its head gate, how many arrived.
+sign-canal-days-full = Full days
+    .short = Full days
+    .plain = Days on which all the water asked for arrived.
+sign-canal-days-short = Short days
+    .short = Short days
+    .plain = Days on which some of the water arrived, not all.
+sign-canal-days-cut = Cut days
+    .short = Cut days
+    .plain = Days on which no water arrived, or almost none.
+sign-canal-first-short-date = First short day
+    .short = First short
+    .plain = The first day on which not all the water arrived.
+sign-canal-last-full-date = Last full day
+    .short = Last full day
+    .plain = The last day on which all the water asked for arrived.
+sign-canal-last-water-date = Last water
+    .short = Last water
+    .plain = The last day on which any water arrived.
+sign-canal-stored-draw-hm3 = Stored water used
+    .short = From storage
+    .plain = Water that this canal took from the reservoir.
+sign-canal-account-end-hm3 = Left in the water account
+    .short = Account left
+    .plain = What is left in this canal's water account at the end of the year.
+
+## All years
+
+sign-reliability = Reliability
+    .short = Reliability
+    .plain = In how many years out of ten the water was enough.
+sign-resilience = Recovery
+    .short = Recovery
+    .plain = After a year that was not enough, how often the next one was.
+sign-vulnerability-hm3 = Mean shortage in short years
+    .short = Mean shortage
+    .plain = In the years that were not enough, how much water was missing.

@@ -1,0 +1,3 @@
+# Coma para los decimales.
+
+number-decimal-mark = ,

@@ -1,0 +1,29 @@
+# Palabras de Chile. Las revisa una persona de allá antes de imprimir.
+
+term-head-gate = bocatoma
+    .short = Bocatoma
+    .plain = La obra por donde el agua pasa del río al canal.
+term-water-right = derecho de aprovechamiento
+    .short = Derecho
+    .plain = Permiso legal para usar cierta agua.
+term-irrigation-efficiency = eficiencia de riego
+    .short = Eficiencia
+    .plain = De cada diez baldes enviados, cuántos usa el cultivo.
+term-dry-beans = poroto
+    .short = Poroto
+    .plain = Poroto seco para comer.
+term-sugar-beet = remolacha azucarera
+    .short = Remolacha
+    .plain = Raíz que se siembra para hacer azúcar.
+term-pasture = pradera
+    .short = Pradera
+    .plain = Terreno con pasto donde come el ganado.
+term-vineyard = viña
+    .short = Viña
+    .plain = Terreno con parras de uva.
+term-chile = ají
+    .short = Ají
+    .plain = Planta de ají para comer.
+term-reliability = seguridad
+    .short = Seguridad
+    .plain = En cuántos años de cada diez alcanzó el agua.

@@ -1,0 +1,45 @@
+# Meses y fechas. Nunca una fecha de puros números: 9/5 es otro día para alguien en la sala.
+
+month-1 = enero
+    .short = ene
+    .letter = E
+month-2 = febrero
+    .short = feb
+    .letter = F
+month-3 = marzo
+    .short = mar
+    .letter = M
+month-4 = abril
+    .short = abr
+    .letter = A
+month-5 = mayo
+    .short = may
+    .letter = M
+month-6 = junio
+    .short = jun
+    .letter = J
+month-7 = julio
+    .short = jul
+    .letter = J
+month-8 = agosto
+    .short = ago
+    .letter = A
+month-9 = septiembre
+    .short = sep
+    .letter = S
+month-10 = octubre
+    .short = oct
+    .letter = O
+month-11 = noviembre
+    .short = nov
+    .letter = N
+month-12 = diciembre
+    .short = dic
+    .letter = D
+
+date-short = { $day } { $month }
+date-in-sentence = el { $day } { $month }
+date-in-sentence-long = el { $day } de { $month }
+date-long = { $day } de { $month } de { $year }
+date-range-in-month = entre el { $a } y el { $b } { $month }
+date-range = entre el { $a } { $month_a } y el { $b } { $month_b }

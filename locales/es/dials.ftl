@@ -1,0 +1,45 @@
+# Las diez perillas: nombre, forma corta (14 letras o menos), la palabra de su unidad y qué representa.
+
+dial-warming = Calentamiento
+    .short = Calentamiento
+    .unit = grados
+    .stands = Cuántos grados más de calor hace, de día y de noche, que en los años medidos. También lo sienten los cultivos, el suelo y la presa: se va más agua al aire.
+dial-winter-precipitation = Lluvia y nieve de invierno
+    .short = Agua invernal
+    .unit = por ciento
+    .stands = Cuánta lluvia y nieve de más o de menos cae en los seis meses fríos. Las tormentas llegan los mismos días que antes.
+dial-summer-precipitation = Lluvia de verano
+    .short = Lluvia verano
+    .unit = por ciento
+    .stands = Cuánta lluvia de más o de menos cae en los seis meses de calor. Las tormentas llegan los mismos días que antes.
+dial-diversion = Agua que piden los canales
+    .short = Agua a canales
+    .unit = por ciento
+    .stands = Cuánta agua de más o de menos pide y puede llevar cada canal. Los derechos quedan igual: un derecho no crece por querer más.
+dial-canal-lining = Revestimiento de los canales
+    .short = Revestimiento
+    .unit = por ciento
+    .stands = Cuánta del agua que hoy pierden los canales ya no se pierde, porque se revisten. Así vuelve menos agua al río por debajo de la tierra.
+dial-crop-mix = Cambio de cultivo
+    .short = Cultivos
+    .unit = por ciento
+    .stands = Cuánta tierra de un cultivo pasa a otro, o descansa. El lugar dice cuáles cultivos.
+dial-river-minimum = Mínimo para el río
+    .short = Para el río
+    .unit = por ciento
+    .stands = Cuánta agua de más o de menos tiene que quedarse en el río para peces y plantas.
+dial-reservoir-size = Tamaño de la presa
+    .short = Tamaño presa
+    .unit = por ciento
+    .stands = Cuánta agua de más o de menos cabe en la presa arriba de la toma. Las cuentas de agua crecen o bajan igual.
+dial-starting-storage = Agua al empezar el año
+    .short = Al empezar
+    .unit = por ciento de llena
+    .stands = Qué tan llena está la presa el primer día del año de agua. Todos los años empiezan así. Si no se mueve, cada año empieza con lo que dejó el anterior.
+dial-town-growth = Crecimiento del pueblo
+    .short = Pueblo crece
+    .unit = por ciento
+    .stands = Cuánta agua de más usa el pueblo en casas, escuelas y negocios.
+
+dial-at-rest = sin cambios
+dial-carry-over = lo que dejó el año anterior

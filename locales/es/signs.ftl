@@ -1,0 +1,112 @@
+# Lo que se lee de cada corrida: nombre, forma corta (14 letras o menos) y una oración sencilla. La unidad no va en el nombre.
+
+## Un año
+
+sign-precipitation-mm = Lluvia y nieve
+    .short = Lluvia y nieve
+    .plain = Toda el agua que cayó del cielo en el año, medida como altura sobre el terreno.
+sign-snow-share = Parte que cayó como nieve
+    .short = Parte de nieve
+    .plain = De cada 100 partes de lluvia y nieve, cuántas cayeron como nieve.
+sign-survey-swe-mm = Agua en la nieve el día de medición
+    .short = Día de medir
+    .plain = Cuánta agua guardaba la nieve el día en que se mide cada año.
+sign-peak-swe-mm = Máximo de agua en la nieve
+    .short = Más nieve
+    .plain = Lo más que llegó a guardar la nieve en un día del año.
+sign-peak-swe-date = Día con más nieve
+    .short = Pico de nieve
+    .plain = El día en que la nieve guardó más agua.
+sign-melt-out-date = Último día con nieve
+    .short = Fin de nieve
+    .plain = El último día con nieve antes de la primera semana sin ella.
+sign-half-volume-date = Día en que ya pasó la mitad del agua
+    .short = Mitad del agua
+    .plain = El primer día en que ya pasó por el río la mitad del agua del año.
+sign-centre-of-volume-day = Centro del caudal
+    .short = Centro caudal
+    .plain = El día que queda en medio del caudal del año, contado desde que empieza el año de agua. Pesan más los días de mucha agua.
+sign-spring-volume-hm3 = Agua de primavera
+    .short = En primavera
+    .plain = Cuánta agua trajo el río en los meses de primavera que dice el lugar.
+sign-peak-flow-m3s = Caudal más alto
+    .short = Caudal mayor
+    .plain = El caudal más alto de un día del año.
+sign-peak-flow-date = Día del caudal más alto
+    .short = Día del pico
+    .plain = El día en que el río llevó más agua.
+sign-low-flow-7day-m3s = Semana con menos agua
+    .short = Semana baja
+    .plain = El caudal promedio de los siete días seguidos con menos agua.
+sign-fill-date = Día en que se llena la presa
+    .short = Se llena
+    .plain = El primer día en que la presa está llena, o casi.
+sign-carryover-hm3 = Reserva para el año siguiente
+    .short = Para otro año
+    .plain = Agua que todavía se puede usar el último día del año de agua y queda para el siguiente.
+sign-spill-hm3 = Derrame
+    .short = Derrame
+    .plain = Agua que se fue por arriba porque no cabía en la presa ni en la toma.
+sign-flood-release-hm3 = Agua soltada para dejar lugar a crecidas
+    .short = Para crecidas
+    .plain = Agua que se suelta a propósito para que quepa una crecida.
+sign-crop-evaporation-hm3 = Agua que usan los cultivos
+    .short = Uso cultivos
+    .plain = Agua que los cultivos le dieron al aire.
+sign-yield-share = Cosecha
+    .short = Cosecha
+    .plain = De lo que se cosecha con toda el agua, cuánto queda con el agua que llegó.
+sign-river-minimum-days-met = Días con agua suficiente en el río
+    .short = Días del río
+    .plain = Cuántos días llevó el río al menos el agua que debe llevar.
+sign-supply-ratio = Parte del agua pedida que llegó
+    .short = Entregado
+    .plain = De cada 100 partes pedidas en las compuertas, cuántas llegaron.
+
+## Un canal, un año
+
+sign-canal-name = Canal
+    .short = Canal
+    .plain = El nombre del canal.
+sign-canal-right-year = Año del derecho
+    .short = Derecho desde
+    .plain = El año de su derecho de agua: el más antiguo va primero.
+sign-canal-supply-ratio = Parte que llegó
+    .short = Entregado
+    .plain = De cada 100 partes que pidió este canal en su compuerta, cuántas llegaron.
+sign-canal-days-full = Días completos
+    .short = Días completos
+    .plain = Días en que llegó toda el agua pedida.
+sign-canal-days-short = Días parciales
+    .short = Días parciales
+    .plain = Días en que llegó una parte, no toda.
+sign-canal-days-cut = Días sin agua
+    .short = Días sin agua
+    .plain = Días en que no llegó agua, o casi nada.
+sign-canal-first-short-date = Primer día parcial
+    .short = Primer parcial
+    .plain = El primer día en que no llegó toda el agua.
+sign-canal-last-full-date = Último día completo
+    .short = Último lleno
+    .plain = El último día en que llegó toda el agua pedida.
+sign-canal-last-water-date = Última agua
+    .short = Última agua
+    .plain = El último día en que llegó agua.
+sign-canal-stored-draw-hm3 = Agua guardada que usó
+    .short = De la presa
+    .plain = Agua que este canal sacó de la presa.
+sign-canal-account-end-hm3 = Queda en la cuenta de agua
+    .short = En la cuenta
+    .plain = Lo que le queda a este canal en su cuenta de agua al cerrar el año.
+
+## Todos los años
+
+sign-reliability = Confiabilidad
+    .short = Confiabilidad
+    .plain = En cuántos años de cada diez alcanzó el agua.
+sign-resilience = Recuperación
+    .short = Recuperación
+    .plain = Después de un año en que no alcanzó, cuántas veces sí alcanzó al siguiente.
+sign-vulnerability-hm3 = Faltante promedio de los años malos
+    .short = Faltante medio
+    .plain = En los años en que no alcanzó, cuánta agua faltó.

@@ -1,0 +1,235 @@
+//! The signs of one water year, read evening by evening.
+//!
+//! Centre of volume: centroid of the year's natural flow, Stewart, Cayan & Dettinger (2005), *Journal of Climate* 18,
+//! 1136–1155. The other dates are as the trade uses them (common practice, no source).
+
+use heapless::Vec;
+
+use super::CanalSigns;
+use super::canal::CanalReader;
+use crate::water::calendar::{CalendarDay, MonthDay};
+use crate::water::canals::MOST_GATES;
+use crate::water::units::{M3_PER_HM3, SECONDS_PER_DAY};
+use crate::water::valley::Valley;
+use crate::water::works::{Evening, WorksStores};
+
+/// Snow water over which the ground counts as white, mm.
+const WHITE_MM: f64 = 5.0;
+/// Days of a bare week.
+const BARE_DAYS: u16 = 7;
+/// Share of active capacity from which the reservoir counts as full.
+const FULL_SHARE: f64 = 0.99;
+/// Days of the low-flow mean.
+const LOW_FLOW_DAYS: usize = 7;
+
+/// What is read off a water year. `None` where the year or the place has no such thing.
+#[derive(Clone, Debug, Default, PartialEq)]
+#[allow(missing_docs, reason = "each is documented once, at its `Sign`")]
+pub struct YearSigns {
+    pub water_year: i32,
+    /// Days of the year, 365 or 366.
+    pub days: u16,
+    pub precipitation_mm: f64,
+    pub snow_share: Option<f64>,
+    pub survey_swe_mm: Option<f64>,
+    pub peak_swe_mm: f64,
+    pub peak_swe_date: Option<CalendarDay>,
+    pub melt_out_date: Option<CalendarDay>,
+    pub half_volume_date: Option<CalendarDay>,
+    pub centre_of_volume_day: Option<f64>,
+    pub spring_volume_hm3: f64,
+    pub peak_flow_m3s: f64,
+    pub peak_flow_date: Option<CalendarDay>,
+    pub low_flow_7day_m3s: Option<f64>,
+    pub fill_date: Option<CalendarDay>,
+    pub carryover_hm3: Option<f64>,
+    pub spill_hm3: Option<f64>,
+    pub flood_release_hm3: Option<f64>,
+    pub crop_evaporation_hm3: Option<f64>,
+    pub yield_share: Option<f64>,
+    pub river_minimum_days_met: Option<u16>,
+    pub supply_ratio: Option<f64>,
+    /// Natural flow of the year, hm³; the year chooser ranks by it.
+    pub natural_flow_hm3: f64,
+    /// One for each gate, in downstream order.
+    pub canals: Vec<CanalSigns, MOST_GATES>,
+}
+
+/// Reads a water year evening by evening.
+#[derive(Clone, Debug)]
+pub struct YearReader {
+    survey: MonthDay,
+    spring_months: (u8, u8),
+    has_reservoir: bool,
+    has_fields: bool,
+    signs: YearSigns,
+    snowfall_mm: f64,
+    peak_seen: bool,
+    white_until: Option<CalendarDay>,
+    bare_run: u16,
+    melted_out: bool,
+    flow_m3: Vec<f64, 366>,
+    half_passed: Vec<CalendarDay, 366>,
+    moment: f64,
+    spill_m3: f64,
+    flood_release_m3: f64,
+    crop_evaporation_m3: f64,
+    harvested_ha: f64,
+    yield_ha: f64,
+    minimum_asked: bool,
+    minimum_days: u16,
+    canals: Vec<CanalReader, MOST_GATES>,
+}
+
+impl YearReader {
+    /// A reader for the next water year of `valley`.
+    pub fn new(valley: &Valley) -> Self {
+        Self {
+            survey: valley.survey,
+            spring_months: valley.spring_months,
+            has_reservoir: valley.reservoir.is_some(),
+            has_fields: valley.gates.iter().any(|gate| !gate.is_town()),
+            signs: YearSigns::default(),
+            snowfall_mm: 0.0,
+            peak_seen: false,
+            white_until: None,
+            bare_run: 0,
+            melted_out: false,
+            flow_m3: Vec::new(),
+            half_passed: Vec::new(),
+            moment: 0.0,
+            spill_m3: 0.0,
+            flood_release_m3: 0.0,
+            crop_evaporation_m3: 0.0,
+            harvested_ha: 0.0,
+            yield_ha: 0.0,
+            minimum_asked: false,
+            minimum_days: 0,
+            canals: valley.gates.iter().enumerate().map(|(at, gate)| CanalReader::new(at, gate.is_town())).collect(),
+        }
+    }
+
+    /// Reads an evening.
+    pub fn day(&mut self, evening: &Evening, stores: &WorksStores) {
+        let today = evening.today;
+        self.signs.water_year = today.water_year;
+        self.signs.days += 1;
+        self.read_snow(evening);
+        self.read_flow(evening);
+
+        self.spill_m3 += evening.spill_m3;
+        self.flood_release_m3 += evening.river.flood_release_m3;
+        if self.has_reservoir {
+            let full_m3 = FULL_SHARE * evening.active_m3;
+            if self.signs.fill_date.is_none() && evening.content_m3 >= full_m3 {
+                self.signs.fill_date = Some(today);
+            }
+            self.signs.carryover_hm3 = Some(evening.content_m3 / M3_PER_HM3);
+        }
+        for fields in &evening.fields[..evening.gates] {
+            self.crop_evaporation_m3 += fields.crop_evaporation_m3;
+            self.harvested_ha += fields.harvested_ha;
+            self.yield_ha += fields.yield_ha;
+        }
+        if evening.minimum_m3 > 0.0 {
+            self.minimum_asked = true;
+            self.minimum_days += u16::from(evening.river.minimum_met);
+        }
+        for (gate, canal) in self.canals.iter_mut().enumerate() {
+            canal.day(evening, stores.river.account_m3[gate]);
+        }
+    }
+
+    fn read_snow(&mut self, evening: &Evening) {
+        let (today, swe_mm) = (evening.today, evening.basin.snow_water_mm);
+        self.signs.precipitation_mm += evening.basin.precipitation_mm;
+        self.snowfall_mm += evening.basin.snowfall_mm;
+        if today.month_day == self.survey {
+            self.signs.survey_swe_mm = Some(swe_mm);
+        }
+        if swe_mm > self.signs.peak_swe_mm {
+            // A new peak: whatever melted out before it was not the year's melt.
+            self.signs.peak_swe_mm = swe_mm;
+            self.signs.peak_swe_date = Some(today);
+            self.peak_seen = swe_mm > WHITE_MM;
+            self.melted_out = false;
+            self.signs.melt_out_date = None;
+        }
+        if !self.peak_seen || self.melted_out {
+            return;
+        }
+        if swe_mm > WHITE_MM {
+            self.white_until = Some(today);
+            self.bare_run = 0;
+        } else {
+            self.bare_run += 1;
+            if self.bare_run == BARE_DAYS {
+                self.signs.melt_out_date = self.white_until;
+                self.melted_out = true;
+            }
+        }
+    }
+
+    fn read_flow(&mut self, evening: &Evening) {
+        let (today, flow_m3) = (evening.today, evening.basin.inflow_m3);
+        let flow_m3s = flow_m3 / SECONDS_PER_DAY;
+        if flow_m3s > self.signs.peak_flow_m3s {
+            self.signs.peak_flow_m3s = flow_m3s;
+            self.signs.peak_flow_date = Some(today);
+        }
+        let (from, to) = self.spring_months;
+        let month = today.month_day.month;
+        let in_spring = if from <= to { (from..=to).contains(&month) } else { month >= from || month <= to };
+        if in_spring {
+            self.signs.spring_volume_hm3 += flow_m3 / M3_PER_HM3;
+        }
+        self.moment += f64::from(today.day_of_water_year) * flow_m3;
+        // A water year has at most 366 days, so there is always room.
+        let _ = self.flow_m3.push(flow_m3);
+        let _ = self.half_passed.push(today);
+        if self.flow_m3.len() >= LOW_FLOW_DAYS {
+            let week = &self.flow_m3[self.flow_m3.len() - LOW_FLOW_DAYS..];
+            let mean_m3s = week.iter().sum::<f64>() / LOW_FLOW_DAYS as f64 / SECONDS_PER_DAY;
+            if self.signs.low_flow_7day_m3s.is_none_or(|lowest| mean_m3s < lowest) {
+                self.signs.low_flow_7day_m3s = Some(mean_m3s);
+            }
+        }
+    }
+
+    /// The year's signs.
+    pub fn close(self) -> YearSigns {
+        let mut signs = self.signs;
+        if signs.precipitation_mm > 0.0 {
+            signs.snow_share = Some(self.snowfall_mm / signs.precipitation_mm);
+        }
+        let total_m3: f64 = self.flow_m3.iter().sum();
+        signs.natural_flow_hm3 = total_m3 / M3_PER_HM3;
+        if total_m3 > 0.0 {
+            signs.centre_of_volume_day = Some(self.moment / total_m3);
+            let mut passed_m3 = 0.0;
+            let half = self.flow_m3.iter().position(|flow_m3| {
+                passed_m3 += flow_m3;
+                passed_m3 >= 0.5 * total_m3
+            });
+            signs.half_volume_date = half.and_then(|day| self.half_passed.get(day).copied());
+        }
+        if self.has_reservoir {
+            signs.spill_hm3 = Some(self.spill_m3 / M3_PER_HM3);
+            signs.flood_release_hm3 = Some(self.flood_release_m3 / M3_PER_HM3);
+        }
+        if self.has_fields {
+            signs.crop_evaporation_hm3 = Some(self.crop_evaporation_m3 / M3_PER_HM3);
+        }
+        if self.harvested_ha > 0.0 {
+            signs.yield_share = Some(self.yield_ha / self.harvested_ha);
+        }
+        if self.minimum_asked {
+            signs.river_minimum_days_met = Some(self.minimum_days);
+        }
+        signs.canals = self.canals.into_iter().map(CanalReader::close).collect();
+        let demand_hm3: f64 = signs.canals.iter().map(|canal| canal.demand_hm3).sum();
+        let delivered_hm3: f64 = signs.canals.iter().map(|canal| canal.delivered_hm3).sum();
+        signs.supply_ratio = (demand_hm3 > 0.0).then(|| delivered_hm3 / demand_hm3);
+        signs
+    }
+}

@@ -1,0 +1,34 @@
+//! The table of locale files that are part of the program.
+
+/// One locale file.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub struct LocaleFile {
+    /// Its folder under `locales/`: a language, or a language and region.
+    pub folder: &'static str,
+    /// Its name.
+    pub name: &'static str,
+    /// Its text.
+    pub text: &'static str,
+}
+
+macro_rules! embedded {
+    ($($folder:literal: $($name:literal),+;)+) => {
+        &[$($(LocaleFile {
+            folder: $folder,
+            name: $name,
+            text: include_str!(concat!("../../locales/", $folder, "/", $name)),
+        },)+)+]
+    };
+}
+
+/// Every `.ftl` file under `locales/`; a test holds this against the folder.
+pub const EMBEDDED: &[LocaleFile] = embedded! {
+    "en": "cautions.ftl", "command.ftl", "crops.ftl", "dates.ftl", "dials.ftl", "languages.ftl", "ledger.ftl", "numbers.ftl", "patterns.ftl", "signs.ftl", "tell.ftl", "terms.ftl", "units.ftl";
+    "en-GB": "dates.ftl", "ledger.ftl", "terms.ftl", "units.ftl";
+    "es": "cautions.ftl", "command.ftl", "crops.ftl", "dates.ftl", "dials.ftl", "languages.ftl", "ledger.ftl", "numbers.ftl", "patterns.ftl", "signs.ftl", "tell.ftl", "terms.ftl", "units.ftl";
+    "es-AR": "numbers.ftl", "terms.ftl";
+    "es-CL": "crops.ftl", "ledger.ftl", "numbers.ftl", "signs.ftl", "terms.ftl";
+    "es-ES": "cautions.ftl", "command.ftl", "crops.ftl", "ledger.ftl", "numbers.ftl", "signs.ftl", "tell.ftl", "terms.ftl";
+    "es-MX": "crops.ftl", "signs.ftl", "tell.ftl", "terms.ftl";
+    "es-embalse": "cautions.ftl", "command.ftl", "dials.ftl", "ledger.ftl", "signs.ftl", "terms.ftl";
+};

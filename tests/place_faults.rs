@@ -2,7 +2,7 @@
 
 use deshielo::place::problem::{Argument, Problem, Severity};
 use deshielo::place::{Source, read};
-use fluent_bundle::{FluentArgs, FluentBundle, FluentResource, FluentValue};
+use fluent::{FluentArgs, FluentBundle, FluentResource, FluentValue};
 
 const PLACE: &str = include_str!("places/good/place.toml");
 const WEATHER: &str = include_str!("places/good/weather.csv");
@@ -89,6 +89,7 @@ const CASES: &[(&str, &str, &str)] = &[
     // The file itself.
     ("latitude_deg = 39.5", "latitude_deg = 39‸,5", "problem-decimal-comma"),
     ("region = \"en-US\"", "region = \"en-US‸", "problem-quote"),
+    ("capacity_mm = 140", "capacity_mm = ‸140 mm", "problem-text-unquoted"),
     ("[soil]", "[soil‸", "problem-bracket"),
     ("quick_days = 7", "quick_days = 7\n‸quick_days = 8", "problem-key-twice"),
     ("[ground]\nquick_days = 7", "[ground]\nquick_days ‸7", "problem-syntax"),

@@ -22,6 +22,8 @@ problem-decimal-comma = This number has a decimal comma.
     .remedy = Write numbers in this file with a decimal point: 12.5.
 problem-quote = Some text here has no closing quotation mark.
     .remedy = Put quotation marks before and after the text, on one line.
+problem-text-unquoted = This value is neither a number nor text in quotation marks.
+    .remedy = Put text in quotation marks. A number stands alone: its unit goes into the key. Yes and no are true and false.
 problem-bracket = A bracket opens here and does not close.
     .remedy = Close it. A table's name stands in brackets: [snow]. A list too: [1, 2].
 problem-key-twice = “{ $key }” is here twice.
@@ -47,7 +49,7 @@ problem-one-bracket = There may be several of [{ $table }], so each needs double
 problem-not-tables = “{ $table }” must be a table.
     .remedy = Start each one with a line [[{ $table }]].
 problem-not-table = “{ $key }” must hold several values with their names.
-    .remedy = Write them in braces: {"{"} name = value, name = value {"}"}.
+    .remedy = Write them in braces, with commas: name = value, name = value.
 
 ## Kinds of value
 
@@ -80,7 +82,7 @@ problem-not-rising = “{ $key }” does not rise: this value is not above the o
 ## Names and languages
 
 problem-name-one-language = “{ $key }” is in one language only.
-    .remedy = Write both: {"{"} en = "…", es = "…" {"}"}.
+    .remedy = Write both, in braces: en = "…", es = "…".
 problem-name-language = “{ $key }” has no words in { $language ->
         [en] English (en)
        *[es] Spanish (es)
@@ -243,7 +245,7 @@ problem-swap-absent = No field grows “{ $value }”, which the crop mix is to 
 problem-dial-unknown = There is no dial “{ $key }”.
     .remedy = Did you mean “{ $nearest }”?
 problem-dial-form = “{ $dial }” needs a range, or to be hidden.
-    .remedy = Write {"{"} least = …, most = … {"}"} or "hidden".
+    .remedy = Write least = … and most = … in braces, or "hidden".
 problem-dial-range = The range of “{ $dial }”, { $least } to { $most }, does not hold 0, where the dial rests.
     .remedy = The least must be below the most, with 0 between them or at an end.
 problem-dial-lacking = The place has nothing for the dial “{ $dial }” to change.

@@ -22,6 +22,8 @@ problem-decimal-comma = Este número lleva coma decimal.
     .remedy = En este archivo los números llevan punto decimal: 12.5.
 problem-quote = Aquí hay un texto sin comillas de cierre.
     .remedy = Ponga comillas antes y después del texto, en una sola línea.
+problem-text-unquoted = Este valor no es un número ni un texto entre comillas.
+    .remedy = Ponga el texto entre comillas. Un número va solo: su unidad va en la clave. Sí y no se escriben true y false.
 problem-bracket = Aquí se abre un corchete y no se cierra.
     .remedy = Ciérrelo. El nombre de una tabla va entre corchetes: [snow]. Una lista también: [1, 2].
 problem-key-twice = «{ $key }» está dos veces.
@@ -47,7 +49,7 @@ problem-one-bracket = Puede haber varias tablas [{ $table }]; por eso cada una l
 problem-not-tables = «{ $table }» debe ser una tabla.
     .remedy = Empiece cada una con una línea [[{ $table }]].
 problem-not-table = «{ $key }» debe llevar varios valores con su nombre.
-    .remedy = Escríbalos entre llaves: {"{"} nombre = valor, nombre = valor {"}"}.
+    .remedy = Escríbalos entre llaves y con comas: nombre = valor, nombre = valor.
 
 ## Clases de valor
 
@@ -80,7 +82,7 @@ problem-not-rising = «{ $key }» no va subiendo: este valor no es mayor que el 
 ## Nombres e idiomas
 
 problem-name-one-language = «{ $key }» está en un solo idioma.
-    .remedy = Escriba los dos: {"{"} en = "…", es = "…" {"}"}.
+    .remedy = Escriba los dos, entre llaves: en = "…", es = "…".
 problem-name-language = A «{ $key }» le faltan las palabras en { $language ->
         [en] inglés (en)
        *[es] español (es)
@@ -243,7 +245,7 @@ problem-swap-absent = Ninguna parcela tiene «{ $value }», el cultivo que se ib
 problem-dial-unknown = No hay una perilla «{ $key }».
     .remedy = ¿Quiso decir «{ $nearest }»?
 problem-dial-form = «{ $dial }» lleva un rango, o va escondida.
-    .remedy = Escriba {"{"} least = …, most = … {"}"} o "hidden".
+    .remedy = Escriba least = … y most = … entre llaves, o "hidden".
 problem-dial-range = El rango de «{ $dial }», de { $least } a { $most }, no incluye el 0, donde la perilla descansa.
     .remedy = El mínimo debe ser menor que el máximo, con el 0 en medio o en un extremo.
 problem-dial-lacking = En este lugar no hay nada que la perilla «{ $dial }» pueda cambiar.

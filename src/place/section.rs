@@ -132,14 +132,14 @@ impl<'a> Section<'a> {
     /// Tells that `key` is missing, unless the whole table is or the text is broken. It is told at the end, and not at
     /// all when a misspelt key turns out to be meant for it.
     pub fn tell_missing(&self, key: &str) {
-        if self.present && !self.sheet.broken {
+        if self.present && !self.sheet.is_broken() {
             self.missing.borrow_mut().push(key.to_owned());
         }
     }
 
     /// Tells that the file lacks this whole table, which it must have.
     pub fn tell_if_absent(&self) {
-        if !self.present && !self.sheet.broken {
+        if !self.present && !self.sheet.is_broken() {
             self.sheet.tell(Problem::error(self.at.clone(), "problem-table-missing").with("table", self.name.clone()));
         }
     }

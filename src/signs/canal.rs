@@ -84,7 +84,7 @@ impl CanalReader {
             self.signs.last_water_date = Some(evening.today);
         }
         let by_turns = evening.cycle_days > 0;
-        if !by_turns || evening.rotation_day % evening.cycle_days == 0 {
+        if !by_turns || evening.rotation_day.is_multiple_of(evening.cycle_days) {
             self.judge(by_turns);
         }
         if demand_m3 > 0.0 {

@@ -150,6 +150,13 @@ const CASES: &[(&str, &str, &str)] = &[
     ("method = \"penman_monteith\"", "method = ‸\"given\"", "problem-method-columns"),
     // Reservoir and minimum.
     ("level_m = [2200, 2210, 2220, 2230]", "level_m = [2200, 2210, ‸2205, 2230]", "problem-not-rising"),
+    ("area_km2 = [0.0, 0.6, 1.0, 1.5]", "area_km2 = []", "problem-list-length@[‸reservoir.table]"),
+    ("level_m = [2200, 2210, 2220, 2230]", "level_m = ‸2200", "problem-not-list"),
+    (
+        "level_m = [2200, 2210, 2220, 2230]",
+        "level_m = [2200, 2210, 2220, 2230]\n‸level_ft = [1, 2, 3, 4]",
+        "problem-two-units",
+    ),
     ("area_km2 = [0.0, 0.6, 1.0, 1.5]", "area_km2 = [0.0, 1.2, ‸1.0, 1.5]", "problem-lake-shrinks"),
     ("volume_hm3 = [0, 3, 11, 23.4]", "volume_hm3 = [0, 3, 23.4]", "problem-list-length@[‸reservoir.table]"),
     (

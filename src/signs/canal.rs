@@ -6,6 +6,8 @@ use crate::water::works::Evening;
 
 /// A day is full from this share of its demand on.
 const FULL_SHARE: f64 = 0.995;
+/// Less than this is rounding, not water.
+const ANY_WATER_M3: f64 = 1e-3;
 /// A day is cut below this share of its demand.
 const CUT_SHARE: f64 = 0.05;
 
@@ -78,11 +80,11 @@ impl CanalReader {
         let (demand_m3, delivered_m3) = (evening.demand_m3[self.gate], evening.river.canal_m3[self.gate]);
         self.stored_m3 += evening.river.stored_take_m3[self.gate];
         self.signs.account_end_hm3 = account_m3 / M3_PER_HM3;
-        if delivered_m3 > 0.0 {
+        if delivered_m3 > ANY_WATER_M3 {
             self.signs.last_water_date = Some(evening.today);
         }
         let by_turns = evening.cycle_days > 0;
-        if !by_turns || evening.rotation_day % evening.cycle_days == 0 {
+        if !by_turns || evening.rotation_day.is_multiple_of(evening.cycle_days) {
             self.judge(by_turns);
         }
         if demand_m3 > 0.0 {

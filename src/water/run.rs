@@ -88,6 +88,7 @@ pub fn stores(valley: &Valley, works: &Works, basin: &BasinDay, stores: &WorksSt
 
 /// Runs the second stage over the record. `each_day` is told every evening; `each_year` the ledger of every whole water
 /// year in its last evening. `before` is the basin in the evening before the first day.
+#[allow(clippy::too_many_arguments, reason = "two listeners and scratch belong to the caller, who owns the memory")]
 pub fn run_works(
     valley: &Valley,
     works: &Works,

@@ -21,6 +21,7 @@ use super::valley::{Gate, Hedging, Purpose, Town, Valley};
 
 /// What hangs on a gate, ready to run.
 #[derive(Clone, Debug)]
+#[allow(clippy::large_enum_variant, reason = "built once a run; indirection would need an allocator")]
 enum User {
     Fields(Plots),
     Town { town: Town, growth: f64 },

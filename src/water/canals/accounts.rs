@@ -43,9 +43,8 @@ impl Stored<'_> {
         }
         let emptied = amount_m3 >= content_m3;
         let ratio = if emptied { 1.0 } else { amount_m3 / content_m3 };
-        let held = &mut *self.account_m3;
-        for i in 0..WIDTH {
-            held[i] -= held[i] * ratio;
+        for held in &mut self.account_m3[..WIDTH] {
+            *held -= *held * ratio;
         }
         *self.pool_m3 -= *self.pool_m3 * ratio;
     }

@@ -10,7 +10,7 @@
 /// assert!(PriorityDate::BeforeAll < PriorityDate::year(1868));
 /// assert!(PriorityDate::year(1889) < PriorityDate::on(1889, 1, 2));
 /// ```
-#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord, Hash)]
+#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord, Hash, serde::Serialize, serde::Deserialize)]
 pub enum PriorityDate {
     /// Before every date.
     BeforeAll,

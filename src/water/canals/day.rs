@@ -35,7 +35,7 @@ pub(super) struct Shared {
 
 impl River {
     /// Runs one day: changes the state and writes what came of it. Losses of the canals come after, by
-    /// [`River::settle`].
+    /// [`River::settle`]. Inputs are not checked here; values without sense give a day without sense.
     pub fn day(&self, state: &mut RiverState, input: &RiverInput, out: &mut RiverDay) {
         match self.gates.len() {
             0..=4 => self.day_of_width::<4>(state, input, out),
@@ -215,6 +215,17 @@ impl River {
     pub(super) fn outlet_left_m3(&self, morning: &Morning, reservoir_take_m3: f64) -> f64 {
         positive(self.outlet_m3 - (morning.natural_m3 - reservoir_take_m3))
     }
+
+    /// Adds the day's canal flows to what each gate has drawn this year, and returns their sum, m³.
+    #[inline(always)]
+    pub(super) fn note_canals<const WIDTH: usize>(&self, state: &mut RiverState, out: &RiverDay) -> f64 {
+        let (drawn, canal) = (&mut state.drawn_this_year_m3, &out.canal_m3);
+        for i in 0..WIDTH {
+            drawn[i] += canal[i];
+        }
+        sum::<WIDTH>(&out.canal_m3)
+    }
+
     /// Natural flow at the river's end, when the gates' takes are written.
     #[inline(always)]
     pub(super) fn natural_end_m3<const WIDTH: usize>(

@@ -37,6 +37,8 @@ mod rotation;
 mod seniority;
 mod state;
 mod width;
+#[cfg(test)]
+mod worked;
 
 pub use date::PriorityDate;
 pub use gate::{Gate, MinimumPlace, RiverSetup, SharingRule};

@@ -68,20 +68,22 @@ impl River {
         let reservoir_take = least(positive(slack), self.reservoir_want_m3(input, morning));
         state.pool_m3 -= released;
 
-        let stored_share = if total > 0.0 { arriving / total } else { 0.0 };
-        let released_share = if total > 0.0 { released / total } else { 0.0 };
-        let wish = &out.wish_m3;
-        let natural = &mut out.natural_take_m3;
-        let stored = &mut out.stored_take_m3;
-        let canal = &mut out.canal_m3;
-        for i in 0..WIDTH {
-            let flow = fraction * wish[i];
-            canal[i] = flow;
-            natural[i] = positive(flow - flow * stored_share);
-            stored[i] = flow * released_share;
+        if morning.any_wish {
+            let stored_share = if total > 0.0 { arriving / total } else { 0.0 };
+            let released_share = if total > 0.0 { released / total } else { 0.0 };
+            let wish = &out.wish_m3;
+            let natural = &mut out.natural_take_m3;
+            let stored = &mut out.stored_take_m3;
+            let canal = &mut out.canal_m3;
+            for i in 0..WIDTH {
+                let flow = fraction * wish[i];
+                canal[i] = flow;
+                natural[i] = positive(flow - flow * stored_share);
+                stored[i] = flow * released_share;
+            }
+            self.note_canals::<WIDTH>(state, out);
+            out.canal_total_m3 = total;
         }
-        self.note_canals::<WIDTH>(state, out);
-        out.canal_total_m3 = total;
         out.fraction = Some(fraction);
         Shared {
             reservoir_take_m3: reservoir_take,

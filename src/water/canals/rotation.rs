@@ -39,7 +39,7 @@ impl River {
 
         let mut outlet_left = self.outlet_left_m3(morning, reservoir_take);
         let (mut released, mut arriving) = (0.0, 0.0);
-        if let Some(i) = turn {
+        if let Some(i) = turn.filter(|_| asked > 0.0) {
             let available = least(outlet_left, input.stored_limit_m3);
             (released, arriving) = draw(&self.gates[i], positive(asked - natural_take), state.pool_m3, available);
             state.pool_m3 -= released;

@@ -14,7 +14,6 @@ use super::bounds::{least, positive};
 use super::day::{Morning, Shared};
 use super::reaches::Reaches;
 use super::river::GateRule;
-use super::width::sum;
 use super::{River, RiverDay, RiverInput, RiverState};
 
 /// Stored water let go for one gate, and what of it arrives, m³.
@@ -89,14 +88,5 @@ impl River {
             natural_end_m3: self.natural_end_m3::<WIDTH>(morning, out, reservoir_take),
             outlet_left_m3: outlet_left,
         }
-    }
-    /// Adds the day's canal flows to what each gate has drawn this year, and returns their sum, m³.
-    #[inline(always)]
-    pub(super) fn note_canals<const WIDTH: usize>(&self, state: &mut RiverState, out: &RiverDay) -> f64 {
-        let (drawn, canal) = (&mut state.drawn_this_year_m3, &out.canal_m3);
-        for i in 0..WIDTH {
-            drawn[i] += canal[i];
-        }
-        sum::<WIDTH>(&out.canal_m3)
     }
 }

@@ -2,8 +2,8 @@
 
 use super::{MOST_GATES, MOST_POSITIONS};
 
-/// What is carried from one day to the next. Gates are counted from 0 here; entries beyond the last gate
-/// must be zero, and stay so.
+/// What is carried from one day to the next. Gates are counted from 0; entries beyond the last gate must be zero, and
+/// stay so.
 #[derive(Clone, Debug, PartialEq)]
 pub struct RiverState {
     /// Stored water in each gate's account, m³. Under one-pool rules the first day moves it into the pool.
@@ -45,11 +45,12 @@ pub struct RiverInput<'a> {
     pub stored_limit_m3: f64,
     /// Day of the rotation, 0 on the day on which the canals open.
     pub rotation_day: u32,
-    /// What each gate asks for at its head, m³, counted from 0; entries beyond the last gate are not read.
+    /// What each gate asks for at its head, m³, counted from 0; entries beyond the last gate do not matter.
     pub demand_m3: &'a [f64; MOST_GATES],
 }
 
-/// What came of one day, m³. Gates are counted from 0; entries beyond the last gate mean nothing.
+/// What came of one day, m³. Gates are counted from 0; entries beyond the last gate are zero, as long as a day is used
+/// with one river only.
 ///
 /// The terms close: `inflow + rain + content_start + return_flow_total = evaporation + canal_total + river_loss +
 /// river_out + content`, to rounding; see [`RiverDay::residual_m3`].

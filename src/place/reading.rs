@@ -19,6 +19,7 @@ use super::{bands, checks, dial_plan, gates, reservoir, slopes};
 use chrono::Days;
 
 use crate::water::calendar::{CalendarDay, MonthDay, fill_calendar};
+use crate::water::run::water_years;
 use crate::water::valley::{MOST_FIELDS, MOST_GATES, Purpose, Valley};
 
 /// Reads a place: all of it, or everything that is wrong with it.
@@ -130,7 +131,7 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     let reservoir = reservoir::read(root, source);
     let minimum = reservoir::minimum(root);
     let (start, settling) = slopes::start(root);
-    let whole_years = whole_water_years(&calendar, about.water_year_start_month);
+    let whole_years = water_years(&calendar, about.water_year_start_month).count();
     if settling.value > whole_years as f64 && whole_years > 0 {
         let problem = Problem::error(settling.at.clone(), "problem-settling-long");
         root.sheet.tell(problem.with("value", settling.value).with("years", whole_years));
@@ -263,20 +264,11 @@ fn calendar(root: &Section<'_>, about: &About, weather: Option<&NamedRecord>) ->
     let first = CalendarDay::new(weather.record.first_date, about.water_year_start_month);
     let mut calendar = vec![first; weather.record.days];
     fill_calendar(weather.record.first_date, about.water_year_start_month, &mut calendar);
-    if whole_water_years(&calendar, about.water_year_start_month) == 0 {
+    if water_years(&calendar, about.water_year_start_month).count() == 0 {
         let problem = Problem::error(weather.at.clone(), "problem-record-short");
         root.sheet.tell(problem.with("days", calendar.len()));
     }
     calendar
-}
-
-/// How many water years the record has from their first day to their last.
-fn whole_water_years(calendar: &[CalendarDay], start_month: u8) -> usize {
-    let starts = calendar.iter().filter(|day| day.day_of_water_year == 1).count();
-    let after = calendar.last().and_then(|last| last.date(start_month).succ_opt());
-    // The year under way at the end is whole only when the day after the record starts another.
-    let ends_whole = after.is_some_and(|after| CalendarDay::new(after, start_month).day_of_water_year == 1);
-    (starts + usize::from(ends_whole)).saturating_sub(1)
 }
 
 /// The records that a run is compared with.

@@ -95,6 +95,12 @@ fn what_the_file_says_arrives() {
 }
 
 #[test]
+fn line_ends_and_byte_order_marks_of_other_systems_change_nothing() {
+    let windows = format!("\u{feff}{}", PLACE.replace('\n', "\r\n"));
+    assert_eq!(format!("{:?}", good(&windows)), format!("{:?}", good(PLACE)));
+}
+
+#[test]
 fn the_water_runs_on_what_was_read() {
     let place = good(PLACE);
     let basin = Basin::new(&place.valley, &Dials::REST);

@@ -33,8 +33,10 @@ pub fn read(source: Source<'_>) -> Outcome {
     let (sheet, table) = Sheet::parse(source.shown("place.toml"), &text);
     // The root is asked last and judged when it ends, before the problems are taken out.
     let place = place(&Section::root(&sheet, &table), source);
-    let mut problems = sheet.problems.into_inner();
-    problems.sort_by(|a, b| a.at.cmp(&b.at).then(a.message.cmp(b.message)));
+    let mut problems = sheet.problems.take();
+    // The place's own file comes first: a record cannot be right before its columns are.
+    let rank = |problem: &Problem| problem.at.file != sheet.file;
+    problems.sort_by(|a, b| rank(a).cmp(&rank(b)).then_with(|| a.at.cmp(&b.at)).then_with(|| a.message.cmp(b.message)));
     problems.dedup();
     let fine = problems.iter().all(|problem| problem.severity < Severity::Error);
     Outcome { place: place.filter(|_| fine), problems }
@@ -64,10 +66,12 @@ fn about(root: &Section<'_>) -> About {
         section.sheet.tell(Problem::error(latitude.at.clone(), "problem-latitude-zero").with("value", latitude.value));
     }
     let units = section.choice("units", &[("metric", UnitSystem::Metric), ("us", UnitSystem::Us)]);
+    let region = region(&section);
+    let usual_units = if region.ends_with("-US") { UnitSystem::Us } else { UnitSystem::Metric };
     About {
         name: need_names(&section, "name"),
-        region: region(&section),
-        units: units.map_or(UnitSystem::Metric, |(units, _)| units),
+        units: units.map_or(usual_units, |(units, _)| units),
+        region,
         water_year_start_month: section.get("water_year_starts").map_or_else(
             || if latitude.value < 0.0 { 4 } else { 10 },
             |value| month(&section, "water_year_starts", value).unwrap_or(10),

@@ -153,7 +153,7 @@ fn no_unit_constant_is_typed_twice() {
                 folders.push(path);
                 continue;
             }
-            if path.extension().is_none_or(|ending| ending != "rs") {
+            if path.extension().is_none_or(|extension| extension != "rs") {
                 continue;
             }
             files += 1;

@@ -90,11 +90,14 @@ fn what_the_file_says_arrives() {
     assert!(day.air.solar_mj_m2 > 0.0 && day.air.wind_2m_ms > 0.0 && day.air.vapour_pressure_kpa > 0.0);
 }
 
+/// End of a metric key, its end in US units, and the value there.
+type Rewrite = (&'static str, &'static str, fn(f64) -> f64);
+
 /// Writes every metric value of the file in US units, to all digits.
 fn in_us_units(text: &str) -> String {
-    const ACRE_M2: f64 = 4046.856_422_4;
+    const ACRE_M2: f64 = 4_046.856_422_4;
     const FOOT_M: f64 = 0.3048;
-    let to_us: [(&str, &str, fn(f64) -> f64); 18] = [
+    let to_us: [Rewrite; 18] = [
         ("_c_per_km", "_f_per_1000ft", |value| value * 1.8 * FOOT_M),
         ("_per_100m", "_per_1000ft", |value| value * FOOT_M * 10.0),
         ("_mm_c_day", "_in_f_day", |value| value / 25.4 / 1.8),

@@ -31,7 +31,7 @@ pub(super) fn largest_lake_km2(reservoir: &Reservoir) -> f64 {
 /// Bands, lake and fields beside the stated area of the whole valley.
 pub(super) fn areas(root: &Section<'_>, stated: Option<&Number>, bands: &ReadBands, lake_km2: f64, fields_km2: f64) {
     let Some(stated) = stated else { return };
-    if bands.bands.is_empty() || root.sheet.broken {
+    if bands.bands.is_empty() || root.sheet.is_broken() {
         return;
     }
     let bands_km2: f64 = bands.bands.iter().map(|band| band.area_km2).sum();

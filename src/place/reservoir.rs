@@ -102,6 +102,7 @@ fn table(section: &Section<'_>, source: Source<'_>) -> FixedVec<LakePoint, MOST_
     if areas.is_none() {
         section.tell_missing("area_km2");
     }
+    let area_count = areas.as_ref().map_or(level.len(), Vec::len);
     let areas = areas.unwrap_or_default();
     if let Some(pair) = areas.windows(2).find(|pair| pair[1].value < pair[0].value) {
         section.sheet.tell(
@@ -110,8 +111,10 @@ fn table(section: &Section<'_>, source: Source<'_>) -> FixedVec<LakePoint, MOST_
                 .with("before", pair[0].value),
         );
     }
-    for (key, found) in [("volume", volume.len()), ("area", areas.len())] {
-        if found != 0 && found != level.len() && !level.is_empty() {
+    // A list of levels or volumes that is too short by itself was told as that.
+    let volume_count = if volume.len() < 2 { level.len() } else { volume.len() };
+    for (key, found) in [("volume", volume_count), ("area", area_count)] {
+        if found != level.len() && level.len() > 1 {
             let problem = Problem::error(section.at.clone(), "problem-list-length").with("key", key);
             section.sheet.tell(problem.with("found", found).with("wanted", level.len()));
         }

@@ -8,5 +8,5 @@ fn main() -> std::io::Result<()> {
     for record in records::RECORDS {
         std::fs::write(record.file, record.text())?;
     }
-    Ok(())
+    std::fs::write(records::OBSERVED_FILE, records::observed_text())
 }

@@ -90,3 +90,31 @@ fn one_decimal(value: f64) -> String {
     let written = format!("{value:.1}");
     if matches!(written.as_str(), "0.0" | "-0.0") { "0".to_owned() } else { written }
 }
+
+/// What was never observed in the place for tests only: flow, snow, storage and one canal, as an office would send it,
+/// with decimal commas and days before months. Straight lines through the year, and every fiftieth flow missing.
+pub const OBSERVED_FILE: &str = "demo-data/limits/observed.csv";
+
+/// The text of [`OBSERVED_FILE`].
+pub fn observed_text() -> String {
+    let mut text = String::from(
+        "# Invented: observations of a place for tests only. Inventado, solo para pruebas.\n\
+         # Made by `cargo run --example make_demo_data`: straight lines through the year.\n\
+         fecha;caudal_pcs;agua_de_nieve_in;almacenamiento_acre_pies;canal_2_l_s\n",
+    );
+    let rise_and_fall = |day: f64, peak: f64, before: f64, after: f64| {
+        let away = if day < peak { (peak - day) / before } else { (day - peak) / after };
+        if away < 1.0 { 1.0 - away } else { 0.0 }
+    };
+    for (index, day) in RECORDS[2].days().iter().enumerate() {
+        let of_year = f64::from((day.date.ordinal0() + 92) % 366);
+        let flow_cfs = 30.0 + 900.0 * rise_and_fall(of_year, 232.0, 60.0, 75.0);
+        let snow_in = 14.0 * rise_and_fall(of_year, 183.0, 150.0, 70.0);
+        let storage_acre_feet = 45_000.0 + 60_000.0 * rise_and_fall(of_year, 255.0, 120.0, 110.0);
+        let canal_l_s = 400.0 * rise_and_fall(of_year, 280.0, 80.0, 90.0);
+        let flow = if index % 50 == 49 { "M".to_owned() } else { format!("{flow_cfs:.1}") };
+        let row = format!("{flow};{snow_in:.1};{storage_acre_feet:.0};{canal_l_s:.0}").replace('.', ",");
+        text.push_str(&format!("{};{row}\n", day.date.format("%d/%m/%Y")));
+    }
+    text
+}

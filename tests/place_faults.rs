@@ -183,7 +183,7 @@ const CASES: &[(&str, &str, &str)] = &[
     ("rate_m3s = 0.2\n", "rate_m3s = ‸200\n", "problem-right-too-large"),
     ("rate_m3s = 0.2\n", "rate_m3s = ‸0.8\n", "problem-right-above-canal"),
     ("capacity_m3s = 2.4", "capacity_m3s = ‸2400", "problem-canal-far-too-large"),
-    ("capacity_m3s = 2.4", "capacity_m3s = ‸0.2", "problem-canal-small+problem-right-above-canal"),
+    ("capacity_m3s = 2.4", "capacity_m3s = ‸0.2", "problem-canal-small+problem-right-above-canal+problem-limit-idle"),
     ("storage_share = 0.2\n", "storage_share = ‸0.7\n", "problem-storage-shares"),
     ("returns_above = \"town\"", "returns_above = ‸\"north\"", "problem-return-uphill"),
     ("returns_above = \"town\"", "returns_above = ‸\"twon\"", "problem-gate-unknown"),
@@ -204,6 +204,12 @@ const CASES: &[(&str, &str, &str)] = &[
         "losses = { length_km = 6, lining = \"earth_loam\" }",
         "losses = { length_km = 6, lining = \"lined\" }\nloss_share = ‸0.3",
         "problem-either",
+    ),
+    ("yearly_limit_hm3 = 30", "yearly_limit_hm3 = ‸24000", "problem-limit-idle"),
+    (
+        "level_m = [2200, 2210, 2220, 2230]",
+        "level_m = [7200, 7210, 7220, 7230]",
+        "problem-lake-above-land@[‸reservoir.table]",
     ),
     // Fields and crops.
     ("crop = \"maize_grain\"", "crop = ‸\"maize_grian\"", "problem-crop-unknown"),
@@ -327,6 +333,11 @@ fn faults_in_the_other_files() {
     let short: Vec<&str> = WEATHER.lines().take(200).collect();
     let file = line_of(PLACE, "file = \"weather.csv\"");
     told_first(PLACE, &short.join("\n"), RIGHTS, "problem-record-short", ("place.toml", file, 8));
+    let later = WEATHER.replace("\n2001-", "\n2011-").replace("\n2002-", "\n2012-").replace("\n2003-", "\n2013-");
+    // 2012 is a leap year and 2002 is not.
+    let later = later.replace("\n2012-03-01", "\n2012-02-29,-8.0,3.0,0.0,60,2.0,15.0\n2012-03-01");
+    let gauge = line_of(PLACE, "file = \"gauge.csv\"");
+    told_first(PLACE, &later, RIGHTS, "problem-record-apart", ("place.toml", gauge, 8));
     let far = WEATHER.replacen("2001-10-05,", "2001-10-05,9", 1);
     let told = problems(PLACE, &far, RIGHTS);
     assert!(told.iter().any(|told| told.at.file.to_str() == Some("weather.csv") && told.at.line == 7), "{told:#?}");

@@ -159,6 +159,8 @@ problem-record-short = The record has { $days ->
        *[other] { $days } days
     } and no whole water year.
     .remedy = Use a record from the first day of a water year to the last, or longer.
+problem-record-apart = This record runs from { $first } to { $last }, the weather from { $weather_first } to { $weather_last }. They share no day.
+    .remedy = It may stay, but nothing is compared with it. Check the dates and their format.
 problem-settling-long = { $value } years of settling are more than the record has: { $years }.
     .remedy = Use fewer. One or two are enough.
 
@@ -172,6 +174,8 @@ problem-dead-below-table = The dead storage ({ $dead } hm³) is below the start 
     .remedy = Start the table lower, or check the units.
 problem-lake-shrinks = The lake gets smaller as the water rises: this area is below the one before it.
     .remedy = List level, area and volume from the bottom up.
+problem-lake-above-land = The full lake lies at { $level } m, above the highest band at { $highest } m.
+    .remedy = Check the units: level_m or level_ft, elevation_m or elevation_ft.
 problem-table-units = The volumes of the table rise by { $stated } hm³, but levels and areas make it about { $expected } hm³.
     .remedy = Check the units of level, area and volume.
 problem-flood-space = The space for floods ({ $space } hm³) is larger than the active storage ({ $active } hm³).
@@ -205,6 +209,8 @@ problem-canal-large = “{ $key }” can carry { $capacity } m³/s, far more tha
     .remedy = It may be so. If not, check the unit and the areas of the fields.
 problem-canal-small = “{ $key }” can carry { $capacity } m³/s, far less than the { $need } m³/s of its hottest day.
     .remedy = It may be so. If not, check the unit and the areas of the fields.
+problem-limit-idle = The yearly limit of “{ $key }” ({ $limit } hm³) is far more than its canal can carry in a season ({ $most } hm³).
+    .remedy = It changes nothing so. Check the unit: yearly_limit_hm3 or yearly_limit_acre_feet.
 problem-season-backwards = “{ $key }” opens on { $opens } and closes on { $closes }: it would be shut all summer.
     .remedy = Change the two days round. If it does run in winter only, write season_over_new_year = true.
 problem-season-winter = “{ $key }” opens on { $opens } and closes on { $closes }: it is shut in midsummer.

@@ -159,6 +159,8 @@ problem-record-short = El registro tiene { $days ->
        *[other] { $days } días
     } y ningún año hidrológico completo.
     .remedy = Use un registro que vaya del primer día de un año hidrológico hasta el último, o más largo.
+problem-record-apart = Este registro va del { $first } al { $last }, y el del tiempo va del { $weather_first } al { $weather_last }. No tienen ni un día en común.
+    .remedy = Puede quedarse, pero no hay con qué compararlo. Revise las fechas y su formato.
 problem-settling-long = { $value } años de preparación son más de los que tiene el registro: { $years }.
     .remedy = Ponga menos. Con uno o dos alcanza.
 
@@ -172,6 +174,8 @@ problem-dead-below-table = El volumen muerto ({ $dead } hm³) queda antes del co
     .remedy = Empiece la tabla más abajo, o revise las unidades.
 problem-lake-shrinks = El lago se hace más chico cuando sube el agua: esta superficie es menor que la anterior.
     .remedy = Ponga nivel, superficie y volumen desde el fondo hacia arriba.
+problem-lake-above-land = El lago lleno queda a { $level } m, por encima de la zona más alta, a { $highest } m.
+    .remedy = Revise las unidades: level_m o level_ft, elevation_m o elevation_ft.
 problem-table-units = Los volúmenes de la tabla suben { $stated } hm³, pero con los niveles y las superficies salen unos { $expected } hm³.
     .remedy = Revise las unidades de nivel, superficie y volumen.
 problem-flood-space = El espacio para crecidas ({ $space } hm³) es mayor que el volumen útil ({ $active } hm³).
@@ -205,6 +209,8 @@ problem-canal-large = En «{ $key }» caben { $capacity } m³/s, mucho más que 
     .remedy = Puede ser así. Si no, revise la unidad y las superficies de las parcelas.
 problem-canal-small = En «{ $key }» caben { $capacity } m³/s, mucho menos que los { $need } m³/s de su día más caluroso.
     .remedy = Puede ser así. Si no, revise la unidad y las superficies de las parcelas.
+problem-limit-idle = El tope anual de «{ $key }» ({ $limit } hm³) es mucho más de lo que cabe en su canal en una temporada ({ $most } hm³).
+    .remedy = Así no cambia nada. Revise la unidad: yearly_limit_hm3 o yearly_limit_acre_feet.
 problem-season-backwards = «{ $key }» abre el { $opens } y cierra el { $closes }: estaría cerrado todo el verano.
     .remedy = Ponga los dos días al revés. Si de veras corre solo en invierno, escriba season_over_new_year = true.
 problem-season-winter = «{ $key }» abre el { $opens } y cierra el { $closes }: está cerrado en pleno verano.

@@ -4,7 +4,7 @@
 
 use super::bands::ReadBands;
 use super::dated::season_days;
-use super::gates::ReadGate;
+use super::gates::{ReadGate, SHORTEST_SEASON};
 use super::problem::{Location, Problem};
 use super::record::{Measure, ReadRecord};
 use super::reservoir::{ReadMinimum, ReadReservoir};
@@ -143,6 +143,7 @@ pub(super) fn gates(
             root.sheet.tell(problem.with("key", gate.names.key.clone()));
         }
         right(root, gate);
+        limit(root, gate);
         if let Some((season, at)) = &gate.season
             && matches!(gate.gate.purpose, Purpose::Fields(_))
         {
@@ -204,7 +205,7 @@ fn greatest_need_m3s(gate: &ReadGate) -> f64 {
 
 /// A season over New Year is legal; one that leaves out the whole of summer is most likely written the wrong way round.
 fn opening(root: &Section<'_>, gate: &ReadGate, season: Season, at: &Location, southern: bool) {
-    if season_days(season) < 7 {
+    if season_days(season) < SHORTEST_SEASON {
         return;
     }
     let over_new_year = season.from > season.to;
@@ -229,6 +230,30 @@ pub(super) fn outlet(root: &Section<'_>, reservoir: Option<&ReadReservoir>, mini
     if reservoir.outlet.value < *rate {
         let problem = Problem::warning(at.clone(), "problem-minimum-above-outlet");
         root.sheet.tell(problem.with("rate", *rate).with("outlet", reservoir.outlet.value));
+    }
+}
+
+/// The full lake beside the highest land: above it, one of the two heights is in another unit.
+pub(super) fn lake_level(root: &Section<'_>, reservoir: Option<&ReadReservoir>, bands: &ReadBands) {
+    let (Some(read), Some(highest)) = (reservoir, bands.bands.last()) else { return };
+    let capacity_m3 = read.reservoir.capacity_hm3 * M3_PER_HM3;
+    let level_m = Vessel::new(&read.reservoir, 0.0).level_m(capacity_m3);
+    if level_m > highest.elevation_m {
+        let problem = Problem::error(read.table_at.clone(), "problem-lake-above-land");
+        root.sheet.tell(problem.with("level", level_m).with("highest", highest.elevation_m));
+    }
+}
+
+/// A yearly limit far beyond what the canal can reach in its whole season changes nothing; mostly its unit is another.
+fn limit(root: &Section<'_>, gate: &ReadGate) {
+    let season = gate.season.as_ref().map_or(Season::ALL_YEAR, |(season, _)| *season);
+    let most_hm3 = gate.capacity.value * SECONDS_PER_DAY * f64::from(season_days(season)) / M3_PER_HM3;
+    if let Some(limit) = &gate.yearly_limit
+        && limit.value > 5.0 * most_hm3
+        && season_days(season) >= SHORTEST_SEASON
+    {
+        let problem = Problem::warning(limit.at.clone(), "problem-limit-idle").with("key", gate.names.key.clone());
+        root.sheet.tell(problem.with("limit", limit.value).with("most", most_hm3));
     }
 }
 

@@ -16,6 +16,8 @@ use super::tree::Sheet;
 use super::unit_suffix::{AREA_KM2, METRES, PLAIN, SHARE};
 use super::{Diversion, FilledGaps, Notes, Outcome, Place, RecordNote, UnitSystem};
 use super::{bands, checks, dial_plan, gates, reservoir, slopes};
+use chrono::Days;
+
 use crate::water::calendar::{CalendarDay, MonthDay, fill_calendar};
 use crate::water::valley::{MOST_FIELDS, MOST_GATES, Purpose, Valley};
 
@@ -142,8 +144,10 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     checks::station(root, &station, &bands, &climb, &gradient);
     checks::gates(root, &read_gates, reservoir.as_ref(), rule, southern);
     checks::outlet(root, reservoir.as_ref(), &minimum);
+    checks::lake_level(root, reservoir.as_ref(), &bands);
 
     let comparisons = Comparisons::read(root, source, &read_gates);
+    comparisons.check_overlap(root, weather.as_ref());
 
     let (gates, names) = finished_gates(read_gates);
     let valley = Valley {
@@ -298,6 +302,28 @@ impl Comparisons {
                 .iter()
                 .filter_map(|section| diversion(section, source, gates))
                 .collect(),
+        }
+    }
+}
+
+impl Comparisons {
+    /// A record that shares no day with the weather has nothing to be compared with.
+    fn check_overlap(&self, root: &Section<'_>, weather: Option<&NamedRecord>) {
+        let Some(weather) = weather else { return };
+        let last =
+            |named: &NamedRecord| named.record.first_date + Days::new(named.record.days.saturating_sub(1) as u64);
+        let others = self.gauge.iter().map(|(_, named)| named);
+        let others = others.chain([&self.snow, &self.storage].into_iter().flatten().map(|(_, named)| named));
+        for named in others.chain(self.diversions.iter().map(|(_, named)| named)) {
+            if named.record.first_date > last(weather) || last(named) < weather.record.first_date {
+                root.sheet.tell(
+                    Problem::warning(named.at.clone(), "problem-record-apart")
+                        .with("first", named.record.first_date)
+                        .with("last", last(named))
+                        .with("weather_first", weather.record.first_date)
+                        .with("weather_last", last(weather)),
+                );
+            }
         }
     }
 }

@@ -26,6 +26,8 @@ pub(super) struct ReadReservoir {
     pub reservoir: Reservoir,
     /// Where the outlet's capacity stands.
     pub outlet: Number,
+    /// Where its table stands.
+    pub table_at: Location,
 }
 
 /// Reads `[reservoir]`, if there is one.
@@ -34,7 +36,8 @@ pub(super) fn read(root: &Section<'_>, source: Source<'_>) -> Option<ReadReservo
     if !section.present {
         return None;
     }
-    let table = table(&section.section("table"), source);
+    let table_section = section.section("table");
+    let table = table(&table_section, source);
     let dead = section.number_or("dead", VOLUME_HM3, VOLUME, 0.0);
     let capacity = section.need_number("capacity", VOLUME_HM3, Limits(0.000_001, VOLUME.1));
     if capacity.value <= dead.value {
@@ -76,7 +79,7 @@ pub(super) fn read(root: &Section<'_>, source: Source<'_>) -> Option<ReadReservo
         serves_minimum: section.flag_or("serves_minimum", true),
         hedging: hedging(&section.section("hedging")),
     };
-    Some(ReadReservoir { reservoir, outlet })
+    Some(ReadReservoir { reservoir, outlet, table_at: table_section.at.clone() })
 }
 
 /// The level–area–volume table: three lists of one length, here or in a file.

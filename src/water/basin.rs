@@ -254,6 +254,7 @@ impl<'v> Basin<'v> {
         let southern = self.valley.is_southern();
         // Local copies: the compiler keeps what nobody else can see in registers.
         let (mut rows, mut ground, mut channel) = (stores.rows, stores.ground[0], stores.channel[0]);
+        let mut wet_bulb_c = [Lanes::default(); MOST_BANDS];
         for ((today, record), out) in calendar.iter().zip(record).zip(out) {
             let weather = self.course.delta.day(self.valley, &self.sky, today, record);
             let sublimation_mm = sublimation_on(self.valley, today, southern);
@@ -263,9 +264,12 @@ impl<'v> Basin<'v> {
                 reference_evaporation_mm: Lanes::splat(weather.reference_evaporation_mm),
                 melt_factor: Lanes::splat(self.melt_factor[usize::from(today.day_of_year - 1) % 366]),
                 most_sublimation_mm: Lanes::splat(sublimation_mm),
-                wet_bulb_humidity_percent: split_humidity(self.valley, record),
             };
-            let [sum, _] = self.slopes.day::<false>(curve, today, &lanes, &mut rows);
+            let split_c = split_humidity(self.valley, record).map(|humidity_percent| {
+                self.slopes.wet_bulb(today, lanes.temperature_c, humidity_percent, &mut wet_bulb_c);
+                &wet_bulb_c
+            });
+            let [sum, _] = self.slopes.day::<false>(curve, today, &lanes, split_c, &mut rows);
             let sums = BasinDay {
                 snowfall_mm: total_of_one(sum.snowfall_mm),
                 snow_water_mm: total_of_one(sum.snow_water_mm),
@@ -332,6 +336,7 @@ impl<'v, const L: usize> Basins<'v, L> {
     ) {
         let southern = self.valleys[0].is_southern();
         let mut rows = stores.rows;
+        let mut wet_bulb_c = [Lanes::default(); MOST_BANDS];
         for (index, (today, record)) in calendar.iter().zip(record).enumerate() {
             let weather: [DialledDay; L] =
                 core::array::from_fn(|lane| self.courses[lane].delta.day(self.valleys[lane], &self.sky, today, record));
@@ -342,9 +347,12 @@ impl<'v, const L: usize> Basins<'v, L> {
                 reference_evaporation_mm: Lanes(weather.map(|w| w.reference_evaporation_mm)),
                 melt_factor: self.melt_factor[usize::from(today.day_of_year - 1) % 366],
                 most_sublimation_mm: Lanes(sublimation),
-                wet_bulb_humidity_percent: split_humidity(self.valleys[0], record),
             };
-            let [even, odd] = self.slopes.day::<true>(curve, today, &lanes, &mut rows);
+            let split_c = split_humidity(self.valleys[0], record).map(|humidity_percent| {
+                self.slopes.wet_bulb(today, lanes.temperature_c, humidity_percent, &mut wet_bulb_c);
+                &wet_bulb_c
+            });
+            let [even, odd] = self.slopes.day::<true>(curve, today, &lanes, split_c, &mut rows);
             let snowfall = even.snowfall_mm + odd.snowfall_mm;
             let snow_water = even.snow_water_mm + odd.snow_water_mm;
             let soil = even.soil_mm + odd.soil_mm;
@@ -395,8 +403,10 @@ fn sublimation_on(valley: &Valley, today: &CalendarDay, southern: bool) -> f64 {
     if is_cold_half(today.month_index(), southern) { valley.snow.sublimation_mm_day } else { 0.0 }
 }
 
+/// Humidity by which the day's rain and snow are split, %; `None` where air temperature splits them.
 #[inline(always)]
-fn split_humidity(valley: &Valley, record: &StationDay) -> f64 {
-    let wet_bulb_counts = valley.rain_snow.wet_bulb && record.precipitation_mm > 0.0;
-    if wet_bulb_counts { record.relative_humidity_percent } else { f64::NAN }
+fn split_humidity(valley: &Valley, record: &StationDay) -> Option<f64> {
+    let humidity_percent = record.relative_humidity_percent;
+    let counts = valley.rain_snow.wet_bulb && record.precipitation_mm > 0.0 && !humidity_percent.is_nan();
+    counts.then_some(humidity_percent)
 }

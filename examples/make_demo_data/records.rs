@@ -110,7 +110,7 @@ pub fn observed_text() -> String {
         let of_year = f64::from((day.date.ordinal0() + 92) % 366);
         let flow_cfs = 30.0 + 900.0 * rise_and_fall(of_year, 232.0, 60.0, 75.0);
         let snow_in = 14.0 * rise_and_fall(of_year, 183.0, 150.0, 70.0);
-        let storage_acre_feet = 45_000.0 + 60_000.0 * rise_and_fall(of_year, 255.0, 120.0, 110.0);
+        let storage_acre_feet = 20_000.0 + 30_000.0 * rise_and_fall(of_year, 255.0, 120.0, 110.0);
         let canal_l_s = 400.0 * rise_and_fall(of_year, 280.0, 80.0, 90.0);
         let flow = if index % 50 == 49 { "M".to_owned() } else { format!("{flow_cfs:.1}") };
         let row = format!("{flow};{snow_in:.1};{storage_acre_feet:.0};{canal_l_s:.0}").replace('.', ",");

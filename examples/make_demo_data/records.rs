@@ -1,6 +1,6 @@
 //! The invented weather of the demo places: which recipe, which days, which seed, and how it is written.
 //!
-//! `tests/demo_places.rs` makes every file anew and compares it byte for byte with the one that is kept.
+//! `tests/demo_places/` makes every file anew and compares it byte for byte with the one that is kept.
 
 use chrono::{Datelike, NaiveDate};
 use deshielo::generator::{GeneratorDay, Recipe, generate, invented};

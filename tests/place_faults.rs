@@ -211,6 +211,8 @@ const CASES: &[(&str, &str, &str)] = &[
         "level_m = [7200, 7210, 7220, 7230]",
         "problem-lake-above-land@[‸reservoir.table]",
     ),
+    ("summer = { from = \"06-01\", to = \"08-31\" }\n", "", "problem-key-missing@[[‸town]]"),
+    ("column = \"caudal\"", "column = ‸\"flow\"", "problem-record-column-missing"),
     // Fields and crops.
     ("crop = \"maize_grain\"", "crop = ‸\"maize_grian\"", "problem-crop-unknown"),
     ("efficiency_share = 0.7", "method = \"drip\"\nefficiency_share = ‸0.7", "problem-either"),
@@ -401,5 +403,5 @@ fn every_fault_is_told_at_its_place() {
         }
     }
     assert!(wrong.is_empty(), "{} of {} cases:\n{}", wrong.len(), CASES.len(), wrong.join("\n"));
-    assert!(CASES.len() >= 60);
+    assert!(CASES.len() >= 100);
 }

@@ -2,7 +2,9 @@
 
 use deshielo::place::problem::Severity;
 use deshielo::place::{DialPlan, Outcome, Source, read, read_setting};
+use deshielo::water::dials::Dials;
 use deshielo::water::valley::{Purpose, Valley};
+use deshielo::water::works::Works;
 use proptest::collection::vec;
 use proptest::prelude::*;
 
@@ -37,6 +39,7 @@ fn check(place: &str, rights: &str) -> Outcome {
 
 /// What the valley's documentation promises to the water, which never checks again.
 fn assert_kept_promises(valley: &Valley) {
+    assert!(Works::new(valley, &Dials::REST).is_ok(), "{:?}", Works::new(valley, &Dials::REST).err());
     assert!(!format!("{valley:?}").contains("NaN"), "{valley:?}");
     assert!(valley.latitude_deg.abs() >= 0.5 && !valley.bands.is_empty());
     assert!(valley.bands.iter().all(|band| band.area_km2 > 0.0));

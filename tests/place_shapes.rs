@@ -162,3 +162,13 @@ fn a_summer_season_over_new_year_is_legal() {
     assert_eq!(told(&canal("11-15", "01-10", "")), ["problem-season-backwards"]);
     assert!(told(&canal("11-15", "01-10", "season_over_new_year = true")).is_empty());
 }
+
+#[test]
+fn an_empty_file_is_told_what_it_lacks() {
+    let told = outcome("# nothing yet\n", "").problems;
+    let missing: Vec<_> = told.iter().map(|problem| (problem.message, problem.at.line)).collect();
+    assert_eq!(
+        missing,
+        [("problem-bands-missing", 0)].into_iter().chain([("problem-table-missing", 0); 4]).collect::<Vec<_>>()
+    );
+}

@@ -177,12 +177,14 @@ fn town(section: &Section<'_>) -> Town {
     let daily = section.need_number("need", DAILY_M3, Limits(0.0, 5.0e7));
     let summer = section.section("summer");
     let (from, to) = (month_day_or(&summer, "from", JUNE), month_day_or(&summer, "to", END_OF_AUGUST));
-    if !summer.present && section.peek("summer_more_m3_day").is_some() {
+    let more = section.number_or("summer_more", DAILY_M3, Limits(0.0, 5.0e7), 0.0);
+    // Which months are summer depends on the hemisphere and on people: it must be said where it counts.
+    if more.value > 0.0 && !summer.present {
         section.tell_missing("summer");
     }
     Town {
         daily_m3: daily.value,
-        summer_more_m3: section.number_or("summer_more", DAILY_M3, Limits(0.0, 5.0e7), 0.0).value,
+        summer_more_m3: more.value,
         summer: Season { from, to },
         used_up_share: share(section, "used_up", 0.3),
     }

@@ -72,6 +72,8 @@ pub(super) struct Sheet<'t> {
     pub text: &'t str,
     /// What was found so far.
     pub problems: RefCell<Vec<Problem>>,
+    /// Where each line starts.
+    line_starts: Vec<usize>,
     /// How many of them, at the start, are lines that could not be read.
     unread: usize,
 }
@@ -81,7 +83,9 @@ impl<'t> Sheet<'t> {
     pub fn parse(file: impl Into<PathBuf>, text: &'t str) -> (Self, Table) {
         let (document, mut errors) = DeTable::parse_recoverable(text);
         errors.sort_by_key(|error| error.span().map_or(0, |span| span.start));
-        let mut sheet = Self { file: file.into(), text, problems: RefCell::new(Vec::new()), unread: 0 };
+        let after_breaks = text.match_indices('\n').map(|(at, _)| at + 1);
+        let line_starts = std::iter::once(0).chain(after_breaks).collect();
+        let mut sheet = Self { file: file.into(), text, problems: RefCell::default(), line_starts, unread: 0 };
         let mut last_line = 0;
         for error in &errors {
             let span = error.span().unwrap_or(0..0);
@@ -99,7 +103,11 @@ impl<'t> Sheet<'t> {
 
     /// Where these bytes stand.
     pub fn at(&self, span: &Range<usize>) -> Location {
-        Location::of_span(self.file.clone(), self.text, span.clone())
+        let line = self.line_starts.partition_point(|start| *start <= span.start).saturating_sub(1);
+        let first = self.line_starts[line];
+        let within = span.start - first..span.end.saturating_sub(first);
+        let at = Location::of_span(self.file.clone(), &self.text[first..], within);
+        Location { line: line + 1, ..at }
     }
 
     /// Adds a problem; what follows from a line that could not be read is not told again.

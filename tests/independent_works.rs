@@ -50,9 +50,8 @@ fn sums<const L: usize>(slopes: &Slopes<L>, total: impl Fn([LaneSums<L>; 2]) -> 
             reference_evaporation_mm: Lanes::splat(0.0),
             melt_factor: Lanes::splat(melt_factor_mm_c_day(&traits, calendar.day_of_year, false)),
             most_sublimation_mm: Lanes::splat(0.0),
-            wet_bulb_humidity_percent: f64::NAN,
         };
-        let day = total(slopes.day::<true>(Halves::<5>, &calendar, &weather, &mut stores));
+        let day = total(slopes.day::<true>(Halves::<5>, &calendar, &weather, None, &mut stores));
         for (column, value) in columns.iter_mut().zip(day) {
             column.push(value);
         }

@@ -153,6 +153,9 @@ fn no_unit_constant_is_typed_twice() {
                 folders.push(path);
                 continue;
             }
+            if path.extension().is_none_or(|extension| extension != "rs") {
+                continue;
+            }
             files += 1;
             for (line, number) in literals(&std::fs::read_to_string(&path).unwrap()) {
                 // Within the digits that people write: 0.0283, 1233.5, 0.405.

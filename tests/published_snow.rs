@@ -92,10 +92,10 @@ fn compute(id: &str, check: &Table) -> Option<f64> {
         }
         // Conversion of the unit; the number is from memory.
         "ddf_usda_typical" => 0.06 * MM_PER_INCH * FAHRENHEIT_PER_CELSIUS,
-        // Plausibility of the invented valleys' split and melt factor; both ranges are from memory.
-        "threshold_usace" | "threshold_jennings_range" | "threshold_jennings_mean" => half_rain_c,
+        // Plausibility of the invented valleys' split and melt factor; all four are from memory.
+        "threshold_jennings_range" | "threshold_jennings_mean" => half_rain_c,
         "ddf_usda_range" | "ddf_usace_range" => valley.snow.melt_factor_mm_c_day,
-        // Means over sites, read in the abstract: the open one is what the invented valleys use, to a hundredth.
+        // A mean over open sites, read in the abstract.
         "ddf_kuusisto_open" => valley.snow.melt_factor_mm_c_day,
         _ => return None,
     })
@@ -116,9 +116,22 @@ fn every_published_check_is_met() {
             left.insert(id.as_str());
         }
     }
-    assert_eq!(checks.len(), 31, "the copy of the checks has changed");
-    // A table, below; and a forest's mean, to which a place comes by the melt exposure of its bands.
-    assert_eq!(left, BTreeSet::from(["ddf_kuusisto_forest", "uniform_pack"]));
+    assert_eq!(checks.len(), 30, "the copy of the checks has changed");
+    // Each of these has a test of its own below.
+    assert_eq!(left, BTreeSet::from(["ddf_kuusisto_forest", "threshold_usace", "uniform_pack"]));
+}
+
+#[test]
+fn the_dividing_range_is_neither_all_snow_nor_all_rain() {
+    // USACE 1956, Snow Hydrology, 34 to 36 °F: from memory. Its middle lies warmer than that of the invented valleys' split,
+    // which has the mean of Jennings et al. 2018; all of it lies between their two temperatures.
+    let checks = checks("snow");
+    let split = valleys::bare_basin(1).rain_snow;
+    for end in ["lo", "hi"] {
+        let dividing_c = number(&checks["threshold_usace"][end]);
+        let share = SnowConstants::<1>::new(&split, &plain(1.0), 1.0).snow_share(Lanes([dividing_c])).0[0];
+        assert!(share > 0.05 && share < 0.5, "{share} snow at {dividing_c} °C");
+    }
 }
 
 #[test]

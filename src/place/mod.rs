@@ -16,6 +16,7 @@ mod checks;
 pub mod crop_table;
 mod crops;
 mod dated;
+pub mod demo;
 mod dial_plan;
 mod fields;
 mod gates;

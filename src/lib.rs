@@ -15,4 +15,6 @@ pub mod generator;
 #[cfg(feature = "std")]
 pub mod place;
 #[cfg(feature = "std")]
+pub mod session;
+#[cfg(feature = "std")]
 pub mod words;

@@ -44,6 +44,7 @@ mod offer;
 mod refit;
 mod ring;
 mod scale;
+pub mod scene;
 mod setting;
 mod state;
 mod touch;

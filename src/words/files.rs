@@ -32,6 +32,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "languages.ftl",
         "ledger.ftl",
         "numbers.ftl",
+        "pages.ftl",
         "patterns.ftl",
         "picture.ftl",
         "problems.ftl",
@@ -43,6 +44,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en-GB":
         "dates.ftl",
         "ledger.ftl",
+        "pages.ftl",
         "terms.ftl",
         "units.ftl";
     "es":
@@ -54,6 +56,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "languages.ftl",
         "ledger.ftl",
         "numbers.ftl",
+        "pages.ftl",
         "patterns.ftl",
         "picture.ftl",
         "problems.ftl",
@@ -77,6 +80,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "crops.ftl",
         "ledger.ftl",
         "numbers.ftl",
+        "pages.ftl",
         "signs.ftl",
         "tell.ftl",
         "terms.ftl";
@@ -90,6 +94,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "command.ftl",
         "dials.ftl",
         "ledger.ftl",
+        "pages.ftl",
         "problems.ftl",
         "signs.ftl",
         "terms.ftl";

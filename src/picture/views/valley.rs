@@ -46,9 +46,9 @@ impl Parts {
         let whole = layout.across(layout.content);
         let (wide, high, gap) = (whole.size.width as i32, whole.size.height as i32, layout.gap);
         let top = whole.top_left.y - gap / 2;
-        let season_high = (high * if layout.form == Form::Tall { 18 } else { 26 } / 100)
-            .max(layout.note.line_px() * 3)
-            .min(layout.note.line_px() * 9);
+        let season_share = if layout.form == Form::Tall { 18 } else { 25 };
+        let note_high = layout.note.line_px();
+        let season_high = (high * season_share / 100).max(note_high * 11 / 4).min(note_high * 9);
         let land_high = high + gap / 2 - season_high - gap;
         let season = area(layout.margin, top + land_high + gap, wide - 2 * layout.margin, season_high);
         let land = area(0, top, wide, land_high);

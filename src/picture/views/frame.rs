@@ -1,7 +1,6 @@
 //! What every page has: the answer on top, day and year under it, the dials along the bottom, place and page at the foot.
 
 use embedded_graphics::geometry::Point;
-use embedded_graphics::primitives::Rectangle;
 
 use super::dial_cards;
 use super::layout::{Form, Layout, area, bottom, right};

@@ -1,7 +1,8 @@
 //! A good place broken on purpose, one fault at a time: each is told once, by its own message, at its line and column.
 
-use deshielo::place::problem::{Problem, Severity};
+use deshielo::place::problem::{Argument, Problem, Severity};
 use deshielo::place::{Source, read};
+use fluent_bundle::{FluentArgs, FluentBundle, FluentResource, FluentValue};
 
 const PLACE: &str = include_str!("places/good/place.toml");
 const WEATHER: &str = include_str!("places/good/weather.csv");
@@ -22,7 +23,42 @@ fn problems(place: &str, weather: &str, rights: &str) -> Vec<Problem> {
     let outcome = read(Source::Embedded(&files));
     let errors = outcome.problems.iter().any(|problem| problem.severity == Severity::Error);
     assert_eq!(outcome.place.is_none(), errors, "a place is there exactly when there is no error");
+    for problem in &outcome.problems {
+        assert_sayable(problem);
+    }
     outcome.problems
+}
+
+/// Both languages can say the problem and its remedy with the arguments that it brings.
+fn assert_sayable(problem: &Problem) {
+    let mut arguments = FluentArgs::new();
+    for (name, value) in &problem.arguments {
+        let value = match value {
+            Argument::Text(text) => FluentValue::from(text.clone()),
+            Argument::Count(count) => FluentValue::from(*count as f64),
+            Argument::Number(number) => FluentValue::from(*number),
+            Argument::Date(date) => FluentValue::from(date.to_string()),
+        };
+        arguments.set(*name, value);
+    }
+    let texts = [
+        ("en", [include_str!("../locales/en/problems.ftl"), include_str!("../locales/en/record-problems.ftl")]),
+        ("es", [include_str!("../locales/es/problems.ftl"), include_str!("../locales/es/record-problems.ftl")]),
+    ];
+    for (language, texts) in texts {
+        let mut bundle = FluentBundle::new(vec![language.parse().unwrap()]);
+        for text in texts {
+            bundle.add_resource(FluentResource::try_new(text.to_owned()).expect("the words can be read")).unwrap();
+        }
+        let message = bundle.get_message(problem.message).unwrap_or_else(|| panic!("{language}: {}", problem.message));
+        let mut errors = Vec::new();
+        let says = [message.value(), message.get_attribute("remedy").map(|remedy| remedy.value())];
+        for pattern in says {
+            let pattern = pattern.unwrap_or_else(|| panic!("{language}: {} is whole", problem.message));
+            bundle.format_pattern(pattern, Some(&arguments), &mut errors);
+        }
+        assert!(errors.is_empty(), "{language}: {}: {errors:?}", problem.message);
+    }
 }
 
 fn shown(problems: &[Problem]) -> Vec<String> {

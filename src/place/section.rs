@@ -171,7 +171,7 @@ impl<'a> Section<'a> {
         };
         let si = unit.to_si(written);
         // The bounds are compared as written, so that a limit given exactly in another unit is inside.
-        let (least, most) = (rounded(unit.from_si(limits.0)), rounded(unit.from_si(limits.1)));
+        let (least, most) = (rounded(unit.si_as_written(limits.0)), rounded(unit.si_as_written(limits.1)));
         if si.is_finite() && ((limits.0 <= si && si <= limits.1) || (least <= written && written <= most)) {
             return Number { value: si, at, stated: true };
         }
@@ -296,8 +296,12 @@ impl<'a> Section<'a> {
             });
         }
         for key in self.missing.borrow().iter().filter(|key| !explained.contains(key)) {
-            let problem = Problem::error(self.at.clone(), "problem-key-missing").with("key", key.clone());
-            self.sheet.tell(problem.with("table", self.name.clone()));
+            let problem = |message| Problem::error(self.at.clone(), message).with("key", key.clone());
+            self.sheet.tell(if self.name.is_empty() {
+                problem("problem-key-missing-at-top")
+            } else {
+                problem("problem-key-missing").with("table", self.name.clone())
+            });
         }
     }
 }

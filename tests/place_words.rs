@@ -65,6 +65,45 @@ fn both_languages_say_every_problem_with_the_same_arguments() {
 }
 
 #[test]
+fn the_page_for_people_explains_every_key() {
+    let page = include_str!("../demo-data/PLACE.md");
+    let mut asked: BTreeSet<String> = BTreeSet::new();
+    for file in fs::read_dir("src/place").unwrap() {
+        let path = file.unwrap().path();
+        if path.extension().is_none_or(|ending| ending != "rs") || path.ends_with("setting.rs") {
+            continue;
+        }
+        let code = fs::read_to_string(path).unwrap();
+        let code = code.split("#[cfg(test)]").next().unwrap();
+        for question in [
+            "number",
+            "number_or",
+            "need_number",
+            "numbers",
+            "text",
+            "need_text",
+            "list",
+            "flag_or",
+            "choice",
+            "section",
+            "sections",
+            "get",
+        ] {
+            let call = format!(".{question}(\"");
+            let asks = code.split(call.as_str()).skip(1);
+            asked.extend(asks.map(|rest| rest.split('"').next().unwrap().to_owned()));
+        }
+    }
+    assert!(asked.len() > 80, "{asked:?}");
+    let words: BTreeSet<&str> = page.split(|c: char| !c.is_ascii_alphanumeric() && c != '_').collect();
+    let silent: Vec<&String> = asked
+        .iter()
+        .filter(|key| !words.iter().any(|word| word == key || word.starts_with(&format!("{key}_"))))
+        .collect();
+    assert!(silent.is_empty(), "PLACE.md says nothing of {silent:?}");
+}
+
+#[test]
 fn regional_words_only_replace_messages_that_exist() {
     let spanish = messages("locales/es/problems.ftl");
     for region in ["es-embalse"] {

@@ -22,6 +22,8 @@ problem-decimal-comma = This number has a decimal comma.
     .remedy = Write numbers in this file with a decimal point: 12.5.
 problem-quote = Some text here has no closing quotation mark.
     .remedy = Put quotation marks before and after the text, on one line.
+problem-text-unquoted = This value is neither a number nor text in quotation marks.
+    .remedy = Put text in quotation marks. A number stands alone: its unit goes into the key. Yes and no are true and false.
 problem-bracket = A bracket opens here and does not close.
     .remedy = Close it. A table's name stands in brackets: [snow]. A list too: [1, 2].
 problem-key-twice = “{ $key }” is here twice.
@@ -47,7 +49,7 @@ problem-one-bracket = There may be several of [{ $table }], so each needs double
 problem-not-tables = “{ $table }” must be a table.
     .remedy = Start each one with a line [[{ $table }]].
 problem-not-table = “{ $key }” must hold several values with their names.
-    .remedy = Write them in braces: {"{"} name = value, name = value {"}"}.
+    .remedy = Write them in braces, with commas: name = value, name = value.
 
 ## Kinds of value
 
@@ -80,7 +82,7 @@ problem-not-rising = “{ $key }” does not rise: this value is not above the o
 ## Names and languages
 
 problem-name-one-language = “{ $key }” is in one language only.
-    .remedy = Write both: {"{"} en = "…", es = "…" {"}"}.
+    .remedy = Write both, in braces: en = "…", es = "…".
 problem-name-language = “{ $key }” has no words in { $language ->
         [en] English (en)
        *[es] Spanish (es)
@@ -157,6 +159,8 @@ problem-record-short = The record has { $days ->
        *[other] { $days } days
     } and no whole water year.
     .remedy = Use a record from the first day of a water year to the last, or longer.
+problem-record-apart = This record runs from { $first } to { $last }, the weather from { $weather_first } to { $weather_last }. They share no day.
+    .remedy = It may stay, but nothing is compared with it. Check the dates and their format.
 problem-settling-long = { $value } years of settling are more than the record has: { $years }.
     .remedy = Use fewer. One or two are enough.
 
@@ -170,6 +174,8 @@ problem-dead-below-table = The dead storage ({ $dead } hm³) is below the start 
     .remedy = Start the table lower, or check the units.
 problem-lake-shrinks = The lake gets smaller as the water rises: this area is below the one before it.
     .remedy = List level, area and volume from the bottom up.
+problem-lake-above-land = The full lake lies at { $level } m, above the highest band at { $highest } m.
+    .remedy = Check the units: level_m or level_ft, elevation_m or elevation_ft.
 problem-table-units = The volumes of the table rise by { $stated } hm³, but levels and areas make it about { $expected } hm³.
     .remedy = Check the units of level, area and volume.
 problem-flood-space = The space for floods ({ $space } hm³) is larger than the active storage ({ $active } hm³).
@@ -203,6 +209,8 @@ problem-canal-large = “{ $key }” can carry { $capacity } m³/s, far more tha
     .remedy = It may be so. If not, check the unit and the areas of the fields.
 problem-canal-small = “{ $key }” can carry { $capacity } m³/s, far less than the { $need } m³/s of its hottest day.
     .remedy = It may be so. If not, check the unit and the areas of the fields.
+problem-limit-idle = The yearly limit of “{ $key }” ({ $limit } hm³) is far more than its canal can carry in a season ({ $most } hm³).
+    .remedy = It changes nothing so. Check the unit: yearly_limit_hm3 or yearly_limit_acre_feet.
 problem-season-backwards = “{ $key }” opens on { $opens } and closes on { $closes }: it would be shut all summer.
     .remedy = Change the two days round. If it does run in winter only, write season_over_new_year = true.
 problem-season-winter = “{ $key }” opens on { $opens } and closes on { $closes }: it is shut in midsummer.
@@ -243,7 +251,7 @@ problem-swap-absent = No field grows “{ $value }”, which the crop mix is to 
 problem-dial-unknown = There is no dial “{ $key }”.
     .remedy = Did you mean “{ $nearest }”?
 problem-dial-form = “{ $dial }” needs a range, or to be hidden.
-    .remedy = Write {"{"} least = …, most = … {"}"} or "hidden".
+    .remedy = Write least = … and most = … in braces, or "hidden".
 problem-dial-range = The range of “{ $dial }”, { $least } to { $most }, does not hold 0, where the dial rests.
     .remedy = The least must be below the most, with 0 between them or at an end.
 problem-dial-lacking = The place has nothing for the dial “{ $dial }” to change.

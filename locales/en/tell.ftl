@@ -59,6 +59,7 @@ tell-points-more = { $n ->
 }
 tell-reservoir-fills = Years in which the reservoir fills
 
+tell-canals-downstream = Canals, going downstream
 tell-canals-by-right = Canals, oldest right first
 tell-canal-with-changes = with changes
 tell-canal-since = Right since
@@ -69,7 +70,8 @@ tell-canal-short = Short days
 tell-canal-cut = Cut days
 tell-canal-last-full = Last full day
 tell-canal-last-water = Last water
-tell-right-before-all = first
+tell-canal-before-all = first
+tell-right-before-all = before all others
 tell-enough = A year is enough when at least { $share } of the water asked for arrives. Short: some of it came that day. Cut: none, or almost none.
 tell-ledger-closes = The ledger closes: { $residual } of { $throughput } is not accounted for.
 tell-less-than-a-liter = less than a liter

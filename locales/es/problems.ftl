@@ -22,6 +22,8 @@ problem-decimal-comma = Este número lleva coma decimal.
     .remedy = En este archivo los números llevan punto decimal: 12.5.
 problem-quote = Aquí hay un texto sin comillas de cierre.
     .remedy = Ponga comillas antes y después del texto, en una sola línea.
+problem-text-unquoted = Este valor no es un número ni un texto entre comillas.
+    .remedy = Ponga el texto entre comillas. Un número va solo: su unidad va en la clave. Sí y no se escriben true y false.
 problem-bracket = Aquí se abre un corchete y no se cierra.
     .remedy = Ciérrelo. El nombre de una tabla va entre corchetes: [snow]. Una lista también: [1, 2].
 problem-key-twice = «{ $key }» está dos veces.
@@ -47,7 +49,7 @@ problem-one-bracket = Puede haber varias tablas [{ $table }]; por eso cada una l
 problem-not-tables = «{ $table }» debe ser una tabla.
     .remedy = Empiece cada una con una línea [[{ $table }]].
 problem-not-table = «{ $key }» debe llevar varios valores con su nombre.
-    .remedy = Escríbalos entre llaves: {"{"} nombre = valor, nombre = valor {"}"}.
+    .remedy = Escríbalos entre llaves y con comas: nombre = valor, nombre = valor.
 
 ## Clases de valor
 
@@ -80,7 +82,7 @@ problem-not-rising = «{ $key }» no va subiendo: este valor no es mayor que el 
 ## Nombres e idiomas
 
 problem-name-one-language = «{ $key }» está en un solo idioma.
-    .remedy = Escriba los dos: {"{"} en = "…", es = "…" {"}"}.
+    .remedy = Escriba los dos, entre llaves: en = "…", es = "…".
 problem-name-language = A «{ $key }» le faltan las palabras en { $language ->
         [en] inglés (en)
        *[es] español (es)
@@ -157,6 +159,8 @@ problem-record-short = El registro tiene { $days ->
        *[other] { $days } días
     } y ningún año hidrológico completo.
     .remedy = Use un registro que vaya del primer día de un año hidrológico hasta el último, o más largo.
+problem-record-apart = Este registro va del { $first } al { $last }, y el del tiempo va del { $weather_first } al { $weather_last }. No tienen ni un día en común.
+    .remedy = Puede quedarse, pero no hay con qué compararlo. Revise las fechas y su formato.
 problem-settling-long = { $value } años de preparación son más de los que tiene el registro: { $years }.
     .remedy = Ponga menos. Con uno o dos alcanza.
 
@@ -170,6 +174,8 @@ problem-dead-below-table = El volumen muerto ({ $dead } hm³) queda antes del co
     .remedy = Empiece la tabla más abajo, o revise las unidades.
 problem-lake-shrinks = El lago se hace más chico cuando sube el agua: esta superficie es menor que la anterior.
     .remedy = Ponga nivel, superficie y volumen desde el fondo hacia arriba.
+problem-lake-above-land = El lago lleno queda a { $level } m, por encima de la zona más alta, a { $highest } m.
+    .remedy = Revise las unidades: level_m o level_ft, elevation_m o elevation_ft.
 problem-table-units = Los volúmenes de la tabla suben { $stated } hm³, pero con los niveles y las superficies salen unos { $expected } hm³.
     .remedy = Revise las unidades de nivel, superficie y volumen.
 problem-flood-space = El espacio para crecidas ({ $space } hm³) es mayor que el volumen útil ({ $active } hm³).
@@ -203,6 +209,8 @@ problem-canal-large = En «{ $key }» caben { $capacity } m³/s, mucho más que 
     .remedy = Puede ser así. Si no, revise la unidad y las superficies de las parcelas.
 problem-canal-small = En «{ $key }» caben { $capacity } m³/s, mucho menos que los { $need } m³/s de su día más caluroso.
     .remedy = Puede ser así. Si no, revise la unidad y las superficies de las parcelas.
+problem-limit-idle = El tope anual de «{ $key }» ({ $limit } hm³) es mucho más de lo que cabe en su canal en una temporada ({ $most } hm³).
+    .remedy = Así no cambia nada. Revise la unidad: yearly_limit_hm3 o yearly_limit_acre_feet.
 problem-season-backwards = «{ $key }» abre el { $opens } y cierra el { $closes }: estaría cerrado todo el verano.
     .remedy = Ponga los dos días al revés. Si de veras corre solo en invierno, escriba season_over_new_year = true.
 problem-season-winter = «{ $key }» abre el { $opens } y cierra el { $closes }: está cerrado en pleno verano.
@@ -243,7 +251,7 @@ problem-swap-absent = Ninguna parcela tiene «{ $value }», el cultivo que se ib
 problem-dial-unknown = No hay una perilla «{ $key }».
     .remedy = ¿Quiso decir «{ $nearest }»?
 problem-dial-form = «{ $dial }» lleva un rango, o va escondida.
-    .remedy = Escriba {"{"} least = …, most = … {"}"} o "hidden".
+    .remedy = Escriba least = … y most = … entre llaves, o "hidden".
 problem-dial-range = El rango de «{ $dial }», de { $least } a { $most }, no incluye el 0, donde la perilla descansa.
     .remedy = El mínimo debe ser menor que el máximo, con el 0 en medio o en un extremo.
 problem-dial-lacking = En este lugar no hay nada que la perilla «{ $dial }» pueda cambiar.

@@ -59,6 +59,7 @@ tell-points-more = { $n ->
 }
 tell-reservoir-fills = Años en que se llena la presa
 
+tell-canals-downstream = Canales, río abajo
 tell-canals-by-right = Canales, primero el derecho más antiguo
 tell-canal-with-changes = con sus cambios
 tell-canal-since = Desde
@@ -69,7 +70,8 @@ tell-canal-short = Días con parte
 tell-canal-cut = Días sin agua
 tell-canal-last-full = Último día completo
 tell-canal-last-water = Última agua
-tell-right-before-all = primero
+tell-canal-before-all = primero
+tell-right-before-all = antes que todos
 tell-enough = En un año alcanza el agua si llega al menos { $share } de la pedida. Con todo, con parte, sin agua: lo que llegó de lo pedido ese día.
 tell-ledger-closes = Las cuentas cierran: de { $throughput } queda sin explicar { $residual }.
 tell-less-than-a-liter = menos de un litro

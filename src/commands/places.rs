@@ -17,7 +17,7 @@ pub(super) enum Named {
     /// A folder with a `place.toml`.
     Folder(PathBuf),
     /// One that is part of the program.
-    BuiltIn(&'static built_in::BuiltInPlace),
+    BuiltIn(built_in::BuiltInPlace),
 }
 
 impl Named {

@@ -30,19 +30,23 @@ pub(super) fn find(name: &Path, words: &Words) -> Result<SettingText, Failure> {
     }
     let key = name.to_str().unwrap_or_default();
     if let Some(setting) = built_in::setting(key) {
-        return Ok(SettingText { file: format!("{key}.toml").into(), text: setting.text.to_owned() });
+        return Ok(SettingText { file: format!("{key}.toml").into(), text: setting.to_owned() });
     }
     let looks_like_file = name.extension().is_some() || name.components().count() > 1;
     if looks_like_file {
         return Err(Failure::input(words.say("error-file-not-found", &[("path", shown().into())])));
     }
-    let near = nearest(key, built_in::SETTINGS.iter().map(|setting| setting.name));
+    let near = nearest(key, built_in::setting_names());
     Err(Failure::input(match near {
         Some(near) => {
             let arguments = [("setting", shown().into()), ("nearest", near.into())];
             words.say("error-setting-unknown-nearest", &arguments)
         }
-        None => words.say("error-setting-unknown", &[("setting", shown().into())]),
+        None => {
+            let known: Vec<&str> = built_in::setting_names().collect();
+            let arguments = [("setting", shown().into()), ("settings", known.join(", ").into())];
+            words.say("error-setting-unknown", &arguments)
+        }
     }))
 }
 

@@ -7,6 +7,7 @@ use super::summary_lines::wrapped;
 use super::table::mean_date;
 use crate::signs::CanalSigns;
 use crate::water::calendar::CalendarDay;
+use crate::water::canals::SharingRule;
 use crate::words::{DateStyle, Words};
 
 /// Letters of a canal's name before it is broken.
@@ -18,11 +19,19 @@ const MOST_CELL: usize = 10;
 pub(super) fn write(told: &Told, words: &Words) -> String {
     let many = told.as_it_was.years.len() > 1;
     let heading = |id: &str, side, most| Column { heading: words.say(id, &[]), side, most, heading_most: 0 };
-    let mut columns = vec![
-        heading("tell-canals-by-right", Side::Left, MOST_NAME),
-        heading("tell-canal-since", Side::Right, MOST_CELL),
-        heading("tell-canal-share", Side::Right, MOST_CELL),
-    ];
+    let valley = &told.place.valley;
+    // Where everybody has the same share or a turn, dates of rights say nothing.
+    let by_right = valley.rule == SharingRule::Seniority;
+    let (title, order) = if by_right {
+        ("tell-canals-by-right", gates_by_right(valley))
+    } else {
+        ("tell-canals-downstream", (0..valley.gates.len()).collect())
+    };
+    let mut columns = vec![heading(title, Side::Left, MOST_NAME)];
+    if by_right {
+        columns.push(heading("tell-canal-since", Side::Right, MOST_CELL));
+    }
+    columns.push(heading("tell-canal-share", Side::Right, MOST_CELL));
     if many {
         columns.push(heading("tell-canal-enough", Side::Right, MOST_CELL));
     }
@@ -31,16 +40,21 @@ pub(super) fn write(told: &Told, words: &Words) -> String {
         columns.push(heading(id, Side::Right, MOST_CELL));
     }
     let mut rows = Vec::new();
-    for gate in gates_by_right(&told.place.valley) {
+    for gate in order {
         let Some(names) = told.place.gates.get(gate) else { continue };
         let since = match names.right_year {
             Some(year) => words.year(year),
-            None => words.say("tell-right-before-all", &[]),
+            None => words.say("tell-canal-before-all", &[]),
         };
-        rows.push(row(told, &told.as_it_was, gate, names.name.get(words.tag()).to_owned(), since, words));
+        let mut begin = |run: &Run, name: String, since: String| {
+            let mut cells = vec![name];
+            cells.extend(Some(since).filter(|_| by_right));
+            cells.extend(row(told, run, gate, words));
+            rows.push(cells);
+        };
+        begin(&told.as_it_was, names.name.get(words.tag()).to_owned(), since);
         if told.is_turned() {
-            let label = format!("  {}", words.say("tell-canal-with-changes", &[]));
-            rows.push(row(told, &told.with_changes, gate, label, String::new(), words));
+            begin(&told.with_changes, format!("  {}", words.say("tell-canal-with-changes", &[])), String::new());
         }
     }
     let mut text = lay_out(&columns, &rows).replace('\u{202f}', " ");
@@ -51,12 +65,13 @@ pub(super) fn write(told: &Told, words: &Words) -> String {
     text
 }
 
-fn row(told: &Told, run: &Run, gate: usize, name: String, since: String, words: &Words) -> Vec<String> {
+/// Share met, enough years, days, dates.
+fn row(told: &Told, run: &Run, gate: usize, words: &Words) -> Vec<String> {
     let missing = || words.style().missing.clone();
     let mean = |read: fn(&CanalSigns) -> Option<f64>| of_canal(run, gate, read).map(|spread| spread.mean);
     let days = |read: fn(&CanalSigns) -> Option<f64>| mean(read).map_or_else(missing, |days| words.number(days, 0));
     let share = mean(|canal| canal.supply_ratio).map_or_else(missing, |share| words.percent(share * 100.0, 0));
-    let mut cells = vec![name, since, share];
+    let mut cells = vec![share];
     if run.years.len() > 1 {
         let performance = canal_performance(run, gate, told.place.valley.enough_share);
         cells.push(performance.map_or_else(missing, |performance| {

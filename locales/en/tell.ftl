@@ -107,7 +107,7 @@ tell-storms-kept = The dials keep the order of storms, the wet days and the crop
 ## Crops
 
 crop-column-name = Crop
-crop-column-coefficients = Coefficients: start · middle · end
+crop-column-coefficients = Coefficients: start / middle / end
 crop-column-stages = Days of the four stages
 crop-column-roots = Roots
 crop-column-depletion = Easy water

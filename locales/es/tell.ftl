@@ -107,7 +107,7 @@ tell-storms-kept = Las perillas no cambian el orden de las tormentas, los días 
 ## Cultivos
 
 crop-column-name = Cultivo
-crop-column-coefficients = Coeficientes: inicio · medio · final
+crop-column-coefficients = Coeficientes: inicio / medio / final
 crop-column-stages = Días de las cuatro etapas
 crop-column-roots = Raíces
 crop-column-depletion = Agua fácil

@@ -85,7 +85,7 @@ fn row(crop: &Shown, system: System, words: &Words) -> Vec<String> {
         return [crop.name.clone()].into_iter().chain((0..5).map(|_| missing())).collect();
     }
     let coefficients = [traits.coefficient_initial, traits.coefficient_mid, traits.coefficient_end];
-    let list = |parts: Vec<String>| parts.join(" · ");
+    let list = |parts: Vec<String>| parts.join("/");
     let depth = words.unit_of(Quantity::Elevation, system).convert(traits.root_depth_m);
     vec![
         crop.name.clone(),

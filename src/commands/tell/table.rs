@@ -28,7 +28,7 @@ const MOST_NAME: usize = 41;
 /// Letters of a value or a change before it is broken.
 const MOST_VALUE: usize = 16;
 /// Letters of a heading before it is broken.
-const MOST_HEADING: usize = 11;
+const MOST_HEADING: usize = 9;
 /// Under this many of the larger metric unit of flow, the smaller one reads better.
 const SMALLEST_IN_LARGE_UNIT: f64 = 0.1;
 
@@ -69,7 +69,7 @@ fn signs(told: &Told, system: System, words: &Words) -> String {
     for row in &mut rows {
         row.truncate(columns.len());
     }
-    lay_out(&columns, &rows)
+    lay_out(&columns, &rows).replace('\u{202f}', " ")
 }
 
 /// Name, as it was, with the changes, change; `None` where the place has no such thing.

@@ -4,7 +4,6 @@ help-about = Gire un mando y vea qué le hace un año más cálido, más seco o 
 help-set = Un mando y cuánto girarlo, por ejemplo warming=2. Se puede repetir. También vale un valor entre dos pasos.
 help-setting = Un archivo con una combinación de mandos y años, o el nombre de una que ya trae el programa.
 error-dial-out-of-range = El mando «{ $dial }» va de { $low } a { $high }. { $value } queda fuera.
-error-dial-step = El mando «{ $dial }» se mueve de { $step } en { $step }. { $value } queda entre dos pasos.
 error-dial-unknown = No hay ningún mando «{ $dial }».
 error-dial-unknown-nearest = No hay ningún mando «{ $dial }». ¿Quiso decir «{ $nearest }»?
 error-dial-list = Los mandos son: { $dials }.

@@ -185,7 +185,8 @@ fn csv_says_what_json_says() {
     assert_eq!(rows.len(), 2 * 2 * (1 + 3));
     for row in &rows {
         let years = told[&row["run"]]["years"].as_array().unwrap();
-        let year = years.iter().find(|year| year["water_year"].to_string() == row["water_year"]).unwrap();
+        let water_year: i64 = row["water_year"].parse().unwrap();
+        let year = years.iter().find(|year| year["water_year"] == water_year).unwrap();
         if row["canal"].is_empty() {
             assert_eq!(row["spring_volume_hm3"].parse().ok(), year["signs"]["spring_volume_hm3"].as_f64());
             assert_eq!(row["half_volume_date"], year["signs"]["half_volume_date"].as_str().unwrap());

@@ -12,8 +12,11 @@ use crate::generator::{Recipe, invented};
 use crate::place::problem::{Location, Problem};
 use crate::words::{Words, nearest};
 
+/// A recipe by its name.
+type BuiltIn = (&'static str, fn() -> Recipe);
+
 /// The recipes that are part of the program.
-const BUILT_IN: [(&str, fn() -> Recipe); 2] = [("tresnubes", invented::tresnubes), ("south", invented::valle_del_sur)];
+const BUILT_IN: [BuiltIn; 2] = [("tresnubes", invented::tresnubes), ("south", invented::valle_del_sur)];
 
 /// Finds and checks the recipe; a file of that name goes before what is built in.
 pub(super) fn find(name: &Path, words: &Words) -> Result<Pattern, Failure> {

@@ -11,4 +11,4 @@ pub use canal::{CUT_SHARE, CanalSigns, FULL_SHARE};
 pub use many::{Performance, Spread, performance, spread};
 pub use read::{YearReport, read_run};
 pub use sign::{SIGNS, Sign, SignKind};
-pub use year::{YearReader, YearSigns};
+pub use year::{WHITE_MM, YearReader, YearSigns};

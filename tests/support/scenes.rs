@@ -1,79 +1,111 @@
 //! Scenes for tests of the pages: a valley run over its record, as it was and under some dials.
 #![allow(dead_code, reason = "each test takes what it needs")]
 
-use deshielo::picture::views::scene::*;
-use deshielo::picture::views::year_log::{YearLog, snow_line_m, titles};
-use deshielo::signs::{YearReport, read_run};
-use deshielo::water::basin::{Basin, BasinDay};
+use deshielo::picture::views::scene::{DialSetting, Scene, YearKind};
+use deshielo::picture::views::{View, canals, season, valley};
+use deshielo::picture::{Canvas, Theme};
+use deshielo::session::Answers;
+use deshielo::session::answer::{Asked, Source};
+use deshielo::session::scene::{Moment, PlaceTold, Stage};
 use deshielo::water::calendar::CalendarDay;
 use deshielo::water::dials::{Dial, Dials};
-use deshielo::water::run::run_basin;
 use deshielo::water::valley::Valley;
 use deshielo::water::weather::StationDay;
-use deshielo::water::works::Works;
-use deshielo::words::System;
+use deshielo::words::{System, Words};
 
-/// A run with everything that a scene borrows.
-pub struct Held {
-    pub years: Vec<YearReport>,
-    pub log: YearLog,
-    /// Snow water of each band, day by day, mm.
-    pub band_snow_mm: Vec<Vec<f64>>,
-}
-
-/// A valley with its runs for one chosen year.
-pub struct Stage {
+/// A valley with its record.
+pub struct Land {
     pub valley: Valley,
-    pub names: Vec<String>,
-    pub dials: Dials,
     pub calendar: Vec<CalendarDay>,
-    pub chosen_year: usize,
-    pub was: Held,
-    pub now: Held,
-    pub settings: Vec<DialSetting>,
+    pub record: Vec<StationDay>,
+    pub place_name: String,
+    pub names: Vec<String>,
 }
 
-/// What of a stage is borrowed and not kept by it.
-pub struct Props<'a> {
-    titles: Vec<CanalTitle<'a>>,
-    was_canals: Vec<CanalShown<'a>>,
-    now_canals: Vec<CanalShown<'a>>,
+impl Land {
+    pub fn new(valley: Valley, years: i32, seed: u32) -> Self {
+        let (calendar, record) = super::valleys::record(&valley, years, seed);
+        let stock = ["Molino", "Vega", "Llano", "Acequia Norte", "Pueblo", "Cerro", "Rincón", "Alameda"];
+        let names = (0..valley.gates.len()).map(|gate| match stock.get(gate) {
+            Some(name) => (*name).to_owned(),
+            None => format!("Canal {}", gate + 1),
+        });
+        let names = names.collect();
+        Self { valley, calendar, record, place_name: "Valle Claro".to_owned(), names }
+    }
+
+    /// Runs the valley and hands the scene of a year to `look`.
+    pub fn show<T>(&self, play: Play<'_>, look: impl FnOnce(&Scene<'_>) -> T) -> T {
+        let source = Source { valley: &self.valley, calendar: &self.calendar, record: &self.record };
+        let mut answers = Answers::new(&source).unwrap();
+        assert!(answers.ask(Asked { dials: play.dials, beside: play.beside, year: play.year }));
+        answers.finish(&source).unwrap();
+        let gate_names: Vec<&str> = self.names.iter().map(String::as_str).collect();
+        let place = PlaceTold { name: &self.place_name, invented: true, fitted: play.fitted, gate_names: &gate_names };
+        let stage = Stage::new(place, &source, &answers);
+        let dials: Vec<DialSetting> = Dial::ALL
+            .into_iter()
+            .map(|dial| DialSetting { dial, value: play.dials.get(dial), range: dial.widest() })
+            .collect();
+        let props = stage.props();
+        let moment = Moment {
+            dials: &dials,
+            chosen: Some(play.chosen),
+            kind: play.kind,
+            day: play.day,
+            playing: play.playing,
+            stale: false,
+            units: play.units,
+            second: play.second,
+            doubt: None,
+        };
+        look(&stage.scene(&props, moment))
+    }
 }
 
-fn hold(valley: &Valley, dials: &Dials, calendar: &[CalendarDay], record: &[StationDay], year: usize) -> Held {
-    let mut basin_days = vec![BasinDay::default(); record.len()];
-    let basin = Basin::new(valley, dials);
-    let before = run_basin(valley, &basin, calendar, record, &mut basin_days);
-    let works = Works::new(valley, dials).unwrap();
-    let mut years = Vec::new();
-    let mut logs = vec![YearLog::new(valley)];
-    let water_year = year_of(calendar, year);
-    read_run(
-        valley,
-        &works,
-        calendar,
-        &basin_days,
-        &before,
-        |evening, _| {
-            if evening.today.water_year == water_year {
-                logs[0].day(evening);
-            }
-        },
-        |report| years.push(report),
-    );
-    let mut log = logs.remove(0);
-    log.close();
-    // The bands' snow of the chosen year, from a run that is told it.
-    let mut stores = basin.start();
-    let settle = settling(calendar, valley.start.settling_years);
-    let mut scratch = basin_days.clone();
-    basin.run(&mut stores, &calendar[..settle], &record[..settle], &mut scratch);
-    let mut band_snow_mm = Vec::new();
-    for (at, day) in calendar.iter().enumerate() {
-        basin.run(&mut stores, &calendar[at..=at], &record[at..=at], &mut scratch[at..=at]);
-        if day.water_year == water_year {
-            band_snow_mm.push(basin.band_snow_mm(&stores));
+/// What a test wants to see of a land.
+#[derive(Clone, Copy)]
+pub struct Play<'a> {
+    pub dials: Dials,
+    pub beside: Option<Dials>,
+    pub year: usize,
+    pub kind: YearKind,
+    pub day: usize,
+    pub chosen: usize,
+    pub playing: bool,
+    pub fitted: bool,
+    pub units: System,
+    pub second: Option<&'a Words>,
+}
+
+impl Play<'_> {
+    /// Mid-June of the second year, two degrees warmer, a little more demand.
+    pub fn warm() -> Self {
+        let dials = Dials::REST.with(Dial::Warming, 2.0).with(Dial::Diversion, 15.0);
+        Self {
+            dials,
+            beside: None,
+            year: 1,
+            kind: YearKind::Dry,
+            day: 256,
+            chosen: 0,
+            playing: false,
+            fitted: false,
+            units: System::Metric,
+            second: None,
         }
     }
-    Held { years, log, band_snow_mm }
 }
+
+/// Draws one of the pages of this test.
+pub fn draw(view: View, canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &Words) {
+    match view {
+        View::Valley => valley::draw(canvas, scene, theme, words),
+        View::Season => season::draw(canvas, scene, theme, words),
+        View::Canals => canals::draw(canvas, scene, theme, words),
+        other => panic!("{other:?} has its own test"),
+    }
+}
+
+/// The pages of this test.
+pub const PAGES: [View; 3] = [View::Valley, View::Season, View::Canals];

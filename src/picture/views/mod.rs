@@ -14,7 +14,6 @@ pub mod scene;
 pub mod season;
 pub mod valley;
 mod wording;
-pub mod year_log;
 
 use embedded_graphics::geometry::OriginDimensions;
 
@@ -41,10 +40,10 @@ pub enum View {
     Grid,
     /// How far the model can be believed.
     Trust,
-    /// A step of a lesson.
-    Lesson,
     /// What this is, and is not for.
     About,
+    /// A step of a lesson.
+    Lesson,
 }
 
 impl View {
@@ -57,8 +56,8 @@ impl View {
         Self::Years,
         Self::Grid,
         Self::Trust,
-        Self::Lesson,
         Self::About,
+        Self::Lesson,
     ];
 
     /// Its stable key, also the end of its message `view-…`.

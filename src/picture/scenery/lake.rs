@@ -74,8 +74,8 @@ pub fn draw_lake(
     if dead_share > 0.0 && dead_share < 1.0 {
         let y = libm::floor(lake.surface_y(dead_share)) + 0.5;
         let colour = if share > dead_share { theme.on_water } else { theme.rule };
-        let end = lake.across.1 - 1.0;
-        let begin = end - (end - lake.bank_x(y)) * 0.25;
+        let begin = lake.bank_x(y);
+        let end = begin + (lake.across.1 - begin) * 0.2;
         segment(canvas, Spot::new(begin, y), Spot::new(end, y), Stroke::solid(1.0), colour);
     }
     polygon(canvas, lake.dam(foot_y).into_iter(), theme.ink);

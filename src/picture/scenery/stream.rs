@@ -34,7 +34,6 @@ pub fn draw_channel(
     between(canvas, line(share), line(0.0), Between::FirstHigher, theme.water);
     if let Some(minimum) = minimum.filter(|minimum| *minimum > 0.0) {
         let depth = minimum.min(1.0);
-        polyline(canvas, line(depth), Stroke::solid(stroke.width_px + 1.0), theme.sky);
         polyline(canvas, line(depth), stroke, theme.ink);
     }
 }

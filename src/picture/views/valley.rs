@@ -52,9 +52,8 @@ impl Parts {
         let land_high = high + gap / 2 - season_high - gap;
         let season = area(layout.margin, top + land_high + gap, wide - 2 * layout.margin, season_high);
         let land = area(0, top, wide, land_high);
-        let river_deep = (layout.figure.px() as i32 / 2).max(7);
-        let fields_high =
-            (land_high.min(wide) / if layout.form == Form::Tall { 12 } else { 9 }).max(river_deep * 5 / 4);
+        let river_deep = (layout.figure.px() as i32 * 4 / 9).max(7);
+        let fields_high = (land_high.min(wide) / if layout.form == Form::Tall { 12 } else { 10 }).max(river_deep);
         let floor_high = river_deep + fields_high + 2 * gap;
         let (upper_high, foot_share) = match layout.form {
             Form::Tall => (land_high * 44 / 100, 60),

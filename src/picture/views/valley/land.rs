@@ -34,10 +34,11 @@ pub(super) fn draw_land(
             reservoir.storage_hm3.get(scene.day).map_or(0.0, |storage| storage / reservoir.capacity_hm3)
         };
         let was = scene.was.reservoir.as_ref().map(level).filter(|_| scene.changed());
-        let dead = now.dead_hm3 / now.capacity_hm3;
         let stroke = as_it_was(layout.line_px);
-        draw_lake(canvas, lake, (level(&now), was, dead), f64::from(parts.floor_y + 1), stroke, theme);
-        lake_words(canvas, layout, parts, &lake, (level(&now), was), theme, words);
+        draw_lake(canvas, lake, (level(&now), was), f64::from(parts.floor_y + 1), stroke, theme);
+        let stored = now.storage_hm3.get(scene.day).filter(|_| layout.roomy);
+        let stored = stored.map(|&hm3| words.quantity(hm3, Quantity::StoredVolume, scene.units, 3));
+        lake_words(canvas, layout, parts, &lake, (level(&now), was), stored.as_deref(), theme, words);
         inflow(canvas, layout, parts, scene, Some(&lake), theme);
     } else {
         inflow(canvas, layout, parts, scene, None, theme);
@@ -141,13 +142,15 @@ fn draw_mountain(
     }
 }
 
-/// Name and earlier level in the air above the lake, the level itself in the largest free part of the hollow.
+#[allow(clippy::too_many_arguments, reason = "one lake, drawn once from one place")]
+/// Name, content and earlier level in the air above the lake, the level itself in the largest free part of the hollow.
 fn lake_words(
     canvas: &mut Canvas<'_>,
     layout: &Layout,
     parts: &Parts,
     lake: &Lake,
     (level, was): (f64, Option<f64>),
+    stored: Option<&str>,
     theme: &Theme,
     words: &Words,
 ) {
@@ -158,6 +161,11 @@ fn lake_words(
         let text = words.say("picture-was", &[("value", share(was, words).into())]);
         let place = area(room.top_left.x, y, room.size.width as i32, layout.label.line_px());
         fit(canvas, &text, place, layout.label, theme.quiet, Across::Right);
+    }
+    if let Some(stored) = stored {
+        y -= layout.label.line_px();
+        let place = area(room.top_left.x, y, room.size.width as i32, layout.label.line_px());
+        fit(canvas, stored, place, layout.label, theme.ink, Across::Right);
     }
     y -= layout.strong.line_px();
     let place = area(room.top_left.x, y, room.size.width as i32, layout.strong.line_px());

@@ -11,6 +11,8 @@ pub mod water;
 #[cfg(feature = "std")]
 pub mod commands;
 #[cfg(feature = "std")]
+pub mod fit;
+#[cfg(feature = "std")]
 pub mod generator;
 #[cfg(feature = "std")]
 pub mod place;

@@ -29,7 +29,7 @@
 //! It makes an [`Offer`] from the place and the run as it was, sends an [`Event::Tick`] with the time gone by before
 //! each other event, hands the [`State`] to the picture when [`Needs::redraw`] says so, and asks [`Answers`]
 //! when [`Needs::answer`] does. The state is a value of fixed size without clock, words or water: the same events give
-//! the same state anywhere. A lesson leads by sending [`Event::Command`]s and by handing in a narrower offer; its guesses
+//! the same state anywhere. A lesson leads by sending [`Event::Command`]s and by handing in a narrower offer ([`State::refit`]); its guesses
 //! and steps are its own and stand beside this state, not in it.
 
 mod act;
@@ -41,6 +41,7 @@ pub mod keys;
 pub mod knob;
 mod needs;
 mod offer;
+mod refit;
 mod ring;
 mod scale;
 pub mod scene;
@@ -56,6 +57,7 @@ pub use command::Command;
 pub use event::{Event, Target};
 pub use needs::Needs;
 pub use offer::{Offer, OfferFault, OfferInput, Voice};
+pub use refit::Refit;
 pub use ring::{Item, MOST_ITEMS};
 pub use scale::{DialScale, MOST_STOPS};
 pub use setting::{MOST_OWN_SETTINGS, Misfit, NamedSetting, OwnSettings, Setting, SettingEntry};

@@ -59,6 +59,7 @@ pub(super) struct CanalReader {
     demand_m3: f64,
     delivered_m3: f64,
     stored_m3: f64,
+    account_m3: f64,
     span: Span,
     signs: CanalSigns,
 }
@@ -71,6 +72,7 @@ impl CanalReader {
             demand_m3: 0.0,
             delivered_m3: 0.0,
             stored_m3: 0.0,
+            account_m3: 0.0,
             span: Span::default(),
             signs: CanalSigns::default(),
         }
@@ -79,7 +81,7 @@ impl CanalReader {
     pub(super) fn day(&mut self, evening: &Evening, account_m3: f64) {
         let (demand_m3, delivered_m3) = (evening.demand_m3[self.gate], evening.river.canal_m3[self.gate]);
         self.stored_m3 += evening.river.stored_take_m3[self.gate];
-        self.signs.account_end_hm3 = account_m3 / M3_PER_HM3;
+        self.account_m3 = account_m3;
         if delivered_m3 > ANY_WATER_M3 {
             self.signs.last_water_date = Some(evening.today);
         }
@@ -116,14 +118,13 @@ impl CanalReader {
         };
         self.demand_m3 += due_m3;
         self.delivered_m3 += span.delivered_m3;
-        let share = span.delivered_m3 / due_m3;
         let signs = &mut self.signs;
-        if share >= FULL_SHARE {
+        if span.delivered_m3 >= FULL_SHARE * due_m3 {
             signs.days_full += span.days;
             signs.last_full_date = span.last;
         } else {
             signs.first_short_date = signs.first_short_date.or(span.first);
-            if share < CUT_SHARE {
+            if span.delivered_m3 < CUT_SHARE * due_m3 {
                 signs.days_cut += span.days;
             } else {
                 signs.days_short += span.days;
@@ -139,6 +140,7 @@ impl CanalReader {
             delivered_hm3: self.delivered_m3 / M3_PER_HM3,
             supply_ratio: ratio,
             stored_draw_hm3: self.stored_m3 / M3_PER_HM3,
+            account_end_hm3: self.account_m3 / M3_PER_HM3,
             ..self.signs
         }
     }

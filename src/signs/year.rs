@@ -71,6 +71,10 @@ pub struct YearReader {
     flow_m3: Vec<f64, 366>,
     half_passed: Vec<CalendarDay, 366>,
     moment: f64,
+    peak_flow_m3: f64,
+    lowest_week_m3: Option<f64>,
+    spring_m3: f64,
+    content_m3: f64,
     spill_m3: f64,
     flood_release_m3: f64,
     crop_evaporation_m3: f64,
@@ -98,6 +102,10 @@ impl YearReader {
             flow_m3: Vec::new(),
             half_passed: Vec::new(),
             moment: 0.0,
+            peak_flow_m3: 0.0,
+            lowest_week_m3: None,
+            spring_m3: 0.0,
+            content_m3: 0.0,
             spill_m3: 0.0,
             flood_release_m3: 0.0,
             crop_evaporation_m3: 0.0,
@@ -124,7 +132,7 @@ impl YearReader {
             if self.signs.fill_date.is_none() && evening.content_m3 >= full_m3 {
                 self.signs.fill_date = Some(today);
             }
-            self.signs.carryover_hm3 = Some(evening.content_m3 / M3_PER_HM3);
+            self.content_m3 = evening.content_m3;
         }
         for fields in &evening.fields[..evening.gates] {
             self.crop_evaporation_m3 += fields.crop_evaporation_m3;
@@ -172,26 +180,24 @@ impl YearReader {
 
     fn read_flow(&mut self, evening: &Evening) {
         let (today, flow_m3) = (evening.today, evening.basin.inflow_m3);
-        let flow_m3s = flow_m3 / SECONDS_PER_DAY;
-        if flow_m3s > self.signs.peak_flow_m3s {
-            self.signs.peak_flow_m3s = flow_m3s;
+        if flow_m3 > self.peak_flow_m3 {
+            self.peak_flow_m3 = flow_m3;
             self.signs.peak_flow_date = Some(today);
         }
         let (from, to) = self.spring_months;
         let month = today.month_day.month;
         let in_spring = if from <= to { (from..=to).contains(&month) } else { month >= from || month <= to };
         if in_spring {
-            self.signs.spring_volume_hm3 += flow_m3 / M3_PER_HM3;
+            self.spring_m3 += flow_m3;
         }
         self.moment += f64::from(today.day_of_water_year) * flow_m3;
         // A water year has at most 366 days, so there is always room.
         let _ = self.flow_m3.push(flow_m3);
         let _ = self.half_passed.push(today);
         if self.flow_m3.len() >= LOW_FLOW_DAYS {
-            let week = &self.flow_m3[self.flow_m3.len() - LOW_FLOW_DAYS..];
-            let mean_m3s = week.iter().sum::<f64>() / LOW_FLOW_DAYS as f64 / SECONDS_PER_DAY;
-            if self.signs.low_flow_7day_m3s.is_none_or(|lowest| mean_m3s < lowest) {
-                self.signs.low_flow_7day_m3s = Some(mean_m3s);
+            let week_m3: f64 = self.flow_m3[self.flow_m3.len() - LOW_FLOW_DAYS..].iter().sum();
+            if self.lowest_week_m3.is_none_or(|lowest_m3| week_m3 < lowest_m3) {
+                self.lowest_week_m3 = Some(week_m3);
             }
         }
     }
@@ -204,6 +210,9 @@ impl YearReader {
         }
         let total_m3: f64 = self.flow_m3.iter().sum();
         signs.natural_flow_hm3 = total_m3 / M3_PER_HM3;
+        signs.spring_volume_hm3 = self.spring_m3 / M3_PER_HM3;
+        signs.peak_flow_m3s = self.peak_flow_m3 / SECONDS_PER_DAY;
+        signs.low_flow_7day_m3s = self.lowest_week_m3.map(|week_m3| week_m3 / (LOW_FLOW_DAYS as f64 * SECONDS_PER_DAY));
         if total_m3 > 0.0 {
             signs.centre_of_volume_day = Some(self.moment / total_m3);
             let mut passed_m3 = 0.0;
@@ -214,6 +223,7 @@ impl YearReader {
             signs.half_volume_date = half.and_then(|day| self.half_passed.get(day).copied());
         }
         if self.has_reservoir {
+            signs.carryover_hm3 = Some(self.content_m3 / M3_PER_HM3);
             signs.spill_hm3 = Some(self.spill_m3 / M3_PER_HM3);
             signs.flood_release_hm3 = Some(self.flood_release_m3 / M3_PER_HM3);
         }

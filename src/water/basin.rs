@@ -9,7 +9,7 @@ use super::dials::Dials;
 use super::evaporation::SkyTable;
 use super::ground::{Ground, GroundStores};
 use super::lanes::Lanes;
-use super::power::{AnyPower, Halves, PowerCurve};
+use super::power::{AnyPower, Halves, HalvesByLane, PowerCurve};
 use super::slopes::{LaneWeather, RowStore, Slopes, total_of_one};
 use super::snow::melt_factor_mm_c_day;
 use super::units::M3_PER_MM_KM2;
@@ -129,10 +129,13 @@ impl Course {
     }
 }
 
-/// Runs `$run` with the recharge curve that fits `$power`: halves by multiplication, any other by our own power.
+/// Runs `$run` with the recharge curve that fits `$powers`, one a lane: halves by multiplication, any other by our own
+/// power. Halves that are common and the same in all lanes have a loop of their own.
 macro_rules! with_curve {
-    ($power:expr, $any:expr, |$curve:ident| $run:expr) => {{
-        let power = $power;
+    ($powers:expr, |$curve:ident| $run:expr) => {{
+        let powers = $powers;
+        let alike = powers.0.iter().all(|power| *power == powers.0[0]);
+        let power = if alike { powers.0[0] } else { f64::NAN };
         let halves = power * 2.0;
         match halves as u32 {
             2 if halves == 2.0 => {
@@ -163,10 +166,13 @@ macro_rules! with_curve {
                 let $curve = Halves::<8>;
                 $run
             }
-            _ => {
-                let $curve = $any;
-                $run
-            }
+            _ => match HalvesByLane::of_powers(powers) {
+                Some($curve) => $run,
+                None => {
+                    let $curve = AnyPower(powers);
+                    $run
+                }
+            },
         }
     }};
 }
@@ -219,8 +225,8 @@ impl<'v> Basin<'v> {
         record: &[StationDay],
         out: &mut [BasinDay],
     ) {
-        let power = self.valley.soil.recharge_power;
-        with_curve!(power, AnyPower(Lanes::splat(power)), |curve| self.run_with(curve, stores, calendar, record, out));
+        let powers = Lanes::splat(self.valley.soil.recharge_power);
+        with_curve!(powers, |curve| self.run_with(curve, stores, calendar, record, out));
     }
 
     /// Like [`Basin::run`], telling `each` the number of the day and the stores of the bands every evening.
@@ -254,6 +260,7 @@ impl<'v> Basin<'v> {
         let southern = self.valley.is_southern();
         // Local copies: the compiler keeps what nobody else can see in registers.
         let (mut rows, mut ground, mut channel) = (stores.rows, stores.ground[0], stores.channel[0]);
+        let mut wet_bulb_c = [Lanes::default(); MOST_BANDS];
         for ((today, record), out) in calendar.iter().zip(record).zip(out) {
             let weather = self.course.delta.day(self.valley, &self.sky, today, record);
             let sublimation_mm = sublimation_on(self.valley, today, southern);
@@ -263,9 +270,12 @@ impl<'v> Basin<'v> {
                 reference_evaporation_mm: Lanes::splat(weather.reference_evaporation_mm),
                 melt_factor: Lanes::splat(self.melt_factor[usize::from(today.day_of_year - 1) % 366]),
                 most_sublimation_mm: Lanes::splat(sublimation_mm),
-                wet_bulb_humidity_percent: split_humidity(self.valley, record),
             };
-            let [sum, _] = self.slopes.day::<false>(curve, today, &lanes, &mut rows);
+            let split_c = split_humidity(self.valley, record).map(|humidity_percent| {
+                self.slopes.wet_bulb(today, lanes.temperature_c, humidity_percent, &mut wet_bulb_c);
+                &wet_bulb_c
+            });
+            let [sum, _] = self.slopes.day::<false>(curve, today, &lanes, split_c, &mut rows);
             let sums = BasinDay {
                 snowfall_mm: total_of_one(sum.snowfall_mm),
                 snow_water_mm: total_of_one(sum.snow_water_mm),
@@ -316,10 +326,9 @@ impl<'v, const L: usize> Basins<'v, L> {
         out: &mut [&mut [BasinDay]; L],
     ) {
         let powers = Lanes(self.valleys.map(|valley| valley.soil.recharge_power));
-        let alike = powers.0.iter().all(|power| *power == powers.0[0]);
-        // Lanes that differ take the general curve: then a lane's bits are those of a run alone only to 1e-12.
-        let power = if alike { powers.0[0] } else { f64::NAN };
-        with_curve!(power, AnyPower(powers), |curve| self.run_with(curve, stores, calendar, record, out));
+        // Where one lane's power is no number of halves all take the general curve: then the bits of a lane that is one
+        // are those of a run alone only to 1e-12.
+        with_curve!(powers, |curve| self.run_with(curve, stores, calendar, record, out));
     }
 
     fn run_with(
@@ -332,6 +341,7 @@ impl<'v, const L: usize> Basins<'v, L> {
     ) {
         let southern = self.valleys[0].is_southern();
         let mut rows = stores.rows;
+        let mut wet_bulb_c = [Lanes::default(); MOST_BANDS];
         for (index, (today, record)) in calendar.iter().zip(record).enumerate() {
             let weather: [DialledDay; L] =
                 core::array::from_fn(|lane| self.courses[lane].delta.day(self.valleys[lane], &self.sky, today, record));
@@ -342,9 +352,12 @@ impl<'v, const L: usize> Basins<'v, L> {
                 reference_evaporation_mm: Lanes(weather.map(|w| w.reference_evaporation_mm)),
                 melt_factor: self.melt_factor[usize::from(today.day_of_year - 1) % 366],
                 most_sublimation_mm: Lanes(sublimation),
-                wet_bulb_humidity_percent: split_humidity(self.valleys[0], record),
             };
-            let [even, odd] = self.slopes.day::<true>(curve, today, &lanes, &mut rows);
+            let split_c = split_humidity(self.valleys[0], record).map(|humidity_percent| {
+                self.slopes.wet_bulb(today, lanes.temperature_c, humidity_percent, &mut wet_bulb_c);
+                &wet_bulb_c
+            });
+            let [even, odd] = self.slopes.day::<true>(curve, today, &lanes, split_c, &mut rows);
             let snowfall = even.snowfall_mm + odd.snowfall_mm;
             let snow_water = even.snow_water_mm + odd.snow_water_mm;
             let soil = even.soil_mm + odd.soil_mm;
@@ -395,8 +408,10 @@ fn sublimation_on(valley: &Valley, today: &CalendarDay, southern: bool) -> f64 {
     if is_cold_half(today.month_index(), southern) { valley.snow.sublimation_mm_day } else { 0.0 }
 }
 
+/// Humidity by which the day's rain and snow are split, %; `None` where air temperature splits them.
 #[inline(always)]
-fn split_humidity(valley: &Valley, record: &StationDay) -> f64 {
-    let wet_bulb_counts = valley.rain_snow.wet_bulb && record.precipitation_mm > 0.0;
-    if wet_bulb_counts { record.relative_humidity_percent } else { f64::NAN }
+fn split_humidity(valley: &Valley, record: &StationDay) -> Option<f64> {
+    let humidity_percent = record.relative_humidity_percent;
+    let counts = valley.rain_snow.wet_bulb && record.precipitation_mm > 0.0 && !humidity_percent.is_nan();
+    counts.then_some(humidity_percent)
 }

@@ -58,8 +58,6 @@ pub struct LaneWeather<const L: usize> {
     pub melt_factor: Lanes<L>,
     /// Most that the air takes from snow, mm.
     pub most_sublimation_mm: Lanes<L>,
-    /// %, where the split is by wet-bulb temperature and the day is wet; NaN otherwise.
-    pub wet_bulb_humidity_percent: f64,
 }
 
 /// Area-weighted sums of a day over the bands, mm.
@@ -142,23 +140,24 @@ impl<const L: usize> Slopes<L> {
     }
 
     /// One day over all bands. With `APART` the rows of even and of odd index are summed in the first and the second
-    /// sum; without it all go into the first.
+    /// sum; without it all go into the first. `wet_bulb_c` holds every
+    /// band's wet-bulb temperature where that splits rain from snow: worked out apart ([`Slopes::wet_bulb`]), since a call
+    /// in the loop would cost every day its registers.
     #[inline(never)]
     pub fn day<const APART: bool>(
         &self,
         curve: impl PowerCurve<L>,
         calendar: &CalendarDay,
         weather: &LaneWeather<L>,
+        wet_bulb_c: Option<&[Lanes<L>; MOST_BANDS]>,
         stores: &mut [RowStore<L>; MOST_BANDS],
     ) -> [LaneSums<L>; 2] {
         let mut sums = [LaneSums::default(); 2];
         let offsets = &self.offset_c[calendar.month_index()];
-        let by_wet_bulb = !weather.wet_bulb_humidity_percent.is_nan();
         for index in 0..self.used.min(MOST_BANDS) {
             let (row, store) = (&self.rows[index], &mut stores[index]);
             let air_c = weather.temperature_c + offsets[index];
-            let split_c =
-                if by_wet_bulb { air_c.map(|c| wet_bulb_c(c, weather.wet_bulb_humidity_percent)) } else { air_c };
+            let split_c = wet_bulb_c.map_or(air_c, |bands| bands[index]);
             let precipitation_mm = weather.precipitation_mm * row.precipitation_factor;
             let melt_factor = weather.melt_factor * row.melt_exposure;
             let snow = self.snow.day(
@@ -181,6 +180,21 @@ impl<const L: usize> Slopes<L> {
             sum.recharge_mm = sum.recharge_mm + row.area_share * soil.recharge_mm;
         }
         sums
+    }
+
+    /// Wet-bulb temperature of every band at the station's humidity.
+    #[cold]
+    #[inline(never)]
+    pub fn wet_bulb(
+        &self,
+        calendar: &CalendarDay,
+        temperature_c: Lanes<L>,
+        humidity_percent: f64,
+        out: &mut [Lanes<L>; MOST_BANDS],
+    ) {
+        for (out, offset) in out.iter_mut().zip(&self.offset_c[calendar.month_index()]).take(self.used) {
+            *out = (temperature_c + *offset).map(|air_c| wet_bulb_c(air_c, humidity_percent));
+        }
     }
 }
 

@@ -50,7 +50,7 @@ impl<const L: usize> SoilConstants<L> {
         evaporation_mm: Lanes<L>,
         covered_share: Lanes<L>,
     ) -> SoilDay<L> {
-        let passed_mm = water_mm * curve.of(*soil_mm * self.per_capacity_mm);
+        let passed_mm = curve.times(water_mm, *soil_mm * self.per_capacity_mm);
         let filled_mm = *soil_mm + (water_mm - passed_mm);
         let overflow_mm = (filled_mm - self.capacity_mm).positive();
         let wet_mm = filled_mm.least(self.capacity_mm);

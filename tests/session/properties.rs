@@ -60,6 +60,30 @@ proptest! {
     }
 
     #[test]
+    fn any_place_takes_over_from_any_other(from: u32, to: u32, seed: u32) {
+        let (first, second) = (random_offer(from), random_offer(to));
+        let mut state = walk(&first, seed, 100, |_, _, _, _| {});
+        let before = *state.shown();
+        // Even the wrong offer breaks nothing, though the state is then no good.
+        let mut astray = state;
+        let mut next = numbers(seed);
+        for _ in 0..100 {
+            astray.step(random_event(&mut next), &second);
+        }
+
+        let refit = state.refit(&second);
+        assert_eq!(state.check(&second), Ok(()));
+        for dial in Dial::ALL {
+            let stays = before.dials.get(dial) == state.shown().dials.get(dial);
+            assert_eq!(stays, !refit.moved.contains(&dial), "{dial:?}");
+        }
+        assert_eq!(refit.beside_gone, before.beside != state.shown().beside);
+        assert_eq!(state.shown().own.count() + refit.own_gone.count(), before.own.count());
+        let again = state.refit(&second);
+        assert_eq!(again, Refit::default(), "what fits stays");
+    }
+
+    #[test]
     fn undo_restores_what_a_turn_changed_and_nothing_else(
         seed: u32, dial in 0..10_usize, detents in -20..20_i32, since_ms: u32,
     ) {

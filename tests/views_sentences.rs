@@ -157,9 +157,9 @@ fn canals_says(scene: &Scene<'_>, said: &str, words: &Words) -> &'static str {
             }
         };
     }
-    let gone_or_come =
+    let mut gone_or_come =
         canals.iter().filter(|(_, was, now)| was.last_full_date.is_some() != now.last_full_date.is_some());
-    if let Some((name, was, now)) = gone_or_come.last() {
+    if let Some((name, was, now)) = gone_or_come.next_back() {
         return match (was.last_full_date, now.last_full_date) {
             (Some(was), _) => {
                 assert_says(said, &[name, " has no full day now. Before, the last one was ", &date(was, scene, words)]);
@@ -177,7 +177,8 @@ fn canals_says(scene: &Scene<'_>, said: &str, words: &Words) -> &'static str {
         assert_eq!(said, "Every canal has the same last full day as before.");
         return "same";
     }
-    let (name, was, now) = shifts.filter(|(_, was, now)| days_between(*was, *now).abs() == most).last().unwrap();
+    let mut shifts = shifts;
+    let (name, was, now) = shifts.rfind(|(_, was, now)| days_between(*was, *now).abs() == most).unwrap();
     let days = days_between(was, now);
     let way = if days < 0 { "sooner" } else { "later" };
     let dates = [date(now, scene, words), date(was, scene, words)];

@@ -145,3 +145,18 @@ fn said_in_two_languages_at_once() {
         }
     });
 }
+
+#[test]
+fn no_size_and_no_day_makes_it_panic() {
+    let (words, _) = Words::new("es-CL");
+    let land = Land::new(steep_valley(), 3, 1);
+    for day in [0, 365, 9999, usize::MAX] {
+        land.show(Play { day, beside: Some(all_turned(0.2)), ..Play::warm() }, |scene| {
+            for (wide, high) in [(0, 0), (1, 1), (7, 300), (300, 7), (64, 48), (120, 900), (4000, 20), (333, 251)] {
+                for view in PAGES {
+                    paint(wide, high, |canvas| draw(view, canvas, scene, &Theme::DARK, &words));
+                }
+            }
+        });
+    }
+}

@@ -143,7 +143,7 @@ impl<'a> Canvas<'a> {
         }
         let skip = usize::try_from(left.saturating_sub(x)).unwrap_or(0);
         let keep = usize::try_from(right.saturating_sub(x)).unwrap_or(0).min(coverage.len());
-        let Some(row) = coverage.get(skip..keep) else { return };
+        let Some(row) = coverage.get(skip..keep).filter(|row| !row.is_empty()) else { return };
         let start = x + skip as i32;
         let (first, colour) = (self.index(start, y), paint.colour());
         let pixels = &mut self.pixels[first..first + row.len()];
@@ -284,5 +284,9 @@ mod tests {
         canvas.fill(Rectangle::new(Point::new(i32::MAX, i32::MIN), Size::new(u32::MAX, u32::MAX)), Rgb565::WHITE);
         canvas.blend_row(i32::MIN, 0, &[9; 40], &Paint::Solid(Rgb565::WHITE).ready());
         assert_eq!(canvas.rows().count(), 0);
+        let mut pixels = [Rgb565::BLACK; 12];
+        let mut canvas = Canvas::new(&mut pixels, 4, 3).unwrap();
+        canvas.blend_row(9, 2, &[9; 4], &Paint::Solid(Rgb565::WHITE).ready());
+        assert_eq!(pixels, [Rgb565::BLACK; 12]);
     }
 }

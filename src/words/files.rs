@@ -25,6 +25,7 @@ macro_rules! embedded {
 pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en":
         "cautions.ftl",
+        "columns.ftl",
         "command.ftl",
         "crops.ftl",
         "dates.ftl",
@@ -40,15 +41,18 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "signs.ftl",
         "tell.ftl",
         "terms.ftl",
-        "units.ftl";
+        "units.ftl",
+        "weather.ftl";
     "en-GB":
         "dates.ftl",
         "ledger.ftl",
         "pages.ftl",
+        "tell.ftl",
         "terms.ftl",
         "units.ftl";
     "es":
         "cautions.ftl",
+        "columns.ftl",
         "command.ftl",
         "crops.ftl",
         "dates.ftl",
@@ -64,7 +68,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "signs.ftl",
         "tell.ftl",
         "terms.ftl",
-        "units.ftl";
+        "units.ftl",
+        "weather.ftl";
     "es-AR":
         "numbers.ftl",
         "terms.ftl";
@@ -97,5 +102,6 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "pages.ftl",
         "problems.ftl",
         "signs.ftl",
+        "tell.ftl",
         "terms.ftl";
 };

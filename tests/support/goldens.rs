@@ -5,8 +5,8 @@ use std::fs::{self, File};
 use std::io::BufReader;
 use std::path::{Path, PathBuf};
 
+use deshielo::picture::Canvas;
 use deshielo::picture::strict::Strict;
-use deshielo::picture::{Canvas, Theme};
 use embedded_graphics::pixelcolor::{Rgb565, RgbColor};
 
 fn bytes(pixels: &[Rgb565]) -> Vec<u8> {

@@ -121,20 +121,22 @@ impl Mountain {
 
     /// Lays the snow on the rock, with a fine edge where it meets the sky.
     pub fn draw_snow(&self, canvas: &mut Canvas<'_>, snow: MountainSnow<'_>, theme: &Theme) {
-        let top = self.snow_top(snow);
-        let ground = top.clone().map(|(spot, _)| Spot::new(spot.x, self.ground_y(spot.x)));
-        // A thin cover is still seen: snow begins a little under the ground.
-        let cover = top.clone().map(|(spot, _)| spot);
-        between(canvas, cover, ground.map(|spot| Spot::new(spot.x, spot.y + 0.75)), Between::FirstHigher, theme.snow);
-        let edge = top.map(|(spot, thick)| if thick > 0.2 { spot } else { Spot::new(spot.x, f64::NAN) });
-        polyline(canvas, edge, Stroke::solid(1.0), theme.snow_edge);
+        let cover = self.snow_top(snow).map(|(top, _)| top);
+        // A thin cover is still seen: snow reaches a little into the ground.
+        let foot = |thick: f64| if thick > 0.0 { thick + 0.75 } else { 0.0 };
+        let ground = self.snow_top(snow).map(|(top, thick)| Spot::new(top.x, top.y + foot(thick)));
+        between(canvas, cover, ground, Between::FirstHigher, theme.snow);
+        polyline(canvas, self.snow_line(snow), Stroke::solid(1.0), theme.snow_edge);
     }
 
     /// Dashes where the snow lay.
     pub fn draw_snow_outline(&self, canvas: &mut Canvas<'_>, snow: MountainSnow<'_>, stroke: Stroke, theme: &Theme) {
-        let line =
-            self.snow_top(snow).map(|(spot, thick)| if thick > 0.2 { spot } else { Spot::new(spot.x, f64::NAN) });
-        polyline(canvas, line, stroke, theme.ink);
+        polyline(canvas, self.snow_line(snow), stroke, theme.ink);
+    }
+
+    /// The top of the snow where there is any, with gaps where there is none.
+    fn snow_line<'a>(&'a self, snow: MountainSnow<'a>) -> impl Iterator<Item = Spot> + Clone + 'a {
+        self.snow_top(snow).map(|(top, thick)| if thick > 0.2 { top } else { Spot::new(top.x, f64::NAN) })
     }
 
     /// Marks a height on the rock with a short level line at the curve.
@@ -145,44 +147,39 @@ impl Mountain {
         }
     }
 
-    /// The top of the snow column by column, with its thickness. Between two bands the thickness changes over a few
-    /// pixels, as drifts do.
+    /// The top of the snow at the corners of every band, with its thickness. Towards a neighbour the thickness changes
+    /// over a few pixels, as drifts do, and is the mean of both on the border.
     fn snow_top<'a>(&'a self, snow: MountainSnow<'a>) -> impl Iterator<Item = (Spot, f64)> + Clone + 'a {
-        let from = self.area.top_left.x;
-        let wide = self.area.size.width as i32;
-        let thickness = move |x: f64| {
-            let count = self.spans.len();
-            let at = self.spans.iter().position(|&(_, right)| x < right).unwrap_or(count.saturating_sub(1));
-            let of = |span: usize| {
-                let band = count.checked_sub(span + 1)?;
-                snow.band_mm.get(band).map(|mm| mm.max(0.0) * snow.px_per_mm)
-            };
-            let here = of(at).unwrap_or(0.0);
-            let Some(&(left, right)) = self.spans.get(at) else { return 0.0 };
-            let drift = ((right - left) / 2.0).min(4.0);
-            if drift <= 0.0 {
-                return here;
-            }
-            // Half of the way to the neighbour lies on either side of the border.
-            let (to_left, to_right) = (x - left, right - x);
-            let (next, distance) = if to_left < to_right && at > 0 {
-                (of(at - 1).unwrap_or(here), to_left)
-            } else if to_right <= to_left && at + 1 < count {
-                (of(at + 1).unwrap_or(here), to_right)
-            } else {
-                return here;
-            };
-            let share = if distance < drift { 0.5 * (1.0 - distance / drift) } else { 0.0 };
-            here + (next - here) * share
+        let count = self.spans.len();
+        let thick = move |span: usize| {
+            let mm = count.checked_sub(span + 1).and_then(|band| snow.band_mm.get(band));
+            mm.map_or(0.0, |mm| mm.max(0.0) * snow.px_per_mm)
         };
-        // Half pixels: the first and the last column are covered in full.
-        (0..=wide).map(move |column| {
-            let x = f64::from(from + column);
-            let thick = thickness(x);
-            (Spot::new(x, self.ground_y(x) - thick), thick)
-        })
+        let corner = |at: usize| self.corners.get(at).copied().unwrap_or(Spot::new(f64::NAN, f64::NAN));
+        let tops = self.spans.iter().enumerate().flat_map(move |(span, &(left, right))| {
+            let here = thick(span);
+            let before = if span > 0 { thick(span - 1) } else { here };
+            let after = if span + 1 < count { thick(span + 1) } else { here };
+            // Corners of the ground: the left edge, the middle and the right edge of each band.
+            let [first, middle, last] = [corner(2 * span), corner(2 * span + 1), corner(2 * span + 2)];
+            let half = (right - left) / 2.0;
+            let share = if half > 0.0 { (DRIFT_PX / half).min(1.0) } else { 0.0 };
+            let towards =
+                |from: Spot| Spot::new(from.x + (middle.x - from.x) * share, from.y + (middle.y - from.y) * share);
+            [
+                (first, (before + here) / 2.0),
+                (towards(first), here),
+                (middle, here),
+                (towards(last), here),
+                (last, (here + after) / 2.0),
+            ]
+        });
+        tops.map(|(ground, thick)| (Spot::new(ground.x, ground.y - thick), thick))
     }
 }
+
+/// Over so many pixels on each side of a border the snow of one band gives way to that of the next.
+const DRIFT_PX: f64 = 4.0;
 
 #[cfg(test)]
 mod tests {
@@ -212,7 +209,7 @@ mod tests {
         let mountain = Mountain::new(&[band(1000.0, 50.0), band(1500.0, 50.0)], BOX);
         let snow = MountainSnow { band_mm: &[0.0, 100.0], px_per_mm: 0.1 };
         let thick = |x: f64| mountain.snow_top(snow).find(|(spot, _)| spot.x == x).unwrap().1;
-        assert_eq!((thick(35.0), thick(85.0)), (10.0, 0.0));
+        assert_eq!([35.0, 56.0, 64.0, 85.0].map(thick), [10.0, 10.0, 0.0, 0.0]);
         // On the border the two meet half-way.
         assert_eq!(thick(60.0), 5.0);
     }

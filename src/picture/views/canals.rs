@@ -71,7 +71,7 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
 fn grid_of(layout: &Layout, rows: Rectangle, scene: &Scene<'_>, words: &Words) -> Grid {
     let count = scene.canals.len() as i32;
     let high = rows.size.height as i32;
-    let named = high / count >= layout.note.cap_px() + layout.note.descent_px() + 1;
+    let named = high / count > line_high(layout.note);
     let free = if named { high } else { high - layout.note.line_px() };
     let row_high = (free / count).clamp(2, layout.strong.line_px() * 5);
     let two_lines = row_high > line_high(Face::bold(layout.label.px())) + line_high(layout.note) + 1;
@@ -176,6 +176,7 @@ fn window(scene: &Scene<'_>) -> (usize, usize) {
     (from, to)
 }
 
+#[allow(clippy::too_many_arguments, reason = "one strip, drawn once from one place")]
 /// As it was as a dashed line that ends in a tick on its last full day, over the strip with your changes.
 fn draw_strip(
     canvas: &mut Canvas<'_>,

@@ -1,7 +1,6 @@
 //! What every page has: the answer on top, day and year under it, the dials along the bottom, place and page at the foot.
 
 use embedded_graphics::geometry::Point;
-use embedded_graphics::primitives::Rectangle;
 
 use super::dial_cards;
 use super::layout::{Form, Layout, area, bottom, right};
@@ -28,6 +27,14 @@ pub fn draw_frame(
     date_line(canvas, layout, scene, theme, words);
     dial_cards::draw_dials(canvas, layout, scene, theme, words);
     footer(canvas, layout, scene, view, theme, words);
+}
+
+/// Which of the scene's dials lies under a finger, and how far along its card, 0 to 1; `None` off the cards.
+pub fn dial_at(layout: &Layout, scene: &Scene<'_>, x: i32, y: i32) -> Option<(usize, f64)> {
+    let finger = Point::new(x, y);
+    let (index, card) = dial_cards::places(layout, scene).find(|(_, card)| card.contains(finger))?;
+    let share = (f64::from(x - card.top_left.x) + 0.5) / f64::from(card.size.width.max(1));
+    Some((index, share))
 }
 
 /// The answer in the room's one or two languages, one line feed between them.

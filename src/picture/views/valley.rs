@@ -46,15 +46,14 @@ impl Parts {
         let whole = layout.across(layout.content);
         let (wide, high, gap) = (whole.size.width as i32, whole.size.height as i32, layout.gap);
         let top = whole.top_left.y - gap / 2;
-        let season_high = (high * if layout.form == Form::Tall { 18 } else { 26 } / 100)
-            .max(layout.note.line_px() * 3)
-            .min(layout.note.line_px() * 9);
+        let season_share = if layout.form == Form::Tall { 18 } else { 25 };
+        let note_high = layout.note.line_px();
+        let season_high = (high * season_share / 100).max(note_high * 11 / 4).min(note_high * 9);
         let land_high = high + gap / 2 - season_high - gap;
         let season = area(layout.margin, top + land_high + gap, wide - 2 * layout.margin, season_high);
         let land = area(0, top, wide, land_high);
-        let river_deep = (layout.figure.px() as i32 / 2).max(7);
-        let fields_high =
-            (land_high.min(wide) / if layout.form == Form::Tall { 12 } else { 9 }).max(river_deep * 5 / 4);
+        let river_deep = (layout.figure.px() as i32 * 4 / 9).max(7);
+        let fields_high = (land_high.min(wide) / if layout.form == Form::Tall { 12 } else { 10 }).max(river_deep);
         let floor_high = river_deep + fields_high + 2 * gap;
         let (upper_high, foot_share) = match layout.form {
             Form::Tall => (land_high * 44 / 100, 60),

@@ -27,17 +27,18 @@ pub(super) fn draw_land(
 ) {
     canvas.fill(parts.land, theme.sky);
     let lake = lake_of(layout, parts, scene);
-    draw_ground(canvas, layout, parts, lake.is_some(), theme);
+    draw_ground(canvas, layout, parts, lake, theme);
     draw_mountain(canvas, layout, parts, scene, theme, words);
     if let (Some(lake), Some(now)) = (lake, scene.now.reservoir) {
         let level = |reservoir: &ReservoirShown<'_>| {
             reservoir.storage_hm3.get(scene.day).map_or(0.0, |storage| storage / reservoir.capacity_hm3)
         };
         let was = scene.was.reservoir.as_ref().map(level).filter(|_| scene.changed());
-        let dead = now.dead_hm3 / now.capacity_hm3;
         let stroke = as_it_was(layout.line_px);
-        draw_lake(canvas, lake, (level(&now), was, dead), f64::from(parts.floor_y + 1), stroke, theme);
-        lake_words(canvas, layout, parts, &lake, (level(&now), was), theme, words);
+        draw_lake(canvas, lake, (level(&now), was), f64::from(parts.floor_y + 1), stroke, theme);
+        let stored = now.storage_hm3.get(scene.day).filter(|_| layout.roomy);
+        let stored = stored.map(|&hm3| words.quantity(hm3, Quantity::StoredVolume, scene.units, 3));
+        lake_words(canvas, layout, parts, &lake, (level(&now), was), stored.as_deref(), theme, words);
         inflow(canvas, layout, parts, scene, Some(&lake), theme);
     } else {
         inflow(canvas, layout, parts, scene, None, theme);
@@ -58,10 +59,10 @@ fn lake_of(layout: &Layout, parts: &Parts, scene: &Scene<'_>) -> Option<Lake> {
 }
 
 /// The rock under everything: level to the dam, then down to the valley floor, which falls a little to the river's end.
-fn draw_ground(canvas: &mut Canvas<'_>, layout: &Layout, parts: &Parts, has_lake: bool, theme: &Theme) {
+fn draw_ground(canvas: &mut Canvas<'_>, layout: &Layout, parts: &Parts, lake: Option<Lake>, theme: &Theme) {
     let (_, dam) = parts.lake_across;
     let (wide, foot) = (f64::from(right(parts.land)), f64::from(bottom(parts.land)));
-    let (rim, floor) = (f64::from(if has_lake { parts.rim_y } else { parts.floor_y }), f64::from(parts.floor_y));
+    let (rim, floor) = (f64::from(if lake.is_some() { parts.rim_y } else { parts.floor_y }), f64::from(parts.floor_y));
     let dam = f64::from(dam);
     if layout.form == Form::Tall {
         let low = f64::from(parts.river.top_left.y);
@@ -77,7 +78,8 @@ fn draw_ground(canvas: &mut Canvas<'_>, layout: &Layout, parts: &Parts, has_lake
         return;
     }
     let end = floor + floor_fall(layout);
-    let corners = [(0.0, rim), (dam, rim), (dam, floor), (wide, end), (wide, foot), (0.0, foot)];
+    let river = river_left(parts, lake);
+    let corners = [(0.0, rim), (dam, rim), (dam, floor), (river, floor), (wide, end), (wide, foot), (0.0, foot)];
     polygon(canvas, corners.into_iter().map(|(x, y)| Spot::new(x, y)), theme.rock);
 }
 
@@ -132,19 +134,23 @@ fn draw_mountain(
         words.quantity(mm, Quantity::SnowWater, scene.units, 2)
     };
     let face = if layout.roomy { layout.figure } else { Face::bold(layout.strong.px() + 4) };
-    line(canvas, &words.say("picture-snow", &[("amount", depth(&scene.now).into())]), face);
-    if scene.changed() {
-        line(canvas, &words.say("picture-was", &[("value", depth(&scene.was).into())]), layout.label);
+    let (was, now) = (depth(&scene.was), depth(&scene.now));
+    let same = was == now;
+    line(canvas, &words.say("picture-snow", &[("amount", now.into())]), face);
+    if scene.changed() && !same {
+        line(canvas, &words.say("picture-was", &[("value", was.into())]), layout.label);
     }
 }
 
-/// Name and earlier level in the air above the lake, the level itself in the largest free part of the hollow.
+#[allow(clippy::too_many_arguments, reason = "one lake, drawn once from one place")]
+/// Name, content and earlier level in the air above the lake, the level itself in the largest free part of the hollow.
 fn lake_words(
     canvas: &mut Canvas<'_>,
     layout: &Layout,
     parts: &Parts,
     lake: &Lake,
     (level, was): (f64, Option<f64>),
+    stored: Option<&str>,
     theme: &Theme,
     words: &Words,
 ) {
@@ -155,6 +161,11 @@ fn lake_words(
         let text = words.say("picture-was", &[("value", share(was, words).into())]);
         let place = area(room.top_left.x, y, room.size.width as i32, layout.label.line_px());
         fit(canvas, &text, place, layout.label, theme.quiet, Across::Right);
+    }
+    if let Some(stored) = stored {
+        y -= layout.label.line_px();
+        let place = area(room.top_left.x, y, room.size.width as i32, layout.label.line_px());
+        fit(canvas, stored, place, layout.label, theme.ink, Across::Right);
     }
     y -= layout.strong.line_px();
     let place = area(room.top_left.x, y, room.size.width as i32, layout.strong.line_px());
@@ -246,7 +257,7 @@ fn draw_river(
     let today = |series: &[f64]| series.get(scene.day).copied().map_or(0.0, depth);
     let bed = parts.river;
     let (top, deep) = (f64::from(bed.top_left.y), f64::from(bed.size.height));
-    let foot = lake.map_or(f64::from(parts.lake_across.1), |lake| lake.dam_foot_x(f64::from(parts.floor_y + 1)));
+    let foot = river_left(parts, lake);
     let share = today(now.river_m3s);
     let levels = (share, Some(today(now.minimum_m3s)));
     let stroke = as_it_was(layout.line_px);
@@ -263,6 +274,11 @@ fn draw_river(
         return;
     }
     draw_channel(canvas, (foot, edge), (top, deep, floor_fall(layout)), levels, stroke, theme);
+}
+
+/// Where the river begins below the dam.
+fn river_left(parts: &Parts, lake: Option<Lake>) -> f64 {
+    lake.map_or(f64::from(parts.lake_across.1), |lake| lake.dam_foot_x(f64::from(parts.floor_y + 1)))
 }
 
 /// How far the valley floor falls from the dam to the edge, in pixels.

@@ -6,7 +6,7 @@ use crate::picture::chart::{DayMark, swatch};
 use crate::picture::lettering::{Across, Face, measure};
 use crate::picture::views::layout::{Layout, area, bottom, right};
 use crate::picture::views::scene::{CanalShown, CanalTitle, Scene};
-use crate::picture::views::wording::{fit, name_within, right_since, share};
+use crate::picture::views::wording::{DOT, fit, name_within, right_since, share};
 use crate::picture::{Canvas, Theme};
 use crate::words::{Quantity, Words};
 
@@ -23,14 +23,14 @@ pub(super) fn draw_list(
     let (row_high, note_high) = if layout.roomy {
         (layout.label.line_px(), layout.note.line_px())
     } else {
-        (tight(layout.label), tight(layout.note))
+        (tight(layout.label) - 1, tight(layout.note))
     };
     let rows = scene.canals.len() as i32;
-    let least_row = layout.label.cap_px() + layout.label.descent_px();
+    let least_row = layout.label.cap_px() + layout.label.descent_px() + 1;
     // The minimum gets a row of its own where that takes no canal's row away.
     let minimum = minimum_said(scene, words).filter(|text| measure(text, Face::regular(9)).width as i32 <= wide);
     let asks = minimum.is_some();
-    let room_for_both = room.size.height as i32 - 2 * note_high - row_high - layout.gap >= rows * least_row;
+    let room_for_both = room.size.height as i32 - note_high - row_high - layout.gap >= rows * least_row;
     let minimum_high = if asks && room_for_both { note_high } else { 0 };
     let river_top = bottom(room) - row_high - minimum_high;
     let river = area(left, river_top, wide, bottom(room) - river_top);
@@ -43,7 +43,7 @@ pub(super) fn draw_list(
     let order = words.say("picture-oldest-first", &[]);
     let fits = measure(&order, Face::regular(9)).width as i32 <= wide;
     let heading = if fits { order } else { words.say("picture-canals", &[]) };
-    let free = river_top - layout.gap / 2 - (y + note_high);
+    let free = river_top - layout.gap / 2 - y;
     let columns = if rows * least_row > free && wide >= i32::from(layout.label.px()) * 20 { 2 } else { 1 };
     let rows = (rows + columns - 1) / columns;
     if rows * least_row > free {
@@ -52,8 +52,13 @@ pub(super) fn draw_list(
         draw_counts(canvas, layout, area(left, y + row_high, wide, river_top - y - row_high), scene, theme, words);
         return;
     }
-    fit(canvas, &heading, area(left, y, wide, note_high), layout.note, theme.quiet, Across::Left);
-    y += note_high;
+    let mut free = free;
+    // The heading is what a small screen can do without: the page of the canals tells the years of the rights.
+    if rows * least_row + note_high <= free {
+        fit(canvas, &heading, area(left, y, wide, note_high), layout.note, theme.quiet, Across::Left);
+        y += note_high;
+        free -= note_high;
+    }
     let step = (free / rows).min(layout.strong.line_px() * 2);
     let gutter = layout.gap * 4;
     let across = (wide - gutter * (columns - 1)) / columns;
@@ -86,9 +91,14 @@ fn draw_row(
     let tall = layout.strong.cap_px() + layout.strong.descent_px() + 2 <= high;
     let strong = if tall { layout.strong } else { Face::bold(layout.label.px() - 1) };
     let face = if mark == DayMark::Idle { layout.label } else { strong };
-    // The thin line of a canal that does not ask says so where its word would take the name's room.
+    // The pattern says it too: where word and name have no room side by side, the name goes first.
     let crowded = wide - side - (measure(&text, face).width as i32) < measure(title.name, layout.label).width as i32;
-    let text = if mark == DayMark::Idle && crowded { String::new() } else { text };
+    let text = if mark != DayMark::Short && crowded { String::new() } else { text };
+    let flow = canal.delivered_m3s.get(scene.day).filter(|_| layout.roomy && mark != DayMark::Idle);
+    let text = match flow {
+        Some(&m3s) => format!("{}{DOT}{text}", words.quantity(m3s, Quantity::Flow, scene.units, 2)),
+        None => text,
+    };
     let taken = (measure(&text, face).width as i32 + 1).min(wide * 2 / 3);
     fit(canvas, &text, area(right(row) - taken, top, taken, high), face, colour, Across::Right);
     let space = (wide - side - taken - layout.gap).max(0);

@@ -5,7 +5,9 @@ use crate::picture::views::facts::{AllYears, PlaceFacts, YearMeasure};
 use crate::picture::views::scene::{
     CanalShown, CanalTitle, DialSetting, Doubt, ReservoirShown, RunShown, Scene, YearKind, YearShown,
 };
+use crate::place::Place;
 use crate::water::calendar::CalendarDay;
+use crate::water::canals::SharingRule;
 use crate::water::dials::{DialRange, Dials};
 use crate::water::valley::{Band, Valley};
 use crate::words::{System, Words};
@@ -30,6 +32,22 @@ pub struct PlaceTold<'a> {
     pub fitted: bool,
     /// Names of its canals and towns in downstream order.
     pub gate_names: &'a [&'a str],
+}
+
+/// What the about page tells of a place, in the words of `tag`.
+pub fn facts_of<'p>(place: &'p Place, percent_per_degree: Option<f64>, tag: &str) -> PlaceFacts<'p> {
+    let rule = match place.valley.rule {
+        SharingRule::Seniority => "seniority",
+        SharingRule::Proportional => "proportional",
+        SharingRule::Rotation => "rotation",
+    };
+    PlaceFacts {
+        source: place.source.as_ref().map(|source| source.get(tag)),
+        evaporation_key: Some(place.notes.evaporation.choice.key()),
+        percent_per_degree,
+        rule_key: (!place.valley.gates.is_empty()).then_some(rule),
+        filled_values: Some(place.notes.filled_gaps.iter().map(|gaps| gaps.days).sum()),
+    }
 }
 
 /// The series of the chosen year, owned; made anew when an answer or the year changes, not for every frame.

@@ -8,6 +8,8 @@ use deshielo::picture::views::term::{Explained, terms};
 use deshielo::picture::views::{Scene, View, about, help};
 use deshielo::session::help::key_lines;
 use deshielo::session::keys::KEYS;
+use deshielo::session::{self, Command, Event, Item, Offer, OfferInput, State, YearList};
+use deshielo::water::dials::Dial;
 use deshielo::words::{KNOWN_TAGS, Words};
 use embedded_graphics::geometry::Size;
 
@@ -62,6 +64,39 @@ fn every_caution_is_on_a_sheet_in_every_language_and_size() {
             }
         });
     }
+}
+
+#[test]
+fn every_sheet_is_reached_by_turning_on_through_the_views() {
+    let views = session::View::ALL.to_vec();
+    let range = Dial::Warming.widest();
+    let input = OfferInput {
+        dials: vec![(Dial::Warming, range)],
+        years: YearList::by_flow([(365, 1.0)]).unwrap(),
+        views,
+        terms: session::View::ALL.map(|_| 0),
+        voices: vec![session::Voice { first: "en".into(), second: None }],
+        system: deshielo::words::System::Metric,
+        shade: session::Shade::Light,
+        settings: Vec::new(),
+        help_pages: 1,
+    };
+    let offer = Offer::new(input).unwrap().with_about_sheets(4);
+    let mut state = State::new(&offer);
+    state.step(Event::Command(Command::Choose(Item::View)), &offer);
+    let mut seen = Vec::new();
+    for _ in 0..session::VIEWS + 3 {
+        seen.push((state.shown().view, state.shown().sheet));
+        state.step(Event::Turn { detents: 1, since_ms: u32::MAX }, &offer);
+        state.check(&offer).unwrap();
+    }
+    assert_eq!(seen.iter().collect::<BTreeSet<_>>().len(), session::VIEWS + 3);
+    assert_eq!((state.shown().view, state.shown().sheet), seen[0], "the circle closes");
+    state.step(Event::Turn { detents: -2, since_ms: u32::MAX }, &offer);
+    assert_eq!((state.shown().view, state.shown().sheet), (session::View::About, 3));
+    // On a larger screen there are fewer sheets.
+    state.refit(&offer.with_about_sheets(2));
+    assert_eq!(state.shown().sheet, 1);
 }
 
 #[test]

@@ -69,9 +69,9 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
     let faces = [larger, layout.label, layout.note].into_iter().skip(usize::from(!airy));
     let face = faces.into_iter().find(|face| rows_in(body, *face) >= outs.len());
     let face = face.unwrap_or(layout.note);
-    merge_smallest(&mut outs, rows_in(body, face));
-    merge_smallest(&mut ins, rows_in(body, face));
-    let sheet = sheet_of(&layout, body, face, (&ins, &outs), scene, words);
+    merge_smallest(&mut outs, rows_in(body, face), Look::Ground);
+    merge_smallest(&mut ins, rows_in(body, face), Look::Rain);
+    let sheet = sheet_with_names(&layout, body, face, &mut ins, &outs, scene, words);
     let row = f64::from(face.line_px());
     let left_row = if sheet.two_lines { row * 2.0 } else { row };
     let high = f64::from(body.size.height);
@@ -105,11 +105,41 @@ fn amount(value_m3: f64, unit: Unit, words: &Words) -> String {
     words.significant(unit.convert(value_m3 / M3_PER_HM3), 3)
 }
 
+/// The columns with room for the names of what comes in: each above its amount where that leaves the stream its width,
+/// else beside it, else above it after all, the smallest joined where there are too many.
+fn sheet_with_names(
+    layout: &Layout,
+    body: Rectangle,
+    face: Face,
+    ins: &mut Vec<Entry>,
+    outs: &[Entry],
+    scene: &Scene<'_>,
+    words: &Words,
+) -> Sheet {
+    let high = body.size.height as i32;
+    let needed = ins.len() as i32 * face.line_px() * 2;
+    for (two_lines, fits) in [(true, needed * 5 <= high * 3), (false, true), (true, needed <= high)] {
+        let sheet = sheet_of(layout, body, face, (ins, outs), two_lines, scene, words);
+        if fits && sheet.left.size.width > 0 {
+            return sheet;
+        }
+    }
+    let mut joined = ins.clone();
+    merge_smallest(&mut joined, rows_in(body, face) / 2, Look::Rain);
+    let sheet = sheet_of(layout, body, face, (&joined, outs), true, scene, words);
+    if sheet.left.size.width > 0 && joined.len() as i32 * face.line_px() * 2 <= high {
+        *ins = joined;
+        return sheet;
+    }
+    sheet_of(layout, body, face, (&[], outs), false, scene, words)
+}
+
 fn sheet_of(
     layout: &Layout,
     body: Rectangle,
     face: Face,
     (ins, outs): (&[Entry], &[Entry]),
+    two_lines: bool,
     scene: &Scene<'_>,
     words: &Words,
 ) -> Sheet {
@@ -126,14 +156,13 @@ fn sheet_of(
     let now = column(|entry| entry.now_m3, strong).max(head("page-now"));
     let was = if scene.changed() { column(|entry| entry.was_m3, face).max(head("page-was")) } else { 0 };
     let gap = layout.gap * 2;
-    let two_lines = ins.len() as i32 * face.line_px() * 2 <= body.size.height as i32;
     let left_name = widest(&mut ins.iter().map(name));
     let left_amount = widest(&mut ins.iter().map(|entry| wide(&amount(entry.now_m3, unit, words), strong)));
     let mut left = if two_lines { left_name.max(left_amount) } else { left_name + layout.gap + left_amount };
     let whole = body.size.width as i32;
     let right_side = names + gap + now + if was > 0 { gap + was } else { 0 };
     let least_stream = i32::from(layout.label.px()) * 4;
-    if layout.form != Form::Wide || left + right_side + 2 * gap + least_stream > whole {
+    if ins.is_empty() || layout.form != Form::Wide || left + right_side + 2 * gap + least_stream > whole {
         left = 0;
     }
     let (x, y, high) = (body.top_left.x, body.top_left.y, body.size.height as i32);

@@ -83,8 +83,8 @@ fn read(lines: &[(&'static str, Look, Read)], now: &Ledger, was: &Ledger) -> Vec
     lines.iter().map(entry).filter(|entry| entry.now_m3 > 0.0 || entry.was_m3 > 0.0).collect()
 }
 
-/// Joins the smallest lines into one until there are no more than `most`.
-pub(super) fn merge_smallest(entries: &mut Vec<Entry>, most: usize) {
+/// Joins the smallest lines into one, which gets this look, until there are no more than `most`.
+pub(super) fn merge_smallest(entries: &mut Vec<Entry>, most: usize, look: Look) {
     while entries.len() > most.max(2) {
         // The joined line, once it is there, takes the next smallest in, whatever its size.
         let joined = entries.iter().position(|entry| entry.id == "page-all-else");
@@ -101,7 +101,7 @@ pub(super) fn merge_smallest(entries: &mut Vec<Entry>, most: usize) {
                 let into = &mut entries[into];
                 *into = Entry {
                     id: "page-all-else",
-                    look: Look::Ground,
+                    look,
                     has_snow: false,
                     now_m3: into.now_m3 + taken.now_m3,
                     was_m3: into.was_m3 + taken.was_m3,
@@ -133,10 +133,10 @@ mod tests {
     #[test]
     fn what_is_joined_keeps_its_water() {
         let mut entries: Vec<Entry> = [5.0, 1.0, 3.0, 2.0, 9.0].map(|now_m3| entry("x", now_m3)).to_vec();
-        merge_smallest(&mut entries, 3);
+        merge_smallest(&mut entries, 3, Look::Ground);
         assert_eq!(entries.iter().map(|entry| entry.now_m3).collect::<Vec<_>>(), [5.0, 6.0, 9.0]);
         assert_eq!(entries[1].id, "page-all-else");
-        merge_smallest(&mut entries, 9);
+        merge_smallest(&mut entries, 9, Look::Ground);
         assert_eq!(entries.len(), 3);
     }
 }

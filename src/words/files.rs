@@ -33,6 +33,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "languages.ftl",
         "ledger.ftl",
         "numbers.ftl",
+        "pages.ftl",
         "patterns.ftl",
         "picture.ftl",
         "problems.ftl",
@@ -45,6 +46,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en-GB":
         "dates.ftl",
         "ledger.ftl",
+        "pages.ftl",
         "tell.ftl",
         "terms.ftl",
         "units.ftl";
@@ -58,6 +60,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "languages.ftl",
         "ledger.ftl",
         "numbers.ftl",
+        "pages.ftl",
         "patterns.ftl",
         "picture.ftl",
         "problems.ftl",
@@ -82,6 +85,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "crops.ftl",
         "ledger.ftl",
         "numbers.ftl",
+        "pages.ftl",
         "signs.ftl",
         "tell.ftl",
         "terms.ftl";
@@ -95,6 +99,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "command.ftl",
         "dials.ftl",
         "ledger.ftl",
+        "pages.ftl",
         "problems.ftl",
         "signs.ftl",
         "tell.ftl",

@@ -13,8 +13,12 @@ pub mod board;
 #[cfg(feature = "std")]
 pub mod commands;
 #[cfg(feature = "std")]
+pub mod fit;
+#[cfg(feature = "std")]
 pub mod generator;
 #[cfg(feature = "std")]
 pub mod place;
+#[cfg(feature = "std")]
+pub mod session;
 #[cfg(feature = "std")]
 pub mod words;

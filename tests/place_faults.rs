@@ -1,7 +1,8 @@
 //! A good place broken on purpose, one fault at a time: each is told once, by its own message, at its line and column.
 
-use deshielo::place::problem::{Problem, Severity};
+use deshielo::place::problem::{Argument, Problem, Severity};
 use deshielo::place::{Source, read};
+use fluent::{FluentArgs, FluentBundle, FluentResource, FluentValue};
 
 const PLACE: &str = include_str!("places/good/place.toml");
 const WEATHER: &str = include_str!("places/good/weather.csv");
@@ -22,7 +23,42 @@ fn problems(place: &str, weather: &str, rights: &str) -> Vec<Problem> {
     let outcome = read(Source::Embedded(&files));
     let errors = outcome.problems.iter().any(|problem| problem.severity == Severity::Error);
     assert_eq!(outcome.place.is_none(), errors, "a place is there exactly when there is no error");
+    for problem in &outcome.problems {
+        assert_sayable(problem);
+    }
     outcome.problems
+}
+
+/// Both languages can say the problem and its remedy with the arguments that it brings.
+fn assert_sayable(problem: &Problem) {
+    let mut arguments = FluentArgs::new();
+    for (name, value) in &problem.arguments {
+        let value = match value {
+            Argument::Text(text) => FluentValue::from(text.clone()),
+            Argument::Count(count) => FluentValue::from(*count as f64),
+            Argument::Number(number) => FluentValue::from(*number),
+            Argument::Date(date) => FluentValue::from(date.to_string()),
+        };
+        arguments.set(*name, value);
+    }
+    let texts = [
+        ("en", [include_str!("../locales/en/problems.ftl"), include_str!("../locales/en/record-problems.ftl")]),
+        ("es", [include_str!("../locales/es/problems.ftl"), include_str!("../locales/es/record-problems.ftl")]),
+    ];
+    for (language, texts) in texts {
+        let mut bundle = FluentBundle::new(vec![language.parse().unwrap()]);
+        for text in texts {
+            bundle.add_resource(FluentResource::try_new(text.to_owned()).expect("the words can be read")).unwrap();
+        }
+        let message = bundle.get_message(problem.message).unwrap_or_else(|| panic!("{language}: {}", problem.message));
+        let mut errors = Vec::new();
+        let says = [message.value(), message.get_attribute("remedy").map(|remedy| remedy.value())];
+        for pattern in says {
+            let pattern = pattern.unwrap_or_else(|| panic!("{language}: {} is whole", problem.message));
+            bundle.format_pattern(pattern, Some(&arguments), &mut errors);
+        }
+        assert!(errors.is_empty(), "{language}: {}: {errors:?}", problem.message);
+    }
 }
 
 fn shown(problems: &[Problem]) -> Vec<String> {
@@ -53,6 +89,7 @@ const CASES: &[(&str, &str, &str)] = &[
     // The file itself.
     ("latitude_deg = 39.5", "latitude_deg = 39‸,5", "problem-decimal-comma"),
     ("region = \"en-US\"", "region = \"en-US‸", "problem-quote"),
+    ("capacity_mm = 140", "capacity_mm = ‸140 mm", "problem-text-unquoted"),
     ("[soil]", "[soil‸", "problem-bracket"),
     ("quick_days = 7", "quick_days = 7\n‸quick_days = 8", "problem-key-twice"),
     ("[ground]\nquick_days = 7", "[ground]\nquick_days ‸7", "problem-syntax"),
@@ -113,6 +150,13 @@ const CASES: &[(&str, &str, &str)] = &[
     ("method = \"penman_monteith\"", "method = ‸\"given\"", "problem-method-columns"),
     // Reservoir and minimum.
     ("level_m = [2200, 2210, 2220, 2230]", "level_m = [2200, 2210, ‸2205, 2230]", "problem-not-rising"),
+    ("area_km2 = [0.0, 0.6, 1.0, 1.5]", "area_km2 = []", "problem-list-length@[‸reservoir.table]"),
+    ("level_m = [2200, 2210, 2220, 2230]", "level_m = ‸2200", "problem-not-list"),
+    (
+        "level_m = [2200, 2210, 2220, 2230]",
+        "level_m = [2200, 2210, 2220, 2230]\n‸level_ft = [1, 2, 3, 4]",
+        "problem-two-units",
+    ),
     ("area_km2 = [0.0, 0.6, 1.0, 1.5]", "area_km2 = [0.0, 1.2, ‸1.0, 1.5]", "problem-lake-shrinks"),
     ("volume_hm3 = [0, 3, 11, 23.4]", "volume_hm3 = [0, 3, 23.4]", "problem-list-length@[‸reservoir.table]"),
     (
@@ -139,7 +183,7 @@ const CASES: &[(&str, &str, &str)] = &[
     ("rate_m3s = 0.2\n", "rate_m3s = ‸200\n", "problem-right-too-large"),
     ("rate_m3s = 0.2\n", "rate_m3s = ‸0.8\n", "problem-right-above-canal"),
     ("capacity_m3s = 2.4", "capacity_m3s = ‸2400", "problem-canal-far-too-large"),
-    ("capacity_m3s = 2.4", "capacity_m3s = ‸0.2", "problem-canal-small+problem-right-above-canal"),
+    ("capacity_m3s = 2.4", "capacity_m3s = ‸0.2", "problem-canal-small+problem-right-above-canal+problem-limit-idle"),
     ("storage_share = 0.2\n", "storage_share = ‸0.7\n", "problem-storage-shares"),
     ("returns_above = \"town\"", "returns_above = ‸\"north\"", "problem-return-uphill"),
     ("returns_above = \"town\"", "returns_above = ‸\"twon\"", "problem-gate-unknown"),
@@ -161,6 +205,14 @@ const CASES: &[(&str, &str, &str)] = &[
         "losses = { length_km = 6, lining = \"lined\" }\nloss_share = ‸0.3",
         "problem-either",
     ),
+    ("yearly_limit_hm3 = 30", "yearly_limit_hm3 = ‸24000", "problem-limit-idle"),
+    (
+        "level_m = [2200, 2210, 2220, 2230]",
+        "level_m = [7200, 7210, 7220, 7230]",
+        "problem-lake-above-land@[‸reservoir.table]",
+    ),
+    ("summer = { from = \"06-01\", to = \"08-31\" }\n", "", "problem-key-missing@[[‸town]]"),
+    ("column = \"caudal\"", "column = ‸\"flow\"", "problem-record-column-missing"),
     // Fields and crops.
     ("crop = \"maize_grain\"", "crop = ‸\"maize_grian\"", "problem-crop-unknown"),
     ("efficiency_share = 0.7", "method = \"drip\"\nefficiency_share = ‸0.7", "problem-either"),
@@ -283,6 +335,11 @@ fn faults_in_the_other_files() {
     let short: Vec<&str> = WEATHER.lines().take(200).collect();
     let file = line_of(PLACE, "file = \"weather.csv\"");
     told_first(PLACE, &short.join("\n"), RIGHTS, "problem-record-short", ("place.toml", file, 8));
+    let later = WEATHER.replace("\n2001-", "\n2011-").replace("\n2002-", "\n2012-").replace("\n2003-", "\n2013-");
+    // 2012 is a leap year and 2002 is not.
+    let later = later.replace("\n2012-03-01", "\n2012-02-29,-8.0,3.0,0.0,60,2.0,15.0\n2012-03-01");
+    let gauge = line_of(PLACE, "file = \"gauge.csv\"");
+    told_first(PLACE, &later, RIGHTS, "problem-record-apart", ("place.toml", gauge, 8));
     let far = WEATHER.replacen("2001-10-05,", "2001-10-05,9", 1);
     let told = problems(PLACE, &far, RIGHTS);
     assert!(told.iter().any(|told| told.at.file.to_str() == Some("weather.csv") && told.at.line == 7), "{told:#?}");
@@ -346,5 +403,5 @@ fn every_fault_is_told_at_its_place() {
         }
     }
     assert!(wrong.is_empty(), "{} of {} cases:\n{}", wrong.len(), CASES.len(), wrong.join("\n"));
-    assert!(CASES.len() >= 60);
+    assert!(CASES.len() >= 100);
 }

@@ -4,10 +4,14 @@ use std::path::Path;
 
 use deshielo::place::problem::Problem;
 use deshielo::place::{DialOffer, EvaporationChoice, GaugeMeasures, Place, Source, UnitSystem, read};
+use deshielo::signs::read_run;
+use deshielo::water::basin::{Basin, BasinDay};
 use deshielo::water::calendar::MonthDay;
 use deshielo::water::canals::PriorityDate;
-use deshielo::water::dials::Dial;
+use deshielo::water::dials::{Dial, Dials};
+use deshielo::water::run::run_basin;
 use deshielo::water::valley::Purpose;
+use deshielo::water::works::Works;
 
 const PLACE: &str = include_str!("places/good/place.toml");
 
@@ -90,11 +94,38 @@ fn what_the_file_says_arrives() {
     assert!(day.air.solar_mj_m2 > 0.0 && day.air.wind_2m_ms > 0.0 && day.air.vapour_pressure_kpa > 0.0);
 }
 
+#[test]
+fn line_ends_and_byte_order_marks_of_other_systems_change_nothing() {
+    let windows = format!("\u{feff}{}", PLACE.replace('\n', "\r\n"));
+    assert_eq!(format!("{:?}", good(&windows)), format!("{:?}", good(PLACE)));
+}
+
+#[test]
+fn the_water_runs_on_what_was_read() {
+    let place = good(PLACE);
+    let basin = Basin::new(&place.valley, &Dials::REST);
+    let mut days = vec![BasinDay::default(); place.days.len()];
+    let before = run_basin(&place.valley, &basin, &place.calendar, &place.days, &mut days);
+    let works = Works::new(&place.valley, &Dials::REST).unwrap();
+    let mut years = Vec::new();
+    read_run(&place.valley, &works, &place.calendar, &days, &before, |_, _| {}, |year| years.push(year));
+    assert_eq!(years.iter().map(|year| year.year.water_year).collect::<Vec<_>>(), [2002, 2003]);
+    for year in &years {
+        assert!(year.ledger.residual_share().abs() <= 1e-9, "{:?}", year.ledger);
+        // A northern mountain: some snow, more than none and less than all of what falls.
+        let snow = year.signs.snow_share.unwrap();
+        assert!((0.1..0.95).contains(&snow), "{snow}");
+    }
+}
+
+/// End of a metric key, its end in US units, and the value there.
+type Rewrite = (&'static str, &'static str, fn(f64) -> f64);
+
 /// Writes every metric value of the file in US units, to all digits.
 fn in_us_units(text: &str) -> String {
-    const ACRE_M2: f64 = 4046.856_422_4;
+    const ACRE_M2: f64 = 4_046.856_422_4;
     const FOOT_M: f64 = 0.3048;
-    let to_us: [(&str, &str, fn(f64) -> f64); 18] = [
+    let to_us: [Rewrite; 18] = [
         ("_c_per_km", "_f_per_1000ft", |value| value * 1.8 * FOOT_M),
         ("_per_100m", "_per_1000ft", |value| value * FOOT_M * 10.0),
         ("_mm_c_day", "_in_f_day", |value| value / 25.4 / 1.8),

@@ -27,7 +27,7 @@ problem-record-cells-many = { $found ->
         [one] Este renglón tiene { $found } celda. El encabezado tiene { $expected }.
        *[other] Este renglón tiene { $found } celdas. El encabezado tiene { $expected }.
     }
-    .remedy = Quite la celda que sobra. Si el archivo escribe 12,5 para doce y medio, separe las celdas con punto y coma.
+    .remedy = Quite la celda que sobra. Si en el archivo 12,5 es doce y medio, separe las celdas con punto y coma.
 problem-record-more = { $count ->
         [one] De aquí en adelante hay { $count } error más como este.
        *[other] De aquí en adelante hay { $count } errores más como este.

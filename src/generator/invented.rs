@@ -84,8 +84,8 @@ pub fn valle_del_sur() -> Recipe {
         residuals: ResidualCorrelations::RICHARDSON_WRIGHT_1984,
         years: YearIndex {
             lag_one: 0.35,
-            wetness_shift: 0.16,
-            depth_shift: 0.12,
+            wetness_shift: 0.12,
+            depth_shift: 0.09,
             wet_year_cooling_c: 0.2,
             temperature_spread_c: 0.4,
         },

@@ -60,7 +60,7 @@ mod expected;
 mod fit;
 pub mod invented;
 mod normal;
-mod random;
+pub(crate) mod random;
 mod recipe;
 mod residuals;
 mod run;

@@ -24,30 +24,35 @@ impl SplitMix64 {
 
 /// What a stream is for; each has its own numbers under one seed.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
-pub(super) enum Purpose {
+pub(crate) enum Purpose {
     YearIndex = 1,
     Wetness = 2,
     Depth = 3,
     Residuals = 4,
     Wind = 5,
+    /// Fitting: the seed of each start.
+    Starts = 6,
+    /// Fitting: the steps of one start.
+    Search = 7,
 }
 
 /// One stream of seeded random numbers (xoshiro256++).
 #[derive(Debug, Clone)]
-pub(super) struct Stream {
+pub(crate) struct Stream {
     state: [u64; 4],
 }
 
 impl Stream {
     /// The stream for one purpose under a seed.
-    pub(super) fn new(seed: u64, purpose: Purpose) -> Self {
+    pub(crate) fn new(seed: u64, purpose: Purpose) -> Self {
         // Mixing the seed before the purpose is added keeps neighbouring seeds from sharing a stream.
         let mixed = SplitMix64(seed).next();
         let mut filler = SplitMix64(mixed ^ SplitMix64(purpose as u64).next());
         Self { state: [filler.next(), filler.next(), filler.next(), filler.next()] }
     }
 
-    fn next(&mut self) -> u64 {
+    /// The next 64 random bits.
+    pub(crate) fn bits(&mut self) -> u64 {
         let [s0, s1, s2, s3] = self.state;
         let result = s0.wrapping_add(s3).rotate_left(23).wrapping_add(s0);
         let shifted = s1 << 17;
@@ -58,13 +63,13 @@ impl Stream {
     }
 
     /// A number evenly spread over the open interval from 0 to 1; neither end ever occurs.
-    pub(super) fn uniform(&mut self) -> f64 {
+    pub(crate) fn uniform(&mut self) -> f64 {
         // 52 bits and a half: one bit fewer than a double holds, so that the half is exact and 1 cannot be reached.
-        ((self.next() >> 12) as f64 + 0.5) * (1.0 / 4_503_599_627_370_496.0)
+        ((self.bits() >> 12) as f64 + 0.5) * (1.0 / 4_503_599_627_370_496.0)
     }
 
     /// A standard normal deviate, by inverting the distribution: one uniform number each, none rejected.
-    pub(super) fn normal(&mut self) -> f64 {
+    pub(crate) fn normal(&mut self) -> f64 {
         normal_from_probability(self.uniform())
     }
 }
@@ -88,7 +93,7 @@ mod tests {
     fn xoshiro_first_outputs() {
         // Reference implementation by Blackman and Vigna (2019), state 1, 2, 3, 4, as widely reprinted; from memory.
         let mut stream = Stream { state: [1, 2, 3, 4] };
-        let first: Vec<u64> = (0..10).map(|_| stream.next()).collect();
+        let first: Vec<u64> = (0..10).map(|_| stream.bits()).collect();
         assert_eq!(
             first,
             [

@@ -15,10 +15,13 @@ pub mod lettering;
 pub mod line;
 mod mask;
 pub mod paint;
+pub mod scenery;
 pub mod shape;
 #[cfg(feature = "std")]
 pub mod strict;
 pub mod theme;
+#[cfg(feature = "std")]
+pub mod views;
 
 pub use canvas::{Canvas, TextMark, Witness};
 pub use lettering::{Align, Face, Weight};

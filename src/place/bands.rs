@@ -36,7 +36,7 @@ pub(super) fn read(root: &Section<'_>) -> ReadBands {
         }
         return from_curve(&curve);
     }
-    if listed.is_empty() && !root.sheet.broken {
+    if listed.is_empty() && !root.sheet.is_broken() {
         root.sheet.tell(Problem::error(root.at.clone(), "problem-bands-missing"));
     }
     from_list(root, &listed)

@@ -18,7 +18,7 @@ pub(super) const FLOW: Limits = Limits(0.0, 50_000.0);
 /// The same where none at all makes no sense: from a tenth of a litre per second.
 const SOME_FLOW: Limits = Limits(0.000_1, FLOW.1);
 /// Shortest season of a canal, days.
-const SHORTEST_SEASON: u16 = 7;
+pub(super) const SHORTEST_SEASON: u16 = 7;
 
 /// What people read of a gate.
 #[derive(Clone, Debug, PartialEq)]
@@ -49,6 +49,8 @@ pub(super) struct ReadGate {
     pub capacity: Number,
     /// Its account in the reservoir.
     pub storage: Number,
+    /// The most that it may take in a year.
+    pub yearly_limit: Option<Number>,
     /// Its turn.
     pub turn: Number,
     /// Opening and closing as stated.
@@ -126,15 +128,14 @@ fn gate(section: &Section<'_>, rule: SharingRule, rights: &RightsFile, crops: Op
         Some(_) => loss(section, &capacity),
         None => section.number_or("loss", SHARE, Limits(0.0, 0.95), 0.10).value,
     };
+    let yearly_limit = section.number("yearly_limit", VOLUME_HM3, Limits(0.0, 1.0e6));
     let gate = Gate {
         right_date,
         decreed_m3s: decreed.value,
         canal_m3s: capacity.value,
         storage_share: storage.value,
         stored_loss_share: section.number_or("stored_loss", SHARE, Limits(0.0, 0.95), 0.0).value,
-        yearly_limit_hm3: section
-            .number("yearly_limit", VOLUME_HM3, Limits(0.0, 1.0e6))
-            .map_or(f64::INFINITY, |limit| limit.value),
+        yearly_limit_hm3: yearly_limit.as_ref().map_or(f64::INFINITY, |limit| limit.value),
         conveyance_loss_share,
         return_share: share(section, "return", if is_town { 1.0 } else { 0.5 }),
         return_days: section.number_or("return", DAYS, Limits(0.0, 3650.0), if is_town { 1.0 } else { 30.0 }).value,
@@ -156,6 +157,7 @@ fn gate(section: &Section<'_>, rule: SharingRule, rights: &RightsFile, crops: Op
         decreed,
         capacity,
         storage,
+        yearly_limit,
         turn,
         season,
         over_new_year,
@@ -175,12 +177,14 @@ fn town(section: &Section<'_>) -> Town {
     let daily = section.need_number("need", DAILY_M3, Limits(0.0, 5.0e7));
     let summer = section.section("summer");
     let (from, to) = (month_day_or(&summer, "from", JUNE), month_day_or(&summer, "to", END_OF_AUGUST));
-    if !summer.present && section.peek("summer_more_m3_day").is_some() {
+    let more = section.number_or("summer_more", DAILY_M3, Limits(0.0, 5.0e7), 0.0);
+    // Which months are summer depends on the hemisphere and on people: it must be said where it counts.
+    if more.value > 0.0 && !summer.present {
         section.tell_missing("summer");
     }
     Town {
         daily_m3: daily.value,
-        summer_more_m3: section.number_or("summer_more", DAILY_M3, Limits(0.0, 5.0e7), 0.0).value,
+        summer_more_m3: more.value,
         summer: Season { from, to },
         used_up_share: share(section, "used_up", 0.3),
     }

@@ -1,17 +1,22 @@
 //! A place folder in, checked values out: TOML and CSV, with every error at its line.
 //!
 //! A place is a folder with `place.toml` and the daily records that it names. [`read`] gives the whole place or every
-//! problem in it, never the first one only. `demo-data/PLACE.md` explains each table and key of the file to the people
-//! who write one; the limits and usual values there are those of the code here.
+//! problem in it, never the first one only. [`file_format`] (the page `demo-data/PLACE.md`) explains each table and key to
+//! the people who write one.
 //!
 //! Every measured value carries its unit in its key (`outlet_m3s`, `outlet_cfs`) and is kept in SI. A key that nobody
 //! asks for is an error and is answered with the nearest known one. Problems are data; their words are in `locales`.
+
+/// How `place.toml` is written: every table and key with its units, usual values, limits and sources.
+#[doc = include_str!("../../demo-data/PLACE.md")]
+pub mod file_format {}
 
 mod bands;
 mod checks;
 pub mod crop_table;
 mod crops;
 mod dated;
+pub mod demo;
 mod dial_plan;
 mod fields;
 mod gates;

@@ -16,7 +16,10 @@ use super::tree::Sheet;
 use super::unit_suffix::{AREA_KM2, METRES, PLAIN, SHARE};
 use super::{Diversion, FilledGaps, Notes, Outcome, Place, RecordNote, UnitSystem};
 use super::{bands, checks, dial_plan, gates, reservoir, slopes};
+use chrono::Days;
+
 use crate::water::calendar::{CalendarDay, MonthDay, fill_calendar};
+use crate::water::run::water_years;
 use crate::water::valley::{MOST_FIELDS, MOST_GATES, Purpose, Valley};
 
 /// Reads a place: all of it, or everything that is wrong with it.
@@ -30,8 +33,10 @@ pub fn read(source: Source<'_>) -> Outcome {
     let (sheet, table) = Sheet::parse(source.shown("place.toml"), &text);
     // The root is asked last and judged when it ends, before the problems are taken out.
     let place = place(&Section::root(&sheet, &table), source);
-    let mut problems = sheet.problems.into_inner();
-    problems.sort_by(|a, b| a.at.cmp(&b.at).then(a.message.cmp(b.message)));
+    let mut problems = sheet.problems.take();
+    // The place's own file comes first: a record cannot be right before its columns are.
+    let rank = |problem: &Problem| problem.at.file != sheet.file;
+    problems.sort_by(|a, b| rank(a).cmp(&rank(b)).then_with(|| a.at.cmp(&b.at)).then_with(|| a.message.cmp(b.message)));
     problems.dedup();
     let fine = problems.iter().all(|problem| problem.severity < Severity::Error);
     Outcome { place: place.filter(|_| fine), problems }
@@ -61,10 +66,12 @@ fn about(root: &Section<'_>) -> About {
         section.sheet.tell(Problem::error(latitude.at.clone(), "problem-latitude-zero").with("value", latitude.value));
     }
     let units = section.choice("units", &[("metric", UnitSystem::Metric), ("us", UnitSystem::Us)]);
+    let region = region(&section);
+    let usual_units = if region.ends_with("-US") { UnitSystem::Us } else { UnitSystem::Metric };
     About {
         name: need_names(&section, "name"),
-        region: region(&section),
-        units: units.map_or(UnitSystem::Metric, |(units, _)| units),
+        units: units.map_or(usual_units, |(units, _)| units),
+        region,
         water_year_start_month: section.get("water_year_starts").map_or_else(
             || if latitude.value < 0.0 { 4 } else { 10 },
             |value| month(&section, "water_year_starts", value).unwrap_or(10),
@@ -128,7 +135,7 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     let reservoir = reservoir::read(root, source);
     let minimum = reservoir::minimum(root);
     let (start, settling) = slopes::start(root);
-    let whole_years = whole_water_years(&calendar, about.water_year_start_month);
+    let whole_years = water_years(&calendar, about.water_year_start_month).count();
     if settling.value > whole_years as f64 && whole_years > 0 {
         let problem = Problem::error(settling.at.clone(), "problem-settling-long");
         root.sheet.tell(problem.with("value", settling.value).with("years", whole_years));
@@ -142,8 +149,10 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
     checks::station(root, &station, &bands, &climb, &gradient);
     checks::gates(root, &read_gates, reservoir.as_ref(), rule, southern);
     checks::outlet(root, reservoir.as_ref(), &minimum);
+    checks::lake_level(root, reservoir.as_ref(), &bands);
 
     let comparisons = Comparisons::read(root, source, &read_gates);
+    comparisons.check_overlap(root, weather.as_ref());
 
     let (gates, names) = finished_gates(read_gates);
     let valley = Valley {
@@ -259,20 +268,11 @@ fn calendar(root: &Section<'_>, about: &About, weather: Option<&NamedRecord>) ->
     let first = CalendarDay::new(weather.record.first_date, about.water_year_start_month);
     let mut calendar = vec![first; weather.record.days];
     fill_calendar(weather.record.first_date, about.water_year_start_month, &mut calendar);
-    if whole_water_years(&calendar, about.water_year_start_month) == 0 {
+    if water_years(&calendar, about.water_year_start_month).count() == 0 {
         let problem = Problem::error(weather.at.clone(), "problem-record-short");
         root.sheet.tell(problem.with("days", calendar.len()));
     }
     calendar
-}
-
-/// How many water years the record has from their first day to their last.
-fn whole_water_years(calendar: &[CalendarDay], start_month: u8) -> usize {
-    let starts = calendar.iter().filter(|day| day.day_of_water_year == 1).count();
-    let after = calendar.last().and_then(|last| last.date(start_month).succ_opt());
-    // The year under way at the end is whole only when the day after the record starts another.
-    let ends_whole = after.is_some_and(|after| CalendarDay::new(after, start_month).day_of_water_year == 1);
-    (starts + usize::from(ends_whole)).saturating_sub(1)
 }
 
 /// The records that a run is compared with.
@@ -298,6 +298,28 @@ impl Comparisons {
                 .iter()
                 .filter_map(|section| diversion(section, source, gates))
                 .collect(),
+        }
+    }
+}
+
+impl Comparisons {
+    /// A record that shares no day with the weather has nothing to be compared with.
+    fn check_overlap(&self, root: &Section<'_>, weather: Option<&NamedRecord>) {
+        let Some(weather) = weather else { return };
+        let last =
+            |named: &NamedRecord| named.record.first_date + Days::new(named.record.days.saturating_sub(1) as u64);
+        let others = self.gauge.iter().map(|(_, named)| named);
+        let others = others.chain([&self.snow, &self.storage].into_iter().flatten().map(|(_, named)| named));
+        for named in others.chain(self.diversions.iter().map(|(_, named)| named)) {
+            if named.record.first_date > last(weather) || last(named) < weather.record.first_date {
+                root.sheet.tell(
+                    Problem::warning(named.at.clone(), "problem-record-apart")
+                        .with("first", named.record.first_date)
+                        .with("last", last(named))
+                        .with("weather_first", weather.record.first_date)
+                        .with("weather_last", last(weather)),
+                );
+            }
         }
     }
 }

@@ -150,8 +150,8 @@ fn column_plan(section: &Section<'_>, measure: Measure) -> Option<ColumnPlan> {
     if let Some(longest) = section.number("longest_gap", DAYS, Limits(0.0, 3660.0)) {
         gaps.longest_days = if longest.value.is_nan() { usual_days as usize } else { longest.value as usize };
     }
-    let (name, _) = name?;
-    Some(ColumnPlan { gaps, declared_at: Some(section.at.clone()), ..ColumnPlan::new(name, measure, unit?) })
+    let (name, at) = name?;
+    Some(ColumnPlan { gaps, declared_at: Some(at), ..ColumnPlan::new(name, measure, unit?) })
 }
 
 fn unit(section: &Section<'_>, measure: Measure) -> Option<MeasureUnit> {

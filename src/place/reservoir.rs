@@ -26,6 +26,8 @@ pub(super) struct ReadReservoir {
     pub reservoir: Reservoir,
     /// Where the outlet's capacity stands.
     pub outlet: Number,
+    /// Where its table stands.
+    pub table_at: Location,
 }
 
 /// Reads `[reservoir]`, if there is one.
@@ -34,7 +36,8 @@ pub(super) fn read(root: &Section<'_>, source: Source<'_>) -> Option<ReadReservo
     if !section.present {
         return None;
     }
-    let table = table(&section.section("table"), source);
+    let table_section = section.section("table");
+    let table = table(&table_section, source);
     let dead = section.number_or("dead", VOLUME_HM3, VOLUME, 0.0);
     let capacity = section.need_number("capacity", VOLUME_HM3, Limits(0.000_001, VOLUME.1));
     if capacity.value <= dead.value {
@@ -76,7 +79,7 @@ pub(super) fn read(root: &Section<'_>, source: Source<'_>) -> Option<ReadReservo
         serves_minimum: section.flag_or("serves_minimum", true),
         hedging: hedging(&section.section("hedging")),
     };
-    Some(ReadReservoir { reservoir, outlet })
+    Some(ReadReservoir { reservoir, outlet, table_at: table_section.at.clone() })
 }
 
 /// The level–area–volume table: three lists of one length, here or in a file.
@@ -102,6 +105,7 @@ fn table(section: &Section<'_>, source: Source<'_>) -> FixedVec<LakePoint, MOST_
     if areas.is_none() {
         section.tell_missing("area_km2");
     }
+    let area_count = areas.as_ref().map_or(level.len(), Vec::len);
     let areas = areas.unwrap_or_default();
     if let Some(pair) = areas.windows(2).find(|pair| pair[1].value < pair[0].value) {
         section.sheet.tell(
@@ -110,8 +114,10 @@ fn table(section: &Section<'_>, source: Source<'_>) -> FixedVec<LakePoint, MOST_
                 .with("before", pair[0].value),
         );
     }
-    for (key, found) in [("volume", volume.len()), ("area", areas.len())] {
-        if found != 0 && found != level.len() && !level.is_empty() {
+    // A list of levels or volumes that is too short by itself was told as that.
+    let volume_count = if volume.len() < 2 { level.len() } else { volume.len() };
+    for (key, found) in [("volume", volume_count), ("area", area_count)] {
+        if found != level.len() && level.len() > 1 {
             let problem = Problem::error(section.at.clone(), "problem-list-length").with("key", key);
             section.sheet.tell(problem.with("found", found).with("wanted", level.len()));
         }

@@ -132,20 +132,26 @@ impl<'a> Section<'a> {
     /// Tells that `key` is missing, unless the whole table is or the text is broken. It is told at the end, and not at
     /// all when a misspelt key turns out to be meant for it.
     pub fn tell_missing(&self, key: &str) {
-        if self.present && !self.sheet.broken {
+        if self.present && !self.sheet.is_broken() {
             self.missing.borrow_mut().push(key.to_owned());
         }
     }
 
     /// Tells that the file lacks this whole table, which it must have.
     pub fn tell_if_absent(&self) {
-        if !self.present && !self.sheet.broken {
+        if !self.present && !self.sheet.is_broken() {
             self.sheet.tell(Problem::error(self.at.clone(), "problem-table-missing").with("table", self.name.clone()));
         }
     }
 
     /// A number in whichever unit it is written, or `None` where the file does not say it.
     pub fn number(&self, base: &'static str, units: Units, limits: Limits) -> Option<Number> {
+        let (entry, unit) = self.measured(base, units)?;
+        Some(self.checked_number(&entry.key, &entry.value, unit, limits))
+    }
+
+    /// The entry of a measured key and the unit that it is written in; tells where it is there in two.
+    fn measured(&self, base: &'static str, units: Units) -> Option<(&'a Entry, UnitSuffix)> {
         self.asked.borrow_mut().push((base, Some(units)));
         let mut found: Option<(&Entry, UnitSuffix)> = None;
         for unit in units {
@@ -153,13 +159,15 @@ impl<'a> Section<'a> {
             match found {
                 None => found = Some((entry, *unit)),
                 Some((first, _)) => {
-                    let problem = Problem::error(self.key_at(entry), "problem-two-units");
-                    self.sheet.tell(problem.with("key", entry.key.clone()).with("other", first.key.clone()));
+                    // The later one is shown: the first was there when it was added.
+                    let (early, late) =
+                        if first.key_span.start < entry.key_span.start { (first, entry) } else { (entry, first) };
+                    let problem = Problem::error(self.key_at(late), "problem-two-units");
+                    self.sheet.tell(problem.with("key", late.key.clone()).with("other", early.key.clone()));
                 }
             }
         }
-        let (entry, unit) = found?;
-        Some(self.checked_number(&entry.key, &entry.value, unit, limits))
+        found
     }
 
     /// `value` as a number in `unit`, within `limits`.
@@ -171,7 +179,7 @@ impl<'a> Section<'a> {
         };
         let si = unit.to_si(written);
         // The bounds are compared as written, so that a limit given exactly in another unit is inside.
-        let (least, most) = (rounded(unit.from_si(limits.0)), rounded(unit.from_si(limits.1)));
+        let (least, most) = (rounded(unit.si_as_written(limits.0)), rounded(unit.si_as_written(limits.1)));
         if si.is_finite() && ((limits.0 <= si && si <= limits.1) || (least <= written && written <= most)) {
             return Number { value: si, at, stated: true };
         }
@@ -248,10 +256,7 @@ impl<'a> Section<'a> {
 
     /// Numbers of a list in whichever unit the key names, with the place of each.
     pub fn numbers(&self, base: &'static str, units: Units, limits: Limits) -> Option<Vec<Number>> {
-        self.asked.borrow_mut().push((base, Some(units)));
-        let (entry, unit) = units
-            .iter()
-            .find_map(|unit| self.table.get(&format!("{base}{}", unit.suffix)).map(|entry| (entry, *unit)))?;
+        let (entry, unit) = self.measured(base, units)?;
         let Kind::List(values) = &entry.value.kind else {
             self.sheet
                 .tell(Problem::error(self.value_at(&entry.value), "problem-not-list").with("key", entry.key.clone()));
@@ -295,9 +300,18 @@ impl<'a> Section<'a> {
                 problem("problem-key-unknown").with("nearest", nearest).with("table", self.name.clone())
             });
         }
-        for key in self.missing.borrow().iter().filter(|key| !explained.contains(key)) {
-            let problem = Problem::error(self.at.clone(), "problem-key-missing").with("key", key.clone());
-            self.sheet.tell(problem.with("table", self.name.clone()));
+        // What is there in a wrong form was told as that.
+        let is_there = |key: &String| {
+            let forms = asked.iter().map(|(base, units)| written(base, *units)).find(|forms| forms.contains(key));
+            forms.into_iter().flatten().any(|form| self.table.get(&form).is_some())
+        };
+        for key in self.missing.borrow().iter().filter(|key| !explained.contains(key) && !is_there(key)) {
+            let problem = |message| Problem::error(self.at.clone(), message).with("key", key.clone());
+            self.sheet.tell(if self.name.is_empty() {
+                problem("problem-key-missing-at-top")
+            } else {
+                problem("problem-key-missing").with("table", self.name.clone())
+            });
         }
     }
 }

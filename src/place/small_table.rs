@@ -114,8 +114,8 @@ impl SmallTable {
                 Problem::error(at.clone(), "problem-number-range")
                     .with("key", name)
                     .with("value", written)
-                    .with("least", unit.from_si(limits.0))
-                    .with("most", unit.from_si(limits.1)),
+                    .with("least", unit.si_as_written(limits.0))
+                    .with("most", unit.si_as_written(limits.1)),
             );
             return Some(wrong());
         }

@@ -72,16 +72,20 @@ pub(super) struct Sheet<'t> {
     pub text: &'t str,
     /// What was found so far.
     pub problems: RefCell<Vec<Problem>>,
-    /// Whether the text broke the rules of TOML; then what seems missing may only be unreadable and is not told.
-    pub broken: bool,
+    /// Where each line starts.
+    line_starts: Vec<usize>,
+    /// How many of them, at the start, are lines that could not be read.
+    unread: usize,
 }
 
 impl<'t> Sheet<'t> {
     /// Parses `text`; every error of syntax becomes a problem.
     pub fn parse(file: impl Into<PathBuf>, text: &'t str) -> (Self, Table) {
-        let (document, errors) = DeTable::parse_recoverable(text);
-        let mut sheet =
-            Self { file: file.into(), text, problems: RefCell::new(Vec::new()), broken: !errors.is_empty() };
+        let (document, mut errors) = DeTable::parse_recoverable(text);
+        errors.sort_by_key(|error| error.span().map_or(0, |span| span.start));
+        let after_breaks = text.match_indices('\n').map(|(at, _)| at + 1);
+        let line_starts = std::iter::once(0).chain(after_breaks).collect();
+        let mut sheet = Self { file: file.into(), text, problems: RefCell::default(), line_starts, unread: 0 };
         let mut last_line = 0;
         for error in &errors {
             let span = error.span().unwrap_or(0..0);
@@ -93,17 +97,33 @@ impl<'t> Sheet<'t> {
                 sheet.problems.get_mut().push(problem);
             }
         }
+        sheet.unread = sheet.problems.get_mut().len();
         (sheet, table(document.get_ref()))
     }
 
     /// Where these bytes stand.
     pub fn at(&self, span: &Range<usize>) -> Location {
-        Location::of_span(self.file.clone(), self.text, span.clone())
+        let line = self.line_starts.partition_point(|start| *start <= span.start).saturating_sub(1);
+        let first = self.line_starts[line];
+        let within = span.start - first..span.end.saturating_sub(first);
+        let at = Location::of_span(self.file.clone(), &self.text[first..], within);
+        Location { line: line + 1, ..at }
     }
 
-    /// Adds a problem.
+    /// Adds a problem; what follows from a line that could not be read is not told again.
     pub fn tell(&self, problem: Problem) {
-        self.problems.borrow_mut().push(problem);
+        let mut problems = self.problems.borrow_mut();
+        let follows = problems[..self.unread]
+            .iter()
+            .any(|told| told.at.file == problem.at.file && told.at.line == problem.at.line);
+        if !follows {
+            problems.push(problem);
+        }
+    }
+
+    /// Whether the text broke the rules of TOML; then what seems missing may only be unreadable and is not told.
+    pub fn is_broken(&self) -> bool {
+        self.unread > 0
     }
 }
 
@@ -115,6 +135,8 @@ fn syntax_problem(at: Location, message: &str, text: &str, span: &Range<usize>) 
         Problem::error(at, "problem-key-twice").with("key", key)
     } else if has_decimal_comma(line) {
         Problem::error(at, "problem-decimal-comma")
+    } else if message.contains("must be quoted") {
+        Problem::error(at, "problem-text-unquoted")
     } else if message.contains("string") || line.matches('"').count() % 2 == 1 {
         Problem::error(at, "problem-quote")
     } else if message.contains("table") || message.contains("array") || message.contains(']') {
@@ -177,14 +199,20 @@ mod tests {
 
     #[test]
     fn several_slips_are_told_together_and_reading_goes_on() {
-        let text = "[place]\nlatitude_deg = 39,5\n[climb\nx = 1\nx = 2\nname = \"open\n";
+        let text = "[place]\nlatitude_deg = 39,5\nx = 1\nx = 2\nname = \"open\ny = 5 mm\n[climb\n";
         let (sheet, _) = Sheet::parse("place.toml", text);
         let told: Vec<_> = sheet.problems.borrow().iter().map(|problem| (problem.message, problem.at.line)).collect();
         assert_eq!(
             told,
-            [("problem-decimal-comma", 2), ("problem-bracket", 3), ("problem-key-twice", 5), ("problem-quote", 6)]
+            [
+                ("problem-decimal-comma", 2),
+                ("problem-key-twice", 4),
+                ("problem-quote", 5),
+                ("problem-text-unquoted", 6),
+                ("problem-bracket", 7)
+            ]
         );
-        assert!(sheet.broken);
+        assert!(sheet.is_broken());
     }
 
     #[test]

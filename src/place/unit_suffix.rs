@@ -25,7 +25,7 @@ impl UnitSuffix {
     }
 
     /// A value in SI as it would be written.
-    pub fn from_si(self, value: f64) -> f64 {
+    pub fn si_as_written(self, value: f64) -> f64 {
         if self.fahrenheit {
             value * FAHRENHEIT_PER_CELSIUS + crate::water::units::FAHRENHEIT_AT_FREEZING
         } else {
@@ -176,7 +176,7 @@ mod tests {
             SOIL_HOLDS, SEEPAGE, METRES, SHARE,
         ] {
             for unit in units {
-                approx::assert_relative_eq!(unit.from_si(unit.to_si(7.25)), 7.25, max_relative = 1e-14);
+                approx::assert_relative_eq!(unit.si_as_written(unit.to_si(7.25)), 7.25, max_relative = 1e-14);
             }
         }
     }

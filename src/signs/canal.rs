@@ -5,11 +5,11 @@ use crate::water::units::M3_PER_HM3;
 use crate::water::works::Evening;
 
 /// A day is full from this share of its demand on.
-const FULL_SHARE: f64 = 0.995;
+pub const FULL_SHARE: f64 = 0.995;
 /// Less than this is rounding, not water.
 const ANY_WATER_M3: f64 = 1e-3;
 /// A day is cut below this share of its demand.
-const CUT_SHARE: f64 = 0.05;
+pub const CUT_SHARE: f64 = 0.05;
 
 /// What is read off a canal's year.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]

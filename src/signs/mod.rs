@@ -7,8 +7,8 @@ mod sign;
 pub mod skill;
 mod year;
 
-pub use canal::CanalSigns;
+pub use canal::{CUT_SHARE, CanalSigns, FULL_SHARE};
 pub use many::{Performance, Spread, performance, spread};
 pub use read::{YearReport, read_run};
 pub use sign::{SIGNS, Sign, SignKind};
-pub use year::{YearReader, YearSigns};
+pub use year::{WHITE_MM, YearReader, YearSigns};

@@ -14,7 +14,7 @@ use crate::water::valley::Valley;
 use crate::water::works::{Evening, WorksStores};
 
 /// Snow water over which the ground counts as white, mm.
-const WHITE_MM: f64 = 5.0;
+pub const WHITE_MM: f64 = 5.0;
 /// Days of a bare week.
 const BARE_DAYS: u16 = 7;
 /// Share of active capacity from which the reservoir counts as full.

@@ -9,7 +9,7 @@ use super::dials::Dials;
 use super::evaporation::SkyTable;
 use super::ground::{Ground, GroundStores};
 use super::lanes::Lanes;
-use super::power::{AnyPower, Halves, PowerCurve};
+use super::power::{AnyPower, Halves, HalvesByLane, PowerCurve};
 use super::slopes::{LaneWeather, RowStore, Slopes, total_of_one};
 use super::snow::melt_factor_mm_c_day;
 use super::units::M3_PER_MM_KM2;
@@ -129,10 +129,13 @@ impl Course {
     }
 }
 
-/// Runs `$run` with the recharge curve that fits `$power`: halves by multiplication, any other by our own power.
+/// Runs `$run` with the recharge curve that fits `$powers`, one a lane: halves by multiplication, any other by our own
+/// power. Halves that are common and the same in all lanes have a loop of their own.
 macro_rules! with_curve {
-    ($power:expr, $any:expr, |$curve:ident| $run:expr) => {{
-        let power = $power;
+    ($powers:expr, |$curve:ident| $run:expr) => {{
+        let powers = $powers;
+        let alike = powers.0.iter().all(|power| *power == powers.0[0]);
+        let power = if alike { powers.0[0] } else { f64::NAN };
         let halves = power * 2.0;
         match halves as u32 {
             2 if halves == 2.0 => {
@@ -163,10 +166,13 @@ macro_rules! with_curve {
                 let $curve = Halves::<8>;
                 $run
             }
-            _ => {
-                let $curve = $any;
-                $run
-            }
+            _ => match HalvesByLane::of_powers(powers) {
+                Some($curve) => $run,
+                None => {
+                    let $curve = AnyPower(powers);
+                    $run
+                }
+            },
         }
     }};
 }
@@ -219,8 +225,8 @@ impl<'v> Basin<'v> {
         record: &[StationDay],
         out: &mut [BasinDay],
     ) {
-        let power = self.valley.soil.recharge_power;
-        with_curve!(power, AnyPower(Lanes::splat(power)), |curve| self.run_with(curve, stores, calendar, record, out));
+        let powers = Lanes::splat(self.valley.soil.recharge_power);
+        with_curve!(powers, |curve| self.run_with(curve, stores, calendar, record, out));
     }
 
     /// Like [`Basin::run`], telling `each` the number of the day and the stores of the bands every evening.
@@ -320,10 +326,9 @@ impl<'v, const L: usize> Basins<'v, L> {
         out: &mut [&mut [BasinDay]; L],
     ) {
         let powers = Lanes(self.valleys.map(|valley| valley.soil.recharge_power));
-        let alike = powers.0.iter().all(|power| *power == powers.0[0]);
-        // Lanes that differ take the general curve: then a lane's bits are those of a run alone only to 1e-12.
-        let power = if alike { powers.0[0] } else { f64::NAN };
-        with_curve!(power, AnyPower(powers), |curve| self.run_with(curve, stores, calendar, record, out));
+        // Where one lane's power is no number of halves all take the general curve: then the bits of a lane that is one
+        // are those of a run alone only to 1e-12.
+        with_curve!(powers, |curve| self.run_with(curve, stores, calendar, record, out));
     }
 
     fn run_with(

@@ -17,10 +17,23 @@ struct VesselPoint {
     level_m: f64,
 }
 
+/// The point at `volume_hm3` on the straight line between two points, where it lies within.
+fn between(below: &LakePoint, above: &LakePoint, volume_hm3: f64) -> Option<LakePoint> {
+    if !(below.volume_hm3 < volume_hm3 && volume_hm3 < above.volume_hm3) {
+        return None;
+    }
+    let along = (volume_hm3 - below.volume_hm3) / (above.volume_hm3 - below.volume_hm3);
+    Some(LakePoint {
+        level_m: below.level_m + along * (above.level_m - below.level_m),
+        area_km2: below.area_km2 + along * (above.area_km2 - below.area_km2),
+        volume_hm3,
+    })
+}
+
 /// The level–area–volume table ready for look-ups.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Vessel {
-    points: Vec<VesselPoint, MOST_LAKE_POINTS>,
+    points: Vec<VesselPoint, { MOST_LAKE_POINTS + 1 }>,
     /// Volume below the outlet, m³.
     pub dead_m3: f64,
     /// Volume between outlet and spillway, m³.
@@ -37,17 +50,24 @@ impl Vessel {
             let enlarged_hm3 = if active_hm3 > 0.0 { reservoir.dead_hm3 + active_hm3 * factor } else { volume_hm3 };
             enlarged_hm3 * M3_PER_HM3
         };
-        let point = |point: &LakePoint| VesselPoint {
+        let ready = |point: &LakePoint| VesselPoint {
             volume_m3: enlarged_m3(point.volume_hm3),
             area_m2: point.area_km2 * M2_PER_KM2,
             level_m: point.level_m,
         };
         let dead_m3 = reservoir.dead_hm3 * M3_PER_HM3;
-        Self {
-            points: reservoir.table.iter().map(point).collect(),
-            dead_m3,
-            active_m3: enlarged_m3(reservoir.capacity_hm3) - dead_m3,
+        let mut points = Vec::new();
+        let mut below: Option<&LakePoint> = None;
+        for point in &reservoir.table {
+            // A point of its own at the outlet: without it the first piece above would stretch what lies below. There
+            // is room for one more than the table has.
+            if let Some(outlet) = below.and_then(|below| between(below, point, reservoir.dead_hm3)) {
+                let _ = points.push(ready(&outlet));
+            }
+            let _ = points.push(ready(point));
+            below = Some(point);
         }
+        Self { points, dead_m3, active_m3: enlarged_m3(reservoir.capacity_hm3) - dead_m3 }
     }
 
     /// Surface at a volume, m²: straight between the points of the table, flat beyond its ends.

@@ -38,6 +38,53 @@ impl<const HALVES: u32, const L: usize> PowerCurve<L> for Halves<HALVES> {
     }
 }
 
+/// Bits of a count of halves: up to 15 halves, the power 7.5.
+const HALF_BITS: usize = 4;
+
+/// Powers that are whole numbers of halves, one a lane: the same multiplications as [`Halves`], with a factor of exactly 1
+/// where a lane's power has no such bit, so that a lane has the same bits as a run alone.
+#[derive(Clone, Copy, Debug)]
+pub struct HalvesByLane<const L: usize> {
+    /// For each bit of the count of halves, all ones in the lanes that have it.
+    masks: [[u64; L]; HALF_BITS],
+}
+
+impl<const L: usize> HalvesByLane<L> {
+    /// The curve of `powers`, if each is ½, 1, 1½, … up to 7½.
+    pub fn of_powers(powers: Lanes<L>) -> Option<Self> {
+        let mut masks = [[0; L]; HALF_BITS];
+        for (lane, power) in powers.0.into_iter().enumerate() {
+            let halves = power * 2.0;
+            // Saturating: what is no number of halves does not come back from the whole number.
+            let count = halves as u64;
+            if count == 0 || count >= 1 << HALF_BITS || count as f64 != halves {
+                return None;
+            }
+            for (bit, mask) in masks.iter_mut().enumerate() {
+                mask[lane] = if count >> bit & 1 == 1 { u64::MAX } else { 0 };
+            }
+        }
+        Some(Self { masks })
+    }
+}
+
+impl<const L: usize> PowerCurve<L> for HalvesByLane<L> {
+    #[inline(always)]
+    fn of(self, x: Lanes<L>) -> Lanes<L> {
+        let or_one = |factor: Lanes<L>, mask: &[u64; L]| {
+            let mut chosen = factor;
+            for (chosen, mask) in chosen.0.iter_mut().zip(mask) {
+                *chosen = f64::from_bits(chosen.to_bits() & mask | ONE_BITS & !mask);
+            }
+            chosen
+        };
+        let [half, one, two, four] = &self.masks;
+        let square = x * x;
+        let low = or_one(x.square_root(), half) * or_one(x, one);
+        low * or_one(square, two) * or_one(square * square, four)
+    }
+}
+
 /// Any power above 0, one a lane.
 #[derive(Clone, Copy, Debug)]
 pub struct AnyPower<const L: usize>(pub Lanes<L>);
@@ -160,6 +207,28 @@ mod tests {
                 assert!((halves.0[0] - any.0[0]).abs() <= 1e-12 * any.0[0]);
             }
             assert_eq!(Halves::<3>.of(x).0[1], x.0[0].sqrt() * x.0[0]);
+        }
+    }
+
+    #[test]
+    fn halves_by_lane_have_the_bits_of_halves_alone() {
+        let curve = HalvesByLane::of_powers(Lanes([0.5, 1.0, 2.5, 3.5, 4.0, 5.5, 6.0, 7.5])).unwrap();
+        for i in 0..=1000 {
+            let x = Lanes([f64::from(i) / 1000.0; 8]);
+            let alone = [
+                Halves::<1>.of(x).0[0],
+                Halves::<2>.of(x).0[0],
+                Halves::<5>.of(x).0[0],
+                Halves::<7>.of(x).0[0],
+                Halves::<8>.of(x).0[0],
+                Halves::<11>.of(x).0[0],
+                Halves::<12>.of(x).0[0],
+                Halves::<15>.of(x).0[0],
+            ];
+            assert_eq!(curve.of(x).0, alone);
+        }
+        for wrong in [0.0, 0.25, 2.6, 8.0, -1.0, f64::NAN, f64::INFINITY] {
+            assert!(HalvesByLane::of_powers(Lanes([1.0, wrong])).is_none(), "{wrong}");
         }
     }
 }

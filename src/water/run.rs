@@ -33,8 +33,8 @@ pub fn water_years(calendar: &[CalendarDay], start_month: u8) -> impl Iterator<I
     })
 }
 
-/// Days from the record's start to the last anniversary within `years` years.
-fn settling_days(calendar: &[CalendarDay], years: u8) -> usize {
+/// Days from the record's start to the last anniversary within `years` years: what is run first to let the stores settle.
+pub fn settling_days(calendar: &[CalendarDay], years: u8) -> usize {
     let Some(first) = calendar.first() else { return 0 };
     let same = calendar.iter().enumerate().skip(1).filter(|(_, day)| day.month_day == first.month_day);
     same.take(usize::from(years)).last().map_or(0, |(index, _)| index)

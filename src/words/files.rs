@@ -23,12 +23,74 @@ macro_rules! embedded {
 
 /// Every `.ftl` file under `locales/`; a test holds this against the folder.
 pub const EMBEDDED: &[LocaleFile] = embedded! {
-    "en": "cautions.ftl", "command.ftl", "crops.ftl", "dates.ftl", "dials.ftl", "languages.ftl", "ledger.ftl", "numbers.ftl", "patterns.ftl", "record-problems.ftl", "signs.ftl", "tell.ftl", "terms.ftl", "units.ftl";
-    "en-GB": "dates.ftl", "ledger.ftl", "terms.ftl", "units.ftl";
-    "es": "cautions.ftl", "command.ftl", "crops.ftl", "dates.ftl", "dials.ftl", "languages.ftl", "ledger.ftl", "numbers.ftl", "patterns.ftl", "record-problems.ftl", "signs.ftl", "tell.ftl", "terms.ftl", "units.ftl";
-    "es-AR": "numbers.ftl", "terms.ftl";
-    "es-CL": "crops.ftl", "ledger.ftl", "numbers.ftl", "signs.ftl", "terms.ftl";
-    "es-ES": "cautions.ftl", "command.ftl", "crops.ftl", "ledger.ftl", "numbers.ftl", "signs.ftl", "tell.ftl", "terms.ftl";
-    "es-MX": "crops.ftl", "signs.ftl", "tell.ftl", "terms.ftl";
-    "es-embalse": "cautions.ftl", "command.ftl", "dials.ftl", "ledger.ftl", "signs.ftl", "terms.ftl";
+    "en":
+        "cautions.ftl",
+        "command.ftl",
+        "crops.ftl",
+        "dates.ftl",
+        "dials.ftl",
+        "languages.ftl",
+        "ledger.ftl",
+        "numbers.ftl",
+        "patterns.ftl",
+        "picture.ftl",
+        "problems.ftl",
+        "record-problems.ftl",
+        "signs.ftl",
+        "tell.ftl",
+        "terms.ftl",
+        "units.ftl";
+    "en-GB":
+        "dates.ftl",
+        "ledger.ftl",
+        "terms.ftl",
+        "units.ftl";
+    "es":
+        "cautions.ftl",
+        "command.ftl",
+        "crops.ftl",
+        "dates.ftl",
+        "dials.ftl",
+        "languages.ftl",
+        "ledger.ftl",
+        "numbers.ftl",
+        "patterns.ftl",
+        "picture.ftl",
+        "problems.ftl",
+        "record-problems.ftl",
+        "signs.ftl",
+        "tell.ftl",
+        "terms.ftl",
+        "units.ftl";
+    "es-AR":
+        "numbers.ftl",
+        "terms.ftl";
+    "es-CL":
+        "crops.ftl",
+        "ledger.ftl",
+        "numbers.ftl",
+        "signs.ftl",
+        "terms.ftl";
+    "es-ES":
+        "cautions.ftl",
+        "command.ftl",
+        "crops.ftl",
+        "ledger.ftl",
+        "numbers.ftl",
+        "signs.ftl",
+        "tell.ftl",
+        "terms.ftl";
+    "es-MX":
+        "crops.ftl",
+        "signs.ftl",
+        "tell.ftl",
+        "terms.ftl";
+    "es-embalse":
+        "cautions.ftl",
+        "command.ftl",
+        "dials.ftl",
+        "ledger.ftl",
+        "problems.ftl",
+        "signs.ftl",
+        "terms.ftl";
 };

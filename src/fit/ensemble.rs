@@ -1,0 +1,98 @@
+//! Sets that fit nearly as well as the best, spread out: what the record cannot tell apart.
+//!
+//! A set is *behavioural* (Beven & Binley 1992, *Hydrological Processes* 6, 279–298) if its score lies within a stated
+//! distance of the best. Of all that were tried, the best is kept first and then, again and again, the one that lies
+//! farthest from those already kept, measured in the unit cube of the search. The band of their flows is what the
+//! parameters leave open; it is narrower than the real error, which the weather, the gauge and the model have a share in.
+
+use serde::{Deserialize, Serialize};
+
+use super::starts::Tried;
+
+/// Fewest sets of an ensemble.
+pub const FEWEST_SETS: usize = 20;
+/// Distance from the best score within which a set is behavioural, by default (common practice, no source).
+pub const DISTANCE: f64 = 0.02;
+/// Sets that are kept, by default.
+pub const SETS: usize = 32;
+/// Shares of the sets below and above which the band ends.
+pub const BAND_SHARES: (f64, f64) = (0.05, 0.95);
+
+/// Which sets were kept.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Chosen {
+    /// Indices of the tried points, the best first, in the order of choice.
+    pub kept: Vec<usize>,
+    /// The distance that was used: the one asked for, or the least that has [`FEWEST_SETS`] sets.
+    pub distance: f64,
+    /// How many tried sets lie within it.
+    pub behavioural: usize,
+}
+
+/// How an ensemble came about.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize, Deserialize)]
+#[serde(deny_unknown_fields)]
+pub struct Spread {
+    /// Distance from the best score that was asked for.
+    pub distance_asked: f64,
+    /// Distance that was used; larger only where fewer than [`FEWEST_SETS`] sets lay within the other.
+    pub distance: f64,
+    /// Tried sets within it.
+    pub behavioural: usize,
+}
+
+/// Chooses up to `sets` sets of `tried` within `distance` of the best score. There are fewer than [`FEWEST_SETS`] only if
+/// fewer have a score. Sets that are alike to the last bit count once.
+pub fn choose(tried: &[Tried], best: usize, distance: f64, sets: usize) -> Chosen {
+    let mut order: Vec<usize> = (0..tried.len()).filter(|&index| tried[index].score > f64::NEG_INFINITY).collect();
+    order.sort_by(|&a, &b| tried[b].score.total_cmp(&tried[a].score).then(a.cmp(&b)));
+    order.dedup_by(|a, b| tried[*a].point == tried[*b].point);
+    let loss = |index: usize| tried[best].score - tried[index].score;
+    let within = order.iter().take_while(|&&index| loss(index) <= distance).count();
+    let behavioural = within.max(FEWEST_SETS).min(order.len());
+    let distance = order[..behavioural].last().map_or(distance, |&last| distance.max(loss(last)));
+    let candidates = &order[..behavioural];
+
+    let apart = |a: usize, b: usize| -> f64 {
+        tried[a].point.iter().zip(&tried[b].point).map(|(a, b)| (a - b) * (a - b)).sum()
+    };
+    let mut kept = vec![best];
+    let mut nearest: Vec<f64> = candidates.iter().map(|&index| apart(index, best)).collect();
+    while kept.len() < sets.max(FEWEST_SETS) {
+        let mut farthest: Option<usize> = None;
+        for (at, away) in nearest.iter().enumerate() {
+            if *away > farthest.map_or(0.0, |at| nearest[at]) {
+                farthest = Some(at);
+            }
+        }
+        let Some(at) = farthest else { break };
+        kept.push(candidates[at]);
+        for (away, &index) in nearest.iter_mut().zip(candidates) {
+            *away = away.min(apart(index, candidates[at]));
+        }
+    }
+    Chosen { kept, distance, behavioural }
+}
+
+/// The band of several series on each day: from the lower to the upper of [`BAND_SHARES`], by straight lines between the
+/// ordered values. Empty for no series; as long as the shortest.
+pub fn band(series: &[Vec<f64>]) -> Vec<(f64, f64)> {
+    let days = series.iter().map(Vec::len).min().unwrap_or(0);
+    let mut values = vec![0.0; series.len()];
+    (0..days)
+        .map(|day| {
+            for (value, one) in values.iter_mut().zip(series) {
+                *value = one[day];
+            }
+            values.sort_by(f64::total_cmp);
+            (quantile(&values, BAND_SHARES.0), quantile(&values, BAND_SHARES.1))
+        })
+        .collect()
+}
+
+fn quantile(sorted: &[f64], share: f64) -> f64 {
+    let rank = share * (sorted.len() - 1) as f64;
+    let below = rank as usize;
+    let above = (below + 1).min(sorted.len() - 1);
+    sorted[below] + (sorted[above] - sorted[below]) * (rank - below as f64)
+}

@@ -1,0 +1,268 @@
+//! Who gets water and until when: the year of every canal as a strip, the oldest right on top.
+
+use embedded_graphics::geometry::Point;
+use embedded_graphics::primitives::Rectangle;
+
+use super::layout::{Layout, area, bottom, right};
+use super::months::{draw_months, months_height};
+use super::scene::{CanalShown, CanalTitle, Scene};
+use super::wording::{change_ink, day_short, fit, name_within, right_since};
+use super::{Answer, View, frame, layout_of};
+use crate::picture::chart::{DayMark, Plot, as_it_was, day_cursor, swatch, swatch_as_it_was, year_strip};
+use crate::picture::lettering::{Across, Face, draw as draw_text, draw_in, measure};
+use crate::picture::line::{polyline, segment};
+use crate::picture::{Align, Canvas, Spot, Theme};
+use crate::words::Words;
+
+/// Columns and rows of the page.
+#[derive(Clone, Copy, Debug)]
+struct Grid {
+    names: i32,
+    dates: i32,
+    strip_left: i32,
+    strip_wide: i32,
+    row_high: i32,
+    /// Whether rows are high enough for names and dates.
+    named: bool,
+    /// Whether a row has room for a second line of small type.
+    two_lines: bool,
+}
+
+/// Draws the page.
+pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &Words) {
+    let layout = layout_of(canvas, scene);
+    frame::draw_frame(canvas, &layout, scene, View::Canals, &Answer::canals(scene), theme, words);
+    if scene.canals.is_empty() {
+        return;
+    }
+    let room = layout.content;
+    let foot = months_height(layout.note) + layout.label.line_px() + layout.gap;
+    let rows = area(room.top_left.x, room.top_left.y, room.size.width as i32, room.size.height as i32 - foot);
+    let grid = grid_of(&layout, rows, scene, words);
+    let whole_year = (0.0, scene.year.calendar.len() as f64);
+    let mut y = rows.top_left.y;
+    let note_at = y;
+    if !grid.named {
+        y += layout.note.line_px();
+        let text = words.say("picture-names-elsewhere", &[("n", scene.canals.len().into())]);
+        let note = area(rows.top_left.x, note_at, rows.size.width as i32, layout.note.line_px());
+        fit(canvas, &text, note, layout.note, theme.quiet, Across::Left);
+    }
+    let first = y;
+    for (title, (was, now)) in scene.canals.iter().zip(scene.was.canals.iter().zip(scene.now.canals)) {
+        let row = area(rows.top_left.x, y, rows.size.width as i32, grid.row_high);
+        y += grid.row_high;
+        draw_strip(canvas, &layout, &grid, row, (was, now), scene, theme);
+        if grid.named {
+            draw_words(canvas, &layout, &grid, row, title, scene, theme, words);
+        }
+    }
+    let axis = Plot {
+        area: area(grid.strip_left, first, grid.strip_wide, y - first + layout.gap / 2),
+        across: whole_year,
+        up: (0.0, 1.0),
+    };
+    day_cursor(canvas, &axis, scene.day as f64 + 0.5, theme.lack);
+    draw_months(canvas, &axis, &scene.year, layout.note, theme, words);
+    let legend_top = bottom(room) - layout.label.line_px();
+    let legend = area(room.top_left.x, legend_top, room.size.width as i32, layout.label.line_px());
+    draw_legend(canvas, &layout, legend, scene, theme, words);
+}
+
+fn grid_of(layout: &Layout, rows: Rectangle, scene: &Scene<'_>, words: &Words) -> Grid {
+    let count = scene.canals.len() as i32;
+    let high = rows.size.height as i32;
+    let named = high / count >= layout.note.cap_px() + layout.note.descent_px() + 1;
+    let free = if named { high } else { high - layout.note.line_px() };
+    let row_high = (free / count).clamp(2, layout.strong.line_px() * 5);
+    let two_lines = row_high >= layout.strong.line_px() + layout.note.line_px();
+    let face = name_face(layout, row_high);
+    let wide = rows.size.width as i32;
+    let (names, dates) = if named {
+        let name = |title: &CanalTitle<'_>| {
+            let since = measure(&right_since(title, words), layout.note).width;
+            let name = measure(title.name, face).width;
+            if two_lines { name.max(since) } else { name }
+        };
+        let names = scene.canals.iter().map(name).max().unwrap_or(0) as i32;
+        let dates = scene.canals.iter().map(|title| dates_width(layout, row_high, two_lines, title, scene, words));
+        (names.min(wide * 3 / 10), dates.max().unwrap_or(0))
+    } else {
+        (0, 0)
+    };
+    let gap = if named { layout.gap * 2 } else { 0 };
+    Grid {
+        names,
+        dates,
+        strip_left: rows.top_left.x + names + gap,
+        strip_wide: wide - names - dates - 2 * gap,
+        row_high,
+        named,
+        two_lines,
+    }
+}
+
+fn name_face(layout: &Layout, row_high: i32) -> Face {
+    if row_high >= layout.strong.line_px() { layout.strong } else { Face::bold(layout.note.px()) }
+}
+
+/// The last full day now, and how it moved in days.
+fn last_full(title: &CanalTitle<'_>, scene: &Scene<'_>, words: &Words) -> (String, Option<(f64, String)>) {
+    let of = |signs: Option<&crate::signs::CanalSigns>| signs.and_then(|signs| signs.last_full_date);
+    let (was, now) = (of(scene.was.canal_signs(title)), of(scene.now.canal_signs(title)));
+    let asks = scene.now.canal_signs(title).is_some_and(|signs| signs.supply_ratio.is_some());
+    let text = match now {
+        Some(day) => day_short(day, &scene.year, words),
+        None if asks => words.say("picture-no-full-day", &[]),
+        None => words.say("picture-no-demand", &[]),
+    };
+    let change = match (was, now) {
+        _ if !scene.changed() => None,
+        (Some(was), Some(now)) => {
+            let days = i32::from(now.day_of_water_year) - i32::from(was.day_of_water_year);
+            let text = if days == 0 { words.say("picture-same-day", &[]) } else { words.days_change(days) };
+            Some((f64::from(days), text))
+        }
+        (Some(was), None) => {
+            let before = day_short(was, &scene.year, words);
+            Some((-1.0, words.say("picture-was", &[("value", before.into())])))
+        }
+        (None, _) => None,
+    };
+    (text, change)
+}
+
+fn dates_width(
+    layout: &Layout,
+    row_high: i32,
+    two_lines: bool,
+    title: &CanalTitle<'_>,
+    scene: &Scene<'_>,
+    words: &Words,
+) -> i32 {
+    let (date, change) = last_full(title, scene, words);
+    let date = measure(&date, name_face(layout, row_high)).width;
+    let change = change.filter(|_| two_lines).map_or(0, |(_, text)| measure(&text, layout.note).width);
+    date.max(change) as i32
+}
+
+/// As it was as a dashed line that ends in a tick on its last full day, over the strip with your changes.
+fn draw_strip(
+    canvas: &mut Canvas<'_>,
+    layout: &Layout,
+    grid: &Grid,
+    row: Rectangle,
+    (was, now): (&CanalShown<'_>, &CanalShown<'_>),
+    scene: &Scene<'_>,
+    theme: &Theme,
+) {
+    let across = (0.0, scene.year.calendar.len() as f64);
+    let high = grid.row_high;
+    let with_line = scene.changed() && high >= 7;
+    let line_room = if with_line { (high / 4).max(3) } else { 0 };
+    let pad = if high >= 7 { (high / 8).max(1) } else { i32::from(high > 2) };
+    let top = row.top_left.y + pad / 2 + line_room;
+    let strip =
+        Plot { area: area(grid.strip_left, top, grid.strip_wide, high - pad - line_room), across, up: (0.0, 1.0) };
+    year_strip(canvas, &strip, now.marks.iter().copied(), theme);
+    if !with_line {
+        return;
+    }
+    let stroke = as_it_was(layout.line_px);
+    let y = f64::from(top) - f64::from(line_room) / 2.0 - 0.5;
+    let y = libm::floor(y) + 0.5;
+    // Dashes over the days that were full; a pair of ends for each unbroken span, since a gap parts the line.
+    let full = |day: usize| was.marks.get(day) == Some(&DayMark::Full);
+    let ends = (0..was.marks.len()).filter(|&day| full(day)).flat_map(|day| {
+        let begin = (day == 0 || !full(day - 1)).then_some(day as f64);
+        let end = (!full(day + 1)).then_some(day as f64 + 1.0);
+        let spot = |x: f64| Spot::new(strip.x(x), y);
+        let gap = Spot::new(f64::NAN, y);
+        [begin.map(spot), end.map(spot), end.map(|_| gap)].into_iter().flatten()
+    });
+    polyline(canvas, ends, stroke, theme.ink);
+    if let Some(last) = (0..was.marks.len()).rev().find(|&day| full(day)) {
+        let x = libm::floor(strip.x(last as f64 + 1.0)) - 0.5;
+        let half = f64::from(line_room) / 2.0 + 0.5;
+        segment(
+            canvas,
+            Spot::new(x, y - half),
+            Spot::new(x, y + half),
+            crate::picture::Stroke::solid(stroke.width_px),
+            theme.ink,
+        );
+    }
+}
+
+#[allow(clippy::too_many_arguments, reason = "one row, drawn once from one place")]
+fn draw_words(
+    canvas: &mut Canvas<'_>,
+    layout: &Layout,
+    grid: &Grid,
+    row: Rectangle,
+    title: &CanalTitle<'_>,
+    scene: &Scene<'_>,
+    theme: &Theme,
+    words: &Words,
+) {
+    let face = name_face(layout, grid.row_high);
+    let (date, change) = last_full(title, scene, words);
+    let second = if grid.two_lines { layout.note.line_px() } else { 0 };
+    let first = if grid.two_lines { face.line_px() } else { grid.row_high };
+    let top = row.top_left.y + (grid.row_high - first - second) / 2;
+    let left = row.top_left.x;
+    let name = name_within(title.name, face, grid.names as u32);
+    draw_in(canvas, &name, area(left, top, grid.names, first), face, theme.ink, Across::Left);
+    let dates_left = right(row) - grid.dates;
+    let lacks = change.as_ref().map_or(0.0, |(days, _)| *days);
+    let date_colour = if grid.two_lines { theme.ink } else { single_line_ink(lacks, theme) };
+    draw_in(canvas, &date, area(dates_left, top, grid.dates, first), face, date_colour, Across::Right);
+    if grid.two_lines {
+        let since = name_within(&right_since(title, words), layout.note, grid.names as u32);
+        draw_in(canvas, &since, area(left, top + first, grid.names, second), layout.note, theme.quiet, Across::Left);
+        if let Some((days, text)) = change {
+            let place = area(dates_left, top + first, grid.dates, second);
+            draw_in(canvas, &text, place, layout.note, change_ink(days, theme), Across::Right);
+        }
+    }
+}
+
+fn single_line_ink(days: f64, theme: &Theme) -> embedded_graphics::pixelcolor::Rgb565 {
+    if days == 0.0 { theme.ink } else { change_ink(days, theme) }
+}
+
+fn draw_legend(
+    canvas: &mut Canvas<'_>,
+    layout: &Layout,
+    room: Rectangle,
+    scene: &Scene<'_>,
+    theme: &Theme,
+    words: &Words,
+) {
+    let face = layout.note;
+    let middle = room.top_left.y + room.size.height as i32 / 2;
+    let tall = face.cap_px() + 1;
+    let wide = tall * 2;
+    let mut x = room.top_left.x;
+    let mut entry = |canvas: &mut Canvas<'_>, id: &str, mark: Option<DayMark>| {
+        let text = words.say(id, &[]);
+        let needed = measure(&text, face).width as i32;
+        if x + wide + layout.gap + needed > right(room) {
+            return;
+        }
+        let place = area(x, middle - tall / 2, wide, tall);
+        match mark {
+            Some(mark) => swatch(canvas, place, mark, theme),
+            None => swatch_as_it_was(canvas, place, layout.line_px, theme),
+        }
+        x += wide + layout.gap;
+        draw_text(canvas, &text, Point::new(x, middle), face, theme.quiet, Align::LEFT.cap_middle());
+        x += needed + layout.gap * 3;
+    };
+    entry(canvas, "term-full.short", Some(DayMark::Full));
+    entry(canvas, "term-short.short", Some(DayMark::Short));
+    entry(canvas, "term-cut.short", Some(DayMark::Cut));
+    if scene.changed() {
+        entry(canvas, "picture-was-full", None);
+    }
+}

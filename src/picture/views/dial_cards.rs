@@ -1,0 +1,132 @@
+//! The dials along the bottom: name, value, and a track that shows rest, reach and where the dial stands.
+
+use embedded_graphics::pixelcolor::Rgb565;
+use embedded_graphics::primitives::Rectangle;
+
+use super::layout::{Layout, area, right};
+use super::scene::{DialSetting, Scene};
+use super::wording::{dial_name, dial_value, fit};
+use crate::picture::lettering::{Across, Face, measure};
+use crate::picture::shape::{bead, rounded_box, rounded_frame};
+use crate::picture::{Canvas, Spot, Theme};
+use crate::water::dials::Dials;
+use crate::words::Words;
+
+/// Colours of one card.
+struct Look {
+    ground: Rgb565,
+    text: Rgb565,
+    name: Rgb565,
+    track: Rgb565,
+}
+
+pub(super) fn draw_dials(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, theme: &Theme, words: &Words) {
+    for (index, place) in places(layout, scene) {
+        let Some(setting) = scene.dials.get(index) else { continue };
+        let chosen = scene.chosen == Some(index);
+        let look = if chosen {
+            Look { ground: theme.chosen, text: theme.on_chosen, name: theme.on_chosen, track: theme.on_chosen }
+        } else {
+            let text = if setting.rests() { theme.quiet } else { theme.ink };
+            Look { ground: theme.card, text, name: theme.quiet, track: theme.rule }
+        };
+        let radius = f64::from(layout.gap);
+        rounded_box(canvas, place, radius, look.ground);
+        if !chosen {
+            rounded_frame(canvas, place, radius, 1.0, theme.faint);
+        }
+        card(canvas, layout, setting, place, &look, scene, theme, words);
+    }
+}
+
+/// Which dial stands where: all of them in rows on a large screen; on a small one the chosen one, as wide as there is
+/// room, and beside it those that are turned, as many as fit.
+pub(super) fn places<'s>(layout: &Layout, scene: &'s Scene<'_>) -> impl Iterator<Item = (usize, Rectangle)> + use<'s> {
+    let room = layout.dials;
+    let (columns, gap) = (layout.dial_columns.max(1), layout.gap);
+    let count = scene.dials.len();
+    let small = layout.dial_rows == 1;
+    let turned =
+        move |index: &usize| scene.chosen != Some(*index) && scene.dials.get(*index).is_some_and(|s| !s.rests());
+    let shown: Vec<usize> = if small {
+        let chosen = scene.chosen.filter(|&index| index < count);
+        let others = columns - usize::from(chosen.is_some());
+        chosen.into_iter().chain((0..count).filter(turned).take(others)).collect()
+    } else {
+        (0..count).collect()
+    };
+    let across = if small { columns } else { columns.min(count.max(1)) };
+    let wide = (room.size.width as i32 - gap * (across as i32 - 1)) / across as i32;
+    let rows = layout.dial_rows as i32;
+    let high = (room.size.height as i32 - gap * (rows - 1)) / rows;
+    // On a small screen the first card takes what the others leave.
+    let first = if small { room.size.width as i32 - (wide + gap) * (shown.len() as i32 - 1) } else { wide };
+    shown.into_iter().enumerate().map(move |(at, index)| {
+        let (column, row) = ((at % across) as i32, (at / across) as i32);
+        let x = if column == 0 { 0 } else { first + gap + (column - 1) * (wide + gap) };
+        let width = if column == 0 { first } else { wide };
+        (index, area(room.top_left.x + x, room.top_left.y + row * (high + gap), width, high))
+    })
+}
+
+#[allow(clippy::too_many_arguments, reason = "one card, drawn once from one place")]
+fn card(
+    canvas: &mut Canvas<'_>,
+    layout: &Layout,
+    setting: &DialSetting,
+    place: Rectangle,
+    look: &Look,
+    scene: &Scene<'_>,
+    theme: &Theme,
+    words: &Words,
+) {
+    let pad = layout.gap + 1;
+    let (left, top) = (place.top_left.x + pad, place.top_left.y);
+    let (wide, high) = (place.size.width as i32 - 2 * pad, place.size.height as i32);
+    let name = dial_name(setting.dial, words);
+    let value = dial_value(setting, scene.units, words);
+    if layout.dial_rows > 1 {
+        let taken = measure(&value, layout.strong).width as i32 + 1;
+        let value_left = (left + wide - taken).max(left);
+        fit(canvas, &value, area(value_left, top, taken.min(wide), high), layout.strong, look.text, Across::Right);
+        let rest = area(left, top, value_left - left - layout.gap, high);
+        fit(canvas, &name, rest, layout.label, look.name, Across::Left);
+        return;
+    }
+    let name_high = layout.label.line_px();
+    fit(canvas, &name, area(left, top + 1, wide, name_high), layout.label, look.name, Across::Left);
+    let figure = Face::bold(layout.strong.px() + 2);
+    let least_track = i32::from(layout.label.px()) * 3;
+    let below = area(left, top + name_high, wide, high - name_high - 1);
+    let taken = (measure(&value, figure).width as i32 + 1).min(wide);
+    fit(canvas, &value, area(left, below.top_left.y, taken, below.size.height as i32), figure, look.text, Across::Left);
+    let track = area(left + taken + pad, below.top_left.y, wide - taken - pad, below.size.height as i32);
+    if track.size.width as i32 >= least_track {
+        draw_track(canvas, setting, track, look, theme);
+    }
+}
+
+/// A level line from the least to the most value, a tick at rest, thick from rest to where the dial stands.
+fn draw_track(canvas: &mut Canvas<'_>, setting: &DialSetting, place: Rectangle, look: &Look, theme: &Theme) {
+    let range = setting.range;
+    let Some(value) = setting.value else { return };
+    if range.most <= range.least {
+        return;
+    }
+    let radius = f64::from(place.size.height.min(16)) / 4.0;
+    let (from, to) = (f64::from(place.top_left.x) + radius, f64::from(right(place)) - radius);
+    let y = place.top_left.y + place.size.height as i32 / 2;
+    let x = |value: f64| from + (to - from) * (value - range.least) / (range.most - range.least);
+    let bar = |canvas: &mut Canvas<'_>, one: f64, other: f64, thick: i32, colour: Rgb565| {
+        let (left, end) = (one.min(other), one.max(other));
+        canvas.fill(area(left as i32, y - thick / 2, (end - left) as i32 + 1, thick), colour);
+    };
+    bar(canvas, from, to, 1, look.track);
+    let rest = Dials::REST.get(setting.dial).filter(|rest| *rest >= range.least && *rest <= range.most);
+    if let Some(rest) = rest {
+        let tick = place.size.height as i32 / 3;
+        canvas.fill(area(x(rest) as i32, y - tick / 2 - 1, 1, tick + 1), look.track);
+        bar(canvas, x(rest), x(value), 3, theme.lack);
+    }
+    bead(canvas, Spot::new(x(value), f64::from(y)), radius, theme.lack, look.ground);
+}

@@ -1,7 +1,5 @@
 # Palabras de España. Las revisa una persona de allá antes de imprimir.
 
-tell-dials = Mandos
 tell-dials-at-rest = Todos los mandos están en reposo: todavía no hay cambios.
-tell-mean = Media
 tell-mean-of-years = Media de { $n } años
 tell-storms-kept = Los mandos no cambian el orden de las tormentas, los días de lluvia ni el calendario de cultivos.

@@ -25,6 +25,7 @@ macro_rules! embedded {
 pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en":
         "cautions.ftl",
+        "columns.ftl",
         "command.ftl",
         "crops.ftl",
         "dates.ftl",
@@ -36,17 +37,21 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "picture.ftl",
         "problems.ftl",
         "record-problems.ftl",
+        "show.ftl",
         "signs.ftl",
         "tell.ftl",
         "terms.ftl",
-        "units.ftl";
+        "units.ftl",
+        "weather.ftl";
     "en-GB":
         "dates.ftl",
         "ledger.ftl",
+        "tell.ftl",
         "terms.ftl",
         "units.ftl";
     "es":
         "cautions.ftl",
+        "columns.ftl",
         "command.ftl",
         "crops.ftl",
         "dates.ftl",
@@ -58,10 +63,12 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "picture.ftl",
         "problems.ftl",
         "record-problems.ftl",
+        "show.ftl",
         "signs.ftl",
         "tell.ftl",
         "terms.ftl",
-        "units.ftl";
+        "units.ftl",
+        "weather.ftl";
     "es-AR":
         "numbers.ftl",
         "terms.ftl";
@@ -92,5 +99,6 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "ledger.ftl",
         "problems.ftl",
         "signs.ftl",
+        "tell.ftl",
         "terms.ftl";
 };

@@ -104,13 +104,14 @@ fn commonest(pixels: impl Iterator<Item = Rgb565>) -> Option<Rgb565> {
     counts.into_iter().rev().max_by_key(|&(_, count)| count).map(|(colour, _)| colour)
 }
 
-/// Where a text begins: letters keep its left edge, its middle or its right edge, as it was set in its box.
+/// Where a text begins: letters keep its left edge, its middle or its right edge, as it was set in its box; the left one
+/// where there is no box.
 fn column_of(text: &PlacedText, letters: usize, room: &Room) -> usize {
     let (left, width) = (f64::from(text.ink.top_left.x), f64::from(text.ink.size.width));
     let (start, end) = (room.column_at(left), room.column_at(left + width));
     let spare = end - start - letters as f64;
     let share = match text.given {
-        None => 0.5,
+        None => 0.0,
         Some(given) => {
             let before = left - f64::from(given.top_left.x);
             let after = f64::from(given.size.width) - before - width;

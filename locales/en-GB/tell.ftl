@@ -1,0 +1,3 @@
+# Words of Britain.
+
+tell-less-than-a-liter = less than a litre

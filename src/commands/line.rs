@@ -1,0 +1,151 @@
+//! The command line itself, built at run time so that every word of its help is in the reader's language.
+
+use clap::builder::{PathBufValueParser, StringValueParser, Styles};
+use clap::{Arg, ArgAction, ColorChoice, Command};
+
+use crate::words::Words;
+
+/// Columns that help is written for.
+const HELP_WIDTH: usize = 80;
+
+/// The whole command line.
+pub(super) fn command(words: &Words) -> Command {
+    let say = |id: &str| words.say(id, &[]);
+    let template = format!(
+        "{{about}}\n\n{}: deshielo {}\n\n{}:\n{{subcommands}}\n\n{}:\n{{options}}\n\n{}\n",
+        say("help-usage"),
+        say("help-usage-commands"),
+        say("help-commands"),
+        say("help-options"),
+        say("help-more"),
+    );
+    plain(Command::new("deshielo"), words)
+        .version(env!("CARGO_PKG_VERSION"))
+        .about(say("help-about"))
+        .help_template(template)
+        .disable_help_subcommand(true)
+        .subcommand(show(words))
+        .subcommand(tell(words))
+        .subcommand(check(words))
+        .subcommand(weather(words))
+        .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
+        .args(common(words))
+}
+
+fn show(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("show", "help-usage-show", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("screen", "value-screen", "help-screen", words).action(ArgAction::Append))
+        .arg(text("size", "value-size", "help-size", words))
+        .arg(path_option("into", "value-folder", "help-show-into", words))
+        .arg(text("units", "value-units", "help-units", words))
+        .arg(text("theme", "value-theme", "help-theme", words).help(with_usual("help-theme", "light", words)))
+        .args(common(words))
+}
+
+fn tell(words: &Words) -> Command {
+    let say = |id: &str| words.say(id, &[]);
+    subcommand("tell", "help-usage-tell", words)
+        .arg(path("place", "value-place", "help-place", words).required(false).help(with_usual(
+            "help-place",
+            "demo",
+            words,
+        )))
+        .arg(text("set", "value-set", "help-set", words).action(ArgAction::Append).allow_hyphen_values(true))
+        .arg(path_option("setting", "value-setting", "help-setting", words))
+        .arg(text("years", "value-years", "help-years", words))
+        .arg(flag("daily", "help-daily", words))
+        .arg(flag("crops", "help-crops", words))
+        .arg(flag("columns", "help-columns", words))
+        .arg(text("form", "value-form", "help-form", words).help(with_usual("help-form", "table", words)))
+        .arg(text("units", "value-units", "help-units", words))
+        .arg(path_option("out", "value-file", "help-out", words))
+        .args(common(words))
+        .after_help(say("help-tell-more"))
+}
+
+fn check(words: &Words) -> Command {
+    subcommand("check", "help-usage-check", words)
+        .arg(path("paths", "value-path", "help-paths", words).required(true).num_args(1..).action(ArgAction::Append))
+        .arg(text("form", "value-form", "help-check-form", words).help(with_usual("help-check-form", "table", words)))
+        .args(common(words))
+}
+
+fn weather(words: &Words) -> Command {
+    subcommand("weather", "help-usage-weather", words)
+        .arg(path("place", "value-place", "help-weather-place", words).required(false))
+        .arg(path_option("recipe", "value-recipe", "help-recipe", words))
+        .arg(text("years", "value-number", "help-length", words).help(with_usual("help-length", "40", words)))
+        .arg(text("from", "value-year", "help-from", words))
+        .arg(text("seed", "value-number", "help-seed", words).help(with_usual("help-seed", "1", words)))
+        .arg(path_option("out", "value-file", "help-out", words))
+        .arg(path_option("recipe-out", "value-file", "help-recipe-out", words))
+        .args(common(words))
+}
+
+/// A subcommand with our headings in place of the parser's English ones.
+fn subcommand(name: &'static str, usage_id: &str, words: &Words) -> Command {
+    let say = |id: &str| words.say(id, &[]);
+    let about = say(&format!("help-{name}"));
+    let template = format!(
+        "{{about}}\n\n{}: deshielo {name} {}\n\n{}:\n{{positionals}}\n\n{}:\n{{options}}{{after-help}}\n",
+        say("help-usage"),
+        say(usage_id),
+        say("help-arguments"),
+        say("help-options"),
+    );
+    plain(Command::new(name), words).about(about).help_template(template)
+}
+
+fn plain(command: Command, words: &Words) -> Command {
+    command
+        .color(ColorChoice::Never)
+        .styles(Styles::plain())
+        .term_width(HELP_WIDTH)
+        .disable_help_flag(true)
+        .disable_version_flag(true)
+        .arg(Arg::new("help").long("help").short('h').action(ArgAction::Help).help(words.say("help-help", &[])))
+}
+
+/// What every command takes.
+fn common(words: &Words) -> [Arg; 2] {
+    [text("lang", "value-lang", "help-lang", words), path_option("locales", "value-folder", "help-locales", words)]
+}
+
+fn with_usual(help_id: &str, usual: &str, words: &Words) -> String {
+    let default = words.say("help-default", &[("value", usual.into())]);
+    format!("{} [{default}]", words.say(help_id, &[]))
+}
+
+fn text(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+    let arg = Arg::new(name).long(name).value_name(words.say(value_id, &[])).help(words.say(help_id, &[]));
+    arg.value_parser(StringValueParser::new()).action(ArgAction::Set).allow_negative_numbers(true)
+}
+
+fn path(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+    let arg = Arg::new(name).value_name(words.say(value_id, &[])).help(words.say(help_id, &[]));
+    arg.value_parser(PathBufValueParser::new())
+}
+
+fn path_option(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+    path(name, value_id, help_id, words).long(name).action(ArgAction::Set)
+}
+
+fn flag(name: &'static str, help_id: &str, words: &Words) -> Arg {
+    Arg::new(name).long(name).action(ArgAction::SetTrue).help(words.say(help_id, &[]))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn the_command_line_is_sound_in_every_language() {
+        for tag in crate::words::KNOWN_TAGS {
+            let (words, _) = Words::new(tag);
+            command(&words).debug_assert();
+            assert_eq!(words.take_errors(), [], "{tag}");
+        }
+    }
+}

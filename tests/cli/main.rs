@@ -1,0 +1,10 @@
+//! Drives the real program, each test in a fresh folder.
+
+mod checking;
+mod golden;
+mod languages;
+mod numbers;
+mod output;
+mod refusals;
+mod support;
+mod weather;

@@ -31,6 +31,7 @@ show-pictures-written = { $n ->
     [one] { $n } picture is in { $path }.
    *[other] { $n } pictures are in { $path }.
 }
+show-folder-unwritable = Pictures cannot be written to { $path }: { $reason }. What was there before is as it was.
 
 show-why-board-file = The board file names it.
 show-why-desktop = This computer has a desktop.

@@ -31,6 +31,7 @@ show-pictures-written = { $n ->
     [one] Hay { $n } imagen en { $path }.
    *[other] Hay { $n } imágenes en { $path }.
 }
+show-folder-unwritable = No se pueden guardar imágenes en { $path }: { $reason }. Lo que había antes sigue igual.
 
 show-why-board-file = La indica el archivo de la placa.
 show-why-desktop = Esta computadora tiene escritorio.

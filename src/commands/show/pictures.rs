@@ -35,7 +35,7 @@ pub(super) fn write(player: &mut Player, request: &Request, words: &Words) -> Re
             write_picture(folder, &name, size, frame.pixels).map_err(|error| {
                 let arguments =
                     [("path", folder.display().to_string().into()), ("reason", reason(&error, words).into())];
-                Failure::Input(vec![words.say("error-folder-unwritable", &arguments)])
+                Failure::Input(vec![words.say("show-folder-unwritable", &arguments)])
             })?;
             count += 1;
             player.step(Event::Command(Command::StepView(1)));

@@ -186,9 +186,5 @@ fn voices(speech: &Speech, region: &str) -> Vec<(Words, Option<Words>)> {
 
 fn caption(place: &Place, words: &Words) -> [String; 3] {
     let name = place.name.get(words.tag());
-    [
-        words.say("show-title", &[("place", name.into())]),
-        words.say("show-hint", &[]),
-        words.say("show-too-small", &[]),
-    ]
+    [words.say("show-title", &[("place", name.into())]), words.say("show-hint", &[]), words.say("show-too-small", &[])]
 }

@@ -1,4 +1,9 @@
-//! How long drawing takes: a year's line, type, and the difference of two frames, at 320×240.
+//! How long drawing takes: a year's line, type, the difference of two frames, and whole pages, at 320×240.
+
+#[path = "../tests/support/scenes.rs"]
+mod scenes;
+#[path = "../tests/support/valleys.rs"]
+mod valleys;
 
 use criterion::{Criterion, criterion_group, criterion_main};
 use deshielo::picture::area::under;
@@ -6,10 +11,13 @@ use deshielo::picture::changes::changes;
 use deshielo::picture::chart::{LinePair, Plot, line_pair};
 use deshielo::picture::lettering::draw;
 use deshielo::picture::line::polyline;
+use deshielo::picture::views::valley;
 use deshielo::picture::{Align, Canvas, Face, Spot, Stroke, Theme};
+use deshielo::words::Words;
 use embedded_graphics::geometry::{Point, Size};
 use embedded_graphics::pixelcolor::{Rgb565, RgbColor};
 use embedded_graphics::primitives::Rectangle;
+use scenes::{Land, PAGES, Play, draw as draw_page, steep_valley};
 
 /// A made-up year of 365 places across the frame.
 fn year() -> impl Iterator<Item = Spot> + Clone {
@@ -47,5 +55,25 @@ fn drawing(c: &mut Criterion) {
     c.bench_function("difference of two frames", |b| b.iter(|| changes(&before, &now, 320)));
 }
 
-criterion_group!(benches, drawing);
+/// The pages with made-up runs, words and all.
+fn pages(c: &mut Criterion) {
+    let (words, _) = Words::new("es-US");
+    let theme = Theme::LIGHT;
+    let mut pixels = vec![Rgb565::WHITE; 320 * 240];
+    let mut large = vec![Rgb565::WHITE; 1920 * 1080];
+    Land::new(steep_valley(), 3, 7).show(Play { day: 216, ..Play::warm() }, |scene| {
+        for view in PAGES {
+            c.bench_function(&format!("{} page, 320×240", view.key()), |b| {
+                let mut canvas = Canvas::new(&mut pixels, 320, 240).unwrap();
+                b.iter(|| draw_page(view, &mut canvas, scene, &theme, &words));
+            });
+        }
+        c.bench_function("valley page, 1920×1080", |b| {
+            let mut canvas = Canvas::new(&mut large, 1920, 1080).unwrap();
+            b.iter(|| valley::draw(&mut canvas, scene, &theme, &words));
+        });
+    });
+}
+
+criterion_group!(benches, drawing, pages);
 criterion_main!(benches);

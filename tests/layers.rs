@@ -16,7 +16,7 @@ const MAY_NAME: [(&str, &[&str]); 11] = [
     ("signs", &["water"]),
     ("place", &["water", "signs"]),
     ("generator", &["water", "signs"]),
-    ("fit", &["water", "signs"]),
+    ("fit", &["water", "signs", "generator::random"]),
     ("lesson", &["water", "signs"]),
     ("words", &["water::units", "water::dials", "water::ledger", "signs::Sign", "signs::SignKind", "signs::SIGNS"]),
     (

@@ -13,11 +13,10 @@ use deshielo::picture::Theme;
 use deshielo::picture::views::View;
 use deshielo::words::{System, Words};
 use support::goldens::check;
-use support::scenes::{Land, PAGES, Play, draw};
-use support::valleys::whole_valley;
+use support::scenes::{Land, PAGES, Play, draw, steep_valley};
 
 fn land() -> Land {
-    Land::new(whole_valley(), 6, 7)
+    Land::new(steep_valley(), 6, 7)
 }
 
 fn name(view: View, what: &str) -> String {
@@ -26,9 +25,10 @@ fn name(view: View, what: &str) -> String {
 
 #[test]
 fn every_page_in_both_languages() {
-    for (tag, units) in [("en-US", System::Us), ("es-CL", System::Metric)] {
+    // A day of melt in one language, a day of lack in the other.
+    for (tag, units, day) in [("en-US", System::Us, 216), ("es-CL", System::Metric, 290)] {
         let (words, _) = Words::new(tag);
-        land().show(Play { units, ..Play::warm() }, |scene| {
+        land().show(Play { units, day, ..Play::warm() }, |scene| {
             for view in PAGES {
                 for (wide, high) in [(320, 240), (800, 480)] {
                     let name = name(view, &format!("{tag}-{wide}x{high}"));

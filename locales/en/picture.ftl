@@ -75,12 +75,12 @@ picture-year-dry = { $year }, a dry year
 picture-year-middling = { $year }, a middling year
 picture-year-wet = { $year }, a wet year
 picture-year-any = water year { $year }
-picture-carried-over = carried over
+picture-carried-over = not set
 
 picture-snow = Snow { $amount }
 picture-was = was { $value }
 picture-snow-line = snow line { $height }
-picture-no-snow = no snow on the ground
+picture-no-snow = bare mountain
 picture-minimum = minimum { $amount }
 picture-oldest-first = oldest right first
 picture-since = since { $year }

@@ -75,12 +75,12 @@ picture-year-dry = { $year }, año seco
 picture-year-middling = { $year }, año regular
 picture-year-wet = { $year }, año húmedo
 picture-year-any = año de agua { $year }
-picture-carried-over = lo que quedó
+picture-carried-over = sin fijar
 
 picture-snow = Nieve { $amount }
 picture-was = antes { $value }
 picture-snow-line = línea de nieve { $height }
-picture-no-snow = sin nieve en el suelo
+picture-no-snow = sierra sin nieve
 picture-minimum = mínimo { $amount }
 picture-oldest-first = primero el más antiguo
 picture-since = desde { $year }

@@ -1,7 +1,7 @@
 //! Fits a valley to its gauge, and finds out how far the fit can be trusted.
 //!
 //! [`fit`] does it all: it parts the years in halves and judges each half's fit on the other ([`split`]), fits all years
-//! ([`starts`], [`search`]), and keeps an ensemble of sets that fit nearly as well ([`ensemble`]). [`report::FitFile`] is
+//! ([`starts`], [`mod@search`]), and keeps an ensemble of sets that fit nearly as well ([`ensemble`]). [`report::FitFile`] is
 //! what is kept of it. The same records, settings and seed give the same bits on every target and any number of threads.
 //!
 //! Which numbers are fitted, and between which bounds, is in [`parameters`]; what "well" means in [`objective`].

@@ -35,6 +35,8 @@ pub struct Progress {
 /// A point that was tried.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Tried {
+    /// Which start tried it, from 0.
+    pub start: usize,
     /// In the unit cube.
     pub point: Vec<f64>,
     /// Its score; minus infinity where not defined.
@@ -81,11 +83,14 @@ pub fn search(
     let mut seeds = Stream::new(seed, Purpose::Starts);
     let searches: Vec<Search> =
         (0..starts).map(|_| Search::new(trial.dimensions(), runs_per_start, seeds.bits())).collect();
-    let groups: Vec<(Vec<Tried>, bool)> =
+    let groups: Vec<(Vec<Scored>, bool)> =
         searches.par_chunks(LANES).map(|group| search_group(trial, group.to_vec(), stop, each)).collect();
 
     let stopped = groups.iter().any(|(_, stopped)| *stopped);
-    let tried: Vec<Tried> = groups.into_iter().flat_map(|(tried, _)| tried).collect();
+    let by_start = groups.into_iter().flat_map(|(by_start, _)| by_start).enumerate();
+    let tried: Vec<Tried> = by_start
+        .flat_map(|(start, tried)| tried.into_iter().map(move |(point, score)| Tried { start, point, score }))
+        .collect();
     let mut best = None;
     for (index, one) in tried.iter().enumerate() {
         if one.score > best.map_or(f64::NEG_INFINITY, |best: usize| tried[best].score) {
@@ -96,15 +101,19 @@ pub fn search(
     Ok(Searched { tried, best, stopped })
 }
 
+/// The points of one start and their scores, in the order in which they were tried.
+type Scored = Vec<(Vec<f64>, f64)>;
+
+/// Runs the starts of a group side by side; what each tried, and whether they were stopped.
 fn search_group(
     trial: &Trial<'_>,
     mut searches: Vec<Search>,
     stop: &AtomicBool,
     each: &(dyn Fn(usize, f64) + Sync),
-) -> (Vec<Tried>, bool) {
+) -> (Vec<Scored>, bool) {
     let mut room = trial.room();
     let mut scores = [f64::NEG_INFINITY; LANES];
-    let mut tried: Vec<Vec<Tried>> = vec![Vec::new(); searches.len()];
+    let mut tried: Vec<Scored> = vec![Vec::new(); searches.len()];
     let mut stopped = false;
     while searches.iter().any(|search| !search.is_over()) {
         for search in &mut searches {
@@ -113,7 +122,7 @@ fn search_group(
         trial.score(searches.iter().map(Search::candidate), &mut room, &mut scores);
         let mut best_score = f64::NEG_INFINITY;
         for ((search, score), tried) in searches.iter_mut().zip(scores).zip(&mut tried) {
-            tried.push(Tried { point: search.candidate().to_vec(), score });
+            tried.push((search.candidate().to_vec(), score));
             search.learn(score);
             best_score = best_score.max(search.best_score());
         }
@@ -124,5 +133,5 @@ fn search_group(
             break;
         }
     }
-    (tried.into_iter().flatten().collect(), stopped)
+    (tried, stopped)
 }

@@ -98,6 +98,15 @@ impl Plot {
         watering_mm * self.area_ha * M3_PER_MM_HECTARE / self.efficiency
     }
 
+    /// Area harvested, ha, and its share of full yield; nothing where the crop has no published response.
+    fn harvest(&self, store: &PlotStore) -> (f64, f64) {
+        let share = self
+            .traits
+            .yield_response
+            .and_then(|response| yield_share(response, store.season_actual_mm, store.season_full_mm));
+        share.map_or((0.0, 0.0), |share| (self.area_ha, share))
+    }
+
     /// Whether the day about to pass is in the crop's season.
     #[inline(always)]
     fn in_season(&self, store: &PlotStore, day: MonthDay) -> bool {
@@ -162,8 +171,9 @@ impl Plots {
         self.plots.iter().zip(stores).map(|(plot, store)| plot.asked_m3(store, today)).sum()
     }
 
-    /// One day: `delivered_m3` is shared among the plots as they asked (`asked_m3` in all), rain falls, the crops use
-    /// water.
+    /// One day into `out`: `delivered_m3` is shared among the plots as they asked (`asked_m3` in all), rain falls, the
+    /// crops use water.
+    #[allow(clippy::too_many_arguments, reason = "the weather of a field is two numbers, its water two more")]
     pub fn day(
         &self,
         stores: &mut PlotStores,
@@ -172,8 +182,12 @@ impl Plots {
         asked_m3: f64,
         rain_mm: f64,
         reference_evaporation_mm: f64,
-    ) -> FieldsDay {
-        let mut out = FieldsDay::default();
+        out: &mut FieldsDay,
+    ) {
+        // Sums of their own, not fields of `out`: they stay in registers until the end.
+        let (mut area_ha, mut evaporation_m3, mut lost_m3) = (0.0, 0.0, 0.0);
+        let (mut crop_evaporation_m3, mut full_crop_evaporation_m3) = (0.0, 0.0);
+        let (mut harvested_ha, mut yield_ha) = (0.0, 0.0);
         let met = if asked_m3 > 0.0 { delivered_m3 / asked_m3 } else { 0.0 };
         for (plot, store) in self.plots.iter().zip(stores) {
             let m3_per_mm = plot.area_ha * M3_PER_MM_HECTARE;
@@ -200,29 +214,29 @@ impl Plots {
             );
             store.depletion_mm = zone.depletion_mm;
 
-            out.rain_m3 += rain_mm * m3_per_mm;
-            out.evaporation_m3 += zone.crop_evaporation_mm * m3_per_mm;
-            out.lost_m3 += edge_m3 - watering_m3 + zone.percolation_mm * m3_per_mm;
+            area_ha += plot.area_ha;
+            evaporation_m3 += zone.crop_evaporation_mm * m3_per_mm;
+            lost_m3 += edge_m3 - watering_m3 + zone.percolation_mm * m3_per_mm;
             if in_season {
                 store.season_actual_mm += zone.crop_evaporation_mm;
                 store.season_full_mm += full_mm;
-                out.crop_evaporation_m3 += zone.crop_evaporation_mm * m3_per_mm;
-                out.full_crop_evaporation_m3 += full_mm * m3_per_mm;
+                crop_evaporation_m3 += zone.crop_evaporation_mm * m3_per_mm;
+                full_crop_evaporation_m3 += full_mm * m3_per_mm;
                 if store.day_of_season == plot.season_days {
-                    out.harvest(plot, store);
+                    let (ha, share) = plot.harvest(store);
+                    harvested_ha += ha;
+                    yield_ha += share * ha;
                 }
             }
         }
-        out
-    }
-}
-
-impl FieldsDay {
-    fn harvest(&mut self, plot: &Plot, store: &PlotStore) {
-        let Some(response) = plot.traits.yield_response else { return };
-        if let Some(share) = yield_share(response, store.season_actual_mm, store.season_full_mm) {
-            self.harvested_ha += plot.area_ha;
-            self.yield_ha += share * plot.area_ha;
-        }
+        *out = FieldsDay {
+            rain_m3: rain_mm * area_ha * M3_PER_MM_HECTARE,
+            evaporation_m3,
+            crop_evaporation_m3,
+            full_crop_evaporation_m3,
+            lost_m3,
+            harvested_ha,
+            yield_ha,
+        };
     }
 }

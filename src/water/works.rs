@@ -306,17 +306,17 @@ impl Works {
             let arrived_m3 = head_m3 - on_the_way_m3;
             let lost_m3 = match &head.user {
                 User::Fields(fields) => {
-                    let day = fields.day(
+                    fields.day(
                         &mut stores.plots[index],
                         today.month_day,
                         arrived_m3,
                         at_edges_m3[index],
                         basin.valley_precipitation_mm,
                         basin.reference_evaporation_mm,
+                        &mut evening.fields[index],
                     );
-                    evening.fields[index] = day;
                     evening.town_used_m3[index] = 0.0;
-                    on_the_way_m3 + day.lost_m3
+                    on_the_way_m3 + evening.fields[index].lost_m3
                 }
                 User::Town { town, .. } => {
                     let used_m3 = arrived_m3 * town.used_up_share;

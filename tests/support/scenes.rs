@@ -63,6 +63,17 @@ impl Land {
     }
 }
 
+/// A valley whose mountain narrows towards its top, as mountains do.
+pub fn steep_valley() -> Valley {
+    let mut valley = super::valleys::whole_valley();
+    let shares = [26.0, 36.0, 40.0, 38.0, 32.0, 25.0, 18.0, 12.0, 7.0, 4.0];
+    for (index, (band, area_km2)) in valley.bands.iter_mut().zip(shares).enumerate() {
+        band.area_km2 = area_km2;
+        band.elevation_m = 1900.0 + 190.0 * index as f64;
+    }
+    valley
+}
+
 /// What a test wants to see of a land.
 #[derive(Clone, Copy)]
 pub struct Play<'a> {

@@ -3,13 +3,13 @@
 use embedded_graphics::geometry::{Point, Size};
 use embedded_graphics::primitives::Rectangle;
 
+use super::super::area::polygon;
 use super::super::canvas::Canvas;
 use super::super::chart::DayMark;
-use super::super::paint::mix;
+use super::super::paint::{Pattern, mix};
 use super::super::shape::{frame, triangle};
 use super::super::theme::Theme;
 use super::super::{Hatch, Paint, Spot};
-use crate::picture::paint::Pattern;
 
 /// How a field looks.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -58,7 +58,7 @@ fn draw_canal(canvas: &mut Canvas<'_>, area: Rectangle, mark: DayMark, theme: &T
             canvas.fill(area, theme.card);
             frame(canvas, area, 1, theme.lack);
         }
-        DayMark::Idle => canvas.fill(area, theme.card),
+        DayMark::Idle => {}
     }
 }
 
@@ -66,31 +66,20 @@ fn draw_canal(canvas: &mut Canvas<'_>, area: Rectangle, mark: DayMark, theme: &T
 pub fn draw_town(canvas: &mut Canvas<'_>, area: Rectangle, canal_px: u32, mark: DayMark, theme: &Theme) {
     let Rectangle { top_left, size } = area;
     let canal_px = canal_px.min(size.height);
-    let high = f64::from(size.height - canal_px);
-    let top = f64::from(top_left.y) + f64::from(canal_px);
-    canvas.fill(
-        Rectangle::new(
-            Point::new(top_left.x, top_left.y.saturating_add_unsigned(canal_px)),
-            Size::new(size.width, size.height - canal_px),
-        ),
-        theme.card,
-    );
-    let (wall, wide) = (high * 0.45, high * 0.8);
-    let count = (f64::from(size.width) / (wide * 1.15)).max(1.0) as u32;
-    let step = f64::from(size.width) / f64::from(count.min(6));
-    for house in 0..count.min(6) {
-        let wide = wide.min(step * 0.85);
+    let high = f64::from(size.height - canal_px) - 1.0;
+    let foot = f64::from(top_left.y) + f64::from(size.height);
+    let (roof, wide) = (high * 0.48, high * 0.85);
+    let count = ((f64::from(size.width) / (wide * 1.1)) as u32).clamp(1, 5);
+    let step = f64::from(size.width) / f64::from(count);
+    for house in 0..count {
+        let wide = wide.min(step * 0.9);
         let left = f64::from(top_left.x) + step * f64::from(house) + (step - wide) / 2.0;
-        let (eaves, foot) = (top + high - wall, top + high);
-        let corners = [Spot::new(left, eaves), Spot::new(left + wide / 2.0, top + 1.0), Spot::new(left + wide, eaves)];
+        let (eaves, ridge) = (foot - high + roof, foot - high);
+        let (wall_left, wall_right) = (left + wide * 0.12, left + wide * 0.88);
+        let wall = [(wall_left, eaves - 1.0), (wall_right, eaves - 1.0), (wall_right, foot), (wall_left, foot)];
+        polygon(canvas, wall.into_iter().map(|(x, y)| Spot::new(x, y)), theme.card);
+        let corners = [Spot::new(left, eaves), Spot::new(left + wide / 2.0, ridge), Spot::new(left + wide, eaves)];
         triangle(canvas, corners, theme.town);
-        let body = [
-            (left + wide * 0.14, eaves - 0.5),
-            (left + wide * 0.86, eaves - 0.5),
-            (left + wide * 0.86, foot),
-            (left + wide * 0.14, foot),
-        ];
-        super::super::area::polygon(canvas, body.into_iter().map(|(x, y)| Spot::new(x, y)), theme.town);
     }
     draw_canal(canvas, Rectangle::new(top_left, Size::new(size.width, canal_px)), mark, theme);
 }

@@ -57,11 +57,11 @@ impl Lake {
 }
 
 /// Draws the hollow as air, the water in it up to `share`, a dashed line where `was` stood, and the dam down to
-/// `foot_y`. Below `dead_share` the water cannot leave; a fine line marks that.
+/// `foot_y`.
 pub fn draw_lake(
     canvas: &mut Canvas<'_>,
     lake: Lake,
-    (share, was, dead_share): (f64, Option<f64>, f64),
+    (share, was): (f64, Option<f64>),
     foot_y: f64,
     stroke: Stroke,
     theme: &Theme,
@@ -70,13 +70,6 @@ pub fn draw_lake(
     let level = lake.surface_y(share);
     if share > 0.0 {
         polygon(canvas, lake.outline(level), theme.water);
-    }
-    if dead_share > 0.0 && dead_share < 1.0 {
-        let y = libm::floor(lake.surface_y(dead_share)) + 0.5;
-        let colour = if share > dead_share { theme.on_water } else { theme.rule };
-        let end = lake.across.1 - 1.0;
-        let begin = end - (end - lake.bank_x(y)) * 0.25;
-        segment(canvas, Spot::new(begin, y), Spot::new(end, y), Stroke::solid(1.0), colour);
     }
     polygon(canvas, lake.dam(foot_y).into_iter(), theme.ink);
     if let Some(was) = was {

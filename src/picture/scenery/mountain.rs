@@ -108,18 +108,14 @@ impl Mountain {
         Some(Spot::new(pair[0].x + (pair[1].x - pair[0].x) * share, y))
     }
 
-    /// Draws the rock down to `foot_y`, every second band a little lighter.
+    /// Draws the rock down to `foot_y`, with a fine level line at every height where one band ends and the next begins.
     pub fn draw_rock(&self, canvas: &mut Canvas<'_>, foot_y: f64, theme: &Theme) {
-        let ends = |left: f64, right: f64| {
-            let inner = self.corners.iter().copied().filter(move |corner| corner.x > left && corner.x < right);
-            let first = Spot::new(left, self.ground_y(left));
-            let last = Spot::new(right, self.ground_y(right));
-            [Spot::new(left, foot_y), first].into_iter().chain(inner).chain([last, Spot::new(right, foot_y)])
-        };
         let Some((&(left, _), &(_, right))) = self.spans.first().zip(self.spans.last()) else { return };
-        polygon(canvas, ends(left, right), theme.rock);
-        for &(left, right) in self.spans.iter().skip(1).step_by(2) {
-            polygon(canvas, ends(left, right), theme.rock_far);
+        let foot = [Spot::new(right, foot_y), Spot::new(left, foot_y)];
+        polygon(canvas, self.corners.iter().copied().chain(foot), theme.rock);
+        for &(_, border) in self.spans.iter().rev().skip(1) {
+            let y = libm::floor(self.ground_y(border)) + 0.5;
+            segment(canvas, Spot::new(left, y), Spot::new(border, y), Stroke::solid(1.0), theme.rock_far);
         }
     }
 

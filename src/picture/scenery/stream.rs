@@ -29,12 +29,12 @@ pub fn draw_channel(
         let y = top + deep_px * (1.0 - depth);
         [Spot::new(left, y), Spot::new(right, y + fall_px)].into_iter()
     };
-    polygon(canvas, line(1.0).chain(line(0.0).rev()), theme.sky);
+    // One pixel higher than the bed: no seam is left between it and the air above.
+    polygon(canvas, line(1.0 + 1.0 / deep_px.max(1.0)).chain(line(0.0).rev()), theme.sky);
     let share = if share > 0.0 { share.min(1.0) } else { 0.0 };
     between(canvas, line(share), line(0.0), Between::FirstHigher, theme.water);
     if let Some(minimum) = minimum.filter(|minimum| *minimum > 0.0) {
         let depth = minimum.min(1.0);
-        polyline(canvas, line(depth), Stroke::solid(stroke.width_px + 1.0), theme.sky);
         polyline(canvas, line(depth), stroke, theme.ink);
     }
 }

@@ -191,7 +191,8 @@ impl Answer {
     /// The sentence.
     pub fn say(&self, scene: &Scene<'_>, words: &Words) -> String {
         let date = |day: &CalendarDay| Value::from(day_in_sentence(*day, &scene.year, words));
-        let name = |canal: usize| Value::from(scene.canals.get(canal).map_or("", |title| title.name));
+        let name =
+            |canal: usize| Value::from(scene.canals.get(canal).map_or(String::new(), |title| name_said(title.name)));
         let tell = |what: &Event, form: &str, args: &[(&str, Value<'_>)]| {
             let mut args = args.to_vec();
             args.extend(what.canal().map(|canal| ("canal", name(canal))));
@@ -258,4 +259,18 @@ fn event(what: Event, was: Option<CalendarDay>, now: Option<CalendarDay>, change
 
 fn holds_zero((low, high): (i32, i32)) -> bool {
     low.min(high) <= 0 && low.max(high) >= 0
+}
+
+/// Letters that a name may take of a sentence.
+const NAME_LETTERS: usize = 24;
+
+/// A name as a sentence says it: whole, or its beginning where it would leave no room for the rest.
+fn name_said(name: &str) -> String {
+    match name.char_indices().nth(NAME_LETTERS) {
+        None => name.to_owned(),
+        Some(_) => {
+            let end = name.char_indices().nth(NAME_LETTERS - 1).map_or(name.len(), |(at, _)| at);
+            format!("{}…", name[..end].trim_end())
+        }
+    }
 }

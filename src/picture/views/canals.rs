@@ -9,7 +9,7 @@ use super::scene::{CanalShown, CanalTitle, Scene};
 use super::wording::{change_ink, day_short, fit, name_within, right_since};
 use super::{Answer, View, frame, layout_of};
 use crate::picture::chart::{DayMark, Plot, as_it_was, day_cursor, swatch, swatch_as_it_was, year_strip};
-use crate::picture::lettering::{Across, Face, draw as draw_text, draw_in, measure};
+use crate::picture::lettering::{Across, Face, draw as draw_text, measure};
 use crate::picture::line::{polyline, segment};
 use crate::picture::{Align, Canvas, Spot, Theme};
 use crate::words::Words;
@@ -36,10 +36,12 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
         return;
     }
     let room = layout.content;
-    let foot = months_height(layout.note) + layout.label.line_px() + layout.gap;
+    let legend_high = line_high(layout.note) + 1;
+    let foot = months_height(layout.note) + legend_high;
     let rows = area(room.top_left.x, room.top_left.y, room.size.width as i32, room.size.height as i32 - foot);
     let grid = grid_of(&layout, rows, scene, words);
-    let whole_year = (0.0, scene.year.calendar.len() as f64);
+    let (from, to) = window(scene);
+    let across = (from as f64, to as f64);
     let mut y = rows.top_left.y;
     let note_at = y;
     if !grid.named {
@@ -52,20 +54,17 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
     for (title, (was, now)) in scene.canals.iter().zip(scene.was.canals.iter().zip(scene.now.canals)) {
         let row = area(rows.top_left.x, y, rows.size.width as i32, grid.row_high);
         y += grid.row_high;
-        draw_strip(canvas, &layout, &grid, row, (was, now), scene, theme);
+        draw_strip(canvas, &layout, &grid, row, (was, now), (from, to), scene, theme);
         if grid.named {
             draw_words(canvas, &layout, &grid, row, title, scene, theme, words);
         }
     }
-    let axis = Plot {
-        area: area(grid.strip_left, first, grid.strip_wide, y - first + layout.gap / 2),
-        across: whole_year,
-        up: (0.0, 1.0),
-    };
-    day_cursor(canvas, &axis, scene.day as f64 + 0.5, theme.lack);
+    let axis = Plot { area: area(grid.strip_left, first, grid.strip_wide, y - first), across, up: (0.0, 1.0) };
+    if (from..to).contains(&scene.day) {
+        day_cursor(canvas, &axis, scene.day as f64 + 0.5, theme.lack);
+    }
     draw_months(canvas, &axis, &scene.year, layout.note, theme, words);
-    let legend_top = bottom(room) - layout.label.line_px();
-    let legend = area(room.top_left.x, legend_top, room.size.width as i32, layout.label.line_px());
+    let legend = area(room.top_left.x, bottom(room) - legend_high, room.size.width as i32, legend_high);
     draw_legend(canvas, &layout, legend, scene, theme, words);
 }
 
@@ -75,8 +74,8 @@ fn grid_of(layout: &Layout, rows: Rectangle, scene: &Scene<'_>, words: &Words) -
     let named = high / count >= layout.note.cap_px() + layout.note.descent_px() + 1;
     let free = if named { high } else { high - layout.note.line_px() };
     let row_high = (free / count).clamp(2, layout.strong.line_px() * 5);
-    let two_lines = row_high >= layout.strong.line_px() + layout.note.line_px();
-    let face = name_face(layout, row_high);
+    let two_lines = row_high > line_high(Face::bold(layout.label.px())) + line_high(layout.note) + 1;
+    let face = name_face(layout, row_high, two_lines);
     let wide = rows.size.width as i32;
     let (names, dates) = if named {
         let name = |title: &CanalTitle<'_>| {
@@ -86,7 +85,7 @@ fn grid_of(layout: &Layout, rows: Rectangle, scene: &Scene<'_>, words: &Words) -
         };
         let names = scene.canals.iter().map(name).max().unwrap_or(0) as i32;
         let dates = scene.canals.iter().map(|title| dates_width(layout, row_high, two_lines, title, scene, words));
-        (names.min(wide * 3 / 10), dates.max().unwrap_or(0))
+        (names.min(wide * 32 / 100), dates.max().unwrap_or(0))
     } else {
         (0, 0)
     };
@@ -102,8 +101,15 @@ fn grid_of(layout: &Layout, rows: Rectangle, scene: &Scene<'_>, words: &Words) -
     }
 }
 
-fn name_face(layout: &Layout, row_high: i32) -> Face {
-    if row_high >= layout.strong.line_px() { layout.strong } else { Face::bold(layout.note.px()) }
+/// The least height of a line whose neighbours keep clear of it.
+fn line_high(face: Face) -> i32 {
+    face.cap_px() + face.descent_px()
+}
+
+fn name_face(layout: &Layout, row_high: i32, two_lines: bool) -> Face {
+    let high = if two_lines { row_high - line_high(layout.note) - 1 } else { row_high - 2 };
+    let faces = [layout.strong, Face::bold(layout.label.px())];
+    faces.into_iter().find(|&face| line_high(face) <= high).unwrap_or(Face::bold(layout.note.px()))
 }
 
 /// The last full day now, and how it moved in days.
@@ -141,9 +147,33 @@ fn dates_width(
     words: &Words,
 ) -> i32 {
     let (date, change) = last_full(title, scene, words);
-    let date = measure(&date, name_face(layout, row_high)).width;
+    let date = measure(&date, name_face(layout, row_high, two_lines)).width;
     let change = change.filter(|_| two_lines).map_or(0, |(_, text)| measure(&text, layout.note).width);
     date.max(change) as i32
+}
+
+/// The first day on show and the one after the last: whole months, from the first in which a field asks for water or
+/// anybody lacks any to the last. What is left out are months in which towns got all they asked for.
+fn window(scene: &Scene<'_>) -> (usize, usize) {
+    let calendar = scene.year.calendar;
+    let runs = [scene.was.canals, scene.now.canals];
+    let told = |day: usize| {
+        runs.iter().flat_map(|canals| scene.canals.iter().zip(*canals)).any(|(title, canal)| {
+            match canal.marks.get(day) {
+                Some(DayMark::Full) => !title.is_town,
+                Some(DayMark::Short | DayMark::Cut) => true,
+                Some(DayMark::Idle) | None => false,
+            }
+        })
+    };
+    let days = 0..calendar.len();
+    let (Some(first), Some(last)) = (days.clone().find(|&day| told(day)), days.rev().find(|&day| told(day))) else {
+        return (0, calendar.len());
+    };
+    let begins = |day: &usize| calendar.get(*day).is_none_or(|day| day.month_day.day == 1);
+    let from = (0..=first).rev().find(begins).unwrap_or(0);
+    let to = (last + 1..calendar.len()).find(begins).unwrap_or(calendar.len());
+    (from, to)
 }
 
 /// As it was as a dashed line that ends in a tick on its last full day, over the strip with your changes.
@@ -153,10 +183,11 @@ fn draw_strip(
     grid: &Grid,
     row: Rectangle,
     (was, now): (&CanalShown<'_>, &CanalShown<'_>),
+    (from, to): (usize, usize),
     scene: &Scene<'_>,
     theme: &Theme,
 ) {
-    let across = (0.0, scene.year.calendar.len() as f64);
+    let across = (from as f64, to as f64);
     let high = grid.row_high;
     let with_line = scene.changed() && high >= 7;
     let line_room = if with_line { (high / 4).max(3) } else { 0 };
@@ -164,7 +195,8 @@ fn draw_strip(
     let top = row.top_left.y + pad / 2 + line_room;
     let strip =
         Plot { area: area(grid.strip_left, top, grid.strip_wide, high - pad - line_room), across, up: (0.0, 1.0) };
-    year_strip(canvas, &strip, now.marks.iter().copied(), theme);
+    let marks = now.marks.get(from..to).unwrap_or_default();
+    year_strip(canvas, &strip, marks.iter().copied(), theme);
     if !with_line {
         return;
     }
@@ -173,9 +205,9 @@ fn draw_strip(
     let y = libm::floor(y) + 0.5;
     // Dashes over the days that were full; a pair of ends for each unbroken span, since a gap parts the line.
     let full = |day: usize| was.marks.get(day) == Some(&DayMark::Full);
-    let ends = (0..was.marks.len()).filter(|&day| full(day)).flat_map(|day| {
-        let begin = (day == 0 || !full(day - 1)).then_some(day as f64);
-        let end = (!full(day + 1)).then_some(day as f64 + 1.0);
+    let ends = (from..to).filter(|&day| full(day)).flat_map(|day| {
+        let begin = (day == from || !full(day - 1)).then_some(day as f64);
+        let end = (day + 1 == to || !full(day + 1)).then_some(day as f64 + 1.0);
         let spot = |x: f64| Spot::new(strip.x(x), y);
         let gap = Spot::new(f64::NAN, y);
         [begin.map(spot), end.map(spot), end.map(|_| gap)].into_iter().flatten()
@@ -205,24 +237,32 @@ fn draw_words(
     theme: &Theme,
     words: &Words,
 ) {
-    let face = name_face(layout, grid.row_high);
+    let face = name_face(layout, grid.row_high, grid.two_lines);
     let (date, change) = last_full(title, scene, words);
-    let second = if grid.two_lines { layout.note.line_px() } else { 0 };
-    let first = if grid.two_lines { face.line_px() } else { grid.row_high };
-    let top = row.top_left.y + (grid.row_high - first - second) / 2;
-    let left = row.top_left.x;
-    let name = name_within(title.name, face, grid.names as u32);
-    draw_in(canvas, &name, area(left, top, grid.names, first), face, theme.ink, Across::Left);
+    let (left, high) = (row.top_left.x, grid.row_high);
+    // Feet of the first line and heads of the second keep clear of each other.
+    let apart = if high >= face.line_px() + layout.note.line_px() {
+        layout.note.line_px() - layout.note.cap_px()
+    } else {
+        face.descent_px() + 1
+    };
+    let both = face.cap_px() + apart + layout.note.cap_px();
+    let first = row.top_left.y + (high - if grid.two_lines { both } else { face.cap_px() }) / 2;
+    let second = first + face.cap_px() + apart;
+    let upper = |x: i32, wide: i32| area(x, first, wide, face.cap_px());
+    let lower = |x: i32, wide: i32| area(x, second, wide, layout.note.cap_px());
+    let names = face.fitting(title.name, grid.names as u32, 9).unwrap_or(Face::bold(9));
+    let name = name_within(title.name, names, grid.names as u32);
+    fit(canvas, &name, upper(left, grid.names), names, theme.ink, Across::Left);
     let dates_left = right(row) - grid.dates;
     let lacks = change.as_ref().map_or(0.0, |(days, _)| *days);
     let date_colour = if grid.two_lines { theme.ink } else { single_line_ink(lacks, theme) };
-    draw_in(canvas, &date, area(dates_left, top, grid.dates, first), face, date_colour, Across::Right);
+    fit(canvas, &date, upper(dates_left, grid.dates), face, date_colour, Across::Right);
     if grid.two_lines {
         let since = name_within(&right_since(title, words), layout.note, grid.names as u32);
-        draw_in(canvas, &since, area(left, top + first, grid.names, second), layout.note, theme.quiet, Across::Left);
+        fit(canvas, &since, lower(left, grid.names), layout.note, theme.quiet, Across::Left);
         if let Some((days, text)) = change {
-            let place = area(dates_left, top + first, grid.dates, second);
-            draw_in(canvas, &text, place, layout.note, change_ink(days, theme), Across::Right);
+            fit(canvas, &text, lower(dates_left, grid.dates), layout.note, change_ink(days, theme), Across::Right);
         }
     }
 }

@@ -21,6 +21,7 @@ struct Look {
 }
 
 pub(super) fn draw_dials(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, theme: &Theme, words: &Words) {
+    let names = name_face(layout, scene, words);
     for (index, place) in places(layout, scene) {
         let Some(setting) = scene.dials.get(index) else { continue };
         let chosen = scene.chosen == Some(index);
@@ -35,8 +36,23 @@ pub(super) fn draw_dials(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene
         if !chosen {
             rounded_frame(canvas, place, radius, 1.0, theme.faint);
         }
-        card(canvas, layout, setting, place, &look, scene, theme, words);
+        card(canvas, layout, setting, place, &look, names, scene, theme, words);
     }
+}
+
+/// The largest face in which every name has room beside its value, so that the rows look even.
+fn name_face(layout: &Layout, scene: &Scene<'_>, words: &Words) -> Face {
+    if layout.dial_rows == 1 {
+        return layout.label;
+    }
+    let pad = 2 * (layout.gap + 1) + layout.gap + 1;
+    let faces = places(layout, scene).filter_map(|(index, place)| {
+        let setting = scene.dials.get(index)?;
+        let value = measure(&dial_value(setting, scene.units, words), layout.strong).width as i32;
+        let room = (place.size.width as i32 - value - pad).max(0) as u32;
+        layout.label.fitting(&dial_name(setting.dial, words), room, 9)
+    });
+    faces.min_by_key(|face| face.px()).unwrap_or(layout.label)
 }
 
 /// Which dial stands where: all of them in rows on a large screen; on a small one the chosen one, as wide as there is
@@ -76,6 +92,7 @@ fn card(
     setting: &DialSetting,
     place: Rectangle,
     look: &Look,
+    names: Face,
     scene: &Scene<'_>,
     theme: &Theme,
     words: &Words,
@@ -90,7 +107,7 @@ fn card(
         let value_left = (left + wide - taken).max(left);
         fit(canvas, &value, area(value_left, top, taken.min(wide), high), layout.strong, look.text, Across::Right);
         let rest = area(left, top, value_left - left - layout.gap, high);
-        fit(canvas, &name, rest, layout.label, look.name, Across::Left);
+        fit(canvas, &name, rest, names, look.name, Across::Left);
         return;
     }
     let name_high = layout.label.line_px();

@@ -4,11 +4,11 @@ use embedded_graphics::geometry::Point;
 use embedded_graphics::primitives::Rectangle;
 
 use super::dial_cards;
-use super::layout::{Layout, area, bottom, right};
+use super::layout::{Form, Layout, area, bottom, right};
 use super::scene::Scene;
-use super::wording::{DOT, day_short, name_within, year_name};
+use super::wording::{DOT, day_short, fit, name_within, year_name};
 use super::{Answer, View};
-use crate::picture::lettering::{Across, draw, draw_in, lines, measure, paragraph, paragraph_height};
+use crate::picture::lettering::{Across, draw, lines, measure, paragraph, paragraph_height};
 use crate::picture::shape::{disc, rounded_box, triangle};
 use crate::picture::{Align, Canvas, Face, Spot, Theme};
 use crate::words::Words;
@@ -51,11 +51,17 @@ fn headline(canvas: &mut Canvas<'_>, layout: &Layout, text: &str, theme: &Theme)
         let Some(smaller) = face.smaller() else { break };
         face = smaller;
     }
-    let used = paragraph_height(text, face, room.size.width).min(room.size.height);
-    let Rectangle { top_left, size } = room;
-    let top = top_left.y + (size.height - used) as i32 / 2;
-    let inside = area(top_left.x, top, size.width as i32, (size.height as i32 + top_left.y) - top);
-    paragraph(canvas, text, inside, face, theme.ink, Across::Left);
+    if !fits(face) {
+        // Said all the same, with what has no room left out; the strict witness tells.
+        paragraph(canvas, text, room, face, theme.ink, Across::Left);
+        return;
+    }
+    let used = paragraph_height(text, face, room.size.width) as i32;
+    let mut baseline = room.top_left.y + (room.size.height as i32 - used) / 2 + face.ascent_px();
+    for line in lines(text, face, room.size.width) {
+        draw(canvas, line, Point::new(room.top_left.x, baseline), face, theme.ink, Align::LEFT);
+        baseline += face.line_px();
+    }
 }
 
 fn date_line(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, theme: &Theme, words: &Words) {
@@ -84,7 +90,7 @@ fn date_line(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, theme:
         x += (radius * 16.0) as i32;
     }
     let rest = area(x + layout.gap, row.top_left.y, right(row) - x - layout.gap, row.size.height as i32);
-    super::wording::fit(canvas, &year_name(&scene.year, words), rest, layout.label, theme.quiet, Across::Right);
+    fit(canvas, &year_name(&scene.year, words), rest, layout.label, theme.quiet, Across::Right);
     let line = layout.across(area(row.top_left.x, bottom(row) + layout.gap / 2, row.size.width as i32, 1));
     canvas.fill(line, theme.faint);
 }
@@ -93,17 +99,18 @@ fn date_line(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, theme:
 fn footer(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, view: View, theme: &Theme, words: &Words) {
     let row = layout.footer;
     let face = layout.note;
-    let tall = i32::from(face.px() / 3).max(3);
-    let (dot, bar, step) = (tall, tall * 3, tall * 2);
-    let marks = step * (View::ALL.len() as i32 - 1) + bar;
     let middle = row.top_left.y + row.size.height as i32 / 2;
-    let mut x = right(row) - marks;
-    for page in View::ALL {
-        let (wide, colour) = if page == view { (bar, theme.ink) } else { (dot, theme.rule) };
-        rounded_box(canvas, area(x, middle - tall / 2, wide, tall), f64::from(tall) / 2.0, colour);
-        x += if page == view { bar + step - dot } else { step };
+    let mut end = right(row);
+    if layout.form == Form::Wide {
+        let wide = page_marks_px(layout);
+        page_marks(canvas, layout, Point::new(end - wide, middle), view, theme);
+        end -= wide + layout.gap * 2;
+    } else {
+        // A narrow foot belongs to the place; day and year leave room between them.
+        let left = row.top_left.x + (row.size.width as i32 - page_marks_px(layout)) / 2;
+        let date = layout.date.top_left.y + layout.date.size.height as i32 / 2;
+        page_marks(canvas, layout, Point::new(left, date), view, theme);
     }
-    let mut end = right(row) - marks - layout.gap * 2;
     if layout.roomy {
         let name = words.say(&format!("view-{}", view.key()), &[]);
         let wide = measure(&name, face).width as i32;
@@ -122,5 +129,26 @@ fn footer(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, view: Vie
     let name = name_within(scene.place_name, face, (room - taken).max(0) as u32);
     let text = if name.is_empty() { remarks.trim_start_matches(DOT).to_owned() } else { name + &remarks };
     let inside = area(row.top_left.x, row.top_left.y, room, row.size.height as i32);
-    draw_in(canvas, &text, inside, face, theme.quiet, Across::Left);
+    fit(canvas, &text, inside, face, theme.quiet, Across::Left);
+}
+
+fn mark_px(layout: &Layout) -> i32 {
+    let px = i32::from(layout.note.px());
+    if layout.form == Form::Wide { (px / 3).max(3) } else { 2 }
+}
+
+/// Width of all marks.
+fn page_marks_px(layout: &Layout) -> i32 {
+    mark_px(layout) * (2 * (View::ALL.len() as i32 - 1) + 3)
+}
+
+/// A dot for every page, a bar for this one.
+fn page_marks(canvas: &mut Canvas<'_>, layout: &Layout, at: Point, view: View, theme: &Theme) {
+    let tall = mark_px(layout);
+    let mut x = at.x;
+    for page in View::ALL {
+        let (wide, colour) = if page == view { (tall * 3, theme.ink) } else { (tall, theme.rule) };
+        rounded_box(canvas, area(x, at.y - tall / 2, wide, tall), f64::from(tall) / 2.0, colour);
+        x += wide + tall;
+    }
 }

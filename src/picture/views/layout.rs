@@ -171,21 +171,21 @@ impl Layout {
 
         let rows = if two_languages { "a\na\na\na" } else { "a\na" };
         let head = paragraph_height(rows, Face::bold(*title_rows), 99) as i32;
-        let headline = area(margin, margin * 2 / 3, inner, head);
-        let date = area(margin, bottom(headline) + gap / 2, inner, label.line_px());
-        let foot = note.line_px() + gap / 2;
-        let footer = area(margin, high - foot - gap / 2, inner, foot);
+        let headline = area(margin, margin / 3, inner, head);
+        let date = area(margin, bottom(headline) + gap / 3, inner, label.line_px());
+        let foot = note.cap_px() + note.descent_px() + 1;
+        let footer = area(margin, high - foot - gap / 3, inner, foot);
         let (dial_columns, dial_rows) = match form {
             _ if roomy => (5, 2),
             Form::Narrow | Form::Tall => (2, 1),
             Form::Wide if wide >= 440 => (4, 1),
             Form::Wide => (3, 1),
         };
-        let card = if roomy { label.line_px() + gap } else { label.line_px() + strong.line_px() + gap };
+        let card = if roomy { label.line_px() + gap } else { label.line_px() + strong.line_px() + 2 };
         let cards = card * dial_rows as i32 + gap * (dial_rows as i32 - 1);
         let dials = area(margin, footer.top_left.y - gap / 2 - cards, inner, cards);
         let top = bottom(date) + gap;
-        let content = area(margin, top, inner, dials.top_left.y - gap - top);
+        let content = area(margin, top, inner, dials.top_left.y - gap * 2 / 3 - top);
         Self {
             form,
             roomy,

@@ -20,13 +20,15 @@ pub(super) fn draw_months(
 ) -> u32 {
     let mut begins: Vec<f64> = Vec::with_capacity(14);
     let mut months: Vec<Month> = Vec::with_capacity(13);
-    for (index, day) in year.calendar.iter().enumerate() {
-        if index == 0 || day.month_day.day == 1 {
+    // The casts take what is below zero as zero.
+    let (from, to) = (plot.across.0 as usize, (plot.across.1 as usize).min(year.calendar.len()));
+    for (index, day) in year.calendar.iter().enumerate().take(to).skip(from) {
+        if index == from || day.month_day.day == 1 {
             begins.push(index as f64);
             months.push(Month::try_from(day.month_day.month).unwrap_or(Month::January));
         }
     }
-    begins.push(year.calendar.len() as f64);
+    begins.push(to as f64);
     let short: Vec<String> = months.iter().map(|&month| words.month_short(month)).collect();
     let room = plot.area.size.width / (months.len().max(1) as u32);
     let fits = short.iter().all(|name| measure(name, face).width + u32::from(face.px()) / 2 <= room);

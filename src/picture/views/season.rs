@@ -100,10 +100,15 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
         draw_chart(canvas, &layout, chart, &plot, scene, theme);
         let (x, middle) = (room.top_left.x, y + layout.gap + (each - layout.gap) / 2);
         let name = words.say(chart.title_id(), &[]);
-        let name_area = area(x, middle - layout.strong.line_px(), side - layout.gap, layout.strong.line_px());
-        fit(canvas, &name, name_area, layout.strong, theme.ink, Across::Left);
-        let top_area = area(x, middle, side - layout.gap, layout.note.line_px());
-        fit(canvas, top, top_area, layout.note, theme.quiet, Across::Left);
+        let (name_high, top_high) = (layout.strong.line_px(), layout.note.line_px());
+        if each >= name_high + top_high {
+            let name_area = area(x, middle - name_high, side - layout.gap, name_high);
+            fit(canvas, &name, name_area, layout.strong, theme.ink, Across::Left);
+            fit(canvas, top, area(x, middle, side - layout.gap, top_high), layout.note, theme.quiet, Across::Left);
+        } else {
+            let name_area = area(x, middle - name_high / 2, side - layout.gap, name_high);
+            fit(canvas, &name, name_area, layout.strong, theme.ink, Across::Left);
+        }
         y += each;
         if chart == Chart::River {
             half_marks(canvas, &layout, &plot, scene, theme);
@@ -161,7 +166,7 @@ fn draw_chart(canvas: &mut Canvas<'_>, layout: &Layout, chart: Chart, plot: &Plo
 
 /// Under the river: a full wedge on the day with half of the water past, an open one where it was, and the way between.
 fn half_marks(canvas: &mut Canvas<'_>, layout: &Layout, plot: &Plot, scene: &Scene<'_>, theme: &Theme) {
-    let size = f64::from(layout.note.px()) * 0.45;
+    let size = f64::from(layout.note.px()) * 0.5;
     let y = f64::from(bottom(plot.area)) + 1.5;
     let x = |day: CalendarDay| plot.x(f64::from(day.day_of_water_year) - 0.5);
     let day = |run: &RunShown<'_>| run.signs().and_then(|signs| signs.half_volume_date);

@@ -46,16 +46,18 @@ impl Parts {
         let whole = layout.across(layout.content);
         let (wide, high, gap) = (whole.size.width as i32, whole.size.height as i32, layout.gap);
         let top = whole.top_left.y - gap / 2;
-        let season_high = (high * 27 / 100).max(layout.note.line_px() * 3).min(layout.note.line_px() * 9);
+        let season_share = if layout.form == Form::Tall { 18 } else { 25 };
+        let note_high = layout.note.line_px();
+        let season_high = (high * season_share / 100).max(note_high * 11 / 4).min(note_high * 9);
         let land_high = high + gap / 2 - season_high - gap;
         let season = area(layout.margin, top + land_high + gap, wide - 2 * layout.margin, season_high);
         let land = area(0, top, wide, land_high);
-        let river_deep = (layout.figure.px() as i32 * 4 / 9).max(6);
-        let fields_high = river_deep * 2 + gap;
-        let floor_high = river_deep + fields_high + 3 * gap;
+        let river_deep = (layout.figure.px() as i32 * 4 / 9).max(7);
+        let fields_high = (land_high.min(wide) / if layout.form == Form::Tall { 12 } else { 10 }).max(river_deep);
+        let floor_high = river_deep + fields_high + 2 * gap;
         let (upper_high, foot_share) = match layout.form {
-            Form::Tall => (land_high * 46 / 100, 62),
-            Form::Narrow => (land_high, 40),
+            Form::Tall => (land_high * 44 / 100, 60),
+            Form::Narrow => (land_high, 39),
             Form::Wide => (land_high, 41),
         };
         let mountain_right = wide * foot_share / 100;
@@ -67,14 +69,15 @@ impl Parts {
             } else {
                 59
             } / 100;
-        let rim_y = top + upper_high * if layout.form == Form::Tall { 46 } else { 48 } / 100;
+        let rim_y = top + upper_high * if layout.form == Form::Tall { 50 } else { 53 } / 100;
         let floor_y = match layout.form {
             Form::Tall => top + upper_high - river_deep,
             _ => bottom(land) - floor_high,
         };
+        let snow_high = gap + land_high / 8;
         // Without a reservoir the mountain reaches down to the river.
         let (mountain_right, foot_y) = if has_reservoir { (mountain_right, rim_y) } else { (dam, floor_y) };
-        let mountain = area(0, top + gap + land_high / 10, mountain_right, foot_y - top - gap - land_high / 10);
+        let mountain = area(0, top + snow_high, mountain_right, foot_y - top - snow_high);
         let caption_bottom = if layout.form == Form::Tall { top + upper_high } else { bottom(land) };
         let caption_top = rim_y.max(top + upper_high / 2) + gap;
         let snow_words = area(
@@ -83,7 +86,12 @@ impl Parts {
             mountain_right - layout.margin - gap,
             caption_bottom - caption_top - gap / 2,
         );
-        let lake_words = area(mountain_right + gap, top + gap, dam - mountain_right, rim_y - top - gap);
+        let lake_words = area(
+            mountain_right + gap,
+            top + gap,
+            dam - mountain_right + layout.figure.px() as i32 / 2,
+            rim_y - top - gap,
+        );
         let (list, bed) = match layout.form {
             Form::Tall => {
                 let list_top = top + upper_high + gap;
@@ -94,12 +102,12 @@ impl Parts {
             }
             _ => {
                 let left = dam + layout.figure.px() as i32;
-                let list = area(left, top + gap, wide - left - layout.margin, floor_y - top - 2 * gap);
+                let list = area(left, top + gap / 2, wide - left - layout.margin, floor_y - top - gap);
                 (list, area(dam, floor_y, wide - dam, river_deep))
             }
         };
         let fields_left = if layout.form == Form::Tall { layout.margin } else { list.top_left.x };
-        let fields_top = bottom(bed) + 2 * gap;
+        let fields_top = bottom(bed) + gap;
         let fields_end = if layout.form == Form::Tall { wide - layout.margin } else { right(list) };
         let fields = area(fields_left, fields_top, fields_end - fields_left, bottom(land) - gap - fields_top);
         Self {

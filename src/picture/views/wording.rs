@@ -1,11 +1,12 @@
 //! Short texts that several pages write: values of dials, shares, the year, names that have to be shortened.
 
+use embedded_graphics::geometry::Point;
 use embedded_graphics::pixelcolor::Rgb565;
 use embedded_graphics::primitives::Rectangle;
 
 use super::scene::{CanalTitle, DialSetting, YearKind, YearShown};
-use crate::picture::lettering::{Across, Face, Weight, draw_in, measure};
-use crate::picture::{Canvas, Theme};
+use crate::picture::lettering::{Across, Face, Weight, draw, draw_in, measure};
+use crate::picture::{Align, Canvas, Theme};
 use crate::water::calendar::CalendarDay;
 use crate::water::dials::{Dial, DialUnit};
 use crate::words::{DateStyle, Quantity, System, Words};
@@ -47,7 +48,8 @@ pub(super) fn day_short(day: CalendarDay, year: &YearShown<'_>, words: &Words) -
 
 /// A day within a sentence.
 pub(super) fn day_in_sentence(day: CalendarDay, year: &YearShown<'_>, words: &Words) -> String {
-    words.date(day.date(year.start_month), DateStyle::InSentence)
+    // Day and month stay on one line.
+    words.date(day.date(year.start_month), DateStyle::InSentence).replace(' ', "\u{A0}")
 }
 
 /// The chosen year and how it was chosen.
@@ -87,10 +89,21 @@ pub(super) fn name_within(name: &str, face: Face, width_px: u32) -> String {
     String::new()
 }
 
-/// Draws words in a box in the largest face up to `face` that holds them.
+/// Draws words on one line, the capitals in the middle of the box's height, in the largest face up to `face` that fits
+/// the box's width. Only words that even the smallest face does not fit are cut, which the strict witness reports.
 pub(super) fn fit(canvas: &mut Canvas<'_>, text: &str, area: Rectangle, face: Face, colour: Rgb565, across: Across) {
-    let face = face.fitting(text, area.size.width, 9).unwrap_or(smallest(face.weight()));
-    draw_in(canvas, text, area, face, colour, across);
+    let Some(face) = face.fitting(text, area.size.width, 9) else {
+        draw_in(canvas, text, area, smallest(face.weight()), colour, across);
+        return;
+    };
+    let Rectangle { top_left: Point { x, y }, size } = area;
+    let middle = y.saturating_add_unsigned(size.height / 2);
+    let (x, align) = match across {
+        Across::Left => (x, Align::LEFT),
+        Across::Centre => (x.saturating_add_unsigned(size.width / 2), Align::CENTRE),
+        Across::Right => (x.saturating_add_unsigned(size.width), Align::RIGHT),
+    };
+    draw(canvas, text, Point::new(x, middle), face, colour, align.cap_middle());
 }
 
 fn smallest(weight: Weight) -> Face {

@@ -27,17 +27,18 @@ pub(super) fn draw_land(
 ) {
     canvas.fill(parts.land, theme.sky);
     let lake = lake_of(layout, parts, scene);
-    draw_ground(canvas, layout, parts, lake.is_some(), theme);
+    draw_ground(canvas, layout, parts, lake, theme);
     draw_mountain(canvas, layout, parts, scene, theme, words);
     if let (Some(lake), Some(now)) = (lake, scene.now.reservoir) {
         let level = |reservoir: &ReservoirShown<'_>| {
             reservoir.storage_hm3.get(scene.day).map_or(0.0, |storage| storage / reservoir.capacity_hm3)
         };
         let was = scene.was.reservoir.as_ref().map(level).filter(|_| scene.changed());
-        let dead = now.dead_hm3 / now.capacity_hm3;
         let stroke = as_it_was(layout.line_px);
-        draw_lake(canvas, lake, (level(&now), was, dead), f64::from(parts.floor_y + 1), stroke, theme);
-        lake_words(canvas, layout, parts, &lake, (level(&now), was), theme, words);
+        draw_lake(canvas, lake, (level(&now), was), f64::from(parts.floor_y + 1), stroke, theme);
+        let stored = now.storage_hm3.get(scene.day).filter(|_| layout.roomy);
+        let stored = stored.map(|&hm3| words.quantity(hm3, Quantity::StoredVolume, scene.units, 3));
+        lake_words(canvas, layout, parts, &lake, (level(&now), was), stored.as_deref(), theme, words);
         inflow(canvas, layout, parts, scene, Some(&lake), theme);
     } else {
         inflow(canvas, layout, parts, scene, None, theme);
@@ -58,10 +59,10 @@ fn lake_of(layout: &Layout, parts: &Parts, scene: &Scene<'_>) -> Option<Lake> {
 }
 
 /// The rock under everything: level to the dam, then down to the valley floor, which falls a little to the river's end.
-fn draw_ground(canvas: &mut Canvas<'_>, layout: &Layout, parts: &Parts, has_lake: bool, theme: &Theme) {
+fn draw_ground(canvas: &mut Canvas<'_>, layout: &Layout, parts: &Parts, lake: Option<Lake>, theme: &Theme) {
     let (_, dam) = parts.lake_across;
     let (wide, foot) = (f64::from(right(parts.land)), f64::from(bottom(parts.land)));
-    let (rim, floor) = (f64::from(if has_lake { parts.rim_y } else { parts.floor_y }), f64::from(parts.floor_y));
+    let (rim, floor) = (f64::from(if lake.is_some() { parts.rim_y } else { parts.floor_y }), f64::from(parts.floor_y));
     let dam = f64::from(dam);
     if layout.form == Form::Tall {
         let low = f64::from(parts.river.top_left.y);
@@ -76,7 +77,9 @@ fn draw_ground(canvas: &mut Canvas<'_>, layout: &Layout, parts: &Parts, has_lake
         canvas.fill(area(0, low as i32, right(parts.land), (foot - low) as i32), theme.rock);
         return;
     }
-    let corners = [(0.0, rim), (dam, rim), (dam, floor), (wide, floor), (wide, foot), (0.0, foot)];
+    let end = floor + floor_fall(layout);
+    let river = river_left(parts, lake);
+    let corners = [(0.0, rim), (dam, rim), (dam, floor), (river, floor), (wide, end), (wide, foot), (0.0, foot)];
     polygon(canvas, corners.into_iter().map(|(x, y)| Spot::new(x, y)), theme.rock);
 }
 
@@ -113,7 +116,10 @@ fn draw_mountain(
     let height = |metres: f64| words.quantity(metres, Quantity::Elevation, scene.units, 3);
     match scene.now.snow_line_m {
         Some(metres) => {
-            line(canvas, &words.say("picture-snow-line", &[("height", height(metres).into())]), layout.label);
+            // Where the words find no room, the leader alone says what the height is of.
+            let said = words.say("picture-snow-line", &[("height", height(metres).into())]);
+            let fits = measure(&said, Face::regular(9)).width <= room.size.width;
+            line(canvas, &if fits { said } else { height(metres) }, layout.label);
             if let Some(spot) = mountain.spot_at(metres) {
                 // A leader from the height on the flank down to the words that name it.
                 let end = Spot::new(spot.x - 0.5, f64::from(room.top_left.y) - 1.0);
@@ -128,19 +134,23 @@ fn draw_mountain(
         words.quantity(mm, Quantity::SnowWater, scene.units, 2)
     };
     let face = if layout.roomy { layout.figure } else { Face::bold(layout.strong.px() + 4) };
-    line(canvas, &words.say("picture-snow", &[("amount", depth(&scene.now).into())]), face);
-    if scene.changed() {
-        line(canvas, &words.say("picture-was", &[("value", depth(&scene.was).into())]), layout.label);
+    let (was, now) = (depth(&scene.was), depth(&scene.now));
+    let same = was == now;
+    line(canvas, &words.say("picture-snow", &[("amount", now.into())]), face);
+    if scene.changed() && !same {
+        line(canvas, &words.say("picture-was", &[("value", was.into())]), layout.label);
     }
 }
 
-/// Name and earlier level in the air above the lake, the level itself in the largest free part of the hollow.
+#[allow(clippy::too_many_arguments, reason = "one lake, drawn once from one place")]
+/// Name, content and earlier level in the air above the lake, the level itself in the largest free part of the hollow.
 fn lake_words(
     canvas: &mut Canvas<'_>,
     layout: &Layout,
     parts: &Parts,
     lake: &Lake,
     (level, was): (f64, Option<f64>),
+    stored: Option<&str>,
     theme: &Theme,
     words: &Words,
 ) {
@@ -151,6 +161,11 @@ fn lake_words(
         let text = words.say("picture-was", &[("value", share(was, words).into())]);
         let place = area(room.top_left.x, y, room.size.width as i32, layout.label.line_px());
         fit(canvas, &text, place, layout.label, theme.quiet, Across::Right);
+    }
+    if let Some(stored) = stored {
+        y -= layout.label.line_px();
+        let place = area(room.top_left.x, y, room.size.width as i32, layout.label.line_px());
+        fit(canvas, stored, place, layout.label, theme.ink, Across::Right);
     }
     y -= layout.strong.line_px();
     let place = area(room.top_left.x, y, room.size.width as i32, layout.strong.line_px());
@@ -192,20 +207,27 @@ fn inflow(
 ) {
     let width = stream_px(layout, scene.now.natural_flow_m3s, scene);
     let mountain = Mountain::new(scene.bands, parts.mountain);
-    let (from, to) = (f64::from(right(parts.mountain)) * 0.72, f64::from(right(parts.mountain)));
-    let lift = width / 2.0 - 0.5;
-    let flank = (0..=12).map(move |step| from + (to - from) * f64::from(step) / 12.0);
-    let flank = flank.map(|x| Spot::new(x, mountain.ground_y(x) - lift));
-    match lake {
-        Some(lake) => {
-            let now = scene.now.reservoir.and_then(|now| Some(now.storage_hm3.get(scene.day)? / now.capacity_hm3));
-            let surface = lake.surface_y(now.unwrap_or(0.0));
-            let (rim, _) = lake.upright;
-            let steps = (0..=6).map(|step| rim + (surface - rim) * f64::from(step) / 6.0);
-            let bank = steps.map(|y| Spot::new(lake.bank_x(y) + lift.max(0.0), y - lift));
-            draw_stream(canvas, flank.chain(bank), width, theme);
-        }
-        None => draw_stream(canvas, flank, width, theme),
+    let (from, to) = (f64::from(right(parts.mountain)) * 0.5, f64::from(right(parts.mountain)));
+    // The stream gathers its water on the way down.
+    let pieces = 16;
+    let at = |piece: i32| {
+        let share = f64::from(piece) / f64::from(pieces);
+        let thick = 1.0 + (width - 1.0).max(0.0) * share;
+        let x = from + (to - from) * share;
+        (Spot::new(x, mountain.ground_y(x) - thick / 2.0 + 0.5), thick)
+    };
+    for piece in 0..pieces {
+        let ((begin, _), (end, thick)) = (at(piece), at(piece + 1));
+        draw_stream(canvas, [begin, end].into_iter(), if width > 0.0 { thick } else { 0.0 }, theme);
+    }
+    if let Some(lake) = lake {
+        let now = scene.now.reservoir.and_then(|now| Some(now.storage_hm3.get(scene.day)? / now.capacity_hm3));
+        let surface = lake.surface_y(now.unwrap_or(0.0));
+        let (rim, _) = lake.upright;
+        let lift = width / 2.0 - 0.5;
+        let steps = (0..=6).map(|step| rim + (surface - rim) * f64::from(step) / 6.0);
+        let bank = steps.map(|y| Spot::new(lake.bank_x(y) + lift.max(0.0), y - lift));
+        draw_stream(canvas, bank, width, theme);
     }
 }
 
@@ -217,7 +239,8 @@ fn stream_px(layout: &Layout, flow_m3s: &[f64], scene: &Scene<'_>) -> f64 {
     if today > 0.0 && most > 0.0 { 1.0 + layout.line_px * 2.0 * libm::sqrt(today / most) } else { 0.0 }
 }
 
-/// The river below the dam. Its depth is the root of its flow, so that a low flow can still be seen.
+/// The river below the dam. A third of its bed is the minimum; beyond that ever more water fills ever less of the rest,
+/// so that a low flow can still be seen and a flood still fits.
 fn draw_river(
     canvas: &mut Canvas<'_>,
     layout: &Layout,
@@ -226,30 +249,41 @@ fn draw_river(
     lake: Option<Lake>,
     theme: &Theme,
 ) {
-    let (was, now) = (&scene.was, &scene.now);
-    let all = was.river_m3s.iter().chain(now.river_m3s).chain(now.minimum_m3s);
-    let most = all.copied().fold(0.0, f64::max);
-    let depth = |m3s: f64| if most > 0.0 && m3s > 0.0 { libm::sqrt(m3s / most) } else { 0.0 };
+    let now = &scene.now;
+    let greatest = now.minimum_m3s.iter().copied().fold(0.0, f64::max);
+    let mean = now.river_m3s.iter().sum::<f64>() / now.river_m3s.len().max(1) as f64;
+    let half_deep_m3s = if greatest > 0.0 { 2.0 * greatest } else { mean };
+    let depth = |m3s: f64| if m3s > 0.0 { m3s / (m3s + half_deep_m3s) } else { 0.0 };
     let today = |series: &[f64]| series.get(scene.day).copied().map_or(0.0, depth);
     let bed = parts.river;
     let (top, deep) = (f64::from(bed.top_left.y), f64::from(bed.size.height));
-    let foot = lake.map_or(f64::from(parts.lake_across.1), |lake| lake.dam_foot_x(f64::from(parts.floor_y + 1)));
-    let levels = (today(now.river_m3s), Some(today(now.minimum_m3s)));
+    let foot = river_left(parts, lake);
+    let share = today(now.river_m3s);
+    let levels = (share, Some(today(now.minimum_m3s)));
     let stroke = as_it_was(layout.line_px);
+    let edge = f64::from(right(parts.land));
     if layout.form == Form::Tall {
         // Down the right edge and back to the left.
-        let edge = right(parts.land) - bed.size.height as i32;
-        let drop = area(edge, parts.floor_y, bed.size.height as i32, bed.top_left.y - parts.floor_y);
-        let wide = ((deep * levels.0) as i32).max(i32::from(levels.0 > 0.0));
-        canvas.fill(
-            area(edge + (drop.size.width as i32 - wide) / 2, drop.top_left.y, wide, drop.size.height as i32),
-            theme.water,
-        );
-        draw_channel(canvas, (0.0, f64::from(right(parts.land))), (top, deep, -1.0), levels, stroke, theme);
+        let wide = bed.size.height as i32;
+        let left = right(parts.land) - wide;
+        canvas.fill(area(left, parts.floor_y, wide, bed.top_left.y - parts.floor_y), theme.sky);
+        let flow = (deep * share) as i32 + i32::from(share > 0.0);
+        let drop = area(left + (wide - flow) / 2, parts.floor_y, flow, bottom(bed) - parts.floor_y - 1);
+        draw_channel(canvas, (0.0, edge), (top, deep, 0.0), levels, stroke, theme);
+        canvas.fill(drop, theme.water);
         return;
     }
-    let fall = f64::from(layout.gap) * 0.6;
-    draw_channel(canvas, (foot, f64::from(right(parts.land))), (top, deep, fall), levels, stroke, theme);
+    draw_channel(canvas, (foot, edge), (top, deep, floor_fall(layout)), levels, stroke, theme);
+}
+
+/// Where the river begins below the dam.
+fn river_left(parts: &Parts, lake: Option<Lake>) -> f64 {
+    lake.map_or(f64::from(parts.lake_across.1), |lake| lake.dam_foot_x(f64::from(parts.floor_y + 1)))
+}
+
+/// How far the valley floor falls from the dam to the edge, in pixels.
+fn floor_fall(layout: &Layout) -> f64 {
+    f64::from(layout.gap) * 0.7
 }
 
 /// One field for each canal, from left to right in order of right, under the river that feeds them.

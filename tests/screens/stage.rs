@@ -13,7 +13,7 @@ use crate::counter::Counter;
 /// Remembers what it was given.
 struct Memory {
     size: Rc<RefCell<FrameSize>>,
-    given: Rc<RefCell<Vec<(FrameSize, Vec<Rectangle>)>>>,
+    given: Given,
     fails: bool,
 }
 

@@ -35,7 +35,7 @@ pub fn cells(frame: &Frame<'_>, room: &Room, grain: Grain) -> Vec<Cell> {
     let mut pixels = frame.pixels.to_vec();
     let width = usize::from(frame.size.width);
     // The letters' own pixels go, so that nothing of them is left beside the real ones.
-    let lines: Vec<letters::Line> =
+    let mut lines: Vec<letters::Line> =
         frame.texts.iter().filter_map(|text| letters::lift(text, &mut pixels, frame.size, room)).collect();
     let (columns, rows) = (usize::from(room.columns), usize::from(room.rows));
     let mut cells = Vec::with_capacity(columns * rows);
@@ -46,6 +46,7 @@ pub fn cells(frame: &Frame<'_>, room: &Room, grain: Grain) -> Vec<Cell> {
             cells.push(cell(&pixels, width, across, down, grain));
         }
     }
+    letters::level(&mut lines);
     letters::set(&lines, &mut cells, columns);
     cells
 }

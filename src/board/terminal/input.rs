@@ -2,7 +2,7 @@
 
 use std::io;
 use std::sync::{Arc, Mutex, PoisonError};
-use std::time::Instant;
+use std::time::{Duration, Instant};
 
 use crossterm::event::{Event, KeyCode, KeyEvent, KeyEventKind, KeyModifiers, MouseButton, MouseEvent, MouseEventKind};
 
@@ -15,8 +15,10 @@ pub type SharedRoom = Arc<Mutex<Option<Room>>>;
 /// Reads the terminal in a thread of its own, which sleeps until something comes.
 ///
 /// # Errors
-/// Where the system gives no thread.
+/// Where the terminal cannot be read, or the system gives no thread.
 pub fn listen(post: Post, room: SharedRoom) -> io::Result<()> {
+    // From the first question on it hears of changes of size; the thread alone might ask too late for the first one.
+    crossterm::event::poll(Duration::ZERO)?;
     std::thread::Builder::new().name("terminal".into()).spawn(move || {
         let mut mouse = Mouse::default();
         loop {

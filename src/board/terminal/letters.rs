@@ -15,6 +15,8 @@ pub struct Line {
     letters: Vec<char>,
     column: usize,
     row: usize,
+    /// The first row of its pixels and the one after the last.
+    down: (usize, usize),
     ink: Rgb,
     /// Behind the letters: what was behind their pixels, so that they can be read wherever a cell ends.
     ground: Rgb,
@@ -43,10 +45,40 @@ pub fn lift(text: &PlacedText, pixels: &mut [Rgb565], size: FrameSize, room: &Ro
     for row in rows() {
         pixels[row].fill(ground);
     }
-    let letters: Vec<char> = text.text.chars().filter(|letter| !letter.is_control() && *letter != '\u{2060}').collect();
+    let letters: Vec<char> = text.text.chars().filter_map(in_a_cell).collect();
     let column = column_of(text, letters.len(), room);
     let row = room.row_at(middle(text)) as usize;
-    Some(Line { letters, column, row: row.min(usize::from(room.rows) - 1), ink, ground: behind })
+    Some(Line { letters, column, row: row.min(usize::from(room.rows) - 1), down: (top, bottom), ink, ground: behind })
+}
+
+/// A letter as a terminal can be trusted with it: narrow blanks would be left out or drawn wide by some.
+fn in_a_cell(letter: char) -> Option<char> {
+    match letter {
+        '\u{a0}' | '\u{2009}' | '\u{202f}' => Some(' '),
+        '\u{2060}' => None,
+        _ => (!letter.is_control()).then_some(letter),
+    }
+}
+
+/// Lets texts that stand side by side on one line of type share a row, although their cells' edges may part them.
+pub fn level(lines: &mut [Line]) {
+    for index in 1..lines.len() {
+        let (before, rest) = lines.split_at_mut(index);
+        if let Some(line) = rest.first_mut()
+            && let Some(beside) = before.iter().find(|other| line.is_beside(other))
+        {
+            line.row = beside.row;
+        }
+    }
+}
+
+impl Line {
+    fn is_beside(&self, other: &Line) -> bool {
+        let shared = self.down.1.min(other.down.1).saturating_sub(self.down.0.max(other.down.0));
+        let (one, two) = (self.down.1 - self.down.0, other.down.1 - other.down.0);
+        // Of about one size, and mostly at one height.
+        one.max(two) * 10 <= one.min(two) * 16 && shared * 10 >= one.min(two) * 8
+    }
 }
 
 /// Puts the letters of all lines into the cells. Where two would lie on each other the later one moves: a little to
@@ -179,6 +211,16 @@ mod tests {
         let texts = [placed("Mayo", 0, 50, 20, 9), placed("nu", 100, 52, 10, 5), placed("12", 200, 50, 10, 7)];
         let rows = rows(&texts, &pixels);
         assert!(rows[5].starts_with("Mayo") && rows[5].contains("nu") && rows[5].contains("12"), "{rows:?}");
+    }
+
+    #[test]
+    fn a_row_edge_between_two_texts_of_one_line_does_not_part_them() {
+        let pixels = vec![Rgb565::WHITE; SIZE.pixels()];
+        // Wherever the edge of a row falls; the second text reaches below the line, the first does not.
+        for top in 70..85 {
+            let rows = rows(&[placed("Oct 1", 6, top, 28, 8), placed("2020, a year", 200, top, 110, 10)], &pixels);
+            assert!(rows.iter().any(|row| row.contains("Oct 1") && row.contains("2020, a year")), "{top} {rows:?}");
+        }
     }
 
     #[test]

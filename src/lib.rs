@@ -9,6 +9,8 @@ pub mod signs;
 pub mod water;
 
 #[cfg(feature = "std")]
+pub mod board;
+#[cfg(feature = "std")]
 pub mod commands;
 #[cfg(feature = "std")]
 pub mod fit;

@@ -110,6 +110,8 @@ pub(super) fn merge_smallest(entries: &mut Vec<Entry>, most: usize, look: Look) 
             None => return,
         }
     }
+    // What is joined stands last.
+    entries.sort_by_key(|entry| entry.id == "page-all-else");
 }
 
 /// What went through the works within the valley.
@@ -134,8 +136,8 @@ mod tests {
     fn what_is_joined_keeps_its_water() {
         let mut entries: Vec<Entry> = [5.0, 1.0, 3.0, 2.0, 9.0].map(|now_m3| entry("x", now_m3)).to_vec();
         merge_smallest(&mut entries, 3, Look::Ground);
-        assert_eq!(entries.iter().map(|entry| entry.now_m3).collect::<Vec<_>>(), [5.0, 6.0, 9.0]);
-        assert_eq!(entries[1].id, "page-all-else");
+        assert_eq!(entries.iter().map(|entry| entry.now_m3).collect::<Vec<_>>(), [5.0, 9.0, 6.0]);
+        assert_eq!(entries[2].id, "page-all-else");
         merge_smallest(&mut entries, 9, Look::Ground);
         assert_eq!(entries.len(), 3);
     }

@@ -9,11 +9,15 @@ pub mod signs;
 pub mod water;
 
 #[cfg(feature = "std")]
+pub mod board;
+#[cfg(feature = "std")]
 pub mod commands;
 #[cfg(feature = "std")]
 pub mod fit;
 #[cfg(feature = "std")]
 pub mod generator;
+#[cfg(feature = "std")]
+pub mod lesson;
 #[cfg(feature = "std")]
 pub mod place;
 #[cfg(feature = "std")]

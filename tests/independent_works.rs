@@ -50,8 +50,11 @@ fn sums<const L: usize>(slopes: &Slopes<L>, total: impl Fn([LaneSums<L>; 2]) -> 
             reference_evaporation_mm: Lanes::splat(0.0),
             melt_factor: Lanes::splat(melt_factor_mm_c_day(&traits, calendar.day_of_year, false)),
             most_sublimation_mm: Lanes::splat(0.0),
+            split_humidity_percent: None,
         };
-        let day = total(slopes.day::<true>(Halves::<5>, &calendar, &weather, None, &mut stores));
+        let mut day = [[LaneSums::default(); 2]];
+        slopes.days::<true>(Halves::<5>, &[calendar], &[weather], &mut stores, &mut day);
+        let day = total(day[0]);
         for (column, value) in columns.iter_mut().zip(day) {
             column.push(value);
         }

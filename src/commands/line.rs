@@ -24,10 +24,23 @@ pub(super) fn command(words: &Words) -> Command {
         .about(say("help-about"))
         .help_template(template)
         .disable_help_subcommand(true)
+        .subcommand(show(words))
         .subcommand(tell(words))
         .subcommand(check(words))
         .subcommand(weather(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
+        .args(common(words))
+}
+
+fn show(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("show", "help-usage-show", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("screen", "value-screen", "help-screen", words).action(ArgAction::Append))
+        .arg(text("size", "value-size", "help-size", words))
+        .arg(path_option("into", "value-folder", "help-show-into", words))
+        .arg(text("units", "value-units", "help-units", words))
+        .arg(text("theme", "value-theme", "help-theme", words).help(with_usual("help-theme", "light", words)))
         .args(common(words))
 }
 

@@ -11,6 +11,7 @@ mod output;
 mod places;
 mod problem_words;
 mod settings;
+mod show;
 mod snippets;
 mod speech;
 mod spinner;
@@ -52,8 +53,9 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
     match matches.subcommand() {
         Some(("tell", matches)) => tell::run(speech, matches),
         Some(("check", matches)) => check::run(speech, matches),
+        Some(("show", matches)) => show::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
-        _ => tell::summary(speech),
+        _ => show::usual(speech),
     }
 }
 

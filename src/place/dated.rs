@@ -53,7 +53,7 @@ pub(super) fn month(section: &Section<'_>, key: &str, value: &Value) -> Option<u
 }
 
 /// A day of every year, written `"04-15"` for 15 April.
-pub(super) fn month_day(section: &Section<'_>, key: &str, value: &Value) -> Option<MonthDay> {
+pub(crate) fn month_day(section: &Section<'_>, key: &str, value: &Value) -> Option<MonthDay> {
     let at = section.value_at(value);
     let Kind::Text(text) = &value.kind else {
         section.sheet.tell(Problem::error(at, "problem-month-day").with("key", key).with("value", ""));

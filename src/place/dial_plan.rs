@@ -81,7 +81,7 @@ pub(super) fn read(root: &Section<'_>, valley: &Valley) -> DialPlan {
 }
 
 /// Tells that there is no such dial, with the nearest that there is.
-pub(super) fn unknown_dial(at: super::problem::Location, key: &str) -> Problem {
+pub(crate) fn unknown_dial(at: super::problem::Location, key: &str) -> Problem {
     let nearest = nearest(key, Dial::ALL.into_iter().map(|dial| dial.key().to_owned()));
     Problem::error(at, "problem-dial-unknown").with("key", key).with("nearest", nearest)
 }

@@ -13,7 +13,7 @@ static NOTHING: Table = Table { entries: Vec::new() };
 
 /// A number that was asked for.
 #[derive(Clone, Debug)]
-pub(super) struct Number {
+pub(crate) struct Number {
     /// In SI; NaN where the file says something wrong, which was told already. Comparisons with NaN are false, so a
     /// check written as "is it too large?" stays silent about it.
     pub value: f64,
@@ -28,7 +28,7 @@ const SHORTEST_PART: usize = 3;
 
 /// Least and most value, in SI, both allowed.
 #[derive(Clone, Copy, Debug)]
-pub(super) struct Limits(pub f64, pub f64);
+pub(crate) struct Limits(pub f64, pub f64);
 
 /// What kind of thing the file leaves out.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
@@ -38,7 +38,7 @@ enum Missing {
 }
 
 /// One table of the file, or its absence.
-pub(super) struct Section<'a> {
+pub(crate) struct Section<'a> {
     /// The text that it is part of.
     pub sheet: &'a Sheet<'a>,
     /// Its name, as `[reservoir]`.
@@ -364,7 +364,7 @@ impl Drop for Section<'_> {
 }
 
 /// Tells that `word` is none of the choices.
-pub(super) fn unknown_choice(
+pub(crate) fn unknown_choice(
     at: Location,
     key: &str,
     word: &str,
@@ -379,7 +379,7 @@ pub(super) fn unknown_choice(
 }
 
 /// The name most like `word`, one that holds the whole of it first; empty when there is none at all.
-pub(super) fn nearest(word: &str, names: impl Iterator<Item = String>) -> String {
+pub(crate) fn nearest(word: &str, names: impl Iterator<Item = String>) -> String {
     let mut best: Option<(f64, String)> = None;
     for name in names {
         let holds = word.chars().count() >= SHORTEST_PART && name.contains(word);

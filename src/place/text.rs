@@ -32,7 +32,7 @@ impl Text {
 }
 
 /// Reads `key = { en = "...", es = "..." }`, which the file must give in both languages.
-pub(super) fn need_names(section: &Section<'_>, key: &'static str) -> Text {
+pub(crate) fn need_names(section: &Section<'_>, key: &'static str) -> Text {
     match section.get(key) {
         Some(value) => names(section, key, value),
         None => {

@@ -13,7 +13,7 @@ use super::problem::{Location, Problem};
 
 /// A value and the bytes that it covers.
 #[derive(Clone, Debug)]
-pub(super) struct Value {
+pub(crate) struct Value {
     /// Bytes of the text.
     pub span: Range<usize>,
     /// What it is.
@@ -22,7 +22,7 @@ pub(super) struct Value {
 
 /// What a value is.
 #[derive(Clone, Debug)]
-pub(super) enum Kind {
+pub(crate) enum Kind {
     /// Text between quotes.
     Text(String),
     /// A finite number.
@@ -41,7 +41,7 @@ pub(super) enum Kind {
 
 /// A key with its value.
 #[derive(Clone, Debug)]
-pub(super) struct Entry {
+pub(crate) struct Entry {
     /// The key.
     pub key: String,
     /// Bytes of the key.
@@ -52,7 +52,7 @@ pub(super) struct Entry {
 
 /// Keys and values in the order of the file.
 #[derive(Clone, Debug, Default)]
-pub(super) struct Table {
+pub(crate) struct Table {
     /// Entries in the order of the file.
     pub entries: Vec<Entry>,
 }
@@ -65,7 +65,7 @@ impl Table {
 }
 
 /// A text being read: where problems are gathered.
-pub(super) struct Sheet<'t> {
+pub(crate) struct Sheet<'t> {
     /// The file, as the user would name it.
     pub file: PathBuf,
     /// Its text.

@@ -9,7 +9,7 @@ use crate::water::units::{
 
 /// One way to write a measured value.
 #[derive(Clone, Copy, Debug)]
-pub(super) struct UnitSuffix {
+pub(crate) struct UnitSuffix {
     /// End of the key, with its underscore.
     pub suffix: &'static str,
     /// Value in SI per unit written, except for a Fahrenheit reading.
@@ -40,10 +40,10 @@ const fn unit(suffix: &'static str, scale: f64) -> UnitSuffix {
 }
 
 /// The ways to write one kind of value, the usual one first.
-pub(super) type Units = &'static [UnitSuffix];
+pub(crate) type Units = &'static [UnitSuffix];
 
 /// A number without a unit.
-pub(super) const PLAIN: Units = &[unit("", 1.0)];
+pub(crate) const PLAIN: Units = &[unit("", 1.0)];
 /// A part of a whole.
 pub(super) const SHARE: Units = &[unit("_share", 1.0), unit("_percent", 0.01)];
 /// Days.

@@ -141,19 +141,25 @@ impl State {
         }
     }
 
-    /// Goes on through the views.
+    /// Goes on through the views, sheet by sheet where a view has several.
     pub(super) fn step_view(&mut self, steps: i64, offer: &Offer) {
-        let views = offer.views();
-        let place = views.iter().position(|view| *view == self.shown.view).unwrap_or(0);
-        if let Some(view) = views.get(around(place, views.len(), steps)) {
-            self.show(*view, offer);
+        let leaves = || {
+            let sheets = |view: &View| (0..offer.sheets(*view)).map(|sheet| (*view, sheet)).collect::<Vec<_>>();
+            offer.views().iter().flat_map(sheets)
+        };
+        let here = (self.shown.view, self.shown.sheet);
+        let place = leaves().position(|leaf| leaf == here).unwrap_or(0);
+        if let Some((view, sheet)) = leaves().nth(around(place, leaves().count(), steps)) {
+            self.show(view, offer);
+            self.shown.sheet = sheet;
         }
     }
 
-    /// Shows a view, if it is offered; a card over the old one is closed.
+    /// Shows a view, if it is offered, from its first sheet on; a card over the old one is closed.
     pub(super) fn show(&mut self, view: View, offer: &Offer) {
         if offer.views().contains(&view) {
             self.shown.view = view;
+            self.shown.sheet = 0;
             self.shown.card = None;
         }
     }

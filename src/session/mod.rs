@@ -37,6 +37,7 @@ pub mod answer;
 mod calendar;
 mod command;
 mod event;
+pub mod help;
 pub mod keys;
 pub mod knob;
 mod needs;

@@ -73,6 +73,7 @@ pub struct Offer {
     shade: Shade,
     settings: Vec<NamedSetting>,
     help_pages: u8,
+    about_sheets: u8,
 }
 
 impl Offer {
@@ -112,11 +113,18 @@ impl Offer {
             shade: input.shade,
             settings: input.settings,
             help_pages: input.help_pages,
+            about_sheets: 1,
         };
         for (index, named) in offer.settings.iter().enumerate() {
             named.setting.fits(&offer).map_err(|misfit| OfferFault::Setting(index, misfit))?;
         }
         Ok(offer)
+    }
+
+    /// The same with so many sheets of the about view, as the picture counts them for a screen; 0 counts as 1.
+    #[must_use]
+    pub fn with_about_sheets(self, sheets: u8) -> Self {
+        Self { about_sheets: sheets.max(1), ..self }
     }
 
     /// The stops of a dial; `None` where the place does not offer it.
@@ -137,6 +145,11 @@ impl Offer {
     /// The views; at least one.
     pub fn views(&self) -> &[View] {
         &self.views
+    }
+
+    /// How many sheets a view has; all but about have one.
+    pub fn sheets(&self, view: View) -> u8 {
+        if view == View::About { self.about_sheets } else { 1 }
     }
 
     /// How many terms can be explained on a view.

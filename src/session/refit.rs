@@ -47,6 +47,7 @@ impl State {
         shown.chosen = old.chosen.filter(|dial| offer.scale(*dial).is_some()).or(start.chosen);
         if offer.views().contains(&old.view) {
             shown.view = old.view;
+            shown.sheet = old.sheet.min(offer.sheets(old.view) - 1);
         }
         if old.voice < offer.voices().len() {
             shown.voice = old.voice;

@@ -1,18 +1,21 @@
 //! From answers to a scene: the chosen year of each run in the series that the pages draw.
 
 use crate::picture::chart::DayMark;
+use crate::picture::views::facts::{AllYears, PlaceFacts, YearMeasure};
 use crate::picture::views::scene::{
     CanalShown, CanalTitle, DialSetting, Doubt, ReservoirShown, RunShown, Scene, YearKind, YearShown,
 };
+use crate::place::Place;
 use crate::water::calendar::CalendarDay;
+use crate::water::canals::SharingRule;
 use crate::water::dials::{DialRange, Dials};
 use crate::water::valley::{Band, Valley};
 use crate::words::{System, Words};
 
 use super::answer::{Answer, Source, Supply, YearDetail};
-use super::year::{Third, YearChoice};
+use super::year::{Third, YearChoice, YearList};
 use super::{Answers, Offer, Shown};
-use crate::signs::WHITE_MM;
+use crate::signs::{WHITE_MM, YearReport};
 use crate::water::dials::Dial;
 
 /// How far back a field's look remembers whether its crops were short, days: one dry day is no dry field.
@@ -31,6 +34,22 @@ pub struct PlaceTold<'a> {
     pub gate_names: &'a [&'a str],
 }
 
+/// What the about page tells of a place, in the words of `tag`.
+pub fn facts_of<'p>(place: &'p Place, percent_per_degree: Option<f64>, tag: &str) -> PlaceFacts<'p> {
+    let rule = match place.valley.rule {
+        SharingRule::Seniority => "seniority",
+        SharingRule::Proportional => "proportional",
+        SharingRule::Rotation => "rotation",
+    };
+    PlaceFacts {
+        source: place.source.as_ref().map(|source| source.get(tag)),
+        evaporation_key: Some(place.notes.evaporation.choice.key()),
+        percent_per_degree,
+        rule_key: (!place.valley.gates.is_empty()).then_some(rule),
+        filled_values: Some(place.notes.filled_gaps.iter().map(|gaps| gaps.days).sum()),
+    }
+}
+
 /// The series of the chosen year, owned; made anew when an answer or the year changes, not for every frame.
 #[derive(Clone, Debug)]
 pub struct Stage<'a> {
@@ -43,6 +62,8 @@ pub struct Stage<'a> {
     was: Course<'a>,
     now: Course<'a>,
     beside: Option<Course<'a>>,
+    enough_share: f64,
+    kinds: Vec<YearKind>,
 }
 
 /// What changes from frame to frame without another answer.
@@ -145,6 +166,8 @@ impl<'a> Stage<'a> {
             was,
             now,
             beside,
+            enough_share: valley.enough_share,
+            kinds: kinds(&answers.rest().run.years),
         }
     }
 
@@ -157,7 +180,8 @@ impl<'a> Stage<'a> {
         }
     }
 
-    /// The scene of a moment.
+    /// The scene of a moment. What the about and the trust page tell is the caller's to add: it knows the place's
+    /// files.
     pub fn scene<'s>(&'s self, props: &'s Props<'s>, moment: Moment<'s>) -> Scene<'s> {
         Scene {
             place_name: self.place.name,
@@ -178,6 +202,14 @@ impl<'a> Stage<'a> {
             now: self.now.shown(&props.now, moment.day),
             beside: self.beside.as_ref().map(|course| course.shown(&props.beside, moment.day)),
             doubt: moment.doubt,
+            all_years: AllYears {
+                enough_share: self.enough_share,
+                kinds: &self.kinds,
+                measure: YearMeasure::default(),
+            },
+            facts: PlaceFacts::default(),
+            skill: None,
+            sheet: 0,
         }
     }
 }
@@ -201,6 +233,17 @@ fn titles<'n>(valley: &Valley, names: &[&'n str]) -> Vec<CanalTitle<'n>> {
         gate,
     };
     order.into_iter().map(title).collect()
+}
+
+/// The third of every year, as the year chooser ranks them.
+fn kinds(years: &[YearReport]) -> Vec<YearKind> {
+    let Some(list) = YearList::of(years) else { return Vec::new() };
+    let kind = |third| match third {
+        Third::Dry => YearKind::Dry,
+        Third::Middling => YearKind::Middling,
+        Third::Wet => YearKind::Wet,
+    };
+    (0..list.count()).filter_map(|index| list.third(index)).map(kind).collect()
 }
 
 fn deepest(year: &YearDetail) -> f64 {

@@ -80,6 +80,8 @@ pub struct Shown {
     pub at_end: Option<End>,
     /// The view.
     pub view: View,
+    /// Its sheet, counted from 0.
+    pub sheet: u8,
     /// The year, as it was chosen.
     pub year: YearChoice,
     /// The same year, counted from 0 in the whole water years of the record.
@@ -142,7 +144,7 @@ pub enum Invalid {
     Focus,
     /// The card shows what is not there.
     Card,
-    /// The view is not offered.
+    /// The view is not offered, or has no such sheet.
     View,
     /// The year or the day is not in the record.
     Year,
@@ -166,6 +168,7 @@ impl State {
             card: None,
             at_end: None,
             view: offer.views()[0],
+            sheet: 0,
             year,
             year_index: offer.years().index(year).unwrap_or(0),
             day: 0,
@@ -268,7 +271,7 @@ impl State {
             },
             Invalid::Card,
         )?;
-        ensure(offer.views().contains(&shown.view), Invalid::View)?;
+        ensure(offer.views().contains(&shown.view) && shown.sheet < offer.sheets(shown.view), Invalid::View)?;
         let days = offer.years().days(shown.year_index);
         ensure(offer.years().index(shown.year) == Some(shown.year_index), Invalid::Year)?;
         ensure(days.is_some_and(|days| shown.day < days), Invalid::Year)?;

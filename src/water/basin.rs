@@ -6,15 +6,19 @@
 use super::calendar::CalendarDay;
 use super::channel::{Channel, ChannelStore};
 use super::dials::Dials;
-use super::evaporation::SkyTable;
+use super::evaporation::{DayBeforeWarming, SkyTable};
 use super::ground::{Ground, GroundStores};
 use super::lanes::Lanes;
 use super::power::{AnyPower, Halves, HalvesByLane, PowerCurve};
-use super::slopes::{LaneWeather, RowStore, Slopes, total_of_one};
+use super::slopes::{LaneSums, LaneWeather, RowStore, Slopes, total_of_one};
 use super::snow::melt_factor_mm_c_day;
 use super::units::M3_PER_MM_KM2;
 use super::valley::{MOST_BANDS, Valley};
 use super::weather::{Delta, DialledDay, StationDay, is_cold_half, precipitation_factor_at};
+
+/// Days that go through weather, slopes and ground together: each stage keeps its constants in registers, and the blocks
+/// of the widest lanes still fit the nearest cache.
+const BLOCK_DAYS: usize = 16;
 
 /// What a day brings over the basin's bands. Depths are over the area of the bands.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
@@ -105,27 +109,26 @@ impl Course {
         }
     }
 
+    /// What the weather alone gives of a day.
     #[inline(always)]
-    fn finish(
-        &self,
-        weather: &DialledDay,
-        sums: BasinDay,
-        recharge_mm: f64,
-        ground: &mut GroundStores,
-        channel: &mut ChannelStore,
-    ) -> BasinDay {
-        let flows = self.ground.day(ground, recharge_mm);
-        let arrived_mm = self.channel.day(channel, flows.quick_flow_mm + flows.slow_flow_mm);
+    fn open(&self, weather: &DialledDay) -> BasinDay {
         BasinDay {
-            precipitation_mm: weather.precipitation_mm * self.mean_precipitation_factor
-                + sums.snowfall_mm * self.added_by_catch,
-            ground_mm: ground.quick_mm + ground.slow_mm,
-            channel_mm: self.channel.in_transit(channel),
-            inflow_m3: arrived_mm * self.area_km2 * M3_PER_MM_KM2,
+            precipitation_mm: weather.precipitation_mm * self.mean_precipitation_factor,
             reference_evaporation_mm: weather.reference_evaporation_mm,
             valley_precipitation_mm: weather.precipitation_mm * self.valley_precipitation_factor,
-            ..sums
+            ..BasinDay::default()
         }
+    }
+
+    /// Sends the slopes' water through ground and channel; the sums of the slopes are in `day`.
+    #[inline(always)]
+    fn close(&self, day: &mut BasinDay, recharge_mm: f64, ground: &mut GroundStores, channel: &mut ChannelStore) {
+        day.precipitation_mm += day.snowfall_mm * self.added_by_catch;
+        let flows = self.ground.day(ground, recharge_mm);
+        let arrived_mm = self.channel.day(channel, flows.quick_flow_mm + flows.slow_flow_mm);
+        day.ground_mm = ground.quick_mm + ground.slow_mm;
+        day.channel_mm = self.channel.in_transit(channel);
+        day.inflow_m3 = arrived_mm * self.area_km2 * M3_PER_MM_KM2;
     }
 }
 
@@ -260,40 +263,40 @@ impl<'v> Basin<'v> {
         let southern = self.valley.is_southern();
         // Local copies: the compiler keeps what nobody else can see in registers.
         let (mut rows, mut ground, mut channel) = (stores.rows, stores.ground[0], stores.channel[0]);
-        let mut wet_bulb_c = [Lanes::default(); MOST_BANDS];
-        for ((today, record), out) in calendar.iter().zip(record).zip(out) {
-            let weather = self.course.delta.day(self.valley, &self.sky, today, record);
-            let sublimation_mm = sublimation_on(self.valley, today, southern);
-            let lanes = LaneWeather {
-                temperature_c: Lanes::splat(weather.temperature_c),
-                precipitation_mm: Lanes::splat(weather.precipitation_mm),
-                reference_evaporation_mm: Lanes::splat(weather.reference_evaporation_mm),
-                melt_factor: Lanes::splat(self.melt_factor[usize::from(today.day_of_year - 1) % 366]),
-                most_sublimation_mm: Lanes::splat(sublimation_mm),
-            };
-            let split_c = split_humidity(self.valley, record).map(|humidity_percent| {
-                self.slopes.wet_bulb(today, lanes.temperature_c, humidity_percent, &mut wet_bulb_c);
-                &wet_bulb_c
-            });
-            let [sum, _] = self.slopes.day::<false>(curve, today, &lanes, split_c, &mut rows);
-            let sums = BasinDay {
-                snowfall_mm: total_of_one(sum.snowfall_mm),
-                snow_water_mm: total_of_one(sum.snow_water_mm),
-                soil_mm: total_of_one(sum.soil_mm),
-                evaporation_mm: total_of_one(sum.evaporation_mm),
-                sublimation_mm: total_of_one(sum.sublimation_mm),
-                ..BasinDay::default()
-            };
-            let recharge_mm = total_of_one(sum.recharge_mm);
-            *out = self.course.finish(&weather, sums, recharge_mm, &mut ground, &mut channel);
+        let mut weather = [LaneWeather::default(); BLOCK_DAYS];
+        let mut sums = [[LaneSums::default(); 2]; BLOCK_DAYS];
+        let blocks = calendar.chunks(BLOCK_DAYS).zip(record.chunks(BLOCK_DAYS)).zip(out.chunks_mut(BLOCK_DAYS));
+        for ((calendar, record), out) in blocks {
+            for (((today, record), weather), out) in calendar.iter().zip(record).zip(&mut weather).zip(out.iter_mut()) {
+                let air = air_of(self.valley, &self.sky, today, record);
+                let dialled = self.course.delta.day(today, record, &air);
+                *weather = LaneWeather {
+                    temperature_c: Lanes::splat(dialled.temperature_c),
+                    precipitation_mm: Lanes::splat(dialled.precipitation_mm),
+                    reference_evaporation_mm: Lanes::splat(dialled.reference_evaporation_mm),
+                    melt_factor: Lanes::splat(self.melt_factor[usize::from(today.day_of_year - 1) % 366]),
+                    most_sublimation_mm: Lanes::splat(sublimation_on(self.valley, today, southern)),
+                    split_humidity_percent: split_humidity(self.valley, record),
+                };
+                *out = self.course.open(&dialled);
+            }
+            self.slopes.days::<false>(curve, calendar, &weather[..out.len()], &mut rows, &mut sums);
+            for ([sum, _], out) in sums.iter().zip(out) {
+                out.snowfall_mm = total_of_one(sum.snowfall_mm);
+                out.snow_water_mm = total_of_one(sum.snow_water_mm);
+                out.soil_mm = total_of_one(sum.soil_mm);
+                out.evaporation_mm = total_of_one(sum.evaporation_mm);
+                out.sublimation_mm = total_of_one(sum.sublimation_mm);
+                self.course.close(out, total_of_one(sum.recharge_mm), &mut ground, &mut channel);
+            }
         }
         (stores.rows, stores.ground[0], stores.channel[0]) = (rows, ground, channel);
     }
 }
 
 impl<'v, const L: usize> Basins<'v, L> {
-    /// The basins of `valleys` under `dials`, side by side. The valleys must be one place: the same latitude, bands and
-    /// kind of split; parameters may differ.
+    /// The basins of `valleys` under `dials`, side by side. The valleys must be one place: the same latitude, bands, kind
+    /// of split and way to reference evaporation; parameters may differ.
     pub fn new(valleys: [&'v Valley; L], dials: [&Dials; L]) -> Self {
         Self {
             valleys,
@@ -341,41 +344,43 @@ impl<'v, const L: usize> Basins<'v, L> {
     ) {
         let southern = self.valleys[0].is_southern();
         let mut rows = stores.rows;
-        let mut wet_bulb_c = [Lanes::default(); MOST_BANDS];
-        for (index, (today, record)) in calendar.iter().zip(record).enumerate() {
-            let weather: [DialledDay; L] =
-                core::array::from_fn(|lane| self.courses[lane].delta.day(self.valleys[lane], &self.sky, today, record));
-            let sublimation = self.valleys.map(|valley| sublimation_on(valley, today, southern));
-            let lanes = LaneWeather {
-                temperature_c: Lanes(weather.map(|w| w.temperature_c)),
-                precipitation_mm: Lanes(weather.map(|w| w.precipitation_mm)),
-                reference_evaporation_mm: Lanes(weather.map(|w| w.reference_evaporation_mm)),
-                melt_factor: self.melt_factor[usize::from(today.day_of_year - 1) % 366],
-                most_sublimation_mm: Lanes(sublimation),
-            };
-            let split_c = split_humidity(self.valleys[0], record).map(|humidity_percent| {
-                self.slopes.wet_bulb(today, lanes.temperature_c, humidity_percent, &mut wet_bulb_c);
-                &wet_bulb_c
-            });
-            let [even, odd] = self.slopes.day::<true>(curve, today, &lanes, split_c, &mut rows);
-            let snowfall = even.snowfall_mm + odd.snowfall_mm;
-            let snow_water = even.snow_water_mm + odd.snow_water_mm;
-            let soil = even.soil_mm + odd.soil_mm;
-            let evaporation = even.evaporation_mm + odd.evaporation_mm;
-            let sublimation = even.sublimation_mm + odd.sublimation_mm;
-            let recharge = even.recharge_mm + odd.recharge_mm;
-            for lane in 0..L {
-                let sums = BasinDay {
-                    snowfall_mm: snowfall.0[lane],
-                    snow_water_mm: snow_water.0[lane],
-                    soil_mm: soil.0[lane],
-                    evaporation_mm: evaporation.0[lane],
-                    sublimation_mm: sublimation.0[lane],
-                    ..BasinDay::default()
-                };
-                let (ground, channel) = (&mut stores.ground[lane], &mut stores.channel[lane]);
-                if let Some(out) = out[lane].get_mut(index) {
-                    *out = self.courses[lane].finish(&weather[lane], sums, recharge.0[lane], ground, channel);
+        let mut weather = [LaneWeather::default(); BLOCK_DAYS];
+        let mut sums = [[LaneSums::default(); 2]; BLOCK_DAYS];
+        for (block, (calendar, record)) in calendar.chunks(BLOCK_DAYS).zip(record.chunks(BLOCK_DAYS)).enumerate() {
+            let first = block * BLOCK_DAYS;
+            for (index, (today, record)) in calendar.iter().zip(record).enumerate() {
+                let weather = &mut weather[index];
+                weather.melt_factor = self.melt_factor[usize::from(today.day_of_year - 1) % 366];
+                weather.most_sublimation_mm = Lanes(self.valleys.map(|valley| sublimation_on(valley, today, southern)));
+                weather.split_humidity_percent = split_humidity(self.valleys[0], record);
+                let air = air_of(self.valleys[0], &self.sky, today, record);
+                for lane in 0..L {
+                    let dialled = self.courses[lane].delta.day(today, record, &air);
+                    weather.temperature_c.0[lane] = dialled.temperature_c;
+                    weather.precipitation_mm.0[lane] = dialled.precipitation_mm;
+                    weather.reference_evaporation_mm.0[lane] = dialled.reference_evaporation_mm;
+                    if let Some(out) = out[lane].get_mut(first + index) {
+                        *out = self.courses[lane].open(&dialled);
+                    }
+                }
+            }
+            self.slopes.days::<true>(curve, calendar, &weather[..calendar.len()], &mut rows, &mut sums);
+            for (index, [even, odd]) in sums.iter().enumerate().take(calendar.len()) {
+                let snowfall = even.snowfall_mm + odd.snowfall_mm;
+                let snow_water = even.snow_water_mm + odd.snow_water_mm;
+                let soil = even.soil_mm + odd.soil_mm;
+                let evaporation = even.evaporation_mm + odd.evaporation_mm;
+                let sublimation = even.sublimation_mm + odd.sublimation_mm;
+                let recharge = even.recharge_mm + odd.recharge_mm;
+                for lane in 0..L {
+                    let Some(out) = out[lane].get_mut(first + index) else { continue };
+                    out.snowfall_mm = snowfall.0[lane];
+                    out.snow_water_mm = snow_water.0[lane];
+                    out.soil_mm = soil.0[lane];
+                    out.evaporation_mm = evaporation.0[lane];
+                    out.sublimation_mm = sublimation.0[lane];
+                    let (ground, channel) = (&mut stores.ground[lane], &mut stores.channel[lane]);
+                    self.courses[lane].close(out, recharge.0[lane], ground, channel);
                 }
             }
         }
@@ -397,6 +402,11 @@ fn sky_of(valley: &Valley) -> SkyTable {
     // `place` admits only latitudes that have a table; any other gives no number rather than a wrong one.
     let nowhere = SkyTable { extraterrestrial_mj_m2: [f64::NAN; 366], daylight_h: [f64::NAN; 366] };
     SkyTable::at_latitude(valley.latitude_deg).unwrap_or(nowhere)
+}
+
+#[inline(always)]
+fn air_of<'a>(valley: &'a Valley, sky: &SkyTable, today: &CalendarDay, record: &'a StationDay) -> DayBeforeWarming<'a> {
+    DayBeforeWarming::new(&valley.evaporation.method, sky, today.day_of_year, &record.air)
 }
 
 fn melt_factor_on(valley: &Valley, index: usize) -> f64 {

@@ -46,7 +46,7 @@ pub struct Slopes<const L: usize> {
 }
 
 /// The weather of a day, one value a lane.
-#[derive(Clone, Copy, Debug)]
+#[derive(Clone, Copy, Debug, Default)]
 pub struct LaneWeather<const L: usize> {
     /// At the station, °C.
     pub temperature_c: Lanes<L>,
@@ -58,6 +58,8 @@ pub struct LaneWeather<const L: usize> {
     pub melt_factor: Lanes<L>,
     /// Most that the air takes from snow, mm.
     pub most_sublimation_mm: Lanes<L>,
+    /// Where wet-bulb temperature splits rain from snow today: the station's humidity, %.
+    pub split_humidity_percent: Option<f64>,
 }
 
 /// Area-weighted sums of a day over the bands, mm.
@@ -139,12 +141,31 @@ impl<const L: usize> Slopes<L> {
         &self.rows[..self.used]
     }
 
-    /// One day over all bands. With `APART` the rows of even and of odd index are summed in the first and the second
-    /// sum; without it all go into the first. `wet_bulb_c` holds every
-    /// band's wet-bulb temperature where that splits rain from snow: worked out apart ([`Slopes::wet_bulb`]), since a call
-    /// in the loop would cost every day its registers.
+    /// Some days over all bands, each into its place in `sums`. With `APART` the rows of even and of odd index are summed
+    /// in the first and the second sum; without it all go into the first. The slices are of equal length; the shortest
+    /// counts.
     #[inline(never)]
-    pub fn day<const APART: bool>(
+    pub fn days<const APART: bool>(
+        &self,
+        curve: impl PowerCurve<L>,
+        calendar: &[CalendarDay],
+        weather: &[LaneWeather<L>],
+        stores: &mut [RowStore<L>; MOST_BANDS],
+        sums: &mut [[LaneSums<L>; 2]],
+    ) {
+        let mut wet_bulb_c = [Lanes::default(); MOST_BANDS];
+        for ((today, weather), sums) in calendar.iter().zip(weather).zip(sums) {
+            // Worked out apart: a call in the loop over the bands would cost every day its registers.
+            let split_c = weather.split_humidity_percent.map(|humidity_percent| {
+                self.wet_bulb(today, weather.temperature_c, humidity_percent, &mut wet_bulb_c);
+                &wet_bulb_c
+            });
+            *sums = self.day::<APART>(curve, today, weather, split_c, stores);
+        }
+    }
+
+    #[inline(always)]
+    fn day<const APART: bool>(
         &self,
         curve: impl PowerCurve<L>,
         calendar: &CalendarDay,
@@ -185,7 +206,7 @@ impl<const L: usize> Slopes<L> {
     /// Wet-bulb temperature of every band at the station's humidity.
     #[cold]
     #[inline(never)]
-    pub fn wet_bulb(
+    fn wet_bulb(
         &self,
         calendar: &CalendarDay,
         temperature_c: Lanes<L>,

@@ -3,7 +3,7 @@
 use super::calendar::CalendarDay;
 use super::dials::Dials;
 use super::evaporation::air::saturation_vapour_pressure_kpa;
-use super::evaporation::{EvaporationDay, SkyTable, reference_evaporation_mm};
+use super::evaporation::{DayBeforeWarming, EvaporationDay};
 use super::valley::{Climb, Valley};
 
 /// One day of the station's record, whole: gaps were filled or refused before.
@@ -96,21 +96,15 @@ impl Delta {
         self.warming_c[month_index]
     }
 
-    /// The day under the dials.
+    /// The day under the dials; `air` is its reference evaporation before warming.
     #[inline(always)]
-    pub fn day(&self, valley: &Valley, sky: &SkyTable, calendar: &CalendarDay, day: &StationDay) -> DialledDay {
+    pub fn day(&self, calendar: &CalendarDay, day: &StationDay, air: &DayBeforeWarming<'_>) -> DialledDay {
         let month_index = calendar.month_index();
         let warming_c = self.warming_c[month_index];
         DialledDay {
             temperature_c: day.mean_temperature_c + warming_c,
             precipitation_mm: day.precipitation_mm * self.precipitation_factor[month_index],
-            reference_evaporation_mm: reference_evaporation_mm(
-                &valley.evaporation.method,
-                sky,
-                calendar.day_of_year,
-                &day.air,
-                warming_c,
-            ),
+            reference_evaporation_mm: air.warmed_mm(warming_c),
         }
     }
 }

@@ -105,10 +105,10 @@ fn temperatures() -> Vec<Broken> {
         ),
         case(
             "two slips that would move any mean",
-            &[(Tmax, C)],
+            &[(Tmin, C), (Tmax, C)],
             400,
-            |day| vec![if day == 100 || day == 200 { 1e7 } else { 12.0 + day as f64 % 9.0 }],
-            &[("problem-record-out-of-bounds", 102, 12)],
+            |day| vec![2.0 + day as f64 % 9.0, if day == 100 || day == 200 { 1e7 } else { 12.0 + day as f64 % 9.0 }],
+            &[("problem-record-out-of-bounds", 102, 14)],
         ),
         case(
             "a filled warmest below a measured coldest",

@@ -3,6 +3,7 @@
 use std::ffi::OsStr;
 use std::path::Path;
 
+use super::lessons;
 use crate::commands::built_in;
 use crate::commands::failure::Failure;
 use crate::commands::places::Named;
@@ -25,8 +26,8 @@ pub(super) struct Checked {
     texts: Vec<(String, String)>,
 }
 
-/// Checks a place or a setting, on the disk or built in.
-pub(super) fn check_one(path: &Path, speech: &Speech) -> Checked {
+/// Checks a place, a setting or a lesson, on the disk or built in. A lesson is tried on the place `on`, else on the demo.
+pub(super) fn check_one(path: &Path, on: Option<&Path>, speech: &Speech) -> Checked {
     let shown = path.display().to_string();
     let name = path.to_str().unwrap_or_default();
     let is_toml = path.extension() == Some(OsStr::new("toml"));
@@ -34,9 +35,13 @@ pub(super) fn check_one(path: &Path, speech: &Speech) -> Checked {
     let is_setting = !is_place && (path.is_file() && is_toml || !path.exists() && built_in::setting(name).is_some());
     if is_setting {
         return match settings::find(path, &speech.words) {
+            Ok(lesson) if lessons::is_lesson(&lesson.text) => of_lesson(shown, lesson, on, speech),
             Ok(setting) => of_setting(shown, setting),
             Err(failure) => unreadable(shown, failure),
         };
+    }
+    if let Some(lesson) = lessons::built_in(name).filter(|_| !path.exists()) {
+        return of_lesson(shown, lesson, on, speech);
     }
     if path.is_file() && !is_place {
         let line = speech.words.say("check-not-known", &[("path", shown.as_str().into())]);
@@ -62,12 +67,29 @@ fn of_setting(path: String, setting: SettingText) -> Checked {
     Checked { path, problems: outcome.problems, unreadable: Vec::new(), texts }
 }
 
+fn of_lesson(path: String, lesson: SettingText, on: Option<&Path>, speech: &Speech) -> Checked {
+    match lessons::problems(&lesson, on, speech) {
+        Ok(problems) => {
+            let texts = vec![(lesson.file.to_string_lossy().into_owned(), lesson.text)];
+            Checked { path, problems, unreadable: Vec::new(), texts }
+        }
+        Err(failure) => unreadable(path, failure),
+    }
+}
+
 fn unreadable(path: String, failure: Failure) -> Checked {
     let lines = match failure {
         Failure::Input(lines) | Failure::Usage(lines) => lines,
         Failure::ReaderGone => Vec::new(),
     };
     Checked { path, problems: Vec::new(), unreadable: lines, texts: Vec::new() }
+}
+
+/// Whether a path names a place, on the disk or built in.
+pub(super) fn is_place(path: &Path) -> bool {
+    path.is_dir()
+        || path.file_name() == Some(OsStr::new("place.toml"))
+        || !path.exists() && path.to_str().and_then(built_in::place).is_some()
 }
 
 impl Checked {

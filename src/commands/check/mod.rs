@@ -1,6 +1,7 @@
-//! `check`: every mistake of places and settings at its line, with what would be right.
+//! `check`: every mistake of places, settings and lessons at its line, with what would be right.
 
 mod found;
+mod lessons;
 mod report_json;
 
 use std::path::PathBuf;
@@ -11,7 +12,7 @@ use super::failure::Failure;
 use super::output::deliver;
 use super::speech::Speech;
 use super::usage::mistake;
-use found::{Checked, check_one};
+use found::{Checked, check_one, is_place};
 
 /// How `check` answers.
 #[derive(Clone, Copy, PartialEq, Eq)]
@@ -25,7 +26,9 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
     let words = &speech.words;
     let form = form(matches.get_one::<String>("form").map(String::as_str), speech)?;
     let paths: Vec<&PathBuf> = matches.get_many::<PathBuf>("paths").into_iter().flatten().collect();
-    let mut checked: Vec<Checked> = paths.iter().map(|path| check_one(path, speech)).collect();
+    // Lessons are tried on the place that is named with them.
+    let on = paths.iter().map(|path| path.as_path()).find(|path| is_place(path));
+    let mut checked: Vec<Checked> = paths.iter().map(|path| check_one(path, on, speech)).collect();
     let wrong = checked.iter().any(Checked::is_wrong);
     let answer = match form {
         Form::Json => report_json::write(&checked, words),

@@ -30,6 +30,7 @@ use super::usage::mistake;
 use crate::water::dials::Dials;
 use request::{Form, Request};
 use runs::Told;
+pub(super) use runs::usual_system;
 
 /// Runs the place and tells what came of it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
@@ -69,9 +70,9 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
     deliver(answer.as_bytes(), request.out.as_deref(), &words)
 }
 
-/// What the program says when it is not told what to do: the usual place at rest, and how to get help.
-pub(super) fn summary(speech: &Speech) -> Result<(), Failure> {
-    let place = places::open(Path::new(places::USUAL), speech)?;
+/// What is said of a place where it cannot be shown: its years at rest, and how to get help.
+pub(super) fn summary(speech: &Speech, place: &Path) -> Result<(), Failure> {
+    let place = places::open(place, speech)?;
     let words = speech.for_place(&place.region);
     let system = runs::usual_system(&place);
     let told = Told::run(place, None, Dials::REST, None, false, &words)?;

@@ -140,7 +140,7 @@ fn second_stage(
 }
 
 /// The units that the people of a place are used to.
-pub(super) fn usual_system(place: &Place) -> System {
+pub(in crate::commands) fn usual_system(place: &Place) -> System {
     match place.units {
         UnitSystem::Metric => System::Metric,
         UnitSystem::Us => System::Us,

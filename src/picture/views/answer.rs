@@ -1,5 +1,6 @@
 //! The one sentence with which each page answers its question, chosen from the signs of both runs.
 
+use super::page_answer::PageAnswer;
 use super::scene::Scene;
 use super::wording::{day_in_sentence, share};
 use crate::signs::{CanalSigns, YearSigns};
@@ -78,6 +79,8 @@ pub enum Answer {
     NobodyAsks,
     /// There are no canals.
     NoCanals,
+    /// What the pages beside the year say.
+    Page(PageAnswer),
 }
 
 /// Something that happens on a day of the year.
@@ -229,6 +232,7 @@ impl Answer {
             Self::AllFull => words.say("answer-all-full", &[]),
             Self::NobodyAsks => words.say("answer-nobody-asks", &[]),
             Self::NoCanals => words.say("answer-no-canals", &[]),
+            Self::Page(answer) => answer.say(scene, words),
         }
     }
 }

@@ -4,14 +4,25 @@
 //! bottom. What was is dashed, what is with your changes is solid; colours mean water and lack, and a pattern or a
 //! word always says the same.
 
+pub mod about;
 pub mod answer;
 pub mod canals;
+mod card;
 mod dial_cards;
+mod emblem;
+pub mod facts;
 pub mod frame;
+pub mod help;
 pub mod layout;
+pub mod ledger;
+pub mod many_years;
 mod months;
+pub mod page_answer;
 pub mod scene;
 pub mod season;
+mod sheets;
+pub mod term;
+pub mod trust;
 pub mod valley;
 mod wording;
 

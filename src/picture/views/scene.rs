@@ -3,6 +3,7 @@
 //! Daily series are those of the chosen water year, one value for each day of its calendar, and empty where the place
 //! has no such thing. Canals stand in order of right, the oldest first, in every list of a scene.
 
+use super::facts::{AllYears, PlaceFacts, Skill};
 use crate::picture::chart::DayMark;
 use crate::signs::{CanalSigns, YearReport, YearSigns};
 use crate::water::calendar::CalendarDay;
@@ -49,6 +50,14 @@ pub struct Scene<'a> {
     pub beside: Option<RunShown<'a>>,
     /// How far the answer may be off, where the place has a band of parameter sets.
     pub doubt: Option<Doubt<'a>>,
+    /// How all the years are looked at.
+    pub all_years: AllYears<'a>,
+    /// What is told of the place.
+    pub facts: PlaceFacts<'a>,
+    /// How far the model was right; `None` where it was not fitted or nobody has the scores.
+    pub skill: Option<Skill<'a>>,
+    /// Which sheet of a page with several is on show, counted from 0.
+    pub sheet: usize,
 }
 
 impl Scene<'_> {

@@ -1,9 +1,10 @@
 //! One day's reference evaporation by the method of the place, with the warming dial applied.
 
-use super::hargreaves_samani::hargreaves_samani_mm;
+use super::hargreaves_samani::of_range_root_mm;
 use super::oudin::oudin_mm;
 use super::penman_monteith::PenmanMonteithTraits;
 use super::sun::SkyTable;
+use crate::water::lanes::square_root;
 
 /// How a place gets its reference evaporation.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -67,24 +68,59 @@ pub fn reference_evaporation_mm(
     day: &EvaporationDay,
     warming_c: f64,
 ) -> f64 {
-    let extraterrestrial_mj_m2 = sky.extraterrestrial_on_mj_m2(day_of_year);
-    let middle_c = (day.tmax_c + day.tmin_c) / 2.0;
-    let hargreaves_samani = |warming_c: f64| {
-        not_negative(hargreaves_samani_mm(middle_c + warming_c, day.tmax_c - day.tmin_c, extraterrestrial_mj_m2))
-    };
-    not_negative(match method {
-        Method::PenmanMonteith(traits) => traits.day_mm(extraterrestrial_mj_m2, day, warming_c),
-        Method::HargreavesSamani => hargreaves_samani(warming_c),
-        Method::Oudin => {
-            let mean_c = if day.tmean_c.is_nan() { middle_c } else { day.tmean_c };
-            oudin_mm(mean_c + warming_c, extraterrestrial_mj_m2)
+    DayBeforeWarming::new(method, sky, day_of_year, day).warmed_mm(warming_c)
+}
+
+/// A day with everything worked out that warming leaves as it is, for many warmings of the same day.
+#[derive(Clone, Copy, Debug)]
+pub struct DayBeforeWarming<'a> {
+    method: &'a Method,
+    day: &'a EvaporationDay,
+    extraterrestrial_mj_m2: f64,
+    middle_c: f64,
+    range_root: f64,
+}
+
+impl<'a> DayBeforeWarming<'a> {
+    /// The day by the place's method; see [`reference_evaporation_mm`].
+    #[inline(always)]
+    pub fn new(method: &'a Method, sky: &SkyTable, day_of_year: u16, day: &'a EvaporationDay) -> Self {
+        Self {
+            method,
+            day,
+            extraterrestrial_mj_m2: sky.extraterrestrial_on_mj_m2(day_of_year),
+            middle_c: (day.tmax_c + day.tmin_c) / 2.0,
+            range_root: square_root(day.tmax_c - day.tmin_c),
         }
-        Method::Given if warming_c == 0.0 => day.given_mm,
-        Method::Given => {
-            let unwarmed_mm = hargreaves_samani(0.0);
-            if unwarmed_mm == 0.0 { day.given_mm } else { day.given_mm * (hargreaves_samani(warming_c) / unwarmed_mm) }
-        }
-    })
+    }
+
+    #[inline(always)]
+    fn hargreaves_samani_mm(&self, warming_c: f64) -> f64 {
+        not_negative(of_range_root_mm(self.middle_c + warming_c, self.range_root, self.extraterrestrial_mj_m2))
+    }
+
+    /// Reference evaporation with `warming_c` added to every temperature; see [`reference_evaporation_mm`].
+    #[inline(always)]
+    pub fn warmed_mm(&self, warming_c: f64) -> f64 {
+        not_negative(match self.method {
+            Method::HargreavesSamani => self.hargreaves_samani_mm(warming_c),
+            Method::PenmanMonteith(traits) => traits.day_mm(self.extraterrestrial_mj_m2, self.day, warming_c),
+            Method::Oudin => {
+                let mean_c = if self.day.tmean_c.is_nan() { self.middle_c } else { self.day.tmean_c };
+                oudin_mm(mean_c + warming_c, self.extraterrestrial_mj_m2)
+            }
+            Method::Given if warming_c == 0.0 => self.day.given_mm,
+            Method::Given => {
+                let unwarmed_mm = self.hargreaves_samani_mm(0.0);
+                let given_mm = self.day.given_mm;
+                if unwarmed_mm == 0.0 {
+                    given_mm
+                } else {
+                    given_mm * (self.hargreaves_samani_mm(warming_c) / unwarmed_mm)
+                }
+            }
+        })
+    }
 }
 
 /// By how many percent a method's evaporation over a whole record grows with the first degree of warming.
@@ -119,6 +155,7 @@ fn not_negative(value_mm: f64) -> f64 {
 mod tests {
     use super::*;
     use crate::water::evaporation::air::{mean_saturation_vapour_pressure_kpa, vapour_pressure_from_mean_humidity_kpa};
+    use crate::water::evaporation::hargreaves_samani_mm;
     use crate::water::evaporation::radiation::INTERIOR_SOLAR_RANGE_COEFFICIENT;
 
     const JULY: u16 = 196;

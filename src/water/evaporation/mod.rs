@@ -12,7 +12,7 @@ mod penman_monteith;
 pub mod radiation;
 pub mod sun;
 
-pub use daily::{EvaporationDay, Method, percent_per_degree, reference_evaporation_mm};
+pub use daily::{DayBeforeWarming, EvaporationDay, Method, percent_per_degree, reference_evaporation_mm};
 pub use hargreaves_samani::hargreaves_samani_mm;
 pub use oudin::{LATENT_HEAT_OF_VAPORISATION_MJ_KG, oudin_mm};
 pub use penman_monteith::{PenmanMonteithInputs, PenmanMonteithTraits, WIND_WHEN_MISSING_MS, penman_monteith_mm};

@@ -1,0 +1,3 @@
+# Whole messages that differ in Britain.
+
+key-shade = other colours

@@ -1,0 +1,88 @@
+//! Hand events as events of the session.
+
+use std::time::Duration;
+
+use crate::board::{HandEvent, Key};
+use crate::session::{self, Event};
+
+/// Turns the time between events into whole milliseconds without losing the rest.
+#[derive(Debug, Default)]
+pub(super) struct Clock {
+    rest: Duration,
+    /// Since the encoder was last turned; `None` before its first turn.
+    since_turn: Option<Duration>,
+}
+
+impl Clock {
+    /// The event for the session, if it is one that the session knows.
+    pub fn event(&mut self, event: HandEvent) -> Option<Event> {
+        Some(match event {
+            HandEvent::Time(gone_by) => {
+                self.since_turn = self.since_turn.map(|since| since.saturating_add(gone_by));
+                self.rest = self.rest.saturating_add(gone_by);
+                let elapsed_ms = whole_ms(self.rest);
+                self.rest = self.rest.saturating_sub(Duration::from_millis(elapsed_ms.into()));
+                Event::Tick { elapsed_ms }
+            }
+            HandEvent::Turn(detents) => {
+                let since_ms = self.since_turn.replace(Duration::ZERO).map_or(u32::MAX, whole_ms);
+                Event::Turn { detents, since_ms }
+            }
+            HandEvent::Press => Event::Press,
+            HandEvent::LongPress => Event::LongPress,
+            HandEvent::Key(key) => Event::Key(session_key(key)?),
+            HandEvent::Pointer { .. } | HandEvent::Resize | HandEvent::Close => return None,
+        })
+    }
+}
+
+fn whole_ms(time: Duration) -> u32 {
+    u32::try_from(time.as_millis()).unwrap_or(u32::MAX)
+}
+
+fn session_key(key: Key) -> Option<session::keys::Key> {
+    use session::keys::Key as To;
+    Some(match key {
+        Key::Up => To::Up,
+        Key::Down => To::Down,
+        Key::Left => To::Left,
+        Key::Right => To::Right,
+        Key::PageUp => To::PageUp,
+        Key::PageDown => To::PageDown,
+        Key::Home => To::Home,
+        Key::End => return None,
+        Key::Enter => To::Enter,
+        Key::Escape => To::Escape,
+        Key::Tab => To::Tab,
+        Key::BackTab => To::BackTab,
+        Key::Char(letter) => To::Char(letter),
+    })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn no_part_of_a_millisecond_is_lost() {
+        let mut clock = Clock::default();
+        let mut sum = 0;
+        for _ in 0..10 {
+            let Some(Event::Tick { elapsed_ms }) = clock.event(HandEvent::Time(Duration::from_micros(700))) else {
+                panic!("time is a tick");
+            };
+            sum += elapsed_ms;
+        }
+        assert_eq!(sum, 7);
+    }
+
+    #[test]
+    fn turns_know_how_long_ago_the_last_one_was() {
+        let mut clock = Clock::default();
+        assert_eq!(clock.event(HandEvent::Turn(1)), Some(Event::Turn { detents: 1, since_ms: u32::MAX }));
+        clock.event(HandEvent::Time(Duration::from_millis(40)));
+        clock.event(HandEvent::Key(Key::End));
+        clock.event(HandEvent::Time(Duration::from_millis(2)));
+        assert_eq!(clock.event(HandEvent::Turn(-2)), Some(Event::Turn { detents: -2, since_ms: 42 }));
+    }
+}

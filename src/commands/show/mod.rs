@@ -1,0 +1,170 @@
+//! `show`: the running instrument on whatever screens are at hand, or as pictures in a folder.
+
+mod drawing;
+mod hands;
+mod pictures;
+mod player;
+mod request;
+
+use clap::ArgMatches;
+
+use super::failure::Failure;
+use super::places;
+use super::speech::Speech;
+use super::spinner::Spinner;
+use super::tell;
+use crate::board::choose::{Why, can_show, choose};
+use crate::board::surroundings::{Surroundings, WindowChance};
+use crate::board::terminal::{Ability, Terminal};
+use crate::board::{Choice, FrameSize, Post, ScreenError, ScreenKind, Stage, run as play};
+use crate::words::Words;
+use player::Player;
+use request::Request;
+
+/// Opens the place and shows it.
+pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
+    let request = Request::read(matches, &speech.words)?;
+    show(speech, &request)
+}
+
+/// What the program does when it is not told what to do: the usual place on the best screen at hand.
+pub(super) fn usual(speech: &Speech) -> Result<(), Failure> {
+    show(speech, &Request::default())
+}
+
+fn show(speech: &Speech, request: &Request) -> Result<(), Failure> {
+    let words = &speech.words;
+    let mut around = Surroundings::look(Vec::new());
+    for &kind in &request.screens {
+        can_show(kind, &around).map_err(|why| refuse(kind, why, words))?;
+    }
+    let player = open(speech, request)?;
+    if !request.screens.is_empty() {
+        return show_on(&request.screens, player, speech, request).map_err(|trouble| trouble.told(words));
+    }
+    let mut choice = choose(&around);
+    if choice.kind == ScreenKind::Window {
+        tell_choice(choice, words);
+        match show_on(&[choice.kind], player, speech, request) {
+            // A desktop that answers and still gives no window: the next best screen has its turn.
+            Err(Trouble::Screen(error)) if error.screen == ScreenKind::Window => {
+                super::tell_standard_error(&[screen_words(&error, words)]);
+                around.window = WindowChance::Failed;
+                choice = choose(&around);
+            }
+            outcome => return outcome.map_err(|trouble| trouble.told(words)),
+        }
+        return show_chosen(choice, open(speech, request)?, speech, request);
+    }
+    show_chosen(choice, player, speech, request)
+}
+
+fn show_chosen(choice: Choice, player: Player, speech: &Speech, request: &Request) -> Result<(), Failure> {
+    tell_choice(choice, &speech.words);
+    show_on(&[choice.kind], player, speech, request).map_err(|trouble| trouble.told(&speech.words))?;
+    // Whoever did not ask for pictures gets the answer in words as well.
+    if choice.kind == ScreenKind::Pictures { tell::summary(speech, &request.place) } else { Ok(()) }
+}
+
+fn open(speech: &Speech, request: &Request) -> Result<Player, Failure> {
+    let reading = speech.words.say("progress-reading", &[("path", request.place.display().to_string().into())]);
+    let spinner = Spinner::start(reading);
+    let place = places::open(&request.place, speech)?;
+    drop(spinner);
+    let _spinner = Spinner::start(speech.words.say("progress-running", &[]));
+    Player::new(place, speech, request.shade, request.units)
+}
+
+/// Why nothing is shown, or no longer.
+enum Trouble {
+    Screen(ScreenError),
+    Told(Failure),
+}
+
+impl From<ScreenError> for Trouble {
+    fn from(error: ScreenError) -> Self {
+        Trouble::Screen(error)
+    }
+}
+
+impl Trouble {
+    fn told(self, words: &Words) -> Failure {
+        match self {
+            Trouble::Screen(error) => Failure::input(screen_words(&error, words)),
+            Trouble::Told(failure) => failure,
+        }
+    }
+}
+
+fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Request) -> Result<(), Trouble> {
+    let mut player = player;
+    if screens.contains(&ScreenKind::Pictures) {
+        pictures::write(&mut player, request, &speech.words).map_err(Trouble::Told)?;
+    }
+    let asked = |kind| screens.iter().filter(move |&&screen| screen == kind).count();
+    let (windows, terminals) = (asked(ScreenKind::Window), asked(ScreenKind::Terminal));
+    let mut stage = Stage::new(player);
+    if windows > 0 {
+        return show_in_windows(stage, windows, terminals > 0, request.size);
+    }
+    if terminals > 0 {
+        let (post, hands) = Post::channel();
+        stage.add(Box::new(terminal(None, request.size, &post)?));
+        play(&mut stage, &hands)?;
+    }
+    Ok(())
+}
+
+#[cfg(feature = "window")]
+fn show_in_windows(
+    mut stage: Stage<Player>,
+    windows: usize,
+    with_terminal: bool,
+    size: Option<FrameSize>,
+) -> Result<(), Trouble> {
+    let desk = crate::board::window::Desk::open()?;
+    if with_terminal {
+        // The terminal is the presenter's, the window the room's, each in its own size.
+        stage.add(Box::new(terminal(None, None, &desk.post())?));
+    }
+    desk.run(stage, &vec![size; windows])?;
+    Ok(())
+}
+
+#[cfg(not(feature = "window"))]
+fn show_in_windows(_: Stage<Player>, _: usize, _: bool, _: Option<FrameSize>) -> Result<(), Trouble> {
+    Err(ScreenError::new(ScreenKind::Window, "not built").into())
+}
+
+fn terminal(ability: Option<Ability>, size: Option<FrameSize>, post: &Post) -> Result<Terminal, ScreenError> {
+    let ability = ability.or_else(|| Ability::of_environment(|name| std::env::var(name).ok()));
+    let ability = ability.ok_or_else(|| ScreenError::new(ScreenKind::Terminal, "TERM"))?;
+    Terminal::open(ability, size, post)
+}
+
+fn tell_choice(choice: Choice, words: &Words) {
+    let why = words.say(choice.why.message(), &[]);
+    let name = words.say(screen_message(choice.kind), &[]);
+    super::tell_standard_error(&[words.say("show-chosen", &[("screen", name.into()), ("why", why.into())])]);
+}
+
+fn refuse(kind: ScreenKind, why: Why, words: &Words) -> Failure {
+    let why = words.say(why.message(), &[]);
+    let name = words.say(screen_message(kind), &[]);
+    Failure::input(words.say("show-cannot", &[("screen", name.into()), ("why", why.into())]))
+}
+
+fn screen_words(error: &ScreenError, words: &Words) -> String {
+    let name = words.say(screen_message(error.screen), &[]);
+    words.say("show-screen-failed", &[("screen", name.into()), ("reason", error.reason.as_str().into())])
+}
+
+fn screen_message(kind: ScreenKind) -> &'static str {
+    match kind {
+        ScreenKind::Panel => "show-screen-panel",
+        ScreenKind::Framebuffer => "show-screen-framebuffer",
+        ScreenKind::Window => "show-screen-window",
+        ScreenKind::Terminal => "show-screen-terminal",
+        ScreenKind::Pictures => "show-screen-pictures",
+    }
+}

@@ -1,0 +1,48 @@
+//! Every view as a picture, in each language.
+
+use std::path::Path;
+
+use super::drawing::VIEWS;
+use super::player::Player;
+use super::request::Request;
+use crate::board::pictures::{file_name, write as write_picture};
+use crate::board::{FrameSize, Instrument};
+use crate::commands::failure::Failure;
+use crate::commands::output::reason;
+use crate::commands::tell_standard_error;
+use crate::picture::views::View as Page;
+use crate::session::{Command, Event};
+use crate::words::Words;
+
+/// Where pictures go when nobody says.
+const FOLDER: &str = "deshielo-pictures";
+/// How large they are when nobody says.
+const SIZE: FrameSize = FrameSize::new(800, 480);
+
+/// Writes the pictures and says where.
+pub(super) fn write(player: &mut Player, request: &Request, words: &Words) -> Result<(), Failure> {
+    let folder = request.into.as_deref().unwrap_or(Path::new(FOLDER));
+    let size = request.size.unwrap_or(SIZE);
+    let mut languages = player.languages();
+    if request.one_language {
+        languages.truncate(1);
+    }
+    let mut count = 0_u32;
+    for language in &languages {
+        for _ in VIEWS {
+            let name = file_name(Page::ALL[player.view() as usize].key(), language, size);
+            let frame = player.frame(size, false);
+            write_picture(folder, &name, size, frame.pixels).map_err(|error| {
+                let arguments =
+                    [("path", folder.display().to_string().into()), ("reason", reason(&error, words).into())];
+                Failure::Input(vec![words.say("show-folder-unwritable", &arguments)])
+            })?;
+            count += 1;
+            player.step(Event::Command(Command::StepView(1)));
+        }
+        player.step(Event::Command(Command::NextVoice));
+    }
+    let path = folder.display().to_string();
+    tell_standard_error(&[words.say("show-pictures-written", &[("n", count.into()), ("path", path.into())])]);
+    Ok(())
+}

@@ -1,0 +1,190 @@
+//! The instrument that is played: a place, the session on it, the answers of the water, and the frames of the views.
+
+use std::time::Duration;
+
+use super::drawing::{Drawing, VIEWS};
+use super::hands::Clock;
+use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument};
+use crate::commands::failure::Failure;
+use crate::commands::speech::Speech;
+use crate::commands::tell::usual_system;
+use crate::place::Place;
+use crate::session::answer::{Asked, Source};
+use crate::session::scene::{Moment, PlaceTold, Stage, settings};
+use crate::session::{Answers, Event, Needs, Offer, OfferInput, Shade, State, View, Voice, YearList};
+use crate::words::{System, Words};
+
+/// The languages that are offered beside the one asked for.
+const LANGUAGES: [&str; 2] = ["en", "es"];
+
+/// A session under way.
+pub(super) struct Player {
+    place: Place,
+    gate_names: Vec<String>,
+    offer: Offer,
+    state: State,
+    answers: Answers,
+    /// One entry for each voice of the offer: the first language and the second, if there are two.
+    voices: Vec<(Words, Option<Words>)>,
+    clock: Clock,
+    drawings: Vec<Drawing>,
+    /// Goes up with everything that can be seen.
+    stamp: u64,
+    asked_water: bool,
+    captions: Vec<[String; 3]>,
+}
+
+impl Player {
+    /// A session at rest on that place.
+    pub fn new(place: Place, speech: &Speech, shade: Shade, units: Option<System>) -> Result<Self, Failure> {
+        let source = Source { valley: &place.valley, calendar: &place.calendar, record: &place.days };
+        let no_run = || Failure::input(speech.words.say("show-no-answer", &[]));
+        let answers = Answers::new(&source).map_err(|_| no_run())?;
+        let years = YearList::of(&answers.rest().run.years).ok_or_else(no_run)?;
+        let voices = voices(speech, &place.region);
+        let tags = voices.iter().map(|(first, second)| Voice {
+            first: first.tag().to_owned(),
+            second: second.as_ref().map(|second| second.tag().to_owned()),
+        });
+        let offer = Offer::new(OfferInput {
+            dials: place.dials.open().collect(),
+            years,
+            views: VIEWS.to_vec(),
+            terms: Default::default(),
+            voices: tags.collect(),
+            system: units.unwrap_or_else(|| usual_system(&place)),
+            shade,
+            settings: Vec::new(),
+            help_pages: 1,
+        })
+        .map_err(|_| no_run())?;
+        let captions = voices.iter().map(|(words, _)| caption(&place, words)).collect();
+        let gate_names = place.gates.iter().map(|gate| gate.name.get(voices[0].0.tag()).to_owned()).collect();
+        let state = State::new(&offer);
+        Ok(Self {
+            gate_names,
+            place,
+            offer,
+            state,
+            answers,
+            voices,
+            clock: Clock::default(),
+            drawings: Vec::new(),
+            stamp: 0,
+            asked_water: false,
+            captions,
+        })
+    }
+
+    /// Takes an event of the session.
+    pub fn step(&mut self, event: Event) {
+        let Needs { redraw, .. } = {
+            let needs = self.state.step(event, &self.offer);
+            self.asked_water |= needs.answer();
+            needs
+        };
+        if redraw {
+            self.stamp += 1;
+        }
+    }
+
+    /// The languages in which it can speak, by their tags; pairs are left out.
+    pub fn languages(&self) -> Vec<String> {
+        let single = self.voices.iter().filter(|(_, second)| second.is_none());
+        single.map(|(words, _)| words.tag().to_owned()).collect()
+    }
+
+    /// The view on show.
+    pub fn view(&self) -> View {
+        self.state.shown().view
+    }
+
+    /// Brings the answers to what the state asks.
+    fn ask_water(&mut self) {
+        if !std::mem::take(&mut self.asked_water) {
+            return;
+        }
+        let source = Source { valley: &self.place.valley, calendar: &self.place.calendar, record: &self.place.days };
+        // The offer lets no dial out of its range, so a river that makes no sense cannot come of it; should it, the old
+        // answer stands and is marked as old.
+        if self.answers.ask(Asked::from(self.state.shown())) {
+            let _ = self.answers.finish(&source);
+        }
+    }
+}
+
+impl Instrument for Player {
+    fn event(&mut self, event: HandEvent) {
+        if let Some(event) = self.clock.event(event) {
+            self.step(event);
+        }
+    }
+
+    fn frame(&mut self, size: FrameSize, texts: bool) -> Frame<'_> {
+        self.ask_water();
+        let at = match self.drawings.iter().position(|drawing| drawing.is(size, texts)) {
+            Some(at) => at,
+            None => {
+                // A window that is drawn larger and smaller must not leave all its sizes behind.
+                if self.drawings.len() >= MOST_DRAWINGS {
+                    self.drawings.remove(0);
+                }
+                self.drawings.push(Drawing::new(size, texts));
+                self.drawings.len() - 1
+            }
+        };
+        if self.drawings[at].stamp != Some(self.stamp) {
+            let shown = self.state.shown();
+            let (words, second) = &self.voices[shown.voice];
+            let names: Vec<&str> = self.gate_names.iter().map(String::as_str).collect();
+            let told = PlaceTold {
+                name: self.place.name.get(words.tag()),
+                invented: self.place.invented,
+                fitted: false,
+                gate_names: &names,
+            };
+            let source =
+                Source { valley: &self.place.valley, calendar: &self.place.calendar, record: &self.place.days };
+            let stage = Stage::new(told, &source, &self.answers);
+            let props = stage.props();
+            let dials = settings(&self.offer, &shown.dials);
+            let scene = stage.scene(&props, Moment::of(shown, &dials, &self.answers, second.as_ref()));
+            self.drawings[at].draw(shown.view, &scene, shown.shade, words);
+            self.drawings[at].stamp = Some(self.stamp);
+        }
+        self.drawings[at].frame()
+    }
+
+    fn wants_tick(&self) -> Option<Duration> {
+        let shown = self.state.shown();
+        shown.playing.then(|| Duration::from_millis(1000 / u64::from(shown.speed.days_per_second())))
+    }
+
+    fn done(&self) -> bool {
+        false
+    }
+
+    fn caption(&self) -> Caption<'_> {
+        let [title, hint, too_small] = &self.captions[self.state.shown().voice];
+        Caption { title, hint, too_small }
+    }
+}
+
+/// Frames that are kept: those of a few screens at once.
+const MOST_DRAWINGS: usize = 4;
+
+/// The language asked for, the other ones, and both at once.
+fn voices(speech: &Speech, region: &str) -> Vec<(Words, Option<Words>)> {
+    let asked = speech.for_place(region);
+    let other = LANGUAGES.into_iter().find(|language| *language != asked.language());
+    let Some(other) = other else { return vec![(asked, None)] };
+    let (_, second_region) = region.split_once('-').unzip();
+    let words = |tag: &str| Words::for_place(tag, second_region).0;
+
+    vec![(asked, None), (words(other), None), (speech.for_place(region), Some(words(other)))]
+}
+
+fn caption(place: &Place, words: &Words) -> [String; 3] {
+    let name = place.name.get(words.tag());
+    [words.say("show-title", &[("place", name.into())]), words.say("show-hint", &[]), words.say("show-too-small", &[])]
+}

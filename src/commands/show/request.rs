@@ -1,0 +1,89 @@
+//! What the command line asks `show` for.
+
+use std::path::PathBuf;
+
+use clap::ArgMatches;
+
+use crate::board::{FrameSize, LAYOUTS, ScreenKind};
+use crate::commands::failure::Failure;
+use crate::commands::places;
+use crate::commands::usage::{mistake, unknown_choice};
+use crate::session::Shade;
+use crate::words::{System, Words};
+
+/// The options, checked.
+#[derive(Debug)]
+pub(super) struct Request {
+    /// The place.
+    pub place: PathBuf,
+    /// Screens that were named; none leaves the choice to the program.
+    pub screens: Vec<ScreenKind>,
+    /// The layout, where one was asked for.
+    pub size: Option<FrameSize>,
+    /// Where pictures go.
+    pub into: Option<PathBuf>,
+    /// Whether a language was asked for, so that pictures are made in that one only.
+    pub one_language: bool,
+    /// Units, where they were asked for.
+    pub units: Option<System>,
+    /// Colours to begin with.
+    pub shade: Shade,
+}
+
+impl Default for Request {
+    fn default() -> Self {
+        Self {
+            place: places::USUAL.into(),
+            screens: Vec::new(),
+            size: None,
+            into: None,
+            one_language: false,
+            units: None,
+            shade: Shade::Light,
+        }
+    }
+}
+
+impl Request {
+    /// Reads the options.
+    pub fn read(matches: &ArgMatches, words: &Words) -> Result<Self, Failure> {
+        let text = |name: &str| matches.get_one::<String>(name).map(String::as_str);
+        let path = |name: &str| matches.get_one::<PathBuf>(name).cloned();
+        let refuse = |line: String| mistake(&line, Some("show"), words);
+        let mut screens = Vec::new();
+        for name in matches.get_many::<String>("screen").into_iter().flatten() {
+            let known = ScreenKind::ALL.map(ScreenKind::name);
+            let unknown = |_| refuse(unknown_choice("--screen", name, &known, words));
+            screens.push(name.parse().map_err(unknown)?);
+        }
+        let sizes = LAYOUTS.map(|size| size.to_string());
+        let sizes: Vec<&str> = sizes.iter().map(String::as_str).collect();
+        let size = match text("size") {
+            None => None,
+            Some(text) => Some(text.parse().map_err(|_| refuse(unknown_choice("--size", text, &sizes, words)))?),
+        };
+        let units = match text("units") {
+            None => None,
+            Some("metric") => Some(System::Metric),
+            Some("us") => Some(System::Us),
+            Some(other) => return Err(refuse(unknown_choice("--units", other, &["metric", "us"], words))),
+        };
+        let shade = match text("theme") {
+            None | Some("light") => Shade::Light,
+            Some("dark") => Shade::Dark,
+            Some("sunlight") => Shade::Sunlight,
+            Some(other) => {
+                return Err(refuse(unknown_choice("--theme", other, &["light", "dark", "sunlight"], words)));
+            }
+        };
+        Ok(Self {
+            place: path("place").unwrap_or_else(|| places::USUAL.into()),
+            screens,
+            size,
+            into: path("into"),
+            one_language: text("lang").is_some(),
+            units,
+            shade,
+        })
+    }
+}

@@ -76,6 +76,25 @@ fn centre_of_volume_of_known_hydrographs() {
     assert_check(&checks["half_volume_skewed"], Sign::HalfVolumeDate.of(&year).unwrap());
 }
 
+/// Two ways to write a place differ in the last digits of its snow; the date must not hang on them.
+#[test]
+fn a_flat_peak_is_dated_to_its_first_day_whatever_the_last_digits() {
+    let start: chrono::NaiveDate = "2000-10-01".parse().unwrap();
+    let dates: Vec<String> = start.iter_days().take(365).map(|date| date.to_string()).collect();
+    let peak = |wobble: f64| {
+        let snow = |day: usize| match day {
+            0..100 => day as f64,
+            100..120 => 100.0 * (1.0 + wobble * day as f64),
+            _ => 0.0,
+        };
+        let year = read(&dates, |index, evening| evening.basin.snow_water_mm = snow(index)).remove(0);
+        (year.peak_swe_date.unwrap().day_of_water_year, year.melt_out_date.unwrap().day_of_water_year)
+    };
+    assert_eq!(peak(0.0), (101, 120));
+    assert_eq!(peak(1e-15), peak(0.0));
+    assert_eq!(peak(1e-6).0, 120, "a rise that can be measured is a new peak");
+}
+
 #[test]
 fn skill_scores_on_the_fixed_series() {
     let checks = checks("indices");

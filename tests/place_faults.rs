@@ -261,6 +261,10 @@ fn more_than_there_is_room_for() {
     let beyond = line_of(&text, "[reservoir]") - 3;
     told_first(&text, WEATHER, RIGHTS, "problem-too-many-bands", ("place.toml", beyond, 1));
 
+    // The areas of bands that do not fit are not missed in the sum.
+    let told = problems(&text, WEATHER, RIGHTS);
+    assert!(told.iter().all(|problem| problem.message != "problem-areas"), "{:?}", shown(&told));
+
     let field = "[[canal.field]]\ncrop = \"oats\"\narea_ha = 0.1\nmethod = \"drip\"\n\n";
     let text = broken(PLACE, "[[town]]\n", &format!("{}[[town]]\n", field.repeat(7)));
     let beyond = line_of(&text, "[[town]]") - 5;
@@ -281,6 +285,37 @@ fn more_than_there_is_room_for() {
     let text = broken(PLACE, "[2200, 2210, 2220, 2230]", &format!("[{}]", levels.join(", ")));
     let table = line_of(&text, "[reservoir.table]");
     told_first(&text, WEATHER, RIGHTS, "problem-too-many-points", ("place.toml", table, 1));
+}
+
+/// What a message says under one of its names.
+fn argument<'a>(told: &'a [Problem], message: &str, name: &str) -> Option<&'a Argument> {
+    let problem = told.iter().find(|problem| problem.message == message)?;
+    problem.arguments.iter().find(|(key, _)| *key == name).map(|(_, value)| value)
+}
+
+#[test]
+fn what_is_offered_is_what_was_meant() {
+    // A part of a name says more than its first letters.
+    let text = broken(PLACE, "measures = \"natural\"", "measures = \"inflow\"");
+    let told = problems(&text, WEATHER, RIGHTS);
+    assert_eq!(argument(&told, "problem-choice", "nearest"), Some(&Argument::Text("computed_inflow".into())));
+    // Keys are named as the file writes them.
+    let text = broken(PLACE, "lapse_c_per_km = -6.0", "lapse_f_per_1000ft = [-3.3]");
+    let told = problems(&text, WEATHER, RIGHTS);
+    assert_eq!(argument(&told, "problem-list-length", "key"), Some(&Argument::Text("lapse_f_per_1000ft".into())));
+    // A wrong capacity is told once, not as an area that does not add up as well.
+    let text = broken(PLACE, "capacity_hm3 = 22", "capacity_hm3 = -22");
+    let told = problems(&text, WEATHER, RIGHTS);
+    assert_eq!(told.len(), 1, "{:?}", shown(&told));
+}
+
+#[test]
+fn a_canal_without_fields_is_told_how_one_begins() {
+    let end = PLACE.find("[[canal.field]]").unwrap();
+    let next = end + PLACE[end..].find("[[town]]").or(PLACE[end..].find("\n[[canal]]")).unwrap();
+    let text = format!("{}{}", &PLACE[..end], &PLACE[next..]);
+    let told = problems(&text, WEATHER, RIGHTS);
+    assert_eq!(argument(&told, "problem-tables-missing", "table"), Some(&Argument::Text("canal".into())));
 }
 
 #[test]

@@ -98,7 +98,7 @@ weather-fitted-to = { $n ->
     [one] It follows the pattern of { $n } whole water year of { $place }.
    *[other] It follows the pattern of { $n } whole water years of { $place }.
 }
-weather-record-too-short = The record has { $n } whole water years. At least { $least } are needed to learn its pattern.
+weather-record-too-short = Whole water years in the record: { $n }. At least { $least } are needed to learn its pattern.
 
 ## Progress
 

@@ -11,6 +11,8 @@ problem-file-large = The file “{ $file }” is larger than { $most } MB.
     .remedy = Check that it is the right file. A century of days takes about 5 MB.
 problem-file-unreadable = The file “{ $file }” cannot be opened.
     .remedy = Check that you may read it and that no other program holds it.
+problem-file-no-file = “{ $file }” is not a file.
+    .remedy = Give the name of a file, not of a folder or a device.
 problem-not-utf8 = There is a letter here that is not UTF-8.
     .remedy = Save the file as UTF-8.
 
@@ -40,6 +42,8 @@ problem-two-units = “{ $key }” and “{ $other }” say the same thing twice
     .remedy = Keep one of the two.
 problem-key-missing = [{ $table }] does not say “{ $key }”.
     .remedy = Add a line: { $key } = …
+problem-tables-missing = This [{ $table }] has no “{ $key }”.
+    .remedy = Start one below it with a line [[{ $table }.{ $key }]].
 problem-key-missing-at-top = The file does not say “{ $key }”.
     .remedy = Add a line at the top: { $key } = …
 problem-either = “{ $key }” and “{ $other }” answer the same question.

@@ -224,7 +224,7 @@ problem-record-out-of-bounds = { $count ->
         [one] The column “{ $column }” has { $count } value that cannot be right: { $text }.
        *[other] The column “{ $column }” has { $count } values that cannot be right. The first: { $text }.
     }
-    .remedy = Values from { $low } to { $high } { $unit } are read. Check the unit, correct the value, or leave the cell empty.
+    .remedy = Values from { $low } to { $high } { $unit } are read. Check the unit, correct the value, or leave the cell empty. If it stands for a missing value, name it as a missing mark in place.toml.
 problem-record-stuck = { $days ->
         [one] The column “{ $column }” reads { $text } on { $days } day on end.
        *[other] The column “{ $column }” reads { $text } on { $days } days on end. The instrument may be stuck.

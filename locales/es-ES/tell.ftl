@@ -1,5 +1,5 @@
 # Palabras de España. Las revisa una persona de allá antes de imprimir.
 
-tell-dials-at-rest = Todos los mandos están en reposo: todavía no hay cambios.
+tell-dials-at-rest = Ningún mando se ha movido: todavía no hay cambios.
 tell-mean-of-years = Media de { $n } años
 tell-storms-kept = Los mandos no cambian el orden de las tormentas, los días de lluvia ni el calendario de cultivos.

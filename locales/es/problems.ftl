@@ -11,6 +11,8 @@ problem-file-large = El archivo «{ $file }» pesa más de { $most } MB.
     .remedy = Revise que sea el archivo correcto. Un siglo de días ocupa unos 5 MB.
 problem-file-unreadable = No se puede abrir el archivo «{ $file }».
     .remedy = Revise que usted tenga permiso de leerlo y que otro programa no lo tenga abierto.
+problem-file-no-file = «{ $file }» no es un archivo.
+    .remedy = Escriba el nombre de un archivo, no el de una carpeta ni el de un aparato.
 problem-not-utf8 = Aquí hay una letra que no está en UTF-8.
     .remedy = Guarde el archivo como UTF-8.
 
@@ -40,6 +42,8 @@ problem-two-units = «{ $key }» y «{ $other }» dicen lo mismo dos veces.
     .remedy = Deje una de las dos.
 problem-key-missing = En [{ $table }] falta «{ $key }».
     .remedy = Agregue una línea: { $key } = …
+problem-tables-missing = A este [{ $table }] le falta «{ $key }».
+    .remedy = Empiece uno más abajo con una línea [[{ $table }.{ $key }]].
 problem-key-missing-at-top = En el archivo falta «{ $key }».
     .remedy = Agregue una línea al principio: { $key } = …
 problem-either = «{ $key }» y «{ $other }» responden a la misma pregunta.

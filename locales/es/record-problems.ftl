@@ -224,7 +224,7 @@ problem-record-out-of-bounds = { $count ->
         [one] La columna «{ $column }» tiene { $count } valor que no puede ser: { $text }.
        *[other] La columna «{ $column }» tiene { $count } valores que no pueden ser. El primero: { $text }.
     }
-    .remedy = Se leen valores de { $low } a { $high } { $unit }. Revise la unidad, corrija el valor o deje vacía la celda.
+    .remedy = Se leen valores de { $low } a { $high } { $unit }. Revise la unidad, corrija el valor o deje vacía la celda. Si quiere decir que falta el dato, póngalo como marca de dato faltante en place.toml.
 problem-record-stuck = { $days ->
         [one] La columna «{ $column }» marca { $text } por { $days } día.
        *[other] La columna «{ $column }» marca { $text } por { $days } días seguidos. Puede que el aparato se haya trabado.

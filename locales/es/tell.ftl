@@ -4,7 +4,7 @@ tell-title = { $place }: { $years }
 tell-invented = Este valle es inventado. Está aquí para aprender.
 tell-dials = Con estos cambios:
 tell-dial-line = { $dial }: { $value }
-tell-dials-at-rest = Todas las perillas están en reposo: todavía no hay cambios.
+tell-dials-at-rest = Ninguna perilla se ha movido: todavía no hay cambios.
 tell-setting = Combinación: { $name }
 
 tell-years-all = los { $n } años de agua, de { $first } a { $last }

@@ -1,5 +1,6 @@
 //! Problems at their lines: the line of the file, what is meant in it, and what would be right.
 
+use std::borrow::Cow;
 use std::collections::BTreeMap;
 use std::path::Path;
 
@@ -22,7 +23,7 @@ const AROUND: usize = 60;
 pub(super) struct Texts<'a> {
     given: Vec<(&'a str, &'a str)>,
     on_disk: bool,
-    read: BTreeMap<String, Option<String>>,
+    read: BTreeMap<String, Option<Vec<u8>>>,
 }
 
 impl<'a> Texts<'a> {
@@ -43,22 +44,32 @@ impl<'a> Texts<'a> {
     }
 
     /// A line, counted from 1.
-    fn line(&mut self, file: &Path, line: usize) -> Option<&str> {
+    fn line(&mut self, file: &Path, line: usize) -> Option<Cow<'_, str>> {
         let name = file.to_string_lossy().into_owned();
         if let Some((_, text)) = self.given.iter().find(|(given, _)| *given == name) {
-            return text.lines().nth(line.checked_sub(1)?);
+            return text.lines().nth(line.checked_sub(1)?).map(Cow::Borrowed);
         }
         if !self.on_disk {
             return None;
         }
-        let text = self.read.entry(name).or_insert_with(|| {
+        let bytes = self.read.entry(name).or_insert_with(|| {
             let small = std::fs::metadata(file).is_ok_and(|about| about.is_file() && about.len() <= MOST_BYTES);
-            let bytes = small.then(|| std::fs::read(file).ok()).flatten()?;
-            // A file that is not UTF-8 is still worth showing.
-            Some(String::from_utf8_lossy(&bytes).into_owned())
+            small.then(|| std::fs::read(file).ok()).flatten()
         });
-        let text = text.as_deref()?;
-        text.strip_prefix('\u{feff}').unwrap_or(text).lines().nth(line.checked_sub(1)?)
+        let bytes = bytes.as_deref()?;
+        let bytes = bytes.strip_prefix("\u{feff}".as_bytes()).unwrap_or(bytes);
+        // As records are read: carriage returns end lines where the file has nothing else.
+        let end = if bytes.contains(&b'\n') { b'\n' } else { b'\r' };
+        let line = bytes.split(|byte| *byte == end).nth(line.checked_sub(1)?)?;
+        Some(readable(line.strip_suffix(b"\r").unwrap_or(line)))
+    }
+}
+
+/// A line as people know it: one that is not UTF-8 comes most likely from a Latin-1 file, where each byte is a letter.
+fn readable(line: &[u8]) -> Cow<'_, str> {
+    match std::str::from_utf8(line) {
+        Ok(text) => Cow::Borrowed(text),
+        Err(_) => Cow::Owned(line.iter().map(|byte| char::from(*byte)).collect()),
     }
 }
 
@@ -79,7 +90,7 @@ fn one(problem: &Problem, texts: &mut Texts<'_>, renderer: &Renderer, words: &Wo
     let at = &problem.at;
     let path = at.file.display().to_string();
     let group = Group::with_title(level.primary_title(visible(&message(problem, words))));
-    let line = texts.line(&at.file, at.line).map(str::to_owned);
+    let line = texts.line(&at.file, at.line).map(Cow::into_owned);
     let mut group = match &line {
         Some(line) => {
             let (shown, span) = cut(line, at.column, at.length);
@@ -136,6 +147,7 @@ mod tests {
             let (shown, span) = cut(&long, column, length);
             assert!(shown.get(span).is_some(), "{column} {length}");
         }
+        assert_eq!(readable(b"nev\xf3; \xb0"), "nevó; °");
         assert_eq!(cut("", 1, 1), (String::new(), 0..0));
         assert_eq!(cut("a\u{1b}[2J", 1, 1).0, "a [2J");
     }

@@ -24,6 +24,8 @@ pub(super) struct ReadBands {
     pub holds_lake: bool,
     /// Whether the curve's area holds the fields.
     pub holds_fields: bool,
+    /// Whether the file has more than fit.
+    pub too_many: bool,
 }
 
 /// Reads `[[band]]` or `[area_elevation]`.
@@ -63,7 +65,7 @@ fn from_list(root: &Section<'_>, listed: &[Section<'_>]) -> ReadBands {
         }
     }
     let at = listed.first().map_or_else(|| root.at.clone(), |section| section.at.clone());
-    ReadBands { bands, at, holds_lake: false, holds_fields: false }
+    ReadBands { bands, at, holds_lake: false, holds_fields: false, too_many: listed.len() > MOST_BANDS }
 }
 
 fn tell_too_many(section: &Section<'_>, at: Location, found: usize) {
@@ -73,8 +75,13 @@ fn tell_too_many(section: &Section<'_>, at: Location, found: usize) {
 
 /// A curve of the area that lies below each elevation, cut into bands of equal height.
 fn from_curve(section: &Section<'_>) -> ReadBands {
-    let elevation = rising(section, section.numbers("elevation", METRES, ELEVATION), "elevation_m");
-    let below = rising(section, section.numbers("area_below", AREA_KM2, Limits(0.0, AREA.1)), "area_below_km2");
+    let elevation =
+        rising(section, section.numbers("elevation", METRES, ELEVATION), &section.as_written("elevation", METRES));
+    let below = rising(
+        section,
+        section.numbers("area_below", AREA_KM2, Limits(0.0, AREA.1)),
+        &section.as_written("area_below", AREA_KM2),
+    );
     let count = section.number_or("bands", PLAIN, Limits(1.0, 1000.0), 8.0);
     if count.value > MOST_BANDS as f64 {
         tell_too_many(section, count.at.clone(), count.value as usize);
@@ -83,7 +90,8 @@ fn from_curve(section: &Section<'_>) -> ReadBands {
         section.sheet.tell(problem.with("value", count.value));
     }
     if !elevation.is_empty() && !below.is_empty() && elevation.len() != below.len() {
-        let problem = Problem::error(section.at.clone(), "problem-list-length").with("key", "area_below");
+        let problem = Problem::error(section.at.clone(), "problem-list-length")
+            .with("key", section.as_written("area_below", AREA_KM2));
         section.sheet.tell(problem.with("found", below.len()).with("wanted", elevation.len()));
     }
     let exposure = section.number_or("melt_exposure", PLAIN, FACTOR, 1.0).value;
@@ -103,6 +111,7 @@ fn from_curve(section: &Section<'_>) -> ReadBands {
         at: section.at.clone(),
         holds_lake: section.flag_or("holds_lake", true),
         holds_fields: section.flag_or("holds_fields", false),
+        too_many: false,
     }
 }
 

@@ -22,7 +22,7 @@ const GREATEST_NEED_MM_DAY: f64 = 12.0;
 
 /// Largest surface of the lake, at capacity, km²; NaN where the reservoir could not be read.
 pub(super) fn largest_lake_km2(reservoir: &Reservoir) -> f64 {
-    if reservoir.table.len() < 2 || reservoir.capacity_hm3 <= reservoir.dead_hm3 {
+    if reservoir.table.len() < 2 || reservoir.capacity_hm3.is_nan() || reservoir.capacity_hm3 <= reservoir.dead_hm3 {
         return f64::NAN;
     }
     Vessel::new(reservoir, 0.0).area_m2(reservoir.capacity_hm3 * M3_PER_HM3) / M2_PER_KM2
@@ -31,7 +31,8 @@ pub(super) fn largest_lake_km2(reservoir: &Reservoir) -> f64 {
 /// Bands, lake and fields beside the stated area of the whole valley.
 pub(super) fn areas(root: &Section<'_>, stated: Option<&Number>, bands: &ReadBands, lake_km2: f64, fields_km2: f64) {
     let Some(stated) = stated else { return };
-    if bands.bands.is_empty() || root.sheet.is_broken() {
+    // Bands beyond those that fit were told, and their area is not among the others.
+    if bands.bands.is_empty() || bands.too_many || root.sheet.is_broken() {
         return;
     }
     let bands_km2: f64 = bands.bands.iter().map(|band| band.area_km2).sum();

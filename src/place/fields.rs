@@ -64,7 +64,7 @@ pub(super) fn read(canal: &Section<'_>, crops: &Crops) -> Vec<ReadField> {
         canal.sheet.tell(problem.with("found", sections.len()).with("most", MOST_FIELDS));
     }
     if sections.is_empty() {
-        canal.tell_missing("field");
+        canal.tell_missing_tables("field");
     }
     sections.iter().map(|section| field(section, crops)).collect()
 }

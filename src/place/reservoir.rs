@@ -100,8 +100,8 @@ fn table(section: &Section<'_>, source: Source<'_>) -> FixedVec<LakePoint, MOST_
             section.numbers("volume", VOLUME_HM3, VOLUME),
         ),
     };
-    let level = rising(section, levels, "level_m");
-    let volume = rising(section, volumes, "volume_hm3");
+    let level = rising(section, levels, &section.as_written("level", METRES));
+    let volume = rising(section, volumes, &section.as_written("volume", VOLUME_HM3));
     if areas.is_none() {
         section.tell_missing("area_km2");
     }
@@ -116,9 +116,10 @@ fn table(section: &Section<'_>, source: Source<'_>) -> FixedVec<LakePoint, MOST_
     }
     // A list of levels or volumes that is too short by itself was told as that.
     let volume_count = if volume.len() < 2 { level.len() } else { volume.len() };
-    for (key, found) in [("volume", volume_count), ("area", area_count)] {
+    for (base, units, found) in [("volume", VOLUME_HM3, volume_count), ("area", AREA_KM2, area_count)] {
         if found != level.len() && level.len() > 1 {
-            let problem = Problem::error(section.at.clone(), "problem-list-length").with("key", key);
+            let problem = Problem::error(section.at.clone(), "problem-list-length");
+            let problem = problem.with("key", section.as_written(base, units));
             section.sheet.tell(problem.with("found", found).with("wanted", level.len()));
         }
     }

@@ -23,9 +23,19 @@ pub(crate) struct Number {
     pub stated: bool,
 }
 
+/// Letters that a part of a name must have to say more than the likeness of the whole.
+const SHORTEST_PART: usize = 3;
+
 /// Least and most value, in SI, both allowed.
 #[derive(Clone, Copy, Debug)]
 pub(crate) struct Limits(pub f64, pub f64);
+
+/// What kind of thing the file leaves out.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+enum Missing {
+    Key,
+    Tables,
+}
 
 /// One table of the file, or its absence.
 pub(crate) struct Section<'a> {
@@ -39,7 +49,7 @@ pub(crate) struct Section<'a> {
     /// Whether the file has this table.
     pub present: bool,
     asked: RefCell<Vec<(&'static str, Option<Units>)>>,
-    missing: RefCell<Vec<String>>,
+    missing: RefCell<Vec<(String, Missing)>>,
     rest_is_free: bool,
 }
 
@@ -132,8 +142,17 @@ impl<'a> Section<'a> {
     /// Tells that `key` is missing, unless the whole table is or the text is broken. It is told at the end, and not at
     /// all when a misspelt key turns out to be meant for it.
     pub fn tell_missing(&self, key: &str) {
+        self.remember_missing(key, Missing::Key);
+    }
+
+    /// The same for tables inside this one, of which there must be one at least.
+    pub fn tell_missing_tables(&self, key: &str) {
+        self.remember_missing(key, Missing::Tables);
+    }
+
+    fn remember_missing(&self, key: &str, kind: Missing) {
         if self.present && !self.sheet.is_broken() {
-            self.missing.borrow_mut().push(key.to_owned());
+            self.missing.borrow_mut().push((key.to_owned(), kind));
         }
     }
 
@@ -265,6 +284,12 @@ impl<'a> Section<'a> {
         Some(values.iter().map(|value| self.checked_number(&entry.key, value, unit, limits)).collect())
     }
 
+    /// `base` with the unit that the file writes it in, or with the first where it does not.
+    pub fn as_written(&self, base: &str, units: Units) -> String {
+        let mut forms = units.iter().map(|unit| format!("{base}{}", unit.suffix));
+        forms.find(|key| self.table.get(key).is_some()).unwrap_or_else(|| format!("{base}{}", units[0].suffix))
+    }
+
     /// One of a few words.
     pub fn choice<T: Copy>(&self, key: &'static str, choices: &[(&'static str, T)]) -> Option<(T, Location)> {
         let (word, at) = self.text(key)?;
@@ -305,12 +330,13 @@ impl<'a> Section<'a> {
             let forms = asked.iter().map(|(base, units)| written(base, *units)).find(|forms| forms.contains(key));
             forms.into_iter().flatten().any(|form| self.table.get(&form).is_some())
         };
-        for key in self.missing.borrow().iter().filter(|key| !explained.contains(key) && !is_there(key)) {
+        let missing = self.missing.borrow();
+        for (key, kind) in missing.iter().filter(|(key, _)| !explained.contains(key) && !is_there(key)) {
             let problem = |message| Problem::error(self.at.clone(), message).with("key", key.clone());
-            self.sheet.tell(if self.name.is_empty() {
-                problem("problem-key-missing-at-top")
-            } else {
-                problem("problem-key-missing").with("table", self.name.clone())
+            self.sheet.tell(match kind {
+                Missing::Key if self.name.is_empty() => problem("problem-key-missing-at-top"),
+                Missing::Key => problem("problem-key-missing").with("table", self.name.clone()),
+                Missing::Tables => problem("problem-tables-missing").with("table", self.name.clone()),
             });
         }
     }
@@ -352,11 +378,12 @@ pub(crate) fn unknown_choice(
         .with("nearest", nearest(word, choices.iter().map(|choice| (*choice).to_owned())))
 }
 
-/// The name most like `word`; empty when there is none at all.
+/// The name most like `word`, one that holds the whole of it first; empty when there is none at all.
 pub(crate) fn nearest(word: &str, names: impl Iterator<Item = String>) -> String {
     let mut best: Option<(f64, String)> = None;
     for name in names {
-        let likeness = strsim::jaro_winkler(word, &name);
+        let holds = word.chars().count() >= SHORTEST_PART && name.contains(word);
+        let likeness = strsim::jaro_winkler(word, &name) + if holds { 1.0 } else { 0.0 };
         if best.as_ref().is_none_or(|(most, _)| likeness > *most) {
             best = Some((likeness, name));
         }

@@ -22,7 +22,7 @@ pub(super) fn climb(root: &Section<'_>) -> (Climb, Number) {
     let lapse: Vec<Number> = if is_list {
         let list = section.numbers("lapse", LAPSE, lapse_limits).unwrap_or_default();
         if list.len() != 12 {
-            tell_length(&section, "lapse", list.len(), 12);
+            tell_length(&section, &section.as_written("lapse", LAPSE), list.len(), 12);
         }
         list
     } else {

@@ -63,9 +63,12 @@ impl Source<'_> {
                 .ok_or_else(|| missing("problem-file-missing")),
             Source::Folder(folder) => {
                 let path = folder.join(name);
-                let about = fs::metadata(&path).map_err(|_| missing("problem-file-missing"))?;
+                let about = fs::metadata(&path).map_err(|error| {
+                    let is_missing = error.kind() == std::io::ErrorKind::NotFound;
+                    missing(if is_missing { "problem-file-missing" } else { "problem-file-unreadable" })
+                })?;
                 if !about.is_file() {
-                    return Err(missing("problem-file-missing"));
+                    return Err(missing("problem-file-no-file"));
                 }
                 if about.len() > most {
                     let megabytes = (most >> 20) as usize;
@@ -100,6 +103,20 @@ mod tests {
             assert_eq!(source.record(name, &at).unwrap_err().message, "problem-file-outside", "{name}");
         }
         assert_eq!(source.record("b.csv", &at).unwrap_err().message, "problem-file-missing");
+    }
+
+    #[test]
+    fn a_folder_is_no_file_and_a_loop_is_not_missing() {
+        let folder = std::env::temp_dir().join(format!("deshielo-source-{}", std::process::id()));
+        fs::create_dir_all(folder.join("days.csv")).unwrap();
+        let (source, at) = (Source::Folder(&folder), Location::whole_file("place.toml"));
+        assert_eq!(source.record("days.csv", &at).unwrap_err().message, "problem-file-no-file");
+        #[cfg(unix)]
+        {
+            std::os::unix::fs::symlink("loop.csv", folder.join("loop.csv")).unwrap();
+            assert_eq!(source.record("loop.csv", &at).unwrap_err().message, "problem-file-unreadable");
+        }
+        fs::remove_dir_all(&folder).unwrap();
     }
 
     #[test]

@@ -15,6 +15,9 @@ use crate::water::works::{Evening, WorksStores};
 
 /// Snow water over which the ground counts as white, mm.
 pub const WHITE_MM: f64 = 5.0;
+/// A rise by less than this share of the pack is the rounding of sums, not snow: on a plateau the first day keeps the date,
+/// whatever units the place was written in.
+const ROUNDING_SHARE: f64 = 1e-9;
 /// Days of a bare week.
 const BARE_DAYS: u16 = 7;
 /// Share of active capacity from which the reservoir counts as full.
@@ -64,6 +67,8 @@ pub struct YearReader {
     has_fields: bool,
     signs: YearSigns,
     snowfall_mm: f64,
+    /// Snow water on the day that the peak is dated to, mm.
+    dated_peak_mm: f64,
     peak_seen: bool,
     white_until: Option<CalendarDay>,
     bare_run: u16,
@@ -95,6 +100,7 @@ impl YearReader {
             has_fields: valley.gates.iter().any(|gate| !gate.is_town()),
             signs: YearSigns::default(),
             snowfall_mm: 0.0,
+            dated_peak_mm: 0.0,
             peak_seen: false,
             white_until: None,
             bare_run: 0,
@@ -156,8 +162,11 @@ impl YearReader {
             self.signs.survey_swe_mm = Some(swe_mm);
         }
         if swe_mm > self.signs.peak_swe_mm {
-            // A new peak: whatever melted out before it was not the year's melt.
             self.signs.peak_swe_mm = swe_mm;
+        }
+        if swe_mm > self.dated_peak_mm * (1.0 + ROUNDING_SHARE) {
+            // A new peak: whatever melted out before it was not the year's melt.
+            self.dated_peak_mm = swe_mm;
             self.signs.peak_swe_date = Some(today);
             self.peak_seen = swe_mm > WHITE_MM;
             self.melted_out = false;

@@ -104,6 +104,13 @@ fn temperatures() -> Vec<Broken> {
             &[("problem-record-out-of-bounds", 102, 12)],
         ),
         case(
+            "two slips that would move any mean",
+            &[(Tmin, C), (Tmax, C)],
+            400,
+            |day| vec![2.0 + day as f64 % 9.0, if day == 100 || day == 200 { 1e7 } else { 12.0 + day as f64 % 9.0 }],
+            &[("problem-record-out-of-bounds", 102, 14)],
+        ),
+        case(
             "a filled warmest below a measured coldest",
             &[(Tmin, C), (Tmax, C)],
             5,

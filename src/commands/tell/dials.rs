@@ -46,9 +46,13 @@ fn read(text: &str, plan: &DialPlan, words: &Words) -> Result<(Dial, f64), Strin
             return Err(words.say("error-dial-lacking", &[key(), ("reason", reason.into())]));
         }
     };
-    let number = value.parse::<f64>().ok().filter(|number| number.is_finite());
+    // People copy what they read, and there a minus is a minus sign.
+    let typed = value.replace('\u{2212}', "-");
+    let number = typed.parse::<f64>().ok().filter(|number| number.is_finite());
     let Some(number) = number else {
-        let example = format!("{}={}", dial.key(), range.most);
+        let with_point = typed.replace(',', ".");
+        let meant = with_point.parse::<f64>().ok().filter(|number| number.is_finite()).unwrap_or(range.most);
+        let example = format!("{}={meant}", dial.key());
         let arguments = [("value", value.into()), key(), ("example", example.into())];
         return Err(words.say("error-dial-not-a-number", &arguments));
     };
@@ -118,10 +122,13 @@ mod tests {
         let dials = turned(&["warming=1.25", "winter_precipitation=-20"]).unwrap();
         assert_eq!(dials, Dials::REST.with(Dial::Warming, 1.25).with(Dial::WinterPrecipitation, -20.0));
         assert!(turned(&["warming=-0"]).unwrap().warming.is_sign_positive());
+        assert_eq!(turned(&["winter_precipitation = \u{2212}20"]).unwrap().winter_precipitation, -20.0);
     }
 
     #[test]
     fn all_that_is_wrong_is_told_at_once() {
+        let comma = turned(&["warming=2,5"]).unwrap_err().join("\n");
+        assert!(comma.contains("warming=2.5"), "{comma}");
         let lines = turned(&["warming=9", "warmin=1", "diversion=nan", "diversion", "canal_lining=1e999"]).unwrap_err();
         let told = lines.join("\n");
         for part in [

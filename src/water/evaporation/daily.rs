@@ -154,8 +154,8 @@ fn not_negative(value_mm: f64) -> f64 {
 #[cfg(test)]
 mod tests {
     use super::*;
-    use crate::water::evaporation::hargreaves_samani_mm;
     use crate::water::evaporation::air::{mean_saturation_vapour_pressure_kpa, vapour_pressure_from_mean_humidity_kpa};
+    use crate::water::evaporation::hargreaves_samani_mm;
     use crate::water::evaporation::radiation::INTERIOR_SOLAR_RANGE_COEFFICIENT;
 
     const JULY: u16 = 196;

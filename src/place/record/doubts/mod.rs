@@ -14,6 +14,8 @@ use crate::place::problem::{Problem, Severity};
 
 /// Days that a column needs before its yearly figures mean anything.
 const ALMOST_A_YEAR_DAYS: usize = 300;
+/// Values beyond all bounds are slips, and no habit of the column, where fewer than one in this many are.
+const SLIPS_IN_VALUES: usize = 100;
 /// Mean length of a year, days.
 const YEAR_DAYS: f64 = 365.25;
 /// Days in a row with one and the same reading that look like a stuck instrument.
@@ -52,7 +54,7 @@ pub(super) fn doubt(table: &Table, notes: &mut Notes) {
     air::doubt_pairs(table, notes);
 }
 
-/// The measured values of a column in a few figures.
+/// The measured values of a column in a few figures, slips left out.
 struct Measured {
     count: usize,
     mean: f64,
@@ -65,7 +67,7 @@ struct Measured {
 impl Measured {
     fn of(column: &Readings) -> Self {
         let mut all = Measured { count: 0, mean: 0.0, highest: f64::NEG_INFINITY, highest_row: 0, first_row: 0 };
-        for (row, value) in column.measured() {
+        for (row, value) in without_slips(column) {
             if all.count == 0 {
                 all.first_row = row;
             }
@@ -82,6 +84,15 @@ impl Measured {
     fn covers_a_year(&self) -> bool {
         self.count >= ALMOST_A_YEAR_DAYS
     }
+}
+
+/// The measured values but for slips, which are told one by one.
+fn without_slips(column: &Readings) -> impl Iterator<Item = (usize, f64)> {
+    let (low, high) = column.plan.measure.bounds();
+    let beyond = move |value: f64| value < low || value > high;
+    let slips = column.measured().filter(|(_, value)| beyond(*value)).count();
+    let few = slips * SLIPS_IN_VALUES < column.measured().count();
+    column.measured().filter(move |(_, value)| !(few && beyond(*value)))
 }
 
 /// Whether enough values lie over `limit` to be a habit of the column and not a typing mistake: one in a hundred, and

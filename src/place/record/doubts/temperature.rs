@@ -1,6 +1,6 @@
 //! Doubts about temperatures: the wrong scale, columns swapped, the coldest warmer than the warmest.
 
-use super::{Measured, about, often_over, rounded};
+use super::{Measured, about, often_over, rounded, without_slips};
 use crate::place::problem::Severity;
 use crate::place::record::measure::Measure;
 use crate::place::record::notes::{Notes, shown};
@@ -76,9 +76,15 @@ pub(super) fn doubt_pairs(table: &Table, wrong_scale: bool, notes: &mut Notes) {
 
 fn doubt_range(table: &Table, tmin: &Readings, tmax: &Readings, wrong_scale: bool, notes: &mut Notes) {
     let crossed = rows_where(tmin, |row, low| low > tmax.values[row]);
-    let both = tmin.measured().filter(|(row, _)| !tmax.values[*row].is_nan());
-    let (days, range_sum) =
-        both.fold((0usize, 0.0), |(days, sum), (row, low)| (days + 1, sum + tmax.values[row] - low));
+    let mut warmest = without_slips(tmax).peekable();
+    let (mut days, mut range_sum) = (0usize, 0.0);
+    for (row, low) in without_slips(tmin) {
+        while warmest.next_if(|(at, _)| *at < row).is_some() {}
+        if let Some((_, high)) = warmest.next_if(|(at, _)| *at == row) {
+            days += 1;
+            range_sum += high - low;
+        }
+    }
     if let Some(first) = crossed.first() {
         let swapped = days >= 10 && crossed.len() * 2 > days;
         let message =

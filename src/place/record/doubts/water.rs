@@ -1,6 +1,6 @@
 //! Doubts about rain, snow and evaporation: the wrong unit, a gauge that adds up, a gauge that stopped.
 
-use super::{ALMOST_A_YEAR_DAYS, Measured, YEAR_DAYS, about, longest_run, rounded};
+use super::{ALMOST_A_YEAR_DAYS, Measured, YEAR_DAYS, about, longest_run, rounded, without_slips};
 use crate::place::problem::Severity;
 use crate::place::record::notes::Notes;
 use crate::place::record::table::{Readings, Table};
@@ -31,8 +31,7 @@ pub(super) fn doubt_precipitation(table: &Table, column: &Readings, measured: &M
         notes.add(about(table, column, row, Severity::Error, "problem-record-precipitation-adds-up"));
         return true;
     }
-    let (wet_days, wet_sum) = column
-        .measured()
+    let (wet_days, wet_sum) = without_slips(column)
         .filter(|(_, value)| *value > 0.0)
         .fold((0usize, 0.0), |(days, sum), (_, value)| (days + 1, sum + value));
     let wet_day_mm = wet_sum / wet_days.max(1) as f64;

@@ -63,7 +63,7 @@ fn what_is_not_there_or_not_ours_is_told() {
     std::fs::create_dir(bench.path("empty")).unwrap();
     for (path, part) in [
         ("nowhere", "no place at nowhere"),
-        ("notes.txt", "not a place or a setting"),
+        ("notes.txt", "not a place, a setting or a lesson"),
         ("odd.toml", "not text in UTF-8"),
         ("empty", "no place at empty"),
     ] {

@@ -186,11 +186,10 @@ fn guess(part: &Section<'_>, around: &Around<'_, '_>, year: usize) -> Option<Gue
     let usual = part.peek("usual").is_some().then(|| at("usual")).flatten();
     let _ = part.get("usual");
     for key in ["least", "most"] {
-        if part.peek(key).is_none() {
+        // Asked for even where the sign is unknown, so that it is not told as a strange key.
+        if part.get(key).is_none() {
             part.tell_missing(key);
         }
-        // Asked for even where the sign is unknown, so that it is not told as a strange key.
-        let _ = part.get(if key == "least" { "least" } else { "most" });
     }
     let (reading, least, most) = (reading?, least?, most?);
     if !(step > 0.0 && near >= 0.0) {

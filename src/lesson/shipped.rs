@@ -1,4 +1,6 @@
 //! The lessons that are part of the program: the files of `scenarios/`, word for word.
+//!
+//! Their usual answers are what we expect a room to say (no source; nobody has been asked yet). That they are wrong is tested.
 
 /// Every lesson by its name, easiest first.
 pub fn lessons() -> &'static [(&'static str, &'static str)] {

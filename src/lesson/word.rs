@@ -1,6 +1,6 @@
 //! A guess as a short word that can be called across a room and typed into another board, without any network.
 //!
-//! A word is three syllables and a letter, such as `lamodet`. The syllables hold the guess's stop, its step and its group,
+//! A word is three syllables and a letter. The syllables hold the guess's stop, its step and its group,
 //! one number below 64,000; the letter at the end checks them and the lesson. The number is stirred first, so that the
 //! guesses of two groups do not look alike and a word does not give the guess away before the result is shown. It is
 //! no secret.

@@ -7,6 +7,7 @@ mod built_in;
 mod check;
 mod failure;
 mod line;
+mod map;
 mod output;
 mod places;
 mod problem_words;
@@ -52,6 +53,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
     match matches.subcommand() {
         Some(("tell", matches)) => tell::run(speech, matches),
         Some(("check", matches)) => check::run(speech, matches),
+        Some(("map", matches)) => map::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
         _ => tell::summary(speech),
     }

@@ -70,6 +70,15 @@ impl CanalSign {
     }
 }
 
+/// Which way people want a reading to go.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Better {
+    /// More, or later.
+    More,
+    /// Less.
+    Less,
+}
+
 /// What is read off many years as one number.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub enum Reading {
@@ -144,6 +153,27 @@ impl Reading {
     /// Whether it is the share of the water asked for that came, which fails below the place's enough share.
     pub const fn is_supply_ratio(self) -> bool {
         matches!(self, Reading::Year(Sign::SupplyRatio) | Reading::Canal { sign: CanalSign::SupplyRatio, .. })
+    }
+
+    /// Which way people want it to go; `None` where that is not for the water to say.
+    pub const fn better(self) -> Option<Better> {
+        match self {
+            Reading::Year(Sign::SupplyRatio | Sign::YieldShare | Sign::Carryover | Sign::RiverMinimumDaysMet)
+            | Reading::Canal {
+                sign:
+                    CanalSign::SupplyRatio
+                    | CanalSign::DaysFull
+                    | CanalSign::FirstShortDate
+                    | CanalSign::LastFullDate
+                    | CanalSign::LastWaterDate
+                    | CanalSign::AccountEnd,
+                ..
+            }
+            | Reading::Supply { sign: SupplySign::Reliability | SupplySign::Resilience, .. } => Some(Better::More),
+            Reading::Canal { sign: CanalSign::DaysCut | CanalSign::DaysShort, .. }
+            | Reading::Supply { sign: SupplySign::Vulnerability, .. } => Some(Better::Less),
+            Reading::Year(_) | Reading::Canal { sign: CanalSign::StoredDraw, .. } => None,
+        }
     }
 
     /// The reading over `years`, in order; `None` where no year has it. A year's supply is enough from `enough_share`

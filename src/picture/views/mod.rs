@@ -8,6 +8,7 @@ pub mod answer;
 pub mod canals;
 mod dial_cards;
 pub mod frame;
+pub mod grid;
 pub mod layout;
 mod months;
 pub mod scene;

@@ -23,4 +23,6 @@ pub mod place;
 #[cfg(feature = "std")]
 pub mod session;
 #[cfg(feature = "std")]
+pub mod whatif;
+#[cfg(feature = "std")]
 pub mod words;

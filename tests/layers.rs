@@ -7,17 +7,18 @@ use std::path::{Path, PathBuf};
 /// not exist. `commands` and the two roots may name everything.
 ///
 /// * `water` is the ground floor; `signs` read it and change nothing.
-/// * `place`, `generator`, `fit` and `lesson` bring values to the water, and never words: what is wrong is told as data.
+/// * `place`, `generator`, `fit`, `whatif` and `lesson` bring values to the water, and never words: what is wrong is told as data.
 ///   A lesson is read for a place, and with its reader of files.
 /// * `words` know units and the keys of what they name, no numbers of a run.
 /// * `picture` draws values: plain data of the water and the signs, never what runs them.
 /// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not water.
-const MAY_NAME: [(&str, &[&str]); 11] = [
+const MAY_NAME: [(&str, &[&str]); 13] = [
     ("water", &[]),
     ("signs", &["water"]),
     ("place", &["water", "signs"]),
     ("generator", &["water", "signs"]),
     ("fit", &["water", "signs", "generator::random"]),
+    ("whatif", &["water", "signs"]),
     ("lesson", &["water", "signs", "place"]),
     ("words", &["water::units", "water::dials", "water::ledger", "signs::Sign", "signs::SignKind", "signs::SIGNS"]),
     (

@@ -27,6 +27,7 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(show(words))
         .subcommand(tell(words))
         .subcommand(check(words))
+        .subcommand(map(words))
         .subcommand(weather(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
@@ -70,6 +71,26 @@ fn check(words: &Words) -> Command {
         .arg(path("paths", "value-path", "help-paths", words).required(true).num_args(1..).action(ArgAction::Append))
         .arg(text("form", "value-form", "help-check-form", words).help(with_usual("help-check-form", "table", words)))
         .args(common(words))
+}
+
+fn map(words: &Words) -> Command {
+    let say = |id: &str| words.say(id, &[]);
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("map", "help-usage-map", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("over", "value-over", "help-over", words).action(ArgAction::Append))
+        .arg(text("sign", "value-sign", "help-sign", words).help(with_usual("help-sign", "supply_ratio", words)))
+        .arg(text("canal", "value-canal", "help-canal", words))
+        .arg(text("set", "value-set", "help-map-set", words).action(ArgAction::Append).allow_hyphen_values(true))
+        .arg(text("years", "value-years", "help-years", words))
+        .arg(text("form", "value-form", "help-map-form", words).help(with_usual("help-map-form", "csv", words)))
+        .arg(text("part", "value-part", "help-part", words))
+        .arg(path_option("merge", "value-file", "help-merge", words).action(ArgAction::Append).num_args(1..))
+        .arg(text("size", "value-size", "help-size", words).help(with_usual("help-size", "800x480", words)))
+        .arg(text("units", "value-units", "help-units", words))
+        .arg(path_option("out", "value-file", "help-out", words))
+        .args(common(words))
+        .after_help(say("help-map-more"))
 }
 
 fn weather(words: &Words) -> Command {

@@ -7,6 +7,7 @@ mod built_in;
 mod check;
 mod failure;
 mod line;
+mod map;
 mod output;
 mod places;
 mod problem_words;
@@ -54,6 +55,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("tell", matches)) => tell::run(speech, matches),
         Some(("check", matches)) => check::run(speech, matches),
         Some(("show", matches)) => show::run(speech, matches),
+        Some(("map", matches)) => map::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
         _ => show::usual(speech),
     }

@@ -27,6 +27,20 @@ impl Spinner {
     }
 }
 
+impl Spinner {
+    /// Says something else.
+    pub fn say(&self, doing: String) {
+        if let Some(bar) = &self.0 {
+            bar.set_message(doing);
+        }
+    }
+
+    /// Whether anybody sees it.
+    pub fn is_seen(&self) -> bool {
+        self.0.is_some()
+    }
+}
+
 impl Drop for Spinner {
     fn drop(&mut self) {
         if let Some(bar) = &self.0 {

@@ -2,17 +2,23 @@
 //!
 //! Steps are for knobs: a value between two steps is taken as it is. The range of the place is strict.
 
-use super::refuse;
 use crate::commands::failure::Failure;
+use crate::commands::usage::mistake;
 use crate::place::{DialOffer, DialPlan};
-use crate::water::dials::{Dial, DialUnit, Dials};
+use crate::water::dials::{Dial, DialRange, DialUnit, Dials};
 use crate::words::{Quantity, System, Words, nearest};
 
 /// What is written where an example is needed.
 const EXAMPLE: &str = "warming=2";
 
-/// `start` with every `DIAL=VALUE` of `set` turned; all that is wrong is told at once.
-pub(super) fn turn(start: Dials, set: &[String], plan: &DialPlan, words: &Words) -> Result<Dials, Failure> {
+/// `start` with every `DIAL=VALUE` of `set` turned; all that is wrong is told at once, as a mistake of `command`.
+pub(in crate::commands) fn turn(
+    start: Dials,
+    set: &[String],
+    plan: &DialPlan,
+    command: &str,
+    words: &Words,
+) -> Result<Dials, Failure> {
     let mut dials = start;
     let mut turned: Vec<Dial> = Vec::new();
     let mut wrong = Vec::new();
@@ -28,7 +34,7 @@ pub(super) fn turn(start: Dials, set: &[String], plan: &DialPlan, words: &Words)
             Err(line) => wrong.push(line),
         }
     }
-    if wrong.is_empty() { Ok(dials) } else { Err(refuse(&wrong.join("\n"), words)) }
+    if wrong.is_empty() { Ok(dials) } else { Err(mistake(&wrong.join("\n"), Some(command), words)) }
 }
 
 fn read(text: &str, plan: &DialPlan, words: &Words) -> Result<(Dial, f64), String> {
@@ -36,16 +42,27 @@ fn read(text: &str, plan: &DialPlan, words: &Words) -> Result<(Dial, f64), Strin
         return Err(words.say("error-dial-no-equals", &[("text", text.into()), ("example", EXAMPLE.into())]));
     };
     let (key, value) = (key.trim(), value.trim());
+    let (dial, range) = offered(key, plan, words)?;
+    Ok((dial, value_of(dial, range, value, words)?))
+}
+
+/// The dial with this key and its range, where the place offers it.
+pub(in crate::commands) fn offered(key: &str, plan: &DialPlan, words: &Words) -> Result<(Dial, DialRange), String> {
     let Some(dial) = Dial::from_key(key) else { return Err(unknown(key, plan, words)) };
     let key = || ("dial", dial.key().into());
-    let range = match plan.offer(dial) {
-        DialOffer::Open(range) => range,
-        DialOffer::Hidden => return Err(words.say("error-dial-hidden", &[key()])),
+    match plan.offer(dial) {
+        DialOffer::Open(range) => Ok((dial, range)),
+        DialOffer::Hidden => Err(words.say("error-dial-hidden", &[key()])),
         DialOffer::Lacking => {
             let reason = words.say(lacking(dial), &[]);
-            return Err(words.say("error-dial-lacking", &[key(), ("reason", reason.into())]));
+            Err(words.say("error-dial-lacking", &[key(), ("reason", reason.into())]))
         }
-    };
+    }
+}
+
+/// The number that is written, where the dial may stand there.
+pub(in crate::commands) fn value_of(dial: Dial, range: DialRange, value: &str, words: &Words) -> Result<f64, String> {
+    let key = || ("dial", dial.key().into());
     // People copy what they read, and there a minus is a minus sign.
     let typed = value.replace('\u{2212}', "-");
     let number = typed.parse::<f64>().ok().filter(|number| number.is_finite());
@@ -63,7 +80,7 @@ fn read(text: &str, plan: &DialPlan, words: &Words) -> Result<(Dial, f64), Strin
         return Err(words.say("error-dial-out-of-range", &arguments));
     }
     // −0 would be another number in the output than 0.
-    Ok((dial, number + 0.0))
+    Ok(number + 0.0)
 }
 
 fn unknown(key: &str, plan: &DialPlan, words: &Words) -> String {
@@ -111,7 +128,7 @@ mod tests {
     fn turned(set: &[&str]) -> Result<Dials, Vec<String>> {
         let (words, _) = Words::new("en");
         let set: Vec<String> = set.iter().map(|text| (*text).to_owned()).collect();
-        turn(Dials::REST, &set, &DialPlan::WIDEST, &words).map_err(|failure| match failure {
+        turn(Dials::REST, &set, &DialPlan::WIDEST, "tell", &words).map_err(|failure| match failure {
             Failure::Usage(lines) | Failure::Input(lines) => lines,
             Failure::ReaderGone => Vec::new(),
         })

@@ -6,7 +6,7 @@ mod canal_table;
 mod columns;
 mod crops;
 mod daily;
-mod dials;
+pub(super) mod dials;
 mod grid;
 mod json;
 mod means;
@@ -15,7 +15,7 @@ mod request;
 mod runs;
 mod summary_lines;
 mod table;
-mod years;
+pub(super) mod years;
 
 use std::path::Path;
 
@@ -30,7 +30,7 @@ use super::usage::mistake;
 use crate::water::dials::Dials;
 use request::{Form, Request};
 use runs::Told;
-pub(super) use runs::usual_system;
+pub(super) use runs::{usual_system, years_at_rest};
 
 /// Runs the place and tells what came of it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
@@ -51,7 +51,7 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
             None => None,
         };
         let start = setting.as_ref().map_or(Dials::REST, |setting| setting.dials);
-        let dials = dials::turn(start, &request.set, &place.dials, &words)?;
+        let dials = dials::turn(start, &request.set, &place.dials, "tell", &words)?;
         let asked = request.years.or(setting.as_ref().map(|setting| setting.years));
         let _spinner = Spinner::start(words.say("progress-running", &[]));
         let told = Told::run(place, setting, dials, asked, request.daily, &words)?;

@@ -68,7 +68,7 @@ impl Request {
         };
         let years = match text("years") {
             None => None,
-            Some(text) => Some(read_years(text, words)?),
+            Some(text) => Some(read_years(text, "tell", words)?),
         };
         let request = Request {
             place: path("place").unwrap_or_else(|| places::USUAL.into()),

@@ -60,7 +60,7 @@ impl Told {
             Some(Stage::Works) => second_stage(&place, &dials, &at_rest, columns.as_ref(), words)?,
             Some(Stage::Basin) => second_stage(&place, &dials, &first_stage(&place, &dials), columns.as_ref(), words)?,
         };
-        let shown = chosen(asked, &as_it_was.years, words)?;
+        let shown = chosen(asked, &as_it_was.years, "tell", words)?;
         let ends =
             [as_it_was.years.first(), as_it_was.years.last()].map(|year| year.map_or(0, |year| year.year.water_year));
         let record_years = (ends[0], ends[1], as_it_was.years.len());
@@ -97,6 +97,11 @@ impl Run {
         let days = self.days.map(|days| days.keep(&kept));
         Run { years: kept, days }
     }
+}
+
+/// Every whole water year of the place with every dial at rest.
+pub(in crate::commands) fn years_at_rest(place: &Place, words: &Words) -> Result<Vec<YearReport>, Failure> {
+    second_stage(place, &Dials::REST, &first_stage(place, &Dials::REST), None, words).map(|run| run.years)
 }
 
 struct FirstStage {

@@ -1,25 +1,30 @@
 //! Choosing the water years that are shown; the whole record is run whatever is chosen.
 
-use super::refuse;
 use crate::commands::failure::Failure;
+use crate::commands::usage::mistake;
 use crate::place::Years;
 use crate::signs::YearReport;
 use crate::words::Words;
 
-/// Reads `--years`.
-pub(super) fn read_years(text: &str, words: &Words) -> Result<Years, Failure> {
+/// Reads `--years` of `command`.
+pub(in crate::commands) fn read_years(text: &str, command: &str, words: &Words) -> Result<Years, Failure> {
     if let Some(years) = Years::from_key(text) {
         return Ok(years);
     }
     let year = |text: &str| text.parse::<i32>().ok().filter(|_| text.len() == 4);
     let backward = text.split_once("..").and_then(|(first, last)| Some(year(first)? > year(last)?));
     let id = if backward == Some(true) { "error-years-backward" } else { "error-years-unreadable" };
-    Err(refuse(&words.say(id, &[("text", text.into())]), words))
+    Err(mistake(&words.say(id, &[("text", text.into())]), Some(command), words))
 }
 
 /// Which of the record's years are shown, as indexes in order; `years` is the run at rest, whose natural flow ranks
 /// them. Dry and wet are the lowest and highest third, each at least one year; middling is what lies between.
-pub(super) fn chosen(asked: Years, years: &[YearReport], words: &Words) -> Result<Vec<usize>, Failure> {
+pub(in crate::commands) fn chosen(
+    asked: Years,
+    years: &[YearReport],
+    command: &str,
+    words: &Words,
+) -> Result<Vec<usize>, Failure> {
     let (Some(first), Some(last)) = (years.first(), years.last()) else {
         return Err(Failure::input(words.say("error-years-none", &[])));
     };
@@ -44,7 +49,7 @@ pub(super) fn chosen(asked: Years, years: &[YearReport], words: &Words) -> Resul
                     ("last", words.year(last.year.water_year).into()),
                     ("asked", words.year(outside).into()),
                 ];
-                return Err(refuse(&words.say("error-years-outside", &arguments), words));
+                return Err(mistake(&words.say("error-years-outside", &arguments), Some(command), words));
             }
             (0..years.len()).filter(|index| (from..=to).contains(&years[*index].year.water_year)).collect()
         }
@@ -70,7 +75,7 @@ mod tests {
 
     fn pick(asked: Years, flows: &[f64]) -> Vec<usize> {
         let years: Vec<_> = flows.iter().zip(2001..).map(|(flow, year)| report(year, *flow)).collect();
-        chosen(asked, &years, &Words::new("en").0).unwrap()
+        chosen(asked, &years, "tell", &Words::new("en").0).unwrap()
     }
 
     #[test]

@@ -1,5 +1,6 @@
 //! The one sentence with which each page answers its question, chosen from the signs of both runs.
 
+use super::grid::GridAnswer;
 use super::page_answer::PageAnswer;
 use super::scene::Scene;
 use super::wording::{day_in_sentence, share};
@@ -81,6 +82,8 @@ pub enum Answer {
     NoCanals,
     /// What the pages beside the year say.
     Page(PageAnswer),
+    /// What the map of two dials says.
+    Grid(GridAnswer),
 }
 
 /// Something that happens on a day of the year.
@@ -233,6 +236,7 @@ impl Answer {
             Self::NobodyAsks => words.say("answer-nobody-asks", &[]),
             Self::NoCanals => words.say("answer-no-canals", &[]),
             Self::Page(answer) => answer.say(scene, words),
+            Self::Grid(answer) => answer.say(scene, words),
         }
     }
 }
@@ -269,7 +273,7 @@ fn holds_zero((low, high): (i32, i32)) -> bool {
 const NAME_LETTERS: usize = 24;
 
 /// A name as a sentence says it: whole, or its beginning where it would leave no room for the rest.
-fn name_said(name: &str) -> String {
+pub(super) fn name_said(name: &str) -> String {
     match name.char_indices().nth(NAME_LETTERS) {
         None => name.to_owned(),
         Some(_) => {

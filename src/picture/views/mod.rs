@@ -12,6 +12,7 @@ mod dial_cards;
 mod emblem;
 pub mod facts;
 pub mod frame;
+pub mod grid;
 pub mod help;
 pub mod layout;
 pub mod ledger;

@@ -127,6 +127,12 @@ impl Offer {
         Self { about_sheets: sheets.max(1), ..self }
     }
 
+    /// The same with so many pages of the help card, as the picture counts them for a screen; 0 counts as 1.
+    #[must_use]
+    pub fn with_help_pages(self, pages: u8) -> Self {
+        Self { help_pages: pages.max(1), ..self }
+    }
+
     /// The stops of a dial; `None` where the place does not offer it.
     pub fn scale(&self, dial: Dial) -> Option<&DialScale> {
         self.scales[dial as usize].as_ref()

@@ -2,7 +2,7 @@
 
 use std::path::Path;
 
-use super::drawing::VIEWS;
+use super::drawing::{VIEWS, page};
 use super::player::Player;
 use super::request::Request;
 use crate::board::pictures::{file_name, write as write_picture};
@@ -10,7 +10,6 @@ use crate::board::{FrameSize, Instrument};
 use crate::commands::failure::Failure;
 use crate::commands::output::reason;
 use crate::commands::tell_standard_error;
-use crate::picture::views::View as Page;
 use crate::session::{Command, Event};
 use crate::words::Words;
 
@@ -29,8 +28,9 @@ pub(super) fn write(player: &mut Player, request: &Request, words: &Words) -> Re
     }
     let mut count = 0_u32;
     for language in &languages {
-        for _ in VIEWS {
-            let name = file_name(Page::ALL[player.view() as usize].key(), language, size);
+        for view in VIEWS {
+            player.step(Event::Command(Command::Show(view)));
+            let name = file_name(page(view).key(), language, size);
             let frame = player.frame(size, false);
             write_picture(folder, &name, size, frame.pixels).map_err(|error| {
                 let arguments =
@@ -38,7 +38,6 @@ pub(super) fn write(player: &mut Player, request: &Request, words: &Words) -> Re
                 Failure::Input(vec![words.say("show-folder-unwritable", &arguments)])
             })?;
             count += 1;
-            player.step(Event::Command(Command::StepView(1)));
         }
         player.step(Event::Command(Command::NextVoice));
     }

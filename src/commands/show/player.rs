@@ -2,15 +2,19 @@
 
 use std::time::Duration;
 
-use super::drawing::{Drawing, VIEWS};
+use embedded_graphics::geometry::Size;
+
+use super::drawing::{Drawing, VIEWS, page};
 use super::hands::Clock;
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument};
 use crate::commands::failure::Failure;
 use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
+use crate::picture::views::{Scene, help, term};
 use crate::place::Place;
 use crate::session::answer::{Asked, Source};
-use crate::session::scene::{Moment, PlaceTold, Stage, settings};
+use crate::session::help::key_lines;
+use crate::session::scene::{Moment, PlaceTold, Stage, facts_of, settings};
 use crate::session::{Answers, Event, Needs, Offer, OfferInput, Shade, State, View, Voice, YearList};
 use crate::words::{System, Words};
 
@@ -50,7 +54,7 @@ impl Player {
             dials: place.dials.open().collect(),
             years,
             views: VIEWS.to_vec(),
-            terms: Default::default(),
+            terms: View::ALL.map(|view| term::terms(page(view)).len() as u16),
             voices: tags.collect(),
             system: units.unwrap_or_else(|| usual_system(&place)),
             shade,
@@ -94,9 +98,14 @@ impl Player {
         single.map(|(words, _)| words.tag().to_owned()).collect()
     }
 
-    /// The view on show.
-    pub fn view(&self) -> View {
-        self.state.shown().view
+    /// Lets the help card have as many pages as it needs on a screen of this size, in any language.
+    fn make_room_for_help(&mut self, size: FrameSize) {
+        let (size, keys) = (Size::new(size.width.into(), size.height.into()), key_lines());
+        let most = self.voices.iter().map(|(words, _)| help::sheet_count(size, &keys, words)).max().unwrap_or(1);
+        let most = u8::try_from(most).unwrap_or(u8::MAX);
+        if most > self.offer.help_pages() {
+            self.offer = self.offer.clone().with_help_pages(most);
+        }
     }
 
     /// Brings the answers to what the state asks.
@@ -130,6 +139,7 @@ impl Instrument for Player {
                     self.drawings.remove(0);
                 }
                 self.drawings.push(Drawing::new(size, texts));
+                self.make_room_for_help(size);
                 self.drawings.len() - 1
             }
         };
@@ -140,6 +150,7 @@ impl Instrument for Player {
             let told = PlaceTold {
                 name: self.place.name.get(words.tag()),
                 invented: self.place.invented,
+                // No place holds a fit to its gauge yet.
                 fitted: false,
                 gate_names: &names,
             };
@@ -149,7 +160,12 @@ impl Instrument for Player {
             let props = stage.props();
             let dials = settings(&self.offer, &shown.dials);
             let scene = stage.scene(&props, Moment::of(shown, &dials, &self.answers, second.as_ref()));
-            self.drawings[at].draw(shown.view, &scene, shown.shade, words);
+            let facts = facts_of(&self.place, None, words.tag());
+            let scene = Scene { facts, sheet: shown.sheet.into(), ..scene };
+            let sheets = self.drawings[at].draw(shown.view, shown.card, &scene, shown.shade, words);
+            if sheets > self.offer.sheets(shown.view) {
+                self.offer = self.offer.clone().with_about_sheets(sheets);
+            }
             self.drawings[at].stamp = Some(self.stamp);
         }
         self.drawings[at].frame()

@@ -142,7 +142,7 @@ impl GridShown<'_> {
     }
 
     /// The values from the top row down, as a field is drawn; what is not there yet is filled from the sketch.
-    fn from_the_top(&self) -> Vec<f64> {
+    fn rows_downward(&self) -> Vec<f64> {
         let columns = self.across.values.len();
         let value = |column: usize, row: usize| match self.cell(column, row) {
             Cell::Value(value) => Some(value),
@@ -195,7 +195,7 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, grid: &GridShown<'_>, th
         map.size.width as i32 - up_wide,
         map.size.height as i32 - line - foot,
     );
-    let values = grid.from_the_top();
+    let values = grid.rows_downward();
     let field = Field { area: inner, columns: grid.across.values.len(), values: &values };
     if !values.is_empty() {
         draw_map(canvas, &field, grid, layout.line_px, theme);

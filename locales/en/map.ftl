@@ -15,7 +15,11 @@ answer-grid-canal-fails = With { $across }, { $canal } never gets { $level } of 
 answer-grid-keep-takes = With { $across }, “{ $sign }” stays at { $level } only with { $up }.
 answer-grid-keep-holds = With { $across }, “{ $sign }” is always { $level } on this map.
 answer-grid-keep-fails = With { $across }, “{ $sign }” is never { $level } on this map.
+answer-grid-brief-takes = { $across }: { $sign } { $level } only with { $up }.
+answer-grid-brief-holds = { $across }: { $sign } always { $level } here.
+answer-grid-brief-fails = { $across }: { $sign } never { $level } here.
 
+grid-brief-at = { $dial } { $value }
 grid-at-least = { $value } or more
 grid-at-most = { $value } or less
 grid-no-sooner = { $value } or later
@@ -55,7 +59,7 @@ help-map-form = How to write the map: csv, json or png.
 help-part = Makes only part K of N, for example 2/8; with --form json. Any N gives the same numbers.
 help-merge = A part to put together with the others. Give all of them; the dials and the number come from the parts.
 help-size = The size of the picture in pixels.
-value-over = DIAL=FROM..TO:STEP
+value-over = SIDE
 value-sign = NAME
 value-canal = KEY
 value-part = K/N

@@ -15,7 +15,11 @@ answer-grid-canal-fails = Con { $across }, en este mapa a { $canal } nunca le ll
 answer-grid-keep-takes = Con { $across }, «{ $sign }» queda en { $level } solo con { $up }.
 answer-grid-keep-holds = Con { $across }, «{ $sign }» siempre queda en { $level } en este mapa.
 answer-grid-keep-fails = Con { $across }, «{ $sign }» nunca queda en { $level } en este mapa.
+answer-grid-brief-takes = { $across }: { $sign } { $level } solo con { $up }.
+answer-grid-brief-holds = { $across }: { $sign } aquí siempre { $level }.
+answer-grid-brief-fails = { $across }: { $sign } aquí nunca { $level }.
 
+grid-brief-at = { $dial } { $value }
 grid-at-least = { $value } o más
 grid-at-most = { $value } o menos
 grid-no-sooner = { $value } o después
@@ -55,7 +59,7 @@ help-map-form = Cómo escribir el mapa: csv, json o png.
 help-part = Hace solo la parte K de N, por ejemplo 2/8; con --form json. Con cualquier N salen los mismos números.
 help-merge = Una parte para juntar con las demás. Van todas; las perillas y el número salen de las partes.
 help-size = El tamaño de la imagen en pixeles.
-value-over = PERILLA=DE..A:PASO
+value-over = LADO
 value-sign = NOMBRE
 value-canal = CLAVE
 value-part = K/N

@@ -3,6 +3,7 @@
 mod checking;
 mod golden;
 mod languages;
+mod map;
 mod numbers;
 mod output;
 mod refusals;

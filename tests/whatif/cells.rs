@@ -14,7 +14,7 @@ use deshielo::water::weather::StationDay;
 use deshielo::water::works::Works;
 use deshielo::whatif::{Axis, Question, Source, WhatIfFault};
 
-use super::valleys;
+use super::support::valleys;
 
 struct Land {
     valley: Valley,

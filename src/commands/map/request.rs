@@ -11,10 +11,11 @@ use crate::commands::tell::dials::{offered, value_of};
 use crate::commands::tell::years::read_years;
 use crate::commands::usage::unknown_choice;
 use crate::place::{DialPlan, Years};
+use crate::water::dials::Dial;
 use crate::whatif::{Axis, AxisFault, MOST_STOPS};
 use crate::words::{System, Words};
 
-/// The two sides where none are asked for.
+/// The two sides where none are asked for; a place with a narrower range has all of that.
 const USUAL_OVER: [&str; 2] = ["warming=0..6:0.5", "winter_precipitation=-20..20:5"];
 /// What the map shows where nothing is asked for.
 const USUAL_SIGN: &str = "supply_ratio";
@@ -117,7 +118,14 @@ impl Request {
 
     /// The two sides, as this place offers them; all that is wrong is told at once.
     pub fn axes(&self, plan: &DialPlan, words: &Words) -> Result<[Axis; 2], Failure> {
-        let usual = USUAL_OVER.map(str::to_owned);
+        let usual = USUAL_OVER.map(|text| match read_axis(text, plan, words) {
+            Ok(_) => text.to_owned(),
+            Err(_) => {
+                let key = text.split('=').next().unwrap_or(text);
+                let range = Dial::from_key(key).and_then(|dial| plan.range(dial));
+                range.map_or(text.to_owned(), |range| format!("{key}={}..{}", range.least, range.most))
+            }
+        });
         let over = if self.over.is_empty() { &usual[..] } else { &self.over[..] };
         let read: Vec<Result<Axis, String>> = over.iter().map(|text| read_axis(text, plan, words)).collect();
         let wrong: Vec<&str> = read.iter().filter_map(|side| side.as_ref().err().map(String::as_str)).collect();

@@ -11,12 +11,12 @@ use embedded_graphics::primitives::Rectangle;
 
 pub use answer::{GridAnswer, Needed};
 
-use super::layout::{Form, area, bottom, right};
+use super::layout::{Form, Layout, area, bottom, right};
 use super::scene::{Scene, YearShown};
 use super::wording::fit;
 use super::{Answer, View, frame, layout_of};
 use crate::picture::chart::{Field, contour, shade};
-use crate::picture::lettering::Across;
+use crate::picture::lettering::{Across, paragraph_height};
 use crate::picture::line::segment;
 use crate::picture::shape::{diamond, disc, frame as box_frame, ring, rounded_box};
 use crate::picture::{Canvas, Spot, Stroke, Theme};
@@ -142,7 +142,7 @@ impl GridShown<'_> {
     }
 
     /// The values from the top row down, as a field is drawn; what is not there yet is filled from the sketch.
-    fn rows_downward(&self) -> Vec<f64> {
+    fn top_row_first(&self) -> Vec<f64> {
         let columns = self.across.values.len();
         let value = |column: usize, row: usize| match self.cell(column, row) {
             Cell::Value(value) => Some(value),
@@ -163,7 +163,7 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, grid: &GridShown<'_>, th
     let layout = layout_of(canvas, scene);
     // The map is of many years: no day and no year of the scene belongs to it.
     let no_day = Scene { year: YearShown { calendar: &[], ..scene.year }, playing: false, ..*scene };
-    let answer = Answer::Grid(GridAnswer::of(grid));
+    let answer = answer_within(&layout, grid, scene, words);
     frame::draw_frame(canvas, &layout, &no_day, View::Grid, &answer, theme, words);
     let over = words.say("grid-years", &[("n", grid.years.into())]);
     let half = area(
@@ -195,7 +195,7 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, grid: &GridShown<'_>, th
         map.size.width as i32 - up_wide,
         map.size.height as i32 - line - foot,
     );
-    let values = grid.rows_downward();
+    let values = grid.top_row_first();
     let field = Field { area: inner, columns: grid.across.values.len(), values: &values };
     if !values.is_empty() {
         draw_map(canvas, &field, grid, layout.line_px, theme);
@@ -222,6 +222,19 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, grid: &GridShown<'_>, th
         legend.draw_under(canvas, legend_room, theme);
     } else {
         legend.draw_beside(canvas, legend_room, theme);
+    }
+}
+
+/// The answer, in brief where it would have to be said in small letters.
+fn answer_within(layout: &Layout, grid: &GridShown<'_>, scene: &Scene<'_>, words: &Words) -> Answer {
+    let found = GridAnswer::of(grid);
+    let full = Answer::Grid(found.clone());
+    let text = frame::sentences(scene, &full, words);
+    let room = layout.headline.size;
+    if paragraph_height(&text, layout.strong, room.width) <= room.height {
+        full
+    } else {
+        Answer::Grid(found.in_brief())
     }
 }
 

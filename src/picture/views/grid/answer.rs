@@ -3,7 +3,7 @@
 use super::{Cell, GridShown};
 use crate::picture::views::answer::name_said;
 use crate::picture::views::scene::{DialSetting, Scene};
-use crate::picture::views::wording::dial_value;
+use crate::picture::views::wording::{dial_name, dial_value};
 use crate::signs::{Better, Reading, SignKind};
 use crate::water::dials::{Dial, Dials};
 use crate::words::Words;
@@ -36,6 +36,8 @@ pub enum GridAnswer {
         up: Needed,
         /// What is kept.
         level: f64,
+        /// Whether it is said in as few words as can be, for small screens and long names.
+        brief: bool,
     },
 }
 
@@ -94,7 +96,7 @@ impl GridAnswer {
         };
         let across = (grid.across.dial, *grid.across.values.get(column)?);
         let canal = grid.gate_name.map(name_said);
-        Some(Self::Needs { reading: grid.reading, canal, across, up: needed, level })
+        Some(Self::Needs { reading: grid.reading, canal, across, up: needed, level, brief: false })
     }
 
     /// The sentence in words.
@@ -114,31 +116,24 @@ impl GridAnswer {
                 let [least, most] = ends;
                 words.say("answer-grid-range", &[sign(reading), least, most])
             }
-            Self::Needs { reading, canal, across, up, level } => {
-                let dial = |dial: Dial, value: String| {
-                    words.say(&Words::key_id("grid-at", dial.key()), &[("value", value.into())])
+            Self::Needs { reading, canal, across, up, level, brief } => {
+                let form = match up {
+                    Needed::From(..) | Needed::To(..) => "takes",
+                    Needed::Any => "holds",
+                    Needed::None => "fails",
                 };
-                let stands = |dial: Dial, value: f64| {
-                    let setting = DialSetting { dial, value: Some(value), range: dial.widest() };
-                    dial_value(&setting, scene.units, words)
-                };
-                let (form, up) = match *up {
-                    Needed::From(which, from) => {
-                        ("takes", dial(which, words.say("grid-at-least", &[("value", stands(which, from).into())])))
+                let mut args = vec![("across", dial_at(across.0, across.1, None, *brief, scene, words).into())];
+                match *up {
+                    Needed::From(dial, from) => {
+                        args.push(("up", dial_at(dial, from, Some("grid-at-least"), *brief, scene, words).into()));
                     }
-                    Needed::To(which, to) => {
-                        ("takes", dial(which, words.say("grid-at-most", &[("value", stands(which, to).into())])))
+                    Needed::To(dial, to) => {
+                        args.push(("up", dial_at(dial, to, Some("grid-at-most"), *brief, scene, words).into()));
                     }
-                    Needed::Any => ("holds", String::new()),
-                    Needed::None => ("fails", String::new()),
-                };
-                let across = dial(across.0, stands(across.0, across.1));
-                let level = value(reading, *level);
-                let mut args = vec![("across", across.into())];
-                if form == "takes" {
-                    args.push(("up", up.into()));
+                    Needed::Any | Needed::None => {}
                 }
-                if reading.is_supply_ratio() {
+                let level = value(reading, *level);
+                if reading.is_supply_ratio() && !brief {
                     args.push(("level", level.into()));
                     let whose = if canal.is_some() { "canal" } else { "supply" };
                     args.extend(canal.iter().map(|canal| ("canal", canal.as_str().into())));
@@ -151,10 +146,33 @@ impl GridAnswer {
                 };
                 args.push(("level", words.say(bound, &[("value", level.into())]).into()));
                 args.push(sign(reading));
-                words.say(&format!("answer-grid-keep-{form}"), &args)
+                let length = if *brief { "brief" } else { "keep" };
+                words.say(&format!("answer-grid-{length}-{form}"), &args)
             }
         }
     }
+
+    /// The same in as few words as can be.
+    #[must_use]
+    pub fn in_brief(mut self) -> Self {
+        if let Self::Needs { brief, .. } = &mut self {
+            *brief = true;
+        }
+        self
+    }
+}
+
+/// A dial with a value or a bound, within a sentence; in brief with its short name.
+fn dial_at(dial: Dial, value: f64, bound: Option<&str>, brief: bool, scene: &Scene<'_>, words: &Words) -> String {
+    let setting = DialSetting { dial, value: Some(value), range: dial.widest() };
+    let mut value = dial_value(&setting, scene.units, words);
+    if let Some(bound) = bound {
+        value = words.say(bound, &[("value", value.into())]);
+    }
+    if brief {
+        return words.say("grid-brief-at", &[("dial", dial_name(dial, words).into()), ("value", value.into())]);
+    }
+    words.say(&Words::key_id("grid-at", dial.key()), &[("value", value.into())])
 }
 
 fn told_column(grid: &GridShown<'_>) -> Option<usize> {

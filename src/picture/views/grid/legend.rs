@@ -40,7 +40,8 @@ impl Legend {
         let value = |value: f64| reading_value(grid.reading, value, scene, words);
         let (least, most) = grid.range().map_or((String::new(), String::new()), |(a, b)| (value(a), value(b)));
         let mut entries = Vec::new();
-        match grid.level() {
+        // While the map fills in there is no line yet.
+        match grid.level().filter(|_| !grid.cells.contains(&Cell::Waiting)) {
             Some(Level::Enough(share)) => {
                 entries.push((Sample::Line, words.say("grid-enough", &[("value", value(share).into())])));
             }

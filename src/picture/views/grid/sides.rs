@@ -72,7 +72,7 @@ pub(super) fn draw_up(
     }
 }
 
-/// Writes the values along the bottom of the field, their heads at `top`, and none beyond the edges of `room`.
+/// Writes the values along the bottom of the field, their heads at `top`, and none far beyond the edges of `room`.
 #[allow(clippy::too_many_arguments, reason = "one side, drawn once from one place")]
 pub(super) fn draw_across(
     canvas: &mut Canvas<'_>,
@@ -93,7 +93,7 @@ pub(super) fn draw_across(
         let text = text(at);
         let x = libm::round(field.middle(at, 0).x) as i32;
         let half = measure(&text, face).width as i32 / 2 + 1;
-        if x - half < room.top_left.x || x + half > super::right(room) {
+        if x - half < room.top_left.x || x + half > super::right(room) + i32::from(face.px()) * 2 / 3 {
             continue;
         }
         draw(canvas, &text, Point::new(x, top), face, theme.quiet, Align::CENTRE.cap_top());

@@ -175,3 +175,20 @@ fn lanes_of_different_powers_agree_with_the_run_alone_to_rounding() {
         }
     }
 }
+
+#[test]
+fn a_longer_page_than_the_record_is_left_as_it_was() {
+    // Settling runs write a few years into room for all of them; what lies beyond must not move the stores on.
+    let valley = valleys::bare_basin(7);
+    let (calendar, record) = valleys::record(&valley, 1, 3);
+    let basin = Basin::new(&valley, &Dials::REST);
+    let (mut exact, mut roomy) = (basin.start(), basin.start());
+    let days = 37;
+    let mut page = vec![BasinDay::default(); days];
+    basin.run(&mut exact, &calendar[..days], &record[..days], &mut page);
+    let mut longer = vec![BasinDay::default(); days + 40];
+    basin.run(&mut roomy, &calendar[..days], &record[..days], &mut longer);
+    assert_eq!(exact, roomy);
+    assert_eq!(page[..], longer[..days]);
+    assert!(longer[days..].iter().all(|day| *day == BasinDay::default()));
+}

@@ -58,12 +58,10 @@ help-map-set = Turns another dial for the whole map, or marks the present settin
 help-map-form = How to write the map: csv, json or png.
 help-part = Makes only part K of N, for example 2/8; with --form json. Any N gives the same numbers.
 help-merge = A part to put together with the others. Give all of them; the dials and the number come from the parts.
-help-size = The size of the picture in pixels.
 value-over = SIDE
 value-sign = NAME
 value-canal = KEY
 value-part = K/N
-value-size = WxH
 help-map-more =
     CSV: one row for each combination; the two dials, then the number.
     JSON: place, sign, canal, years, dials (for the whole map), over (the two

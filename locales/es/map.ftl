@@ -58,12 +58,10 @@ help-map-set = Mueve otra perilla en todo el mapa, o marca dónde está ahora un
 help-map-form = Cómo escribir el mapa: csv, json o png.
 help-part = Hace solo la parte K de N, por ejemplo 2/8; con --form json. Con cualquier N salen los mismos números.
 help-merge = Una parte para juntar con las demás. Van todas; las perillas y el número salen de las partes.
-help-size = El tamaño de la imagen en pixeles.
 value-over = LADO
 value-sign = NOMBRE
 value-canal = CLAVE
 value-part = K/N
-value-size = ANCHOxALTO
 help-map-more =
     CSV: un renglón por combinación; las dos perillas y luego el número.
     JSON: place, sign, canal, years, dials (para todo el mapa), over (las dos

@@ -261,6 +261,8 @@ impl<'v> Basin<'v> {
         out: &mut [BasinDay],
     ) {
         let southern = self.valley.is_southern();
+        let days = calendar.len().min(record.len()).min(out.len());
+        let (calendar, record, out) = (&calendar[..days], &record[..days], &mut out[..days]);
         // Local copies: the compiler keeps what nobody else can see in registers.
         let (mut rows, mut ground, mut channel) = (stores.rows, stores.ground[0], stores.channel[0]);
         let mut weather = [LaneWeather::default(); BLOCK_DAYS];
@@ -343,6 +345,8 @@ impl<'v, const L: usize> Basins<'v, L> {
         out: &mut [&mut [BasinDay]; L],
     ) {
         let southern = self.valleys[0].is_southern();
+        let days = calendar.len().min(record.len());
+        let (calendar, record) = (&calendar[..days], &record[..days]);
         let mut rows = stores.rows;
         let mut weather = [LaneWeather::default(); BLOCK_DAYS];
         let mut sums = [[LaneSums::default(); 2]; BLOCK_DAYS];

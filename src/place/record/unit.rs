@@ -84,8 +84,8 @@ pub enum MeasureUnit {
 
 /// Each unit with the words that a place file may write for it; the first is the one that messages say.
 const KEYS: [(MeasureUnit, &[&str]); 31] = [
-    (MeasureUnit::Celsius, &["°C", "C", "celsius"]),
-    (MeasureUnit::Fahrenheit, &["°F", "F", "fahrenheit"]),
+    (MeasureUnit::Celsius, &["°C", "C", "celsius", "degC"]),
+    (MeasureUnit::Fahrenheit, &["°F", "F", "fahrenheit", "degF"]),
     (MeasureUnit::Kelvin, &["K", "kelvin"]),
     (MeasureUnit::TenthCelsius, &["0.1 °C", "0.1 C", "tenths of °C"]),
     (MeasureUnit::Millimetre, &["mm", "mm/day", "mm/d", "kg/m²", "kg/m2"]),
@@ -100,7 +100,7 @@ const KEYS: [(MeasureUnit, &[&str]); 31] = [
     (MeasureUnit::Hm3PerDay, &["hm³/day", "hm3/day", "hm³/d", "hm3/d"]),
     (MeasureUnit::Hm3, &["hm³", "hm3", "million m³", "million m3"]),
     (MeasureUnit::M3, &["m³", "m3"]),
-    (MeasureUnit::AcreFeet, &["acre-feet", "ac-ft", "acre-foot", "acre-pies"]),
+    (MeasureUnit::AcreFeet, &["acre-feet", "ac-ft", "acre-foot", "acre-pies", "af"]),
     (MeasureUnit::MjPerM2, &["MJ/m²", "MJ/m2", "MJ/m²/day", "MJ/m2/day"]),
     (MeasureUnit::WattPerM2, &["W/m²", "W/m2"]),
     (MeasureUnit::KilowattHourPerM2, &["kWh/m²", "kWh/m2", "kWh/m²/day", "kWh/m2/day"]),

@@ -182,6 +182,8 @@ impl<const L: usize> Slopes<L> {
         sums: &mut [LaneSums<L>],
     ) {
         let mut split = [MonthRow::default(); MOST_BANDS];
+        let mut thaw = [Thaw::default(); MOST_BANDS];
+        let mut snow_water_mm = self.snow_water_mm(stores);
         for ((today, weather), sums) in calendar.iter().zip(weather).zip(sums) {
             let mut months = &self.months[today.month_index()];
             // Worked out apart: a call in the loop over the bands would cost every day its registers.
@@ -189,19 +191,28 @@ impl<const L: usize> Slopes<L> {
                 self.wet_bulb(today, weather.temperature_c, humidity_percent, &mut split);
                 months = &split;
             }
+            let wet = weather.precipitation_mm.0.iter().any(|mm| *mm != 0.0);
             for pair in 0..Lanes::<L>::PAIRS {
                 let day = self.pair_day(weather, pair);
-                let curve = curve.pair(pair);
+                let bare = !wet && snow_water_mm.pair(pair) == Lanes::default();
+                let rows = Rows { curve: curve.pair(pair), day: &day, months, pair, wet, bare };
                 let sum = if APART {
-                    let even = self.rows_day::<2>(0, curve, &day, months, stores, pair);
-                    let odd = self.rows_day::<2>(1, curve, &day, months, stores, pair);
+                    let even = self.rows_day::<2>(0, &rows, stores, &mut thaw);
+                    let odd = self.rows_day::<2>(1, &rows, stores, &mut thaw);
                     even.and(&odd)
                 } else {
-                    self.rows_day::<1>(0, curve, &day, months, stores, pair)
+                    self.rows_day::<1>(0, &rows, stores, &mut thaw)
                 };
                 sums.set_pair(pair, &sum);
             }
+            snow_water_mm = sums.snow_water_mm;
         }
+    }
+
+    /// Snow water of all rows, mm over the basin.
+    fn snow_water_mm(&self, stores: &[RowStore<L>; MOST_BANDS]) -> Lanes<L> {
+        let rows = stores.iter().take(self.used);
+        rows.fold(Lanes::default(), |sum, row| sum + (row.snow.ice_mm + row.snow.liquid_mm))
     }
 
     #[inline(always)]
@@ -222,48 +233,94 @@ impl<const L: usize> Slopes<L> {
         }
     }
 
-    /// One pair of lanes over every `STEP`th row from `first` on: the body of all loops.
+    /// One pair of lanes over every `STEP`th row from `first` on: first the snow of all, then the soil of all, since short
+    /// chains of arithmetic fill a processor better than long ones.
     #[inline(always)]
     fn rows_day<const STEP: usize>(
         &self,
         first: usize,
-        curve: impl PowerCurve<2>,
-        day: &PairDay,
-        months: &MonthRows<L>,
+        rows: &Rows<L, impl PowerCurve<2>>,
         stores: &mut [RowStore<L>; MOST_BANDS],
-        pair: usize,
+        thaw: &mut [Thaw; MOST_BANDS],
     ) -> LaneSums<2> {
         let mut sum = LaneSums::default();
-        let used = self.used.min(MOST_BANDS);
+        if rows.bare {
+            self.soil_day::<STEP, true>(first, rows, stores, thaw, &mut sum);
+            return sum;
+        }
+        if rows.wet {
+            self.snow_day::<STEP, true>(first, rows, stores, thaw, &mut sum);
+        } else {
+            self.snow_day::<STEP, false>(first, rows, stores, thaw, &mut sum);
+        }
+        self.soil_day::<STEP, false>(first, rows, stores, thaw, &mut sum);
+        sum
+    }
+
+    /// The soil of [`Slopes::rows_day`]; on a `BARE` day there is no snow and no water enters.
+    #[inline(always)]
+    fn soil_day<const STEP: usize, const BARE: bool>(
+        &self,
+        first: usize,
+        rows: &Rows<L, impl PowerCurve<2>>,
+        stores: &mut [RowStore<L>; MOST_BANDS],
+        thaw: &[Thaw; MOST_BANDS],
+        sum: &mut LaneSums<2>,
+    ) {
+        let Rows { curve, day, pair, .. } = *rows;
         let mut index = first;
-        while index < used {
-            let (row, month, store) = (&self.rows[index], &months[index], &mut stores[index]);
-            let mut pack =
-                SnowStore { ice_mm: store.snow.ice_mm.pair(pair), liquid_mm: store.snow.liquid_mm.pair(pair) };
-            let mut soil_mm = store.soil_mm.pair(pair);
-            let snow = day.snow.pack(
+        while index < self.used.min(MOST_BANDS) {
+            let (row, thaw, soil_mm) = (&self.rows[index], &thaw[index], &mut stores[index].soil_mm);
+            let mut moist_mm = soil_mm.pair(pair);
+            let asked_mm = day.reference_evaporation_mm * row.evaporation_factor.pair(pair);
+            let soil = row.soil.pair(pair);
+            if BARE {
+                sum.evaporation_mm = sum.evaporation_mm + soil.dry_day(&mut moist_mm, asked_mm);
+            } else {
+                let soil = soil.day(&mut moist_mm, curve, thaw.outflow_mm, asked_mm, thaw.covered_share);
+                sum.evaporation_mm = sum.evaporation_mm + soil.evaporation_mm;
+                sum.recharge_mm = sum.recharge_mm + soil.recharge_mm;
+            }
+            soil_mm.set_pair(pair, moist_mm);
+            sum.soil_mm = sum.soil_mm + moist_mm;
+            index += STEP;
+        }
+    }
+
+    /// The snow of [`Slopes::rows_day`]; a day that is not `WET` has no precipitation.
+    #[inline(always)]
+    fn snow_day<const STEP: usize, const WET: bool>(
+        &self,
+        first: usize,
+        rows: &Rows<L, impl PowerCurve<2>>,
+        stores: &mut [RowStore<L>; MOST_BANDS],
+        thaw: &mut [Thaw; MOST_BANDS],
+        sum: &mut LaneSums<2>,
+    ) {
+        let Rows { day, months, pair, .. } = *rows;
+        let mut index = first;
+        while index < self.used.min(MOST_BANDS) {
+            let (row, month, store) = (&self.rows[index], &months[index], &mut stores[index].snow);
+            let mut pack = SnowStore { ice_mm: store.ice_mm.pair(pair), liquid_mm: store.liquid_mm.pair(pair) };
+            let precipitation_mm = day.precipitation_mm * row.precipitation_factor.pair(pair);
+            let snow = day.snow.pack::<WET>(
                 &mut pack,
-                day.precipitation_mm * row.precipitation_factor.pair(pair),
+                precipitation_mm,
                 month.warmth.pair(pair).at(&day.station),
                 day.melt_factor * row.melt_exposure.pair(pair),
                 month.most_sublimation_mm.pair(pair),
                 row.per_full_cover_mm.pair(pair),
             );
-            let asked_mm = day.reference_evaporation_mm * row.evaporation_factor.pair(pair);
-            let soil = row.soil.pair(pair).day(&mut soil_mm, curve, snow.outflow_mm, asked_mm, snow.covered_share);
-            store.snow.ice_mm.set_pair(pair, pack.ice_mm);
-            store.snow.liquid_mm.set_pair(pair, pack.liquid_mm);
-            store.soil_mm.set_pair(pair, soil_mm);
-
-            sum.snowfall_mm = sum.snowfall_mm + snow.snowfall_mm;
+            store.ice_mm.set_pair(pair, pack.ice_mm);
+            store.liquid_mm.set_pair(pair, pack.liquid_mm);
+            thaw[index] = Thaw { outflow_mm: snow.outflow_mm, covered_share: snow.covered_share };
+            if WET {
+                sum.snowfall_mm = sum.snowfall_mm + snow.snowfall_mm;
+            }
             sum.snow_water_mm = sum.snow_water_mm + snow.snow_water_mm;
             sum.sublimation_mm = sum.sublimation_mm + snow.sublimation_mm;
-            sum.soil_mm = sum.soil_mm + soil_mm;
-            sum.evaporation_mm = sum.evaporation_mm + soil.evaporation_mm;
-            sum.recharge_mm = sum.recharge_mm + soil.recharge_mm;
             index += STEP;
         }
-        sum
     }
 
     /// The month's rows of a day on which the wet bulb at the station's humidity tells rain from snow.
@@ -284,6 +341,26 @@ impl<const L: usize> Slopes<L> {
             out.warmth.snow_share = self.snow.of_offset(wet_bulb_c).snow_share;
         }
     }
+}
+
+/// What the soil of a row needs to know of its snow.
+#[derive(Clone, Copy, Default)]
+struct Thaw {
+    outflow_mm: Lanes<2>,
+    covered_share: Lanes<2>,
+}
+
+/// A day over all rows for one pair of lanes.
+#[derive(Clone, Copy)]
+struct Rows<'d, const L: usize, C> {
+    curve: C,
+    day: &'d PairDay,
+    months: &'d MonthRows<L>,
+    pair: usize,
+    /// Whether any rain or snow falls, in any lane.
+    wet: bool,
+    /// Whether it is dry and no snow lies anywhere, in either lane.
+    bare: bool,
 }
 
 /// The weather of a day as a pair of lanes meets it in every row.

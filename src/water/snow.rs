@@ -147,13 +147,14 @@ impl<const L: usize> SnowConstants<L> {
             above_c: air_c - self.melt_above_c,
             melt_per_rain: air_c * self.heat_of_rain_per_c,
         };
-        self.pack(store, precipitation_mm, warmth, melt_factor, most_sublimation_mm, self.per_full_cover_mm)
+        self.pack::<true>(store, precipitation_mm, warmth, melt_factor, most_sublimation_mm, self.per_full_cover_mm)
     }
 
-    /// The same from the parts of the day's temperature. Depths may be over any area, that of a band or of the basin, as
+    /// The same from the parts of the day's temperature; a day that is not `WET` has no precipitation, and the arithmetic that
+    /// would change nothing is left out. Depths may be over any area, that of a band or of the basin, as
     /// long as they are all over the same: `per_full_cover_mm` is one over the depth that covers the ground.
     #[inline(always)]
-    pub(super) fn pack(
+    pub(super) fn pack<const WET: bool>(
         &self,
         store: &mut SnowStore<L>,
         precipitation_mm: Lanes<L>,
@@ -162,11 +163,15 @@ impl<const L: usize> SnowConstants<L> {
         most_sublimation_mm: Lanes<L>,
         per_full_cover_mm: Lanes<L>,
     ) -> SnowDay<L> {
-        let caught_snow = within_one(warmth.snow_share) * precipitation_mm;
-        let rain_mm = precipitation_mm - caught_snow;
-        let snowfall_mm = caught_snow * self.snow_catch_factor;
-
-        let mut ice = store.ice_mm + snowfall_mm;
+        let nothing = Lanes::splat(0.0);
+        let (mut ice, mut liquid) = (store.ice_mm, store.liquid_mm);
+        let (mut snowfall_mm, mut rain_mm) = (nothing, nothing);
+        if WET {
+            let caught_snow = within_one(warmth.snow_share) * precipitation_mm;
+            rain_mm = precipitation_mm - caught_snow;
+            snowfall_mm = caught_snow * self.snow_catch_factor;
+            ice = ice + snowfall_mm;
+        }
         let sublimation_mm = most_sublimation_mm.least(ice);
         ice = ice - sublimation_mm;
 
@@ -174,9 +179,13 @@ impl<const L: usize> SnowConstants<L> {
         let by_degrees_mm = melt_factor * warmth.above_c;
         let thawing_mm = by_degrees_mm.positive();
         let freezing_mm = thawing_mm - by_degrees_mm;
-        let melt_mm = (thawing_mm + rain_mm * warmth.melt_per_rain.positive()).least(ice);
+        let mut melting_mm = thawing_mm;
+        if WET {
+            melting_mm = melting_mm + rain_mm * warmth.melt_per_rain.positive();
+        }
+        let melt_mm = melting_mm.least(ice);
         ice = ice - melt_mm;
-        let mut liquid = store.liquid_mm + (rain_mm + melt_mm);
+        liquid = liquid + if WET { rain_mm + melt_mm } else { melt_mm };
 
         let refreeze_mm = (self.refreeze_share * freezing_mm).least(liquid);
         liquid = liquid - refreeze_mm;

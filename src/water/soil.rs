@@ -73,10 +73,24 @@ impl<const L: usize> SoilConstants<L> {
         let wet_mm = filled_mm.least(self.capacity_mm);
         let overflow_mm = filled_mm - wet_mm;
 
-        let asked_mm = evaporation_mm * (Lanes::splat(1.0) - covered_share);
-        let moisture = (wet_mm * self.per_dry_mm).least(Lanes::splat(1.0));
-        let evaporation_mm = (asked_mm * moisture).least(wet_mm);
+        let evaporation_mm = self.evaporation_mm(wet_mm, evaporation_mm * (Lanes::splat(1.0) - covered_share));
         *soil_mm = wet_mm - evaporation_mm;
         SoilDay { recharge_mm: passed_mm + overflow_mm, evaporation_mm }
+    }
+
+    /// A day on which no water enters and no snow lies: the same numbers with less work. In the morning the soil holds no
+    /// more than its capacity. Gives what evaporates, mm.
+    #[inline(always)]
+    pub(super) fn dry_day(&self, soil_mm: &mut Lanes<L>, evaporation_mm: Lanes<L>) -> Lanes<L> {
+        let evaporation_mm = self.evaporation_mm(*soil_mm, evaporation_mm);
+        *soil_mm = *soil_mm - evaporation_mm;
+        evaporation_mm
+    }
+
+    /// What soil that holds `wet_mm` gives when `asked_mm` is asked.
+    #[inline(always)]
+    fn evaporation_mm(&self, wet_mm: Lanes<L>, asked_mm: Lanes<L>) -> Lanes<L> {
+        let moisture = (wet_mm * self.per_dry_mm).least(Lanes::splat(1.0));
+        (asked_mm * moisture).least(wet_mm)
     }
 }

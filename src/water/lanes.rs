@@ -3,7 +3,7 @@
 //! Plain arrays, no intrinsics: the compiler turns the loops into vector instructions where the target has them, and
 //! every lane gets the same bits as it would alone.
 
-use core::ops::{Add, Mul, Sub};
+use core::ops::{Add, Div, Mul, Sub};
 
 /// `L` numbers side by side.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -36,13 +36,20 @@ pub fn square_root(x: f64) -> f64 {
 }
 
 /// A number, or a few side by side: what a chain of stores is written for once.
-pub trait Number: Copy + Add<Output = Self> + Sub<Output = Self> + Mul<Output = Self> {
+pub trait Number:
+    Copy + Add<Output = Self> + Sub<Output = Self> + Mul<Output = Self> + Div<Output = Self>
+{
     /// The same number in every lane.
     fn splat(x: f64) -> Self;
     /// The smaller, lane by lane.
     fn least(self, other: Self) -> Self;
-    /// Zero where negative.
-    fn positive(self) -> Self;
+    /// The larger, lane by lane; `other` where this is not a number.
+    fn most(self, other: Self) -> Self;
+    /// Zero where negative or not a number.
+    #[inline(always)]
+    fn positive(self) -> Self {
+        self.most(Self::splat(0.0))
+    }
 }
 
 impl Number for f64 {
@@ -55,8 +62,8 @@ impl Number for f64 {
         least(self, other)
     }
     #[inline(always)]
-    fn positive(self) -> Self {
-        most(self, 0.0)
+    fn most(self, other: Self) -> Self {
+        most(self, other)
     }
 }
 
@@ -70,8 +77,8 @@ impl<const L: usize> Number for Lanes<L> {
         self.zip(other, least)
     }
     #[inline(always)]
-    fn positive(self) -> Self {
-        self.map(|x| most(x, 0.0))
+    fn most(self, other: Self) -> Self {
+        self.zip(other, most)
     }
 }
 
@@ -155,5 +162,13 @@ impl<const L: usize> Mul for Lanes<L> {
     #[inline(always)]
     fn mul(self, other: Self) -> Self {
         self.zip(other, |a, b| a * b)
+    }
+}
+
+impl<const L: usize> Div for Lanes<L> {
+    type Output = Self;
+    #[inline(always)]
+    fn div(self, other: Self) -> Self {
+        self.zip(other, |a, b| a / b)
     }
 }

@@ -14,6 +14,7 @@
 //! Tried on Linux under X11. The window should also work under Wayland, on Windows and on macOS: never tried there.
 
 pub mod choose;
+pub mod file;
 pub mod hands;
 pub mod pictures;
 mod run;

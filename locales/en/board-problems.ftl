@@ -34,3 +34,5 @@ problem-board-input-twice = Input { $input } is used twice. The other is in line
     .remedy = Each knob has an input of its own. Check the wires.
 problem-board-dial-twice = Two hands turn the dial “{ $dial }”. The other is in line { $line }.
     .remedy = Let only one of them turn it. Two knobs would pull it to and fro.
+problem-board-two-monitors = There are two monitors, and only one can be used.
+    .remedy = Keep one of the two. Small panels may be as many as there are wires for.

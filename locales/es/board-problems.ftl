@@ -34,3 +34,5 @@ problem-board-input-twice = La entrada { $input } se usa dos veces. La otra est�
     .remedy = Cada perilla lleva su propia entrada. Revise los cables.
 problem-board-dial-twice = Dos manos mueven la perilla «{ $dial }». La otra está en la línea { $line }.
     .remedy = Deje que una sola la mueva: si no, la llevarían de un lado a otro.
+problem-board-two-monitors = Hay dos monitores y solo se puede usar uno.
+    .remedy = Deje uno de los dos. Paneles pequeños puede haber tantos como alcancen los cables.

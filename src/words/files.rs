@@ -25,6 +25,7 @@ macro_rules! embedded {
 pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en":
         "board-problems.ftl",
+        "board.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",
@@ -57,6 +58,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "units.ftl";
     "es":
         "board-problems.ftl",
+        "board.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",

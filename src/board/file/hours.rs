@@ -59,7 +59,7 @@ impl Night {
 /// What screens do at night.
 #[derive(Clone, Copy, Debug, Default, PartialEq, Eq)]
 pub enum NightLight {
-    /// They are dimmed, and put out where they cannot be.
+    /// They are dimmed where their backlight can be; others stay as they are.
     #[default]
     Dim,
     /// They are put out.

@@ -14,9 +14,9 @@ mod units;
 
 use std::path::Path;
 
-use super::choose::ScreenKind;
+use crate::board::choose::ScreenKind;
 use crate::place::Text;
-use crate::place::problem::{Problem, Severity};
+use crate::place::problem::{Location, Problem, Severity};
 use crate::place::section::Section;
 use crate::place::text::need_names;
 use crate::place::tree::Sheet;
@@ -77,11 +77,7 @@ pub struct BoardOutcome {
 impl BoardFile {
     /// The kinds of its screens, the presenter's first.
     pub fn screen_kinds(&self) -> Vec<ScreenKind> {
-        let kind = |part: &ScreenPart| match part {
-            ScreenPart::Panel(_) => ScreenKind::Panel,
-            ScreenPart::Monitor(_) => ScreenKind::Framebuffer,
-        };
-        self.screens.iter().map(kind).collect()
+        self.screens.iter().map(ScreenPart::kind).collect()
     }
 }
 
@@ -115,12 +111,21 @@ fn whole(root: &Section<'_>, languages: &[&'static str]) -> Option<BoardFile> {
         root.sheet.tell(Problem::error(root.at.clone(), "problem-board-no-screen"));
     }
     let screens: Vec<Option<ScreenPart>> = sections.iter().map(|part| read_screens::screen(part, &uses)).collect();
+    if let Some(at) = second_monitor(&sections, &screens) {
+        root.sheet.tell(Problem::error(at, "problem-board-two-monitors"));
+    }
     let hands = read_hands::hands(&root.sections("hand"), screens.len(), &uses);
     let idle = hours::idle(&root.section("idle"));
     let night = hours::night(&root.section("night"));
     let start = start(&root.section("start"), languages);
     let screens = screens.into_iter().collect::<Option<Vec<ScreenPart>>>()?;
     Some(BoardFile { name, processor, gpio_chip, reserved_pins, screens, hands: hands?, idle, night, start })
+}
+
+/// Where a second monitor stands: one program sets the mode of one monitor of a card.
+fn second_monitor(sections: &[Section<'_>], screens: &[Option<ScreenPart>]) -> Option<Location> {
+    let monitors = sections.iter().zip(screens).filter(|(_, part)| matches!(part, Some(ScreenPart::Monitor(_))));
+    monitors.skip(1).map(|(section, _)| section.at.clone()).next()
 }
 
 fn start(section: &Section<'_>, languages: &[&'static str]) -> Start {
@@ -133,7 +138,8 @@ fn start(section: &Section<'_>, languages: &[&'static str]) -> Start {
 /// The file of a device: a whole path below `/dev`.
 fn device(section: &Section<'_>, key: &'static str) -> Option<String> {
     let (path, at) = section.text(key)?;
-    let plain = path.strip_prefix("/dev/").is_some_and(|rest| !rest.is_empty() && !rest.split('/').any(|part| part == ".."));
+    let plain =
+        path.strip_prefix("/dev/").is_some_and(|rest| !rest.is_empty() && !rest.split('/').any(|part| part == ".."));
     if !plain {
         section.sheet.tell(Problem::error(at, "problem-board-device").with("key", key).with("value", path));
     }

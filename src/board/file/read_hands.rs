@@ -56,7 +56,8 @@ const KINDS: [(&str, Kind); 6] = [
 /// Reads every `[[hand]]` of a board with `screens` screens; `None` where any has errors, which were told.
 pub(super) fn hands(sections: &[Section<'_>], screens: usize, uses: &Uses) -> Option<Vec<HandPart>> {
     let mut dials: Vec<(Dial, Location)> = Vec::new();
-    let hands: Vec<Option<HandPart>> = sections.iter().map(|section| hand(section, screens, uses, &mut dials)).collect();
+    let hands: Vec<Option<HandPart>> =
+        sections.iter().map(|section| hand(section, screens, uses, &mut dials)).collect();
     hands.into_iter().collect()
 }
 
@@ -150,12 +151,8 @@ fn button(section: &Section<'_>, uses: &Uses) -> Option<ButtonPart> {
 }
 
 fn pull(section: &Section<'_>) -> Pull {
-    let pulls = [
-        ("up", Pull::Up),
-        ("down", Pull::Down),
-        ("outside_up", Pull::OutsideUp),
-        ("outside_down", Pull::OutsideDown),
-    ];
+    let pulls =
+        [("up", Pull::Up), ("down", Pull::Down), ("outside_up", Pull::OutsideUp), ("outside_down", Pull::OutsideDown)];
     section.choice("pull", &pulls).map_or_else(Pull::default, |(pull, _)| pull)
 }
 

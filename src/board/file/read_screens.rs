@@ -68,8 +68,8 @@ fn panel(section: &Section<'_>, uses: &Uses) -> Option<PanelPart> {
     let pixels = |key, number| whole(section, key, number).map(|value| value as u16);
     let (width_px, height_px) = (pixels("width_px", &width)?, pixels("height_px", &height)?);
     let (offset_x_px, offset_y_px) = (pixels("offset_x_px", &offset_x)?, pixels("offset_y_px", &offset_y)?);
-    has_a_layout(section, turned.picture(width_px, height_px), &width.at);
     let (chip, _) = chip?;
+    has_a_layout(section, turned.picture(width_px, height_px), &width.at);
     Some(PanelPart {
         chip,
         width_px,
@@ -116,7 +116,8 @@ fn turned(section: &Section<'_>) -> Turned {
 fn word_bits(section: &Section<'_>, chip: Option<PanelChip>) -> WordBits {
     let Some(number) = section.number("word_bits", PLAIN, Limits(8.0, 16.0)) else { return WordBits::Eight };
     let sixteen = number.value == 16.0;
-    if number.value != 8.0 && !sixteen && !number.value.is_nan() || sixteen && chip.is_some_and(|chip| chip != PanelChip::Ili9486)
+    if number.value != 8.0 && !sixteen && !number.value.is_nan()
+        || sixteen && chip.is_some_and(|chip| chip != PanelChip::Ili9486)
     {
         section.sheet.tell(Problem::error(number.at, "problem-board-word-bits").with("value", number.value));
     }
@@ -187,8 +188,11 @@ fn monitor(section: &Section<'_>) -> Option<MonitorPart> {
         }
     };
     let turned = turned(section);
-    let ways =
-        [("either", MonitorWay::Either), ("mode_setting", MonitorWay::ModeSetting), ("framebuffer", MonitorWay::Framebuffer)];
+    let ways = [
+        ("either", MonitorWay::Either),
+        ("mode_setting", MonitorWay::ModeSetting),
+        ("framebuffer", MonitorWay::Framebuffer),
+    ];
     let way = section.choice("way", &ways).map_or_else(MonitorWay::default, |(way, _)| way);
     let subpixels = [("rgb", false), ("bgr", true)];
     let blue_first = section.choice("subpixels", &subpixels).is_some_and(|(blue_first, _)| blue_first);

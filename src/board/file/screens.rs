@@ -2,6 +2,7 @@
 
 use super::chips::PanelChip;
 use super::pins::Pin;
+use crate::board::choose::ScreenKind;
 
 /// One screen.
 #[derive(Clone, Debug, PartialEq, Eq)]
@@ -10,6 +11,16 @@ pub enum ScreenPart {
     Panel(PanelPart),
     /// A monitor, or a display that the system treats as one.
     Monitor(MonitorPart),
+}
+
+impl ScreenPart {
+    /// What it is.
+    pub const fn kind(&self) -> ScreenKind {
+        match self {
+            Self::Panel(_) => ScreenKind::Panel,
+            Self::Monitor(_) => ScreenKind::Framebuffer,
+        }
+    }
 }
 
 /// How far a picture is turned on its glass, clockwise.

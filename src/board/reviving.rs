@@ -155,7 +155,7 @@ impl Screen for Reviving {
     }
 
     fn light(&mut self, light: Light) -> bool {
-        let wakes = self.light == Light::Off;
+        let wakes = self.light == Light::Off && light != Light::Off;
         self.light = light;
         if wakes && self.surface.as_ref().is_some_and(|surface| surface.starts_anew_after_dark()) {
             if let Err(reason) = self.try_open() {

@@ -44,6 +44,11 @@ impl PanelChip {
         !matches!(self, Self::St7789)
     }
 
+    /// Whether its columns usually run from right to left on the glass.
+    pub(super) const fn usually_mirrored(self) -> bool {
+        !matches!(self, Self::St7789)
+    }
+
     /// Whether its glass usually needs inverting.
     pub(super) const fn usually_inverted(self) -> bool {
         matches!(self, Self::St7789)

@@ -57,6 +57,7 @@ fn panel(section: &Section<'_>, uses: &Uses) -> Option<PanelPart> {
     let turned = turned(section);
     let subpixels = [("rgb", false), ("bgr", true)];
     let blue_first = section.choice("subpixels", &subpixels).map(|(blue_first, _)| blue_first);
+    let mirrored = section.flag_or("mirrored", chip.as_ref().is_some_and(|(chip, _)| chip.usually_mirrored()));
     let inverted = section.flag_or("inverted", chip.as_ref().is_some_and(|(chip, _)| chip.usually_inverted()));
     let word_bits = word_bits(section, chip.as_ref().map(|(chip, _)| *chip));
     let at = spi(section, uses);
@@ -77,6 +78,7 @@ fn panel(section: &Section<'_>, uses: &Uses) -> Option<PanelPart> {
         offset_x_px,
         offset_y_px,
         turned,
+        mirrored,
         blue_first: blue_first.unwrap_or(chip.usually_blue_first()),
         inverted,
         word_bits,

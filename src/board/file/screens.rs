@@ -77,6 +77,8 @@ pub struct PanelPart {
     pub offset_y_px: u16,
     /// How far the picture is turned.
     pub turned: Turned,
+    /// Whether the chip's columns run from right to left on the glass.
+    pub mirrored: bool,
     /// Whether the glass has blue where the chip expects red.
     pub blue_first: bool,
     /// Whether the glass shows colours the wrong way round unless told to invert.

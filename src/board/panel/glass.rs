@@ -74,10 +74,13 @@ impl<R: OutputPin + 'static, D: DelayNs + 'static> Means<'_, R, D> {
             Turned::By180 => Rotation::Deg180,
             Turned::By270 => Rotation::Deg270,
         };
+        // Flipped before it is turned: it is the columns of the chip that run the other way, not those of the picture.
+        let upright = if part.mirrored { Orientation::new().flip_horizontal() } else { Orientation::new() };
+        let orientation = upright.rotate(rotation);
         let builder = Builder::new(model, wire)
             .display_size(part.width_px, part.height_px)
             .display_offset(part.offset_x_px, part.offset_y_px)
-            .orientation(Orientation::new().rotate(rotation))
+            .orientation(orientation)
             .color_order(if part.blue_first { ColorOrder::Bgr } else { ColorOrder::Rgb })
             .invert_colors(if part.inverted { ColorInversion::Inverted } else { ColorInversion::Normal });
         match reset {

@@ -5,7 +5,7 @@ use std::rc::Rc;
 use std::time::{Duration, Instant};
 
 use deshielo::board::reviving::{EVERY, LONGEST_WAIT, Notice, Reviving, Surface};
-use deshielo::board::{Frame, FrameSize, Light, Screen, ScreenKind};
+use deshielo::board::{Caption, Frame, FrameSize, HandEvent, Instrument, Light, Screen, ScreenKind, Stage};
 use embedded_graphics::primitives::{PointsIter, Rectangle};
 use proptest::prelude::*;
 
@@ -123,6 +123,56 @@ fn a_morning_starts_a_panel_anew() {
     world.works.set(false);
     screen.light(Light::Off);
     assert!(!screen.is_there());
+}
+
+/// Shows one frame that never moves, at a light that may change.
+struct Still(Drawn, Rc<Cell<Light>>);
+
+impl Instrument for Still {
+    fn event(&mut self, _: HandEvent) {}
+
+    fn frame(&mut self, size: FrameSize, _: bool) -> Frame<'_> {
+        Frame { size, pixels: &self.0.pixels, texts: &[] }
+    }
+
+    fn wants_tick(&self) -> Option<Duration> {
+        None
+    }
+
+    fn done(&self) -> bool {
+        false
+    }
+
+    fn caption(&self) -> Caption<'_> {
+        Caption::default()
+    }
+
+    fn light(&self) -> Light {
+        self.1.get()
+    }
+}
+
+#[test]
+fn a_stage_on_which_nothing_moves_still_looks_after_its_screens() {
+    let world = Rc::new(World::default());
+    let mut drawn = Drawn::black(SIZE);
+    drawn.scribble(&mut Dice::new(11));
+    let (pixels, light) = (drawn.pixels.clone(), Rc::new(Cell::new(Light::Full)));
+    let mut stage = Stage::new(Still(drawn, Rc::clone(&light)));
+    stage.add(Box::new(screen(&world)));
+    stage.refresh().unwrap();
+    world.works.set(true);
+    wait(&world, EVERY);
+    // Nobody touches anything: the stage itself says when it wants to be woken.
+    let due = stage.next_tick().unwrap();
+    assert!(due <= Instant::now() + EVERY);
+    std::thread::sleep(due.saturating_duration_since(Instant::now()));
+    stage.tick();
+    stage.refresh().unwrap();
+    assert!(*world.shown.borrow() == pixels);
+    light.set(Light::Dim);
+    stage.refresh().unwrap();
+    assert_eq!((world.light.get(), world.told.borrow().len()), (Light::Dim, 2));
 }
 
 proptest! {

@@ -94,7 +94,7 @@ impl Kind {
     fn assert_shows(self, chip: &Shared, drawn: &Drawn, degrees: u16, when: &str) {
         let chip = chip.borrow();
         let (width, height) = (u32::from(self.glass.0), u32::from(self.glass.1));
-        let (across, down) = if degrees % 180 == 0 { (width, height) } else { (height, width) };
+        let (across, down) = if degrees.is_multiple_of(180) { (width, height) } else { (height, width) };
         let (wide, high) = (u32::from(drawn.size.width), u32::from(drawn.size.height));
         let (left, top) = ((across - wide) / 2, (down - high) / 2);
         for y in 0..down {

@@ -1,6 +1,6 @@
 //! The panel of a board file on this machine's own bus and pins.
 
-use std::fmt::Debug;
+use std::fmt::Display;
 use std::path::Path;
 
 use linux_embedded_hal::gpio_cdev::{Chip, LineRequestFlags};
@@ -24,8 +24,8 @@ const HOLDER: &str = "deshielo";
 /// What the system says, with the device that it says it of.
 pub fn open(part: &PanelPart, gpio_chip: &str) -> Result<Box<dyn Surface>, String> {
     let device = part.at.device();
-    let of_device = |error: &dyn Debug| format!("{device}: {error:?}");
-    let mut bus = SpidevDevice::open(&device).map_err(|error| of_device(&error))?;
+    let of_device = |error: &dyn Display| format!("{device}: {error}");
+    let mut bus = SpidevDevice::open(&device).map_err(|error| of_device(error.inner()))?;
     let options =
         SpidevOptions::new().bits_per_word(8).max_speed_hz(part.speed_hz).mode(SpiModeFlags::SPI_MODE_0).build();
     bus.0.configure(&options).map_err(|error| of_device(&error))?;
@@ -44,7 +44,7 @@ pub fn open(part: &PanelPart, gpio_chip: &str) -> Result<Box<dyn Surface>, Strin
 
 /// A line as an output that begins high or low.
 fn output(gpio_chip: &str, pin: Pin, high: bool) -> Result<CdevPin, String> {
-    let said = |error: &dyn Debug| format!("{gpio_chip}, {}: {error:?}", pin.0);
+    let said = |error: &dyn Display| format!("{gpio_chip}, {}: {error}", pin.0);
     let mut chip = Chip::new(gpio_chip).map_err(|error| said(&error))?;
     let line = chip.get_line(pin.0.into()).map_err(|error| said(&error))?;
     let handle = line.request(LineRequestFlags::OUTPUT, high.into(), HOLDER).map_err(|error| said(&error))?;

@@ -1,6 +1,8 @@
 //! The screens of a board file, in `show`.
 
+use std::cell::Cell;
 use std::path::{Path, PathBuf};
+use std::rc::Rc;
 
 use crate::board::file::{BoardFile, MonitorPart, ScreenPart, read_board};
 use crate::board::reviving::{Notice, Opener, Reviving, Told};
@@ -45,7 +47,9 @@ pub(super) fn open<'a>(
     gpio_chip: &str,
     words: &Words,
 ) -> Result<Vec<Box<dyn Screen>>, ScreenError> {
-    let (mut screens, mut any, mut first): (Vec<Box<dyn Screen>>, bool, Option<ScreenError>) = Default::default();
+    let mut screens: Vec<Box<dyn Screen>> = Vec::new();
+    let (mut any, mut lost) = (false, Vec::new());
+    let begun = Rc::new(Cell::new(false));
     for part in parts {
         let (kind, size) = match part {
             ScreenPart::Panel(panel) => {
@@ -62,18 +66,26 @@ pub(super) fn open<'a>(
         // Tried once by itself, so that the reason is at hand where nothing works.
         let tried = opener();
         if let Err(reason) = &tried {
-            first.get_or_insert_with(|| ScreenError::new(kind, reason));
+            lost.push(ScreenError::new(kind, reason));
         }
         let mut tried = Some(tried);
         let open: Opener = Box::new(move || tried.take().unwrap_or_else(&mut opener));
-        let screen = Reviving::new(kind, size.unwrap_or(MONITOR), open, told(kind, words));
+        let (mut tell, speaks) = (told(kind, words), Rc::clone(&begun));
+        let told: Told = Box::new(move |notice| {
+            if speaks.get() {
+                tell(notice);
+            }
+        });
+        let screen = Reviving::new(kind, size.unwrap_or(MONITOR), open, told);
         any |= screen.is_there();
         screens.push(Box::new(screen));
     }
-    match first {
-        Some(error) if !any => Err(error),
-        _ => Ok(screens),
+    if !any && !lost.is_empty() {
+        return Err(lost.swap_remove(0));
     }
+    begun.set(true);
+    lost.into_iter().for_each(|error| told(error.screen, words)(Notice::Lost(error)));
+    Ok(screens)
 }
 
 #[cfg(all(feature = "board", target_os = "linux"))]

@@ -11,7 +11,8 @@ use std::path::{Path, PathBuf};
 ///   A lesson is read for a place, and with its reader of files.
 /// * `words` know units and the keys of what they name, no numbers of a run.
 /// * `picture` draws values: plain data of the water and the signs, never what runs them.
-/// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not water.
+/// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not
+///   water: of a place it has the reader of files, of the water the names of the dials.
 const MAY_NAME: [(&str, &[&str]); 12] = [
     ("water", &[]),
     ("signs", &["water"]),
@@ -26,7 +27,20 @@ const MAY_NAME: [(&str, &[&str]); 12] = [
         &["signs", "words", "water::valley", "water::calendar", "water::dials", "water::ledger", "water::units"],
     ),
     ("session", &["picture", "words", "signs", "water", "place", "lesson"]),
-    ("board", &["picture", "session"]),
+    (
+        "board",
+        &[
+            "picture",
+            "session",
+            "place::Text",
+            "place::problem",
+            "place::section",
+            "place::text",
+            "place::tree",
+            "place::unit_suffix",
+            "water::dials",
+        ],
+    ),
     ("keep", &["water::dials", "session"]),
 ];
 const ROOTS: [&str; 3] = ["commands", "lib", "main"];

@@ -14,8 +14,15 @@
 //! Tried on Linux under X11. The window should also work under Wayland, on Windows and on macOS: never tried there.
 
 pub mod choose;
+pub mod file;
 pub mod hands;
+pub mod light;
+pub mod monitor;
+#[cfg(all(feature = "board", target_os = "linux"))]
+pub mod panel;
 pub mod pictures;
+pub mod placing;
+pub mod reviving;
 mod run;
 pub mod screen;
 pub mod size;
@@ -27,6 +34,7 @@ pub mod window;
 
 pub use choose::{Choice, ScreenKind};
 pub use hands::{HandEvent, Key, PointerPhase, Post};
+pub use light::Light;
 pub use run::run;
 pub use screen::{Caption, Frame, Instrument, PlacedText, PlacedTexts, Screen, ScreenError};
 pub use size::{FrameSize, LAYOUTS};

@@ -3,7 +3,7 @@
 //! Every question is remembered. When a [`Section`] ends, an entry that nobody asked for is an unknown key, and the
 //! nearest key that somebody did ask for is offered.
 
-use std::cell::RefCell;
+use std::cell::{Cell, RefCell};
 
 use super::problem::{Location, Problem};
 use super::tree::{Entry, Kind, Sheet, Table, Value};
@@ -50,7 +50,7 @@ pub(crate) struct Section<'a> {
     pub present: bool,
     asked: RefCell<Vec<(&'static str, Option<Units>)>>,
     missing: RefCell<Vec<(String, Missing)>>,
-    rest_is_free: bool,
+    rest_is_free: Cell<bool>,
 }
 
 impl<'a> Section<'a> {
@@ -69,14 +69,19 @@ impl<'a> Section<'a> {
             present,
             asked: RefCell::default(),
             missing: RefCell::default(),
-            rest_is_free: false,
+            rest_is_free: Cell::new(false),
         }
     }
 
     /// Entries in the order of the file, for tables whose keys are free; none of them is then unknown.
     pub fn free_entries(&mut self) -> &'a [Entry] {
-        self.rest_is_free = true;
+        self.allow_rest();
         &self.table.entries
+    }
+
+    /// Leaves every key that nobody asks for unjudged, where what may be there is not known.
+    pub fn allow_rest(&self) {
+        self.rest_is_free.set(true);
     }
 
     /// Where this entry's key stands.
@@ -300,12 +305,20 @@ impl<'a> Section<'a> {
         found.map(|(_, choice)| (*choice, at))
     }
 
+    /// One of a few words, which the file must give.
+    pub fn need_choice<T: Copy>(&self, key: &'static str, choices: &[(&'static str, T)]) -> Option<(T, Location)> {
+        if self.table.get(key).is_none() {
+            self.tell_missing(key);
+        }
+        self.choice(key, choices)
+    }
+
     /// Says that every key not asked for is unknown, then what is missing.
     fn conclude(&self) {
         let asked = self.asked.borrow();
         let names: Vec<String> = asked.iter().flat_map(|(base, units)| written(base, *units)).collect();
         let mut explained: Vec<String> = Vec::new();
-        for entry in self.table.entries.iter().filter(|entry| !self.rest_is_free && !names.contains(&entry.key)) {
+        for entry in self.table.entries.iter().filter(|entry| !self.rest_is_free.get() && !names.contains(&entry.key)) {
             let problem = |message| Problem::error(self.key_at(entry), message).with("key", entry.key.clone());
             let in_other_unit: Vec<String> = asked
                 .iter()

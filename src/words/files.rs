@@ -24,6 +24,8 @@ macro_rules! embedded {
 /// Every `.ftl` file under `locales/`; a test holds this against the folder.
 pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en":
+        "board-problems.ftl",
+        "board.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",
@@ -55,6 +57,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "terms.ftl",
         "units.ftl";
     "es":
+        "board-problems.ftl",
+        "board.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",

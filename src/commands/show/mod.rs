@@ -1,5 +1,6 @@
 //! `show`: the running instrument on whatever screens are at hand, or as pictures in a folder.
 
+mod board;
 mod drawing;
 mod hands;
 mod pictures;
@@ -14,6 +15,7 @@ use super::speech::Speech;
 use super::spinner::Spinner;
 use super::tell;
 use crate::board::choose::{Why, can_show, choose};
+use crate::board::file::BoardFile;
 use crate::board::surroundings::{Surroundings, WindowChance};
 use crate::board::terminal::{Ability, Terminal};
 use crate::board::{Choice, FrameSize, Post, ScreenError, ScreenKind, Stage, run as play};
@@ -34,9 +36,16 @@ pub(super) fn usual(speech: &Speech) -> Result<(), Failure> {
 
 fn show(speech: &Speech, request: &Request) -> Result<(), Failure> {
     let words = &speech.words;
-    let mut around = Surroundings::look(Vec::new());
+    let of_board = request.board.as_ref().map(BoardFile::screen_kinds).unwrap_or_default();
+    let mut around = Surroundings::look(of_board);
     for &kind in &request.screens {
         can_show(kind, &around).map_err(|why| refuse(kind, why, words))?;
+    }
+    if request.screens.is_empty() {
+        around.board_file.iter().try_for_each(|&kind| can_show(kind, &around)).map_err(|why| {
+            let kind = around.board_file[0];
+            refuse(kind, why, words)
+        })?;
     }
     let player = open(speech, request)?;
     if !request.screens.is_empty() {
@@ -61,7 +70,9 @@ fn show(speech: &Speech, request: &Request) -> Result<(), Failure> {
 
 fn show_chosen(choice: Choice, player: Player, speech: &Speech, request: &Request) -> Result<(), Failure> {
     tell_choice(choice, &speech.words);
-    show_on(&[choice.kind], player, speech, request).map_err(|trouble| trouble.told(&speech.words))?;
+    let of_board = request.board.as_ref().map(BoardFile::screen_kinds).unwrap_or_default();
+    let screens = if of_board.is_empty() { vec![choice.kind] } else { of_board };
+    show_on(&screens, player, speech, request).map_err(|trouble| trouble.told(&speech.words))?;
     // Whoever did not ask for pictures gets the answer in words as well.
     if choice.kind == ScreenKind::Pictures { tell::summary(speech, &request.place) } else { Ok(()) }
 }
@@ -104,6 +115,7 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
     let asked = |kind| screens.iter().filter(move |&&screen| screen == kind).count();
     let (windows, terminals) = (asked(ScreenKind::Window), asked(ScreenKind::Terminal));
     let mut stage = Stage::new(player);
+    let on_board = add_board_screens(&mut stage, screens, speech, request)?;
     if windows > 0 {
         return show_in_windows(stage, windows, terminals > 0, request.size);
     }
@@ -111,8 +123,32 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
         let (post, hands) = Post::channel();
         stage.add(Box::new(terminal(None, request.size, &post)?));
         play(&mut stage, &hands)?;
+    } else if on_board {
+        let (_post, hands) = Post::channel();
+        play(&mut stage, &hands)?;
     }
     Ok(())
+}
+
+/// Adds the panels and monitors among `screens`; `true` where there are any.
+fn add_board_screens(
+    stage: &mut Stage<Player>,
+    screens: &[ScreenKind],
+    speech: &Speech,
+    request: &Request,
+) -> Result<bool, ScreenError> {
+    let any = [board::any_monitor()];
+    let (parts, gpio_chip) = match &request.board {
+        Some(file) => (file.screens.as_slice(), file.gpio_chip.as_str()),
+        None => (any.as_slice(), ""),
+    };
+    let asked = parts.iter().filter(|part| screens.contains(&part.kind()));
+    let opened = board::open(asked, gpio_chip, &speech.words)?;
+    let on_board = !opened.is_empty();
+    opened.into_iter().for_each(|screen| {
+        stage.add(screen);
+    });
+    Ok(on_board)
 }
 
 #[cfg(feature = "window")]

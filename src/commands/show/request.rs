@@ -4,6 +4,8 @@ use std::path::PathBuf;
 
 use clap::ArgMatches;
 
+use super::board;
+use crate::board::file::BoardFile;
 use crate::board::{FrameSize, LAYOUTS, ScreenKind};
 use crate::commands::failure::Failure;
 use crate::commands::places;
@@ -16,6 +18,8 @@ use crate::words::{System, Words};
 pub(super) struct Request {
     /// The place.
     pub place: PathBuf,
+    /// The board whose screens are used.
+    pub board: Option<BoardFile>,
     /// Screens that were named; none leaves the choice to the program.
     pub screens: Vec<ScreenKind>,
     /// The layout, where one was asked for.
@@ -34,6 +38,7 @@ impl Default for Request {
     fn default() -> Self {
         Self {
             place: places::USUAL.into(),
+            board: None,
             screens: Vec::new(),
             size: None,
             into: None,
@@ -76,8 +81,12 @@ impl Request {
                 return Err(refuse(unknown_choice("--theme", other, &["light", "dark", "sunlight"], words)));
             }
         };
+        let board_file = path("board");
+        let board = board_file.as_deref().map(|file| board::read(file, words)).transpose()?;
+        let board_place = || board::place(board.as_ref()?, board_file.as_deref()?);
         Ok(Self {
-            place: path("place").unwrap_or_else(|| places::USUAL.into()),
+            place: path("place").or_else(board_place).unwrap_or_else(|| places::USUAL.into()),
+            board,
             screens,
             size,
             into: path("into"),

@@ -74,7 +74,7 @@ fn closing_mark(line: &str, from: usize) -> Option<usize> {
 }
 
 /// A name as it is compared: capitals, outer spaces and runs of spaces do not count.
-pub(super) fn plain_name(name: &str) -> String {
+pub(in crate::place) fn plain_name(name: &str) -> String {
     name.split_whitespace().collect::<Vec<_>>().join(" ").to_lowercase()
 }
 

@@ -44,6 +44,7 @@ pub use plan::{ColumnPlan, DateOrder, DatePlan, Encoding, GapFill, GapRule, Reco
 pub use unit::MeasureUnit;
 
 use super::problem::Problem;
+pub(super) use cells::plain_name;
 use cells::{recognise_delimiter, split_cells};
 use notes::Notes;
 use table::Sheet;

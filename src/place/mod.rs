@@ -35,6 +35,7 @@ mod slopes;
 mod small_table;
 mod source;
 mod station_days;
+pub mod terrain;
 pub(crate) mod text;
 pub(crate) mod tree;
 pub(crate) mod unit_suffix;

@@ -29,6 +29,7 @@ mod look;
 mod measure;
 mod notes;
 mod number;
+mod peek;
 mod plan;
 mod rows;
 mod table;
@@ -40,6 +41,7 @@ use chrono::NaiveDate;
 pub use checksum::checksum_of;
 pub use look::{ColumnLook, RecordLook, Spread};
 pub use measure::Measure;
+pub use peek::{ColumnRole, DateReason, Peek, PeekColumn, UnitReason, peek};
 pub use plan::{ColumnPlan, DateOrder, DatePlan, Encoding, GapFill, GapRule, RecordPlan};
 pub use unit::MeasureUnit;
 

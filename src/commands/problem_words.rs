@@ -70,8 +70,10 @@ mod tests {
     fn numbers_keep_the_digits_of_the_file() {
         let said: Vec<_> = [0.0001, 12.5, -0.0, -1e308, 3.0].into_iter().map(as_in_file).collect();
         assert_eq!(said, ["0.0001", "12.5", "0", "-1e308", "3"]);
-        let worked_out: Vec<_> =
-            [96.423_456_789, 1.0 / 3.0, 2.0e6 / 7.0, -1.0 / 7.0e3, 1234.567, 86_400_000.0].into_iter().map(as_in_file).collect();
+        let worked_out: Vec<_> = [96.423_456_789, 1.0 / 3.0, 2.0e6 / 7.0, -1.0 / 7.0e3, 1234.567, 86_400_000.0]
+            .into_iter()
+            .map(as_in_file)
+            .collect();
         assert_eq!(worked_out, ["96.42", "0.3333", "285714", "-0.0001429", "1234.567", "86400000"]);
     }
 }

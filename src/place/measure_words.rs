@@ -127,7 +127,10 @@ pub fn measure_of_words(name: &str) -> Option<Measure> {
         return Some(Measure::TemperatureMean);
     }
     // A bare "minimum" beside no other word that could be measured is a temperature in every station's table.
-    if starts(&["temp", "air", "aire"]) || is(&["t"]) || (words.len() == 1 && (starts(&LOWEST[..1]) || starts(&HIGHEST[..1]))) {
+    if starts(&["temp", "air", "aire"])
+        || is(&["t"])
+        || (words.len() == 1 && (starts(&LOWEST[..1]) || starts(&HIGHEST[..1])))
+    {
         return match extreme() {
             Some(false) => Some(Measure::TemperatureMin),
             Some(true) => Some(Measure::TemperatureMax),

@@ -22,6 +22,7 @@ pub mod exchange;
 mod fields;
 mod gates;
 mod measure_words;
+pub mod preparing;
 pub mod problem;
 mod reading;
 pub mod record;

@@ -120,7 +120,11 @@ fn years(root: &Section<'_>) -> Years {
     };
     Years::from_key(&word).unwrap_or_else(|| {
         let at: Location = root.value_at(value);
-        root.sheet.tell(Problem::error(at, "problem-years").with_nearest(&word, ["all", "dry", "middling", "wet"]).with("value", word));
+        root.sheet.tell(
+            Problem::error(at, "problem-years")
+                .with_nearest(&word, ["all", "dry", "middling", "wet"])
+                .with("value", word),
+        );
         Years::All
     })
 }

@@ -148,8 +148,8 @@ fn is_ragged(net: &NetCdf) -> bool {
 fn one_series(net: &NetCdf, variable: &Variable, days: &[ExchangeDay]) -> Result<ExchangeSeries, Fault> {
     let about = &variable.attributes;
     let long = [about.text("standard_name"), about.text("long_name"), about.text("cell_methods")];
-    let measure = measure_of_words(&format!("{} {}", long.join(" "), variable.name))
-        .or_else(|| measure_of_words(&variable.name));
+    let measure =
+        measure_of_words(&format!("{} {}", long.join(" "), variable.name)).or_else(|| measure_of_words(&variable.name));
     let unit_text = about.text("units").to_owned();
     let unit = unit_of(&unit_text, measure);
     let scale = unit.map_or(1.0, |(_, scale)| scale);

@@ -87,7 +87,8 @@ impl Since {
         }
         let (whole, past) = (day.abs() as u64, day < 0.0);
         let from = self.from.date;
-        let date = if past { from.checked_sub_days(Days::new(whole)) } else { from.checked_add_days(Days::new(whole)) }?;
+        let date =
+            if past { from.checked_sub_days(Days::new(whole)) } else { from.checked_add_days(Days::new(whole)) }?;
         YEARS.contains(&date.year()).then_some(Instant { date, second: (seconds - day * SECONDS_PER_DAY).max(0.0) })
     }
 }
@@ -117,7 +118,9 @@ mod tests {
         ] {
             assert_eq!(instant(text), Some(("2004-05-31".into(), second)), "{text}");
         }
-        for text in ["", "2004-05", "2004-02-30", "2004-05-31T25:00", "31/05/2004", "2004-05-31Tx:y", "-5-5-5", "20041-05-31"] {
+        for text in
+            ["", "2004-05", "2004-02-30", "2004-05-31T25:00", "31/05/2004", "2004-05-31Tx:y", "-5-5-5", "20041-05-31"]
+        {
             assert_eq!(instant(text), None, "{text}");
         }
     }

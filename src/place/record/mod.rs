@@ -18,6 +18,7 @@
 //! assert_eq!((record.days, record.columns[0].values[1]), (2, 10.0));
 //! ```
 
+mod append;
 mod cells;
 mod checksum;
 mod dates;
@@ -38,6 +39,7 @@ mod unit;
 
 use chrono::NaiveDate;
 
+pub use append::{Appended, append, with_open_gaps};
 pub use checksum::checksum_of;
 pub use look::{ColumnLook, RecordLook, Spread};
 pub use measure::Measure;

@@ -9,8 +9,7 @@ const HIGHEST_M: f64 = 9_000.0;
 const BINS: usize = (HIGHEST_M - LOWEST_M) as usize;
 
 /// Shares of the area at which the curve has a point: close together at the ends, where the ground is steepest.
-const SHARES: [f64; 15] =
-    [0.0, 0.025, 0.05, 0.1, 0.2, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 0.95, 0.975, 1.0];
+const SHARES: [f64; 15] = [0.0, 0.025, 0.05, 0.1, 0.2, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 0.95, 0.975, 1.0];
 
 /// A point of the curve.
 #[derive(Clone, Copy, Debug, PartialEq)]

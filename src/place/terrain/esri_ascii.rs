@@ -93,9 +93,8 @@ pub(super) fn open<'f>(files: &TerrainFiles<'f>) -> Result<(Geometry, AsciiCells
     let (columns, rows) = (header.side(header.columns), header.side(header.rows));
     let step_x = header.cell.or(header.cell_x);
     let step_y = header.cell.or(header.cell_y);
-    let corner = |corner: Option<f64>, center: Option<f64>, step: Option<f64>| {
-        corner.or_else(|| Some(center? - step? / 2.0))
-    };
+    let corner =
+        |corner: Option<f64>, center: Option<f64>, step: Option<f64>| corner.or_else(|| Some(center? - step? / 2.0));
     let west = corner(header.x_corner, header.x_center, step_x);
     let south = corner(header.y_corner, header.y_center, step_y);
     let lacking = [

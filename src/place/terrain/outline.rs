@@ -56,9 +56,7 @@ pub(super) fn read(file: &Path, bytes: &[u8]) -> Result<Outline, Box<Problem>> {
                 Coordinates::from_key(name)
             };
             let short: String = name.chars().take(60).collect();
-            known.ok_or_else(|| {
-                Box::new(Problem::error(whole(file), "problem-terrain-code").with("text", short))
-            })?
+            known.ok_or_else(|| Box::new(Problem::error(whole(file), "problem-terrain-code").with("text", short)))?
         }
     };
     let on_globe = |(x, y): &(f64, f64)| x.abs() <= 180.0 && y.abs() <= 90.0;

@@ -19,7 +19,9 @@ pub(super) fn coordinates_of(text: &[u8]) -> Option<Coordinates> {
     let text = String::from_utf8_lossy(&text[..text.len().min(MOST_BYTES)]).to_uppercase();
     let plain: String = text.chars().filter(|letter| !matches!(letter, '_' | ' ' | '\n' | '\r' | '\t')).collect();
     let datum = DATUMS.iter().find(|(name, ..)| {
-        plain.contains(&format!("\"D{name}\"")) || plain.contains(&format!("DATUM[\"{name}\"")) || plain.contains(&format!("\"{name}DATUM\""))
+        plain.contains(&format!("\"D{name}\""))
+            || plain.contains(&format!("DATUM[\"{name}\""))
+            || plain.contains(&format!("\"{name}DATUM\""))
     });
     if plain.starts_with("GEOGCS[") {
         return datum.is_some_and(|_| plain.contains("\"DEGREE\"")).then_some(Coordinates::Degrees);
@@ -53,7 +55,8 @@ mod tests {
 
     #[test]
     fn texts_of_two_writers_are_understood() {
-        let esri = b"PROJCS[\"WGS_1984_UTM_Zone_13N\",GEOGCS[\"GCS_WGS_1984\",DATUM[\"D_WGS_1984\",SPHEROID[\"WGS_1984\",\
+        let esri =
+            b"PROJCS[\"WGS_1984_UTM_Zone_13N\",GEOGCS[\"GCS_WGS_1984\",DATUM[\"D_WGS_1984\",SPHEROID[\"WGS_1984\",\
             6378137.0,298.257223563]],PRIMEM[\"Greenwich\",0.0],UNIT[\"Degree\",0.0174532925199433]],\
             PROJECTION[\"Transverse_Mercator\"],PARAMETER[\"Central_Meridian\",-105.0],UNIT[\"Meter\",1.0]]";
         assert_eq!(coordinates_of(esri), Some(Coordinates::Metres(32_613)));

@@ -2,7 +2,7 @@
 
 use std::path::Path;
 
-use super::super::cells::split_cells;
+use super::super::cells::texts_of;
 use super::super::dates::{DateFault, parse_date};
 use super::super::notes::Notes;
 use super::super::plan::{DateOrder, Encoding};
@@ -16,6 +16,8 @@ const MOST_LINES_ABOVE: usize = 120;
 /// Columns of a file.
 const MOST_COLUMNS: usize = 400;
 const DELIMITERS: [char; 4] = [',', ';', '\t', '|'];
+/// Digits of the shortest date: 1-may-04.
+const FEWEST_DIGITS: usize = 3;
 const COMMENT: Option<char> = Some('#');
 
 /// A file that has a header and rows below it.
@@ -55,7 +57,8 @@ impl Layout {
                 return Ok(Self { header_line: pair[0], lines, encoding, delimiter, skip_lines, names });
             }
         }
-        let is_row = |line: &str| DELIMITERS.iter().any(|mark| cells_of(line, *mark).iter().any(|cell| looks_like_date(cell)));
+        let is_row =
+            |line: &str| DELIMITERS.iter().any(|mark| texts_of(line, *mark).iter().any(|cell| looks_like_date(cell)));
         let message = if is_row(&lines[*first]) { "problem-peek-header" } else { "problem-peek-layout" };
         Err(tell(first + 1, message))
     }
@@ -64,29 +67,22 @@ impl Layout {
     pub fn rows(&self, most: usize) -> Vec<Vec<String>> {
         let below = self.lines.iter().skip(self.header_line + 1);
         let rows = below.filter(|line| !is_idle(line, COMMENT, Some(self.delimiter)));
-        let cells = |line: &String| cells_of(line, self.delimiter).into_iter().take(self.names.len()).collect();
+        let cells = |line: &String| texts_of(line, self.delimiter).into_iter().take(self.names.len()).collect();
         rows.take(most).map(cells).collect()
     }
 }
 
-fn cells_of(line: &str, delimiter: char) -> Vec<String> {
-    let mut cells = Vec::new();
-    if split_cells(line, delimiter, &mut cells).is_err() {
-        return Vec::new();
-    }
-    cells.into_iter().map(|cell| cell.text.into_owned()).collect()
-}
-
 /// Names of the header, if the two lines can be a header and its first row.
 fn names_of(header: &str, row: &str, delimiter: char) -> Option<Vec<String>> {
-    let mut names = cells_of(header, delimiter);
+    let mut names = texts_of(header, delimiter);
     while names.last().is_some_and(String::is_empty) {
         names.pop();
     }
-    let cells = cells_of(row, delimiter);
+    let cells = texts_of(row, delimiter);
     let parts: Vec<DatePart> = names.iter().filter_map(|name| date_part(name)).collect();
     let in_parts = parts.contains(&DatePart::Year)
-        && (parts.contains(&DatePart::DayOfYear) || (parts.contains(&DatePart::Month) && parts.contains(&DatePart::Day)));
+        && (parts.contains(&DatePart::DayOfYear)
+            || (parts.contains(&DatePart::Month) && parts.contains(&DatePart::Day)));
     let fits = (2..=MOST_COLUMNS).contains(&names.len())
         && cells.len() >= names.len()
         && !names.iter().any(|name| looks_like_date(name))
@@ -97,7 +93,7 @@ fn names_of(header: &str, row: &str, delimiter: char) -> Option<Vec<String>> {
 /// Whether a text is a date in some order, or would be but for a small fault.
 fn looks_like_date(text: &str) -> bool {
     let close = |fault| matches!(fault, DateFault::ShortYear | DateFault::TimeOfDay);
-    text.len() >= 6
+    text.bytes().filter(u8::is_ascii_digit).count() >= FEWEST_DIGITS
         && text.len() <= 40
         && DateOrder::ALL.iter().any(|order| match parse_date(text, *order) {
             Ok(_) => true,

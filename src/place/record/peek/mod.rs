@@ -9,9 +9,10 @@ mod units;
 
 use std::path::Path;
 
+use super::append::with_open_gaps;
 use super::measure::Measure;
 use super::number::parse_number;
-use super::plan::{ColumnPlan, DateOrder, DatePlan, GapFill, GapRule, RecordPlan};
+use super::plan::{ColumnPlan, DateOrder, DatePlan, RecordPlan};
 use super::rows::USUAL_MISSING;
 use super::unit::MeasureUnit;
 use super::{ReadRecord, read_record};
@@ -143,11 +144,7 @@ fn try_plan(plan: &RecordPlan, bytes: &[u8]) -> (Option<ReadRecord>, Vec<Problem
         return (None, problems);
     }
     read_record(plan, bytes, &mut problems);
-    let mut open = plan.clone();
-    for column in &mut open.columns {
-        column.gaps = GapRule { how: GapFill::Keep, longest_days: 0 };
-    }
-    (read_record(&open, bytes, &mut Vec::new()), problems)
+    (read_record(&with_open_gaps(plan), bytes, &mut Vec::new()), problems)
 }
 
 fn is_of_date(name: &str, date: &DatePlan) -> bool {

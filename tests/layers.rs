@@ -9,6 +9,7 @@ use std::path::{Path, PathBuf};
 /// * `water` is the ground floor; `signs` read it and change nothing.
 /// * `place`, `generator`, `fit`, `whatif` and `lesson` bring values to the water, and never words: what is wrong is told as data.
 ///   A lesson is read for a place, and with its reader of files.
+/// * `place` takes from `words` only the comparing of names that were mistyped.
 /// * `words` know units and the keys of what they name, no numbers of a run.
 /// * `picture` draws values: plain data of the water and the signs, never what runs them.
 /// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not
@@ -16,7 +17,7 @@ use std::path::{Path, PathBuf};
 const MAY_NAME: [(&str, &[&str]); 12] = [
     ("water", &[]),
     ("signs", &["water"]),
-    ("place", &["water", "signs"]),
+    ("place", &["water", "signs", "words::nearest"]),
     ("generator", &["water", "signs"]),
     ("fit", &["water", "signs", "generator::random"]),
     ("whatif", &["water", "signs"]),

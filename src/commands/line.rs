@@ -29,6 +29,7 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(check(words))
         .subcommand(map(words))
         .subcommand(weather(words))
+        .subcommand(super::place::line::command(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
 }
@@ -120,7 +121,7 @@ fn subcommand(name: &'static str, usage_id: &str, words: &Words) -> Command {
     plain(Command::new(name), words).about(about).help_template(template)
 }
 
-fn plain(command: Command, words: &Words) -> Command {
+pub(super) fn plain(command: Command, words: &Words) -> Command {
     command
         .color(ColorChoice::Never)
         .styles(Styles::plain())
@@ -131,7 +132,7 @@ fn plain(command: Command, words: &Words) -> Command {
 }
 
 /// What every command takes.
-fn common(words: &Words) -> [Arg; 2] {
+pub(super) fn common(words: &Words) -> [Arg; 2] {
     [text("lang", "value-lang", "help-lang", words), path_option("locales", "value-folder", "help-locales", words)]
 }
 
@@ -140,21 +141,21 @@ fn with_usual(help_id: &str, usual: &str, words: &Words) -> String {
     format!("{} [{default}]", words.say(help_id, &[]))
 }
 
-fn text(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+pub(super) fn text(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
     let arg = Arg::new(name).long(name).value_name(words.say(value_id, &[])).help(words.say(help_id, &[]));
     arg.value_parser(StringValueParser::new()).action(ArgAction::Set).allow_negative_numbers(true)
 }
 
-fn path(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+pub(super) fn path(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
     let arg = Arg::new(name).value_name(words.say(value_id, &[])).help(words.say(help_id, &[]));
     arg.value_parser(PathBufValueParser::new())
 }
 
-fn path_option(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+pub(super) fn path_option(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
     path(name, value_id, help_id, words).long(name).action(ArgAction::Set)
 }
 
-fn flag(name: &'static str, help_id: &str, words: &Words) -> Arg {
+pub(super) fn flag(name: &'static str, help_id: &str, words: &Words) -> Arg {
     Arg::new(name).long(name).action(ArgAction::SetTrue).help(words.say(help_id, &[]))
 }
 

@@ -9,6 +9,7 @@ mod failure;
 mod line;
 mod map;
 mod output;
+mod place;
 mod places;
 mod problem_words;
 mod settings;
@@ -57,6 +58,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("show", matches)) => show::run(speech, matches),
         Some(("map", matches)) => map::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        Some(("place", matches)) => place::run(speech, matches),
         _ => show::usual(speech),
     }
 }

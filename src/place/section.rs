@@ -8,6 +8,7 @@ use std::cell::{Cell, RefCell};
 use super::problem::{Location, Problem};
 use super::tree::{Entry, Kind, Sheet, Table, Value};
 use super::unit_suffix::{OTHER_SUFFIXES, UnitSuffix, Units};
+use crate::words::nearest;
 
 static NOTHING: Table = Table { entries: Vec::new() };
 
@@ -22,9 +23,6 @@ pub(crate) struct Number {
     /// Whether the file says it.
     pub stated: bool,
 }
-
-/// Letters that a part of a name must have to say more than the likeness of the whole.
-const SHORTEST_PART: usize = 3;
 
 /// Least and most value, in SI, both allowed.
 #[derive(Clone, Copy, Debug)]
@@ -330,13 +328,13 @@ impl<'a> Section<'a> {
                 explained.extend(in_other_unit);
                 continue;
             }
-            let nearest = nearest(&entry.key, names.iter().cloned());
-            explained.push(nearest.clone());
-            self.sheet.tell(if self.name.is_empty() {
-                problem("problem-table-unknown").with("nearest", nearest)
+            explained.extend(nearest(&entry.key, names.iter().map(String::as_str)).map(str::to_owned));
+            let told = if self.name.is_empty() {
+                problem("problem-table-unknown")
             } else {
-                problem("problem-key-unknown").with("nearest", nearest).with("table", self.name.clone())
-            });
+                problem("problem-key-unknown").with("table", self.name.clone())
+            };
+            self.sheet.tell(told.with_nearest(&entry.key, &names));
         }
         // What is there in a wrong form was told as that.
         let is_there = |key: &String| {
@@ -388,20 +386,7 @@ pub(crate) fn unknown_choice(
         .with("key", key)
         .with("value", word)
         .with("choices", choices.join(", "))
-        .with("nearest", nearest(word, choices.iter().map(|choice| (*choice).to_owned())))
-}
-
-/// The name most like `word`, one that holds the whole of it first; empty when there is none at all.
-pub(crate) fn nearest(word: &str, names: impl Iterator<Item = String>) -> String {
-    let mut best: Option<(f64, String)> = None;
-    for name in names {
-        let holds = word.chars().count() >= SHORTEST_PART && name.contains(word);
-        let likeness = strsim::jaro_winkler(word, &name) + if holds { 1.0 } else { 0.0 };
-        if best.as_ref().is_none_or(|(most, _)| likeness > *most) {
-            best = Some((likeness, name));
-        }
-    }
-    best.map(|(_, name)| name).unwrap_or_default()
+        .with_nearest(word, &choices)
 }
 
 /// A bound as people would write it, six significant digits.

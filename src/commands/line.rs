@@ -40,6 +40,8 @@ fn show(words: &Words) -> Command {
         .arg(text("screen", "value-screen", "help-screen", words).action(ArgAction::Append))
         .arg(text("size", "value-size", "help-size", words))
         .arg(path_option("into", "value-folder", "help-show-into", words))
+        .arg(path_option("lesson", "value-lesson", "help-lesson", words))
+        .arg(text("groups", "value-number", "help-groups", words))
         .arg(text("units", "value-units", "help-units", words))
         .arg(text("theme", "value-theme", "help-theme", words).help(with_usual("help-theme", "light", words)))
         .args(common(words))

@@ -40,6 +40,7 @@ mod event;
 pub mod help;
 pub mod keys;
 pub mod knob;
+pub mod lesson;
 mod needs;
 mod offer;
 mod refit;

@@ -6,6 +6,7 @@ use embedded_graphics::geometry::Size;
 
 use super::drawing::{Drawing, VIEWS, page};
 use super::hands::Clock;
+use super::leading::{LessonText, shelf};
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument};
 use crate::commands::failure::Failure;
 use crate::commands::speech::Speech;
@@ -14,6 +15,7 @@ use crate::picture::views::{Scene, help, term};
 use crate::place::Place;
 use crate::session::answer::{Asked, Source};
 use crate::session::help::key_lines;
+use crate::session::lesson::Led;
 use crate::session::scene::{Moment, PlaceTold, Stage, facts_of, settings};
 use crate::session::{Answers, Event, Needs, Offer, OfferInput, Shade, State, View, Voice, YearList};
 use crate::words::{System, Words};
@@ -22,20 +24,23 @@ use crate::words::{System, Words};
 const LANGUAGES: [&str; 2] = ["en", "es"];
 
 /// A session under way.
-pub(super) struct Player {
-    place: Place,
+pub(in crate::commands) struct Player {
+    pub(super) place: Place,
     gate_names: Vec<String>,
-    offer: Offer,
-    state: State,
+    pub(super) offer: Offer,
+    pub(super) state: State,
     answers: Answers,
     /// One entry for each voice of the offer: the first language and the second, if there are two.
-    voices: Vec<(Words, Option<Words>)>,
+    pub(super) voices: Vec<(Words, Option<Words>)>,
     clock: Clock,
-    drawings: Vec<Drawing>,
+    pub(super) drawings: Vec<Drawing>,
     /// Goes up with everything that can be seen.
-    stamp: u64,
-    asked_water: bool,
+    pub(super) stamp: u64,
+    pub(super) asked_water: bool,
     captions: Vec<[String; 3]>,
+    pub(super) led: Led,
+    /// The lessons of the list, in its order.
+    pub(super) shelf: Vec<LessonText>,
 }
 
 impl Player {
@@ -53,7 +58,7 @@ impl Player {
         let offer = Offer::new(OfferInput {
             dials: place.dials.open().collect(),
             years,
-            views: VIEWS.to_vec(),
+            views: VIEWS.into_iter().chain([View::Lesson]).collect(),
             terms: View::ALL.map(|view| term::terms(page(view)).len() as u16),
             voices: tags.collect(),
             system: units.unwrap_or_else(|| usual_system(&place)),
@@ -65,6 +70,7 @@ impl Player {
         let captions = voices.iter().map(|(words, _)| caption(&place, words)).collect();
         let gate_names = place.gates.iter().map(|gate| gate.name.get(voices[0].0.tag()).to_owned()).collect();
         let state = State::new(&offer);
+        let (shelf, entries) = shelf(&place, &LessonText::built_in()).into_iter().unzip();
         Ok(Self {
             gate_names,
             place,
@@ -77,11 +83,20 @@ impl Player {
             stamp: 0,
             asked_water: false,
             captions,
+            led: Led::new(entries),
+            shelf,
         })
     }
 
-    /// Takes an event of the session.
+    /// Takes an event: the lesson first, then the session.
     pub fn step(&mut self, event: Event) {
+        if let Some(event) = self.led_first(event) {
+            self.step_session(event);
+        }
+    }
+
+    /// Takes an event of the session.
+    pub(super) fn step_session(&mut self, event: Event) {
         let Needs { redraw, .. } = {
             let needs = self.state.step(event, &self.offer);
             self.asked_water |= needs.answer();
@@ -144,6 +159,7 @@ impl Instrument for Player {
             }
         };
         if self.drawings[at].stamp != Some(self.stamp) {
+            self.drawings[at].foot = self.strip_px(size);
             let shown = self.state.shown();
             let (words, second) = &self.voices[shown.voice];
             let names: Vec<&str> = self.gate_names.iter().map(String::as_str).collect();
@@ -166,6 +182,7 @@ impl Instrument for Player {
             if sheets > self.offer.sheets(shown.view) {
                 self.offer = self.offer.clone().with_about_sheets(sheets);
             }
+            self.draw_lesson(at);
             self.drawings[at].stamp = Some(self.stamp);
         }
         self.drawings[at].frame()

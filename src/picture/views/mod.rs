@@ -16,6 +16,7 @@ pub mod grid;
 pub mod help;
 pub mod layout;
 pub mod ledger;
+pub mod lesson;
 pub mod many_years;
 mod months;
 pub mod page_answer;
@@ -32,6 +33,7 @@ use embedded_graphics::geometry::OriginDimensions;
 pub use answer::Answer;
 pub use layout::{Form, Layout};
 pub use scene::Scene;
+pub use wording::dial_name as wording_of_dial;
 
 use super::Canvas;
 

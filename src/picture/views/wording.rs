@@ -15,7 +15,7 @@ use crate::words::{DateStyle, Quantity, System, Words};
 pub(super) const DOT: &str = " · ";
 
 /// The short name of a dial.
-pub(super) fn dial_name(dial: Dial, words: &Words) -> String {
+pub fn dial_name(dial: Dial, words: &Words) -> String {
     words.say(&format!("{}.short", Words::key_id("dial", dial.key())), &[])
 }
 

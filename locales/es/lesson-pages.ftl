@@ -1,0 +1,94 @@
+# Las páginas de una lección guiada: qué hace la perilla, qué dijo cada grupo y los avisos de al lado.
+
+lesson-list = Lecciones
+lesson-minutes = Unos { $n } minutos
+lesson-groups = { $n ->
+    [one] Va a adivinar { $n } grupo
+   *[other] Van a adivinar { $n } grupos
+}
+lesson-for-leader = Para quien guía
+lesson-may-turn = Después les toca mover: { $dials }
+lesson-nothing = No llega a pasar.
+
+## Lo que se puede hacer
+
+lesson-do-on = Seguir
+lesson-do-show = Ver el resultado
+lesson-do-skip = Seguir sin responder
+lesson-do-guess = Seguir adivinando
+lesson-do-group = Otro grupo
+lesson-do-word = Escribir una palabra
+lesson-do-back = Volver
+lesson-do-more = Más
+lesson-do-again = Otro grupo de gente
+lesson-do-leave = Salir de la lección
+
+lesson-hint-list = Gire: elegir. Oprima: abrir.
+lesson-hint-start = Gire: cuántos grupos. Oprima: empezar. Sostenga: volver a la lista.
+lesson-hint-on = Oprima: hacerlo. Gire: otra cosa. Sostenga: empezar de nuevo.
+lesson-hint-guess = Gire: su respuesta. Oprima: queda puesta. Sostenga: más.
+lesson-hint-choose = Oprima: hacerlo. Gire: otra cosa.
+lesson-hint-word = Gire: una letra. Oprima: ponerla. Sostenga: salir.
+
+## Avisos
+
+lesson-in = El grupo { $group } ya respondió.
+lesson-in-word = El grupo { $group } ya respondió. Su palabra: { $word }
+lesson-letter-wrong = Ninguna palabra lleva esa letra aquí.
+lesson-cleared = Se borraron las respuestas. Con la Z vuelven.
+lesson-not-here = Esta lección no va con este lugar.
+lesson-word-ask = Escriba la palabra que muestra la otra pantalla, letra por letra.
+
+## Lo que se adivina
+
+lesson-of-canal = { $canal }: { $sign }
+lesson-axis = { $what }, { $unit }
+lesson-axis-change = { $what }: cambio, { $unit }
+lesson-axis-change-only = { $what }: cambio
+lesson-unit-parts = de cada 100 partes
+lesson-unit-days = días
+lesson-unit-years = años
+lesson-days-fewer = { $n ->
+    [one] { $n } día menos
+   *[other] { $n } días menos
+}
+lesson-days-more = { $n ->
+    [one] { $n } día más
+   *[other] { $n } días más
+}
+lesson-years-fewer = { $n ->
+    [one] { $n } año menos
+   *[other] { $n } años menos
+}
+lesson-years-more = { $n ->
+    [one] { $n } año más
+   *[other] { $n } años más
+}
+lesson-parts = { $n } de cada 100
+lesson-parts-fewer = { $n } de cada 100 menos
+lesson-parts-more = { $n } de cada 100 más
+
+## Las respuestas y el resultado
+
+lesson-usual-value = Muchos dicen: { $value }
+lesson-verdict = Ustedes dijeron: de { $least } a { $most }. { $n ->
+    [0] Nadie anduvo cerca.
+    [one] Un grupo anduvo cerca.
+   *[other] { $n } grupos anduvieron cerca.
+}
+lesson-verdict-one = Ustedes dijeron: { $guess }.
+lesson-verdict-one-near = Ustedes dijeron: { $guess }. Anduvieron cerca.
+lesson-verdict-right = { $n ->
+    [0] Nadie nombró este canal.
+    [one] { $n } de { $of } grupos nombró este canal.
+   *[other] { $n } de { $of } grupos nombraron este canal.
+}
+
+## La línea de órdenes
+
+value-lesson = ARCHIVO|NOMBRE
+help-lesson = Un archivo de lección, o el nombre de una incluida, como line_the_canal.
+help-groups = Cuántos grupos adivinan, de 1 a 12.
+error-lesson-unknown = No hay ninguna lección «{ $lesson }». Hay: { $lessons }; o dé un archivo.
+error-lesson-unknown-nearest = No hay ninguna lección «{ $lesson }». ¿Quiso decir «{ $nearest }»?
+error-lesson-has-problems = La lección { $path } tiene errores en este lugar, así que no se puede dar.

@@ -20,12 +20,13 @@ lesson-do-group = Another group
 lesson-do-word = Type a word
 lesson-do-back = Back
 lesson-do-more = More
-lesson-do-again = Next group
+lesson-do-again = Begin again
 lesson-do-leave = End the lesson
 
 lesson-hint-list = Turn: choose. Press: open.
 lesson-hint-start = Turn: how many groups. Press: begin. Hold: back to the list.
 lesson-hint-on = Press: do it. Turn: something else. Hold: begin again.
+lesson-hint-look = Press: go on
 lesson-hint-guess = Turn: your guess. Press: it is in. Hold: more.
 lesson-hint-choose = Press: do it. Turn: something else.
 lesson-hint-word = Turn: a letter. Press: take it. Hold: leave.
@@ -46,6 +47,9 @@ lesson-axis = { $what }, { $unit }
 lesson-axis-change = { $what }: change, { $unit }
 lesson-axis-change-only = { $what }: change
 lesson-unit-parts = of each 100 parts
+lesson-unit-rights = 1 is the oldest right
+lesson-no-change = no change
+lesson-same-day = the same day
 lesson-unit-days = days
 lesson-unit-years = years
 lesson-days-fewer = { $n ->
@@ -71,15 +75,16 @@ lesson-parts-more = { $n } of 100 parts more
 ## The guesses and the result
 
 lesson-usual-value = Many people say: { $value }
-lesson-verdict = You said from { $least } to { $most }. { $n ->
-    [0] Nobody was close.
+lesson-verdict = You said from { $least } to { $most }.
+lesson-none-near = Nobody was close.
+lesson-near = { $n ->
     [one] { $n } group was close.
    *[other] { $n } groups were close.
 }
 lesson-verdict-one = You said { $guess }.
 lesson-verdict-one-near = You said { $guess }. That is close.
-lesson-verdict-right = { $n ->
-    [0] Nobody named this canal.
+lesson-none-right = Nobody named this canal.
+lesson-right = { $n ->
     [one] { $n } of { $of } groups named this canal.
    *[other] { $n } of { $of } groups named this canal.
 }
@@ -92,3 +97,35 @@ help-groups = How many groups guess, 1 to 12.
 error-lesson-unknown = There is no lesson “{ $lesson }”. There are: { $lessons }; or give a file.
 error-lesson-unknown-nearest = There is no lesson “{ $lesson }”. Did you mean “{ $nearest }”?
 error-lesson-has-problems = The lesson { $path } has mistakes on this place, so it cannot be led.
+
+## Rehearsing
+
+help-rehearse = Plays a lesson, or a script of events, and writes every page as a picture.
+help-usage-rehearse = [PLACE] --lesson FILE|NAME --into FOLDER [OPTIONS]
+help-steps = A script: one event a line.
+help-rehearse-into = The folder for the pictures. It appears when all are in it.
+help-rehearse-more =
+    A script has one event a line; what follows a # is a remark:
+      turn 3            the knob, so many steps; -3 the other way
+      press             the button
+      hold              the button, held
+      key L             a key: a letter, or Up, Down, Left, Right, PageUp,
+                        PageDown, Home, Enter, Escape, Tab, Space
+      dial warming 2    the knob of one dial
+      wait 500          milliseconds go by
+      picture NAME      a picture is made; without any such line,
+                        one is made after every event
+
+    With --lesson and --steps together the script plays the lesson.
+    Example: deshielo rehearse --lesson line_the_canal --into pages
+rehearse-what = Say what to rehearse: --lesson or --steps.
+rehearse-into = Say where the pictures go: --into FOLDER.
+rehearse-too-many = This would be more than { $most } pictures.
+rehearse-not-ours = { $path } holds something that no rehearsal made: { $file }. Choose another folder.
+rehearse-bad-verb = “{ $text }” is no event.
+rehearse-bad-line = “{ $text }” has a word too many or too few.
+rehearse-bad-number = “{ $text }” needs a whole number.
+rehearse-bad-key = “{ $text }” names no key.
+rehearse-bad-dial = “{ $text }” names no dial.
+rehearse-bad-name = “{ $text }”: a picture’s name has only letters, figures and hyphens, at most 40.
+rehearse-lines = Events are: turn 3, press, hold, key L, dial warming 2, wait 500, picture NAME.

@@ -20,12 +20,13 @@ lesson-do-group = Otro grupo
 lesson-do-word = Escribir una palabra
 lesson-do-back = Volver
 lesson-do-more = Más
-lesson-do-again = Otro grupo de gente
+lesson-do-again = Empezar de nuevo
 lesson-do-leave = Salir de la lección
 
 lesson-hint-list = Gire: elegir. Oprima: abrir.
 lesson-hint-start = Gire: cuántos grupos. Oprima: empezar. Sostenga: volver a la lista.
 lesson-hint-on = Oprima: hacerlo. Gire: otra cosa. Sostenga: empezar de nuevo.
+lesson-hint-look = Oprima: seguir
 lesson-hint-guess = Gire: su respuesta. Oprima: queda puesta. Sostenga: más.
 lesson-hint-choose = Oprima: hacerlo. Gire: otra cosa.
 lesson-hint-word = Gire: una letra. Oprima: ponerla. Sostenga: salir.
@@ -46,6 +47,9 @@ lesson-axis = { $what }, { $unit }
 lesson-axis-change = { $what }: cambio, { $unit }
 lesson-axis-change-only = { $what }: cambio
 lesson-unit-parts = de cada 100 partes
+lesson-unit-rights = 1 es el derecho más antiguo
+lesson-no-change = sin cambio
+lesson-same-day = el mismo día
 lesson-unit-days = días
 lesson-unit-years = años
 lesson-days-fewer = { $n ->
@@ -71,15 +75,16 @@ lesson-parts-more = { $n } de cada 100 más
 ## Las respuestas y el resultado
 
 lesson-usual-value = Muchos dicen: { $value }
-lesson-verdict = Ustedes dijeron: de { $least } a { $most }. { $n ->
-    [0] Nadie anduvo cerca.
+lesson-verdict = Ustedes dijeron de { $least } a { $most }.
+lesson-none-near = Nadie anduvo cerca.
+lesson-near = { $n ->
     [one] Un grupo anduvo cerca.
    *[other] { $n } grupos anduvieron cerca.
 }
 lesson-verdict-one = Ustedes dijeron: { $guess }.
 lesson-verdict-one-near = Ustedes dijeron: { $guess }. Anduvieron cerca.
-lesson-verdict-right = { $n ->
-    [0] Nadie nombró este canal.
+lesson-none-right = Nadie nombró este canal.
+lesson-right = { $n ->
     [one] { $n } de { $of } grupos nombró este canal.
    *[other] { $n } de { $of } grupos nombraron este canal.
 }
@@ -92,3 +97,35 @@ help-groups = Cuántos grupos adivinan, de 1 a 12.
 error-lesson-unknown = No hay ninguna lección «{ $lesson }». Hay: { $lessons }; o dé un archivo.
 error-lesson-unknown-nearest = No hay ninguna lección «{ $lesson }». ¿Quiso decir «{ $nearest }»?
 error-lesson-has-problems = La lección { $path } tiene errores en este lugar, así que no se puede dar.
+
+## El ensayo
+
+help-rehearse = Recorre una lección, o una lista de acciones, y guarda cada página como imagen.
+help-usage-rehearse = [LUGAR] --lesson ARCHIVO|NOMBRE --into CARPETA [OPCIONES]
+help-steps = Una lista de acciones: una por renglón.
+help-rehearse-into = La carpeta para las imágenes. Aparece cuando ya están todas.
+help-rehearse-more =
+    La lista lleva una acción por renglón; lo que sigue a # es un comentario:
+      turn 3            la perilla, tantos pasos; -3 hacia el otro lado
+      press             el botón
+      hold              el botón, sostenido
+      key L             una tecla: una letra, o Up, Down, Left, Right, PageUp,
+                        PageDown, Home, Enter, Escape, Tab, Space
+      dial warming 2    la perilla propia de un cambio
+      wait 500          pasan tantos milisegundos
+      picture NOMBRE    se guarda una imagen; si no hay ningún renglón así,
+                        se guarda una después de cada acción
+
+    Con --lesson y --steps juntos, la lista recorre la lección.
+    Ejemplo: deshielo rehearse --lesson line_the_canal --into paginas
+rehearse-what = Diga qué se ensaya: --lesson o --steps.
+rehearse-into = Diga a dónde van las imágenes: --into CARPETA.
+rehearse-too-many = Serían más de { $most } imágenes.
+rehearse-not-ours = En { $path } hay algo que no es de un ensayo: { $file }. Elija otra carpeta.
+rehearse-bad-verb = «{ $text }» no es una acción.
+rehearse-bad-line = A «{ $text }» le sobra o le falta una palabra.
+rehearse-bad-number = «{ $text }» necesita un número entero.
+rehearse-bad-key = «{ $text }» no nombra ninguna tecla.
+rehearse-bad-dial = «{ $text }» no nombra ninguna perilla.
+rehearse-bad-name = «{ $text }»: el nombre de una imagen lleva solo letras, cifras y guiones, 40 cuando más.
+rehearse-lines = Las acciones son: turn 3, press, hold, key L, dial warming 2, wait 500, picture NOMBRE.

@@ -11,6 +11,7 @@ mod map;
 mod output;
 mod places;
 mod problem_words;
+mod rehearse;
 mod settings;
 mod show;
 mod snippets;
@@ -56,6 +57,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("check", matches)) => check::run(speech, matches),
         Some(("show", matches)) => show::run(speech, matches),
         Some(("map", matches)) => map::run(speech, matches),
+        Some(("rehearse", matches)) => rehearse::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
         _ => show::usual(speech),
     }

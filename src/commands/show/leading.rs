@@ -15,7 +15,7 @@ use crate::lesson::{Lesson, lessons};
 use crate::picture::views::lesson as page;
 use crate::place::Place;
 use crate::session::lesson::{Course, Led, NotOpened, Pass, ShelfEntry, Taken, Voices};
-use crate::session::{Command, Event, State, View};
+use crate::session::{Command, Event, View};
 use crate::words::{Words, nearest};
 
 /// A lesson's file, before it is read for a place.
@@ -173,13 +173,9 @@ impl Player {
         if shown.view == View::Lesson && shown.card.is_none() {
             let scene = self.led.scene(voices);
             self.drawings[at].draw_over(|canvas, _| page::draw(canvas, &scene, theme));
-        } else if let Some((saying, step)) = self.led.strip(voices) {
-            self.drawings[at].draw_foot(|canvas, screen| page::draw_strip(canvas, screen, &saying, &step, theme));
+        } else if let Some((saying, step, hint)) = self.led.strip(voices) {
+            let beside = (step.as_str(), hint.as_str());
+            self.drawings[at].draw_foot(|canvas, screen| page::draw_strip(canvas, screen, &saying, beside, theme));
         }
-    }
-
-    /// The session as it is.
-    pub fn state(&self) -> &State {
-        &self.state
     }
 }

@@ -22,6 +22,7 @@ use crate::words::Words;
 pub(super) use leading::LessonText;
 pub(super) use player::Player;
 use request::Request;
+pub(super) use request::groups;
 
 /// Opens the place and shows it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {

@@ -1,6 +1,6 @@
 //! The page at hand as plain data for the picture, in the reader's words. What must not be seen yet is not in it.
 
-use super::sayings::Sayings;
+use super::sayings::{Sayings, in_units};
 use super::{Choice, Led, Note, Part};
 use crate::lesson::{Guess, GuessPage, Page, Phase, Quantity, Shape, WORD_LETTERS};
 use crate::picture::views::lesson::{Axis, Body, Foot, GuessShown, LessonScene, RevealShown, Saying};
@@ -21,10 +21,8 @@ pub struct Voices<'a> {
 
 impl Voices<'_> {
     fn of(&self, text: &Text) -> Saying {
-        Saying {
-            first: text.get(self.words.tag()).to_owned(),
-            second: self.second.map(|words| text.get(words.tag()).to_owned()),
-        }
+        let said = |words: &Words| in_units(text.get(words.tag()), self.system, words);
+        Saying { first: said(self.words), second: self.second.map(said) }
     }
 
     fn say(&self, message: &str) -> Saying {
@@ -56,14 +54,14 @@ impl Led {
         LessonScene { title: title.to_owned(), step, done, body, foot: self.foot(words) }
     }
 
-    /// What the strip under a view says while it is looked at, and the step.
-    pub fn strip(&self, voices: Voices<'_>) -> Option<(Saying, String)> {
+    /// What the strip under a view says while it is looked at, the step, and how to go on.
+    pub fn strip(&self, voices: Voices<'_>) -> Option<(Saying, String, String)> {
         if !self.is_looking() {
             return None;
         }
         let page = self.page()?;
         let step = words_of_step(page.step, page.steps, voices.words);
-        Some((voices.of(page.reveal.unwrap_or(page.prompt)), step))
+        Some((voices.of(page.reveal.unwrap_or(page.prompt)), step, voices.words.say("lesson-hint-look", &[])))
     }
 
     fn page(&self) -> Option<Page<'_>> {
@@ -99,7 +97,7 @@ impl Led {
             (Phase::Reveal, Some(shown), Some(guess), _) => Body::Reveal(self.reveal(page, shown, &guess, voices)),
             (Phase::Talk, _, _, Some(talk)) => Body::Talk {
                 kicker: words.say("lesson-for-leader", &[]),
-                prompt: page.prompt.get(words.tag()).to_owned(),
+                prompt: voices.of(page.prompt).first,
                 talk: voices.of(talk),
             },
             _ => {
@@ -191,15 +189,18 @@ impl Led {
         let near = values.filter(|value| guess.is_near(*value, result)).count();
         if guess.reading.quantity() == Quantity::Canal {
             let count = [("n", (near as u32).into()), ("of", (spread.guesses as u32).into())];
-            return words.say("lesson-verdict-right", &count);
+            return words.say(if near == 0 { "lesson-none-right" } else { "lesson-right" }, &count);
         }
         if spread.least == spread.most {
             let one = [("guess", value(spread.least).into())];
             return words.say(if near > 0 { "lesson-verdict-one-near" } else { "lesson-verdict-one" }, &one);
         }
-        let count =
-            [("least", value(spread.least).into()), ("most", value(spread.most).into()), ("n", (near as u32).into())];
-        words.say("lesson-verdict", &count)
+        let range = [("least", value(spread.least).into()), ("most", value(spread.most).into())];
+        let near = match near {
+            0 => words.say("lesson-none-near", &[]),
+            near => words.say("lesson-near", &[("n", (near as u32).into())]),
+        };
+        format!("{} {near}", words.say("lesson-verdict", &range))
     }
 
     fn foot(&self, words: &Words) -> Foot {

@@ -57,7 +57,8 @@ impl Sayings<'_> {
     fn unit(&self) -> Option<String> {
         let words = self.words;
         Some(match self.reading().quantity() {
-            Quantity::Date | Quantity::Canal => return None,
+            Quantity::Date => return None,
+            Quantity::Canal => words.say("lesson-unit-rights", &[]),
             Quantity::Share => words.say("lesson-unit-parts", &[]),
             Quantity::Days => words.say("lesson-unit-days", &[]),
             Quantity::Years => words.say("lesson-unit-years", &[]),
@@ -97,7 +98,7 @@ impl Sayings<'_> {
         let more = |less: &str, more: &str, value: f64| {
             let whole = libm::round(value);
             match whole {
-                0.0 => words.say("change-none", &[]),
+                0.0 => words.say("lesson-no-change", &[]),
                 ..0.0 => words.say(less, &[count(whole)]),
                 _ => words.say(more, &[count(whole)]),
             }
@@ -106,7 +107,10 @@ impl Sayings<'_> {
             Quantity::Date => words.date(self.date(value), DateStyle::Short),
             Quantity::Canal => self.gate_by_right(value).to_owned(),
             Quantity::Days if is_change && self.reading().measure.quantity() == Quantity::Date => {
-                words.days_change(libm::round(value) as i32)
+                match libm::round(value) as i32 {
+                    0 => words.say("lesson-same-day", &[]),
+                    days => words.days_change(days),
+                }
             }
             Quantity::Days if is_change => more("lesson-days-fewer", "lesson-days-more", value),
             Quantity::Days => words.say("days-count", &[count(libm::round(value))]),
@@ -114,6 +118,7 @@ impl Sayings<'_> {
             Quantity::Years => words.say("years-count", &[count(libm::round(value))]),
             Quantity::Share if is_change => more("lesson-parts-fewer", "lesson-parts-more", value * 100.0),
             Quantity::Share => words.say("lesson-parts", &[count(libm::round(value * 100.0))]),
+            _ if is_change && value == 0.0 => words.say("lesson-no-change", &[]),
             quantity if is_change => words.amount_change(value, self.written(quantity), self.system, 2),
             quantity => words.quantity(value, self.written(quantity), self.system, 2),
         }
@@ -162,6 +167,31 @@ impl Sayings<'_> {
         };
         unit.convert(1.0)
     }
+}
+
+/// Degrees of warming in a lesson's text, which is written in Celsius, in the reader's units: "2 °C" as "3.6 °F".
+pub(super) fn in_units(text: &str, system: System, words: &Words) -> String {
+    if system == System::Metric {
+        return text.to_owned();
+    }
+    let mut said = String::with_capacity(text.len());
+    let mut rest = text;
+    while let Some(at) = rest.find("°C") {
+        let before = &rest[..at];
+        let number = before.trim_end_matches([' ', '\u{A0}', '\u{202F}']);
+        let digits = number.len() - number.trim_end_matches(|c: char| c.is_ascii_digit()).len();
+        let (kept, digits) = number.split_at(number.len() - digits);
+        match digits.parse::<f64>() {
+            Ok(degrees) => {
+                said.push_str(kept);
+                said.push_str(&words.quantity(degrees, Written::TemperatureChange, system, 2));
+            }
+            Err(_) => said.push_str(&rest[..at + "°C".len()]),
+        }
+        rest = &rest[at + "°C".len()..];
+    }
+    said.push_str(rest);
+    said
 }
 
 /// 1, 2 or 5 times a power of ten, at least as far as `least`.

@@ -5,6 +5,7 @@ use crate::lesson::Shows;
 use crate::session::command::Command;
 use crate::session::event::Event;
 use crate::session::offer::Offer;
+use crate::session::ring::Item;
 use crate::session::setting::Setting;
 use crate::session::state::State;
 use crate::session::view::View;
@@ -36,6 +37,10 @@ impl Led {
         state.step(Event::Command(Command::Set(setting)), &narrow);
         let view = if self.looking { view_of(stage.shows, &narrow) } else { View::Lesson };
         state.step(Event::Command(Command::Show(view)), &narrow);
+        if self.looking && narrow.dials().next().is_none() {
+            // Without a dial the knob goes through the days, which moves what is looked at.
+            state.step(Event::Command(Command::Choose(Item::Day)), &narrow);
+        }
         if view == View::Valley && state.shown().day == 0 {
             look_from(state, course, &narrow);
         }

@@ -8,7 +8,7 @@ use super::{Axis, RevealShown};
 use crate::picture::lettering::{Across, draw as draw_text, measure};
 use crate::picture::line::segment;
 use crate::picture::shape::{rounded_box, triangle};
-use crate::picture::views::layout::{Layout, area, bottom, right};
+use crate::picture::views::layout::{Layout, area, right};
 use crate::picture::views::wording::fit;
 use crate::picture::{Align, Canvas, Face, Spot, Stroke, Theme};
 
@@ -64,25 +64,41 @@ pub(super) fn draw_axis(
         let left = libm::round(line.x(share)) as i32 - wide / 2;
         (left.min(edge_right - wide).max(edge_left), wide)
     };
-    let mut taken: Vec<(i32, i32)> = Vec::new();
     let space = i32::from(face.px()) * 2 / 3;
-    // The place of what was comes first: it keeps its name whatever else has to go.
+    // The place of what was keeps its name whatever else has to go; names are left out evenly on both sides of it.
     let is_rest = |share: f64| axis.rest.as_ref().is_some_and(|(rest, _)| (rest - share).abs() < 1e-9);
-    let mut order: Vec<usize> = (0..axis.ticks.len()).collect();
-    order.sort_by_key(|&tick| (!is_rest(axis.ticks[tick].0), tick % 2 == 1));
-    for tick in order {
-        let (share, text) = &axis.ticks[tick];
+    let anchor = axis.ticks.iter().position(|(share, _)| is_rest(*share)).unwrap_or(0);
+    let bold = Face::bold(face.px());
+    let named = |stride: usize| (0..axis.ticks.len()).filter(move |tick| tick.abs_diff(anchor) % stride == 0);
+    let face_of = |share: f64| if is_rest(share) { bold } else { face };
+    let fits = |stride: &usize| {
+        let mut end = i32::MIN;
+        named(*stride).all(|tick| {
+            let (share, text) = &axis.ticks[tick];
+            let (left, wide) = place(*share, text, face_of(*share));
+            let free = left >= end;
+            end = left + wide + space;
+            free
+        })
+    };
+    let stride = (1..=axis.ticks.len().max(1)).find(fits).unwrap_or(usize::MAX);
+    for (tick, (share, text)) in axis.ticks.iter().enumerate() {
         let x = libm::floor(line.x(*share)) + 0.5;
-        let long = if is_rest(*share) { tall * 1.6 } else { tall };
+        let has_name = tick.abs_diff(anchor) % stride == 0;
+        let long = tall
+            * if is_rest(*share) {
+                1.6
+            } else if has_name {
+                1.0
+            } else {
+                0.6
+            };
         segment(canvas, Spot::new(x, y), Spot::new(x, y + long), Stroke::solid((thick / 2.0).max(1.0)), theme.ink);
-        let face = if is_rest(*share) { Face::bold(face.px()) } else { face };
-        let (left, wide) = place(*share, text, face);
-        if taken.iter().any(|&(from, to)| left < to && left + wide > from) {
-            continue;
+        if has_name {
+            let (left, _) = place(*share, text, face_of(*share));
+            let at = Point::new(left, names_top + face.cap_px());
+            draw_text(canvas, text, at, face_of(*share), theme.ink, Align::LEFT);
         }
-        let at = Point::new(left, names_top + face.cap_px());
-        draw_text(canvas, text, at, face, theme.ink, Align::LEFT);
-        taken.push((left - space, left + wide + space));
     }
     let mut y = names_top + face.line_px();
     if let Some((share, text)) = &axis.rest {
@@ -196,9 +212,4 @@ pub(super) fn draw_result(
     if let Some((share, _)) = &shown.usual {
         draw_usual(canvas, Spot::new(line.x(*share), y), (radius * 0.75).max(4.0), theme);
     }
-}
-
-/// The first row under everything that [`draw_axis`] draws.
-pub(super) fn foot(layout: &Layout, line: Line, axis: &Axis) -> i32 {
-    bottom(area(0, line.y, 1, under_px(layout, axis)))
 }

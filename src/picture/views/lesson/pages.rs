@@ -4,12 +4,12 @@ use embedded_graphics::geometry::Point;
 use embedded_graphics::pixelcolor::Rgb565;
 use embedded_graphics::primitives::Rectangle;
 
-use super::axis::{Line, draw_axis, draw_hand, draw_result, foot, under_px};
+use super::axis::{Line, draw_axis, draw_hand, draw_result, under_px};
 use super::marks::{Look, draw_group, draw_usual};
 use super::{Body, Foot, GuessShown, LessonScene, RevealShown, Saying};
 use crate::picture::lettering::{Across, SIZES_PX, draw as draw_text, lines, measure, paragraph, paragraph_height};
 use crate::picture::shape::{disc, rounded_box, rounded_frame, triangle};
-use crate::picture::views::layout::{Layout, area, bottom, right};
+use crate::picture::views::layout::{Form, Layout, area, bottom, right};
 use crate::picture::views::wording::fit;
 use crate::picture::{Align, Canvas, Face, Spot, Theme};
 
@@ -59,7 +59,12 @@ fn draw_head(canvas: &mut Canvas<'_>, layout: &Layout, row: Rectangle, scene: &L
 }
 
 fn foot_px(layout: &Layout) -> i32 {
-    layout.label.line_px() + layout.gap * 2 + layout.note.line_px()
+    layout.label.line_px() + layout.gap * 2 + hint_px(layout)
+}
+
+/// A narrow screen has room for what a turn and a press do in two lines.
+fn hint_px(layout: &Layout) -> i32 {
+    layout.note.line_px() * if layout.form == Form::Wide { 1 } else { 2 }
 }
 
 /// What is at hand between two arrows, or a note; under it what a turn and a press do.
@@ -96,15 +101,22 @@ fn draw_foot(canvas: &mut Canvas<'_>, layout: &Layout, row: Rectangle, foot: &Fo
         }
     }
     let notes = area(left + layout.gap, y, x + wide - left - layout.gap, high);
-    let hint = area(x, y + high + layout.gap / 2, wide, layout.note.line_px());
+    let hint = area(x, y + high + layout.gap / 2, wide, hint_px(layout));
+    let mut small = |text: &str, face: Face, ink: Rgb565| {
+        let saying = Saying { first: text.to_owned(), second: None };
+        write(canvas, &saying, hint, fitted(&saying, hint, face), (ink, ink), false);
+    };
     match &foot.note {
         // A note that finds no room beside the choice takes the place of the hint.
-        Some(note) if layout.label.fitting(note, notes.size.width, 10).is_some() => {
-            fit(canvas, note, notes, layout.label, theme.lack_ink, Across::Left);
-            fit(canvas, &foot.hint, hint, layout.note, theme.quiet, Across::Left);
+        Some(note) if layout.label.fitting(note, notes.size.width, 10).is_none() => {
+            small(note, layout.label, theme.lack_ink);
         }
-        Some(note) => fit(canvas, note, hint, layout.label, theme.lack_ink, Across::Left),
-        None => fit(canvas, &foot.hint, hint, layout.note, theme.quiet, Across::Left),
+        note => {
+            small(&foot.hint, layout.note, theme.quiet);
+            if let Some(note) = note {
+                fit(canvas, note, notes, layout.label, theme.lack_ink, Across::Left);
+            }
+        }
     }
 }
 
@@ -193,43 +205,39 @@ fn draw_prompt(canvas: &mut Canvas<'_>, layout: &Layout, room: Rectangle, prompt
     }
 }
 
-/// Radius of a group's mark and the face of its letter.
-fn mark(layout: &Layout) -> (f64, Face) {
-    let face = Face::bold(layout.label.px());
+/// Radius of a group's mark and the face of its letter: larger where few groups share the axis.
+fn mark(layout: &Layout, groups: usize) -> (f64, Face) {
+    let px = u16::from(layout.label.px());
+    let face = Face::bold((if groups > 6 { px } else { px * 3 / 2 }).min(255) as u8);
     (f64::from(face.px()) * 0.72, face)
 }
 
 fn draw_guess(canvas: &mut Canvas<'_>, layout: &Layout, room: Rectangle, shown: &GuessShown, theme: &Theme) {
-    let (radius, face) = mark(layout);
+    let (radius, face) = mark(layout, shown.is_in.len());
     let (x, wide) = (room.top_left.x, room.size.width as i32);
     let groups_high = (radius * 2.6) as i32;
     let groups = area(x, bottom(room) - groups_high, wide, groups_high);
-    let axis_high = under_px(layout, &shown.axis);
-    let line_y = groups.top_left.y - layout.gap - axis_high;
+    let line_y = groups.top_left.y - layout.gap - under_px(layout, &shown.axis);
     let line = Line::across(room, radius, line_y);
     draw_axis(canvas, layout, room, line, &shown.axis, theme);
     let pin_top = line_y - (radius * 3.8) as i32;
     let rest = pin_top - room.top_left.y;
-    // The question keeps the larger part of what is left, the guess in words the rest.
-    let figure = Face::bold(layout.figure.px().min(SIZES_PX[SIZES_PX.len() - 1]));
-    let value_high = figure.line_px().min(rest * 2 / 5);
+    // The guess stands large over its pin; the question keeps what is left.
+    let figure = figure_within(Face::bold(layout.figure.px()), rest * 2 / 5);
+    let name_high = layout.label.line_px();
+    let value_high = figure.line_px() + name_high;
     let prompt_room = area(x, room.top_left.y, wide, rest - value_high - layout.gap);
-    write(
-        canvas,
-        &shown.prompt,
-        prompt_room,
-        fitted(&shown.prompt, prompt_room, large(layout, 2)),
-        (theme.ink, theme.quiet),
-        false,
-    );
+    let prompt_face = fitted(&shown.prompt, prompt_room, large(layout, 2));
+    write(canvas, &shown.prompt, prompt_room, prompt_face, (theme.ink, theme.quiet), false);
     if let Some(hand) = shown.hand {
-        let value = area(x, pin_top - value_high, wide, value_high);
-        let value_face = figure_within(figure, value_high);
-        let name_wide = measure(&shown.group_name, layout.label).width as i32 + layout.gap * 2;
-        let label = area(x, value.top_left.y, name_wide, value_high);
-        fit(canvas, &shown.group_name, label, layout.label, theme.lack_ink, Across::Left);
-        let value = area(x + name_wide, value.top_left.y, wide - name_wide, value_high);
-        fit(canvas, &shown.value, value, value_face, theme.ink, Across::Left);
+        let top = pin_top - value_high - layout.gap / 2;
+        let value_face = figure.fitting(&shown.value, room.size.width, 9).unwrap_or(figure);
+        let widest = measure(&shown.value, value_face).width.max(measure(&shown.group_name, layout.label).width) as i32;
+        let left = (libm::round(line.x(hand)) as i32 - widest / 2).min(right(room) - widest).max(x);
+        let name = area(left, top, widest, name_high);
+        fit(canvas, &shown.group_name, name, layout.label, theme.lack_ink, Across::Centre);
+        let value = area(left, top + name_high, widest, figure.line_px());
+        fit(canvas, &shown.value, value, value_face, theme.ink, Across::Centre);
         draw_hand(canvas, line, shown.group, hand, radius, face, theme);
     }
     draw_groups(canvas, groups, shown, (radius, face), theme);
@@ -257,6 +265,7 @@ fn draw_groups(
     let left = f64::from(row.top_left.x) + (f64::from(row.size.width) - apart * count) / 2.0;
     let y = f64::from(row.top_left.y) + f64::from(row.size.height) / 2.0;
     let radius = radius.min(apart / 2.5);
+    let face = Face::bold(face.px().min((radius * 1.4) as u8));
     for (group, is_in) in shown.is_in.iter().enumerate() {
         let middle = Spot::new(left + apart * (group as f64 + 0.5), y);
         let look = match is_in {
@@ -269,37 +278,45 @@ fn draw_groups(
 }
 
 fn draw_reveal(canvas: &mut Canvas<'_>, layout: &Layout, room: Rectangle, shown: &RevealShown, theme: &Theme) {
-    let (radius, face) = mark(layout);
+    let (radius, face) = mark(layout, shown.guesses.len());
     let (x, wide, high) = (room.top_left.x, room.size.width as i32, room.size.height as i32);
-    let result_face = figure_within(Face::bold(layout.figure.px()), high / 6);
-    let result_high = result_face.line_px();
-    let verdict_high = layout.label.line_px();
+    // What is said under the axis: the guesses in a sentence, and what most people say.
+    let verdict = Saying { first: shown.verdict.clone(), second: None };
+    let verdict_wide = wide as u32;
+    let lines_of = |face: Face| lines(&shown.verdict, face, verdict_wide).count() as i32;
+    let verdict_face = if lines_of(layout.label) > 2 { layout.note } else { layout.label };
+    let verdict_high = verdict_face.line_px() * lines_of(verdict_face).min(2);
     let usual_high = if shown.usual.is_some() { layout.label.line_px() } else { 0 };
-    let axis_high = under_px(layout, &shown.axis);
-    let head_high = (high * 3 / 10).min(layout.title.line_px() * if shown.reveal.second.is_some() { 5 } else { 3 });
-    let head = area(x, room.top_left.y, wide, head_high);
+    let below = area(x, bottom(room) - verdict_high - usual_high, wide, verdict_high + usual_high);
+    let line_y = below.top_left.y - layout.gap / 2 - under_px(layout, &shown.axis);
+    let line = Line::across(room, radius, line_y);
+    let result_face = figure_within(Face::bold(layout.figure.px()), high / 6);
+    let chip_high = result_face.line_px() + layout.gap;
+    // The marks of the guesses need two rows at least; the sentence gets what is left.
+    let pile_high = (radius * 6.0) as i32;
+    let head_high = line_y - pile_high - chip_high - layout.gap * 2 - room.top_left.y;
+    let most = layout.title.line_px() * if shown.reveal.second.is_some() { 5 } else { 3 };
+    let head = area(x, room.top_left.y, wide, head_high.min(most));
     let face_head = fitted(&shown.reveal, head, large(layout, 2));
     let end = write(canvas, &shown.reveal, head, face_head, (theme.ink, theme.quiet), false);
     // The result in large figures, on the ground of water, which its line shares.
     let says_wide = measure(&shown.says, layout.label).width as i32;
+    let inset = layout.gap * 7;
+    let result_face = result_face.fitting(&shown.result_text, (wide - says_wide - inset).max(0) as u32, 9);
+    let result_face = result_face.unwrap_or(Face::bold(9));
     let text_wide = measure(&shown.result_text, result_face).width as i32;
-    let chip = area(x, end + layout.gap, (says_wide + text_wide + layout.gap * 7).min(wide), result_high + layout.gap);
+    let chip = area(x, end + layout.gap, (says_wide + text_wide + inset).min(wide), chip_high);
     rounded_box(canvas, chip, f64::from(layout.gap) * 1.2, theme.water);
-    let inside = area(x + layout.gap * 2, chip.top_left.y, says_wide, chip.size.height as i32);
+    let inside = area(x + layout.gap * 2, chip.top_left.y, says_wide, chip_high);
     fit(canvas, &shown.says, inside, layout.label, theme.on_water, Across::Left);
     let left = right(inside) + layout.gap * 3;
-    let value = area(left, chip.top_left.y, right(chip) - left - layout.gap, chip.size.height as i32);
+    let value = area(left, chip.top_left.y, right(chip) - left - layout.gap, chip_high);
     fit(canvas, &shown.result_text, value, result_face, theme.on_water, Across::Left);
-    let foot_top = bottom(room) - verdict_high - usual_high;
-    let line_y = foot_top - layout.gap - axis_high;
     let top = bottom(chip) + layout.gap;
-    let line = Line::across(room, radius, line_y);
-    let pile = area(x, top, wide, line_y - top);
-    draw_result(canvas, layout, pile, line, shown, (radius, face), theme);
+    draw_result(canvas, layout, area(x, top, wide, line_y - top), line, shown, (radius, face), theme);
     draw_axis(canvas, layout, room, line, &shown.axis, theme);
-    let below = foot(layout, line, &shown.axis).min(foot_top);
-    let mut y = below + (bottom(room) - below - verdict_high - usual_high) / 2;
-    fit(canvas, &shown.verdict, area(x, y, wide, verdict_high), layout.label, theme.ink, Across::Left);
+    let mut y = below.top_left.y;
+    write(canvas, &verdict, area(x, y, wide, verdict_high), verdict_face, (theme.ink, theme.ink), false);
     y += verdict_high;
     if let Some((_, text)) = &shown.usual {
         let mark = layout.label.cap_px();
@@ -343,7 +360,7 @@ fn draw_start(
     theme: &Theme,
 ) {
     let (x, wide) = (room.top_left.x, room.size.width as i32);
-    let (radius, face) = mark(layout);
+    let (radius, face) = mark(layout, groups.into());
     let per_row = ((f64::from(wide) / (radius * 3.0)) as i32).clamp(1, 12);
     let rows = (i32::from(groups) + per_row - 1) / per_row;
     let marks_high = (radius * 2.8) as i32 * rows;

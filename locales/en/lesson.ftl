@@ -3,7 +3,7 @@
 lesson-step = Step { $step } of { $steps }
 lesson-guess-first = Guess first.
 lesson-group = Group { $group }
-lesson-needs-guess = No guess is in yet. Turn and press, or hold to skip.
+lesson-needs-guess = No guess is in yet. Turn and press.
 lesson-closed = The result is out. Guesses are closed.
 lesson-skipped = You went on without a guess.
 lesson-over = The lesson is over. Thank you.

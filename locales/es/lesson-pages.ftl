@@ -23,13 +23,13 @@ lesson-do-more = Más
 lesson-do-again = Empezar de nuevo
 lesson-do-leave = Salir de la lección
 
-lesson-hint-list = Gire: elegir. Oprima: abrir.
-lesson-hint-start = Gire: cuántos grupos. Oprima: empezar. Sostenga: volver a la lista.
-lesson-hint-on = Oprima: hacerlo. Gire: otra cosa. Sostenga: empezar de nuevo.
-lesson-hint-look = Oprima: seguir
-lesson-hint-guess = Gire: su respuesta. Oprima: queda puesta. Sostenga: más.
-lesson-hint-choose = Oprima: hacerlo. Gire: otra cosa.
-lesson-hint-word = Gire: una letra. Oprima: ponerla. Sostenga: salir.
+lesson-hint-list = Gire: elegir. Presione: abrir.
+lesson-hint-start = Gire: cuántos grupos. Presione: empezar. Mantenga presionado: volver a la lista.
+lesson-hint-on = Presione: hacerlo. Gire: otra cosa. Mantenga presionado: empezar de nuevo.
+lesson-hint-look = Presione: seguir
+lesson-hint-guess = Gire: su respuesta. Presione: queda puesta. Mantenga presionado: más.
+lesson-hint-choose = Presione: hacerlo. Gire: otra cosa.
+lesson-hint-word = Gire: una letra. Presione: ponerla. Mantenga presionado: salir.
 
 ## Avisos
 

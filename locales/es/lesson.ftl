@@ -3,7 +3,7 @@
 lesson-step = Paso { $step } de { $steps }
 lesson-guess-first = Primero, adivine.
 lesson-group = Grupo { $group }
-lesson-needs-guess = Falta una respuesta. Gire y oprima, o mantenga oprimido para seguir sin ella.
+lesson-needs-guess = Falta una respuesta. Gire y presione.
 lesson-closed = El resultado ya se vio; no se admiten más respuestas.
 lesson-skipped = Siguió sin responder.
 lesson-over = Aquí termina la lección. Gracias.

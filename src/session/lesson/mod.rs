@@ -270,6 +270,19 @@ impl Led {
         self.part == Part::Steps && self.phase() == Some(Phase::Guess) && self.bar.is_none() && !self.is_closed()
     }
 
+    /// Moves the guess at hand to a share of its axis, 0 to 1, as a finger on it does; nothing where no group guesses.
+    pub fn guess_at(&mut self, share: f64) -> Taken {
+        if self.is_guessing() && share.is_finite() {
+            if let (Some(course), Some(progress)) = (&self.course, &mut self.progress) {
+                let guess = course.lesson.steps.get(progress.step()).and_then(|step| step.guess);
+                let last = guess.map_or(0.0, |guess| f64::from(guess.stops) - 1.0);
+                let stop = libm::round(share.clamp(0.0, 1.0) * last) as i32;
+                progress.turn(&course.lesson, stop - i32::from(progress.hand()));
+            }
+        }
+        Taken::here()
+    }
+
     /// Takes an event before the session does.
     pub fn take(&mut self, event: Event, state: &State) -> Taken {
         let shown = state.shown();

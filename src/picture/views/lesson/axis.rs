@@ -31,6 +31,11 @@ impl Line {
         Self { left: f64::from(room.top_left.x) + inset, wide: f64::from(room.size.width) - 2.0 * inset, y }
     }
 
+    /// The share of the way at a column, 0 to 1.
+    pub fn share_at(&self, x: i32) -> f64 {
+        if self.wide > 0.0 { ((f64::from(x) + 0.5 - self.left) / self.wide).clamp(0.0, 1.0) } else { 0.5 }
+    }
+
     /// The column of a share of the way.
     pub fn x(&self, share: f64) -> f64 {
         self.left + self.wide * share.clamp(-BEYOND, 1.0 + BEYOND)

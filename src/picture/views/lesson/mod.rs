@@ -8,6 +8,7 @@ mod axis;
 mod marks;
 mod pages;
 mod strip;
+mod touch;
 
 use embedded_graphics::geometry::{OriginDimensions, Size};
 
@@ -15,6 +16,7 @@ use super::layout::Layout;
 use crate::picture::{Canvas, Theme};
 
 pub use strip::{draw_strip, strip_px};
+pub use touch::{LessonTouched, touched};
 
 /// A sentence in the room's one or two languages.
 #[derive(Clone, Debug, Default, PartialEq, Eq)]

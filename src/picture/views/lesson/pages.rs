@@ -1,6 +1,6 @@
 //! The pages of a lesson, each laid out afresh for the size of the screen.
 
-use embedded_graphics::geometry::Point;
+use embedded_graphics::geometry::{OriginDimensions, Point, Size};
 use embedded_graphics::pixelcolor::Rgb565;
 use embedded_graphics::primitives::Rectangle;
 
@@ -13,19 +13,33 @@ use crate::picture::views::layout::{Form, Layout, area, bottom, right};
 use crate::picture::views::wording::fit;
 use crate::picture::{Align, Canvas, Face, Spot, Theme};
 
+/// The boxes of a page.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub(super) struct Rooms {
+    pub head: Rectangle,
+    pub room: Rectangle,
+    pub foot: Rectangle,
+}
+
+impl Rooms {
+    pub fn of(size: Size, layout: &Layout) -> Self {
+        let (wide, high) = (size.width as i32, size.height as i32);
+        let inner = wide - 2 * layout.margin;
+        let head = area(layout.margin, layout.margin / 2, inner, layout.label.line_px());
+        let foot_high = foot_px(layout);
+        let foot = area(layout.margin, high - foot_high - layout.margin / 2, inner, foot_high);
+        let top = bottom(head) + layout.gap * 2;
+        let room = area(layout.margin, top, inner, foot.top_left.y - layout.gap - top);
+        Self { head, room, foot }
+    }
+}
+
 /// Draws head, page and foot.
 pub(super) fn draw(canvas: &mut Canvas<'_>, layout: &Layout, scene: &LessonScene, theme: &Theme) {
-    let whole = canvas.frame();
-    canvas.fill(whole, theme.paper);
-    let (wide, high) = (whole.size.width as i32, whole.size.height as i32);
-    let inner = wide - 2 * layout.margin;
-    let head = area(layout.margin, layout.margin / 2, inner, layout.label.line_px());
+    canvas.fill(canvas.frame(), theme.paper);
+    let Rooms { head, room, foot } = Rooms::of(canvas.size(), layout);
     draw_head(canvas, layout, head, scene, theme);
-    let foot_high = foot_px(layout);
-    let foot = area(layout.margin, high - foot_high - layout.margin / 2, inner, foot_high);
     draw_foot(canvas, layout, foot, &scene.foot, theme);
-    let top = bottom(head) + layout.gap * 2;
-    let room = area(layout.margin, top, inner, foot.top_left.y - layout.gap - top);
     match &scene.body {
         Body::List { entries, open } => draw_list(canvas, layout, room, entries, *open, theme),
         Body::Start { about, minutes, ask, groups } => {
@@ -67,6 +81,14 @@ fn hint_px(layout: &Layout) -> i32 {
     layout.note.line_px() * if layout.form == Form::Wide { 1 } else { 2 }
 }
 
+/// Where the name of what is at hand stands, right of the first arrow where there are more.
+pub(super) fn chip_place(layout: &Layout, row: Rectangle, name: &str, count: usize) -> Rectangle {
+    let face = Face::bold(layout.label.px());
+    let wide = measure(name, face).width as i32 + layout.gap * 4;
+    let arrow = if count > 1 { face.cap_px() * 8 / 5 } else { 0 };
+    area(row.top_left.x + arrow, row.top_left.y, wide, layout.label.line_px() + layout.gap)
+}
+
 /// What is at hand between two arrows, or a note; under it what a turn and a press do.
 fn draw_foot(canvas: &mut Canvas<'_>, layout: &Layout, row: Rectangle, foot: &Foot, theme: &Theme) {
     let (x, y, wide) = (row.top_left.x, row.top_left.y, row.size.width as i32);
@@ -75,15 +97,12 @@ fn draw_foot(canvas: &mut Canvas<'_>, layout: &Layout, row: Rectangle, foot: &Fo
     let mut left = x;
     if let Some((name, place, count)) = &foot.choice {
         let arrow = f64::from(face.cap_px());
-        let chip_wide = measure(name, face).width as i32 + layout.gap * 4;
-        let turns = *count > 1;
-        let start = if turns { x + (arrow * 1.6) as i32 } else { x };
-        let chip = area(start, y, chip_wide, high);
+        let chip = chip_place(layout, row, name, *count);
         rounded_box(canvas, chip, f64::from(high) / 2.0, theme.chosen);
         fit(canvas, name, chip, face, theme.on_chosen, Across::Centre);
         let middle = f64::from(y) + f64::from(high) / 2.0;
         left = right(chip);
-        if turns {
+        if *count > 1 {
             let mut tip = |at: f64, way: f64| {
                 let back = at - way * arrow * 0.8;
                 let (up, down) = (middle - arrow * 0.6, middle + arrow * 0.6);
@@ -212,13 +231,20 @@ fn mark(layout: &Layout, groups: usize) -> (f64, Face) {
     (f64::from(face.px()) * 0.72, face)
 }
 
+/// The line along which a guess is moved.
+pub(super) fn guess_line(layout: &Layout, room: Rectangle, shown: &GuessShown) -> Line {
+    let (radius, _) = mark(layout, shown.is_in.len());
+    let groups_top = bottom(room) - (radius * 2.6) as i32;
+    Line::across(room, radius, groups_top - layout.gap - under_px(layout, &shown.axis))
+}
+
 fn draw_guess(canvas: &mut Canvas<'_>, layout: &Layout, room: Rectangle, shown: &GuessShown, theme: &Theme) {
     let (radius, face) = mark(layout, shown.is_in.len());
     let (x, wide) = (room.top_left.x, room.size.width as i32);
     let groups_high = (radius * 2.6) as i32;
     let groups = area(x, bottom(room) - groups_high, wide, groups_high);
-    let line_y = groups.top_left.y - layout.gap - under_px(layout, &shown.axis);
-    let line = Line::across(room, radius, line_y);
+    let line = guess_line(layout, room, shown);
+    let line_y = line.y;
     draw_axis(canvas, layout, room, line, &shown.axis, theme);
     let pin_top = line_y - (radius * 3.8) as i32;
     let rest = pin_top - room.top_left.y;
@@ -389,6 +415,14 @@ fn draw_start(
     }
 }
 
+/// The first entry that is listed, and how many are, so that there is room for what the open one is about.
+fn listed(layout: &Layout, room: Rectangle, count: usize, open: usize) -> (usize, usize) {
+    let about_high = layout.label.line_px() * 4;
+    let row_high = Face::bold(layout.strong.px()).line_px() + layout.gap;
+    let shown = ((room.size.height as i32 - about_high) / row_high).max(1) as usize;
+    (open.saturating_sub(shown / 2).min(count.saturating_sub(shown)), shown)
+}
+
 fn draw_list(
     canvas: &mut Canvas<'_>,
     layout: &Layout,
@@ -402,8 +436,7 @@ fn draw_list(
     let about = Face::regular(layout.label.px());
     let about_high = about.line_px() * 4;
     let row_high = face.line_px() + layout.gap;
-    let shown = ((room.size.height as i32 - about_high) / row_high).max(1) as usize;
-    let first = open.saturating_sub(shown / 2).min(entries.len().saturating_sub(shown));
+    let (first, shown) = listed(layout, room, entries.len(), open);
     let mut y = room.top_left.y;
     for (index, (name, text)) in entries.iter().enumerate().skip(first).take(shown) {
         let row = area(x, y, wide, row_high);

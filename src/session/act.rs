@@ -7,7 +7,7 @@ use super::knob::{Turn, around};
 use super::offer::Offer;
 use super::ring::Item;
 use super::setting::{Setting, SettingEntry};
-use super::state::{Act, Card, Focus, State};
+use super::state::{Act, Card, Done, Focus, State};
 use super::view::View;
 use crate::water::dials::Dials;
 
@@ -17,7 +17,7 @@ impl State {
         // Time, a resting potentiometer and a finger on its way say nothing new about ends or turns by themselves.
         let goes_on = matches!(event, Event::Tick { .. } | Event::SetDial { .. } | Event::TouchMove(_));
         if !goes_on {
-            self.shown.at_end = None;
+            (self.shown.at_end, self.shown.done) = (None, None);
         }
         self.turned = false;
         match event {
@@ -171,16 +171,18 @@ impl State {
     }
 
     fn keep(&mut self) {
-        self.shown.beside = match self.shown.beside {
-            Some(_) => None,
-            None => Some(self.shown.dials),
+        let (beside, done) = match self.shown.beside {
+            Some(_) => (None, Done::LetGo),
+            None => (Some(self.shown.dials), Done::Kept),
         };
+        (self.shown.beside, self.shown.done) = (beside, Some(done));
     }
 
     fn reset(&mut self) {
         if self.shown.dials != Dials::REST || self.shown.beside.is_some() {
             self.remember(Act::Reset);
         }
+        self.shown.done = Some(Done::Reset);
         self.shown.dials = Dials::REST;
         self.shown.beside = None;
         self.shown.card = None;
@@ -191,7 +193,11 @@ impl State {
 
     /// Takes back the last act by changing what it changed with what it was; the next undo changes it again.
     fn undo(&mut self, offer: &Offer) {
-        let Some(undo) = self.shown.undo else { return };
+        let Some(undo) = self.shown.undo else {
+            self.shown.done = Some(Done::NothingToUndo);
+            return;
+        };
+        self.shown.done = Some(if undo.undone { Done::DoneAgain } else { Done::Undone });
         self.remember(undo.act);
         if let Some(again) = &mut self.shown.undo {
             again.undone = !undo.undone;
@@ -210,22 +216,26 @@ impl State {
     /// Does what an entry of the list of settings says.
     pub(super) fn do_entry(&mut self, entry: usize, offer: &Offer) {
         let own = &mut self.shown.own;
-        let recalled = match own.entry(offer, entry) {
+        let chosen = own.entry(offer, entry);
+        let recalled = match chosen {
             None => return,
             Some(SettingEntry::Back) => None,
             Some(SettingEntry::Offered(index)) => offer.settings().get(index).map(|named| named.setting),
             Some(SettingEntry::Own(index)) => own.get(index),
             Some(SettingEntry::Save) => {
                 own.push(Setting { dials: self.shown.dials, year: Some(self.shown.year) });
+                self.shown.done = Some(Done::Saved(own.count() - 1));
                 None
             }
             Some(SettingEntry::ForgetLast) => {
                 own.pop();
+                self.shown.done = Some(Done::Forgot);
                 None
             }
         };
         if let Some(setting) = recalled {
             self.remember(Act::Recall);
+            self.shown.done = chosen.map(Done::Recalled);
             self.shown.dials = setting.dials;
             if let Some(year) = setting.year {
                 self.set_year(year, offer);

@@ -121,6 +121,15 @@ impl Offer {
         Ok(offer)
     }
 
+    /// The same with those of `settings` that go with it, beside those that it has.
+    #[must_use]
+    pub fn with_settings(mut self, settings: Vec<NamedSetting>) -> Self {
+        let fitting: Vec<NamedSetting> =
+            settings.into_iter().filter(|named| named.setting.fits(&self).is_ok()).collect();
+        self.settings.extend(fitting);
+        self
+    }
+
     /// The same with so many sheets of the about view, as the picture counts them for a screen; 0 counts as 1.
     #[must_use]
     pub fn with_about_sheets(self, sheets: u8) -> Self {

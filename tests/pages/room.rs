@@ -193,7 +193,7 @@ fn every_sheet_of_the_help_card_and_every_explanation() {
         let (words, _) = Words::new(tag);
         land.show(Play { units: words.system(), dials: all_turned(1.0), ..Play::warm() }, |scene| {
             for (wide, high) in SIZES {
-                for sheet in 0..help::sheet_count(Size::new(wide.into(), high.into()), &key_lines(), &words) {
+                for sheet in 0..help::sheet_count(Size::new(wide.into(), high.into()), &key_lines(), (&words, None)) {
                     let (_, strict) = paint(wide, high, |canvas| draw_help(canvas, sheet, &Theme::LIGHT, &words));
                     let at = format!("help {sheet} in {tag} at {wide}x{high}");
                     found.extend(strict.faults().iter().map(|fault| format!("{at}: {fault}")));

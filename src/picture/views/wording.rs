@@ -15,12 +15,12 @@ use crate::words::{DateStyle, Quantity, System, Words};
 pub(super) const DOT: &str = " · ";
 
 /// The short name of a dial.
-pub(super) fn dial_name(dial: Dial, words: &Words) -> String {
+pub fn dial_name(dial: Dial, words: &Words) -> String {
     words.say(&format!("{}.short", Words::key_id("dial", dial.key())), &[])
 }
 
 /// Where a dial stands, with its sign where it means more or less, and its unit.
-pub(super) fn dial_value(setting: &DialSetting, units: System, words: &Words) -> String {
+pub fn dial_value(setting: &DialSetting, units: System, words: &Words) -> String {
     let Some(value) = setting.value else { return words.say("picture-carried-over", &[]) };
     let written = match setting.dial.unit() {
         DialUnit::Celsius => words.quantity(value, Quantity::TemperatureChange, units, 2),

@@ -2,7 +2,7 @@
 
 use super::command::Command;
 use super::event::Event;
-use super::keys::command_of;
+use super::keys::{Key, PAGE, command_of};
 use super::knob::{Turn, around};
 use super::offer::Offer;
 use super::ring::Item;
@@ -28,7 +28,7 @@ impl State {
             Event::TurnDial { dial, detents, since_ms } => self.turn_dial(dial, Turn { detents, since_ms }, offer),
             Event::SetDial { dial, share } => self.set_dial(dial, share, offer),
             Event::Key(key) => {
-                if let Some(command) = command_of(key) {
+                if let Some(command) = self.along(key).or_else(|| command_of(key)) {
                     self.command(command, offer);
                 }
             }
@@ -41,6 +41,22 @@ impl State {
         if !goes_on && !self.turned {
             self.gesture = None;
         }
+    }
+
+    /// What an arrow means where a list, the sheets of a card, the ring or a thing that is no dial is open: the way that it
+    /// points.
+    fn along(&self, key: Key) -> Option<Command> {
+        let downwards = self.shown.card.is_some() || self.shown.focus == Focus::In(Item::Settings);
+        let steps = match key {
+            Key::Left => -1,
+            Key::Right => 1,
+            Key::Up if downwards => -1,
+            Key::Down if downwards => 1,
+            Key::PageUp if downwards => -PAGE,
+            Key::PageDown if downwards => PAGE,
+            _ => return None,
+        };
+        (downwards || !self.shown.focus.is_in_dial()).then_some(Command::Turn(steps))
     }
 
     /// Does what was asked.
@@ -161,6 +177,9 @@ impl State {
             self.shown.view = view;
             self.shown.sheet = 0;
             self.shown.card = None;
+            if self.shown.focus == Focus::In(Item::Settings) {
+                self.go_home();
+            }
         }
     }
 

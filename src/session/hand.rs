@@ -220,11 +220,15 @@ fn told_text(setting: &PlaceSetting, words: &Words) -> String {
 fn in_words(setting: &Setting, shown: &Shown, told: &Told<'_>) -> String {
     let words = told.words;
     let turned = |dial: &Dial| setting.dials.get(*dial) != Dials::REST.get(*dial);
-    let mut parts: Vec<String> = Dial::ALL.into_iter().filter(turned).map(|dial| {
-        let range = told.offer.scale(dial).map_or(dial.widest(), |scale| scale.range());
-        let stands = DialSetting { dial, value: setting.dials.get(dial), range };
-        format!("{} {}", dial_name(dial, words), dial_value(&stands, shown.system, words))
-    }).collect();
+    let mut parts: Vec<String> = Dial::ALL
+        .into_iter()
+        .filter(turned)
+        .map(|dial| {
+            let range = told.offer.scale(dial).map_or(dial.widest(), |scale| scale.range());
+            let stands = DialSetting { dial, value: setting.dials.get(dial), range };
+            format!("{} {}", dial_name(dial, words), dial_value(&stands, shown.system, words))
+        })
+        .collect();
     if parts.is_empty() {
         parts.push(words.say("dial-at-rest", &[]));
     }

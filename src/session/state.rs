@@ -175,10 +175,12 @@ pub enum Invalid {
 }
 
 impl State {
-    /// The state at the start: dials at rest, the first dial in hand, the first view, the middling year's first day.
+    /// The state at the start: dials at rest, the first dial in hand, the first view, the middling year's opening day.
     pub fn new(offer: &Offer) -> Self {
         let chosen = offer.dials().next();
         let year = YearChoice::Of(Third::Middling);
+        let year_index = offer.years().index(year).unwrap_or(0);
+        let last_day = offer.years().days(year_index).unwrap_or(1) - 1;
         let shown = Shown {
             dials: Dials::REST,
             chosen,
@@ -189,8 +191,8 @@ impl State {
             view: offer.views()[0],
             sheet: 0,
             year,
-            year_index: offer.years().index(year).unwrap_or(0),
-            day: 0,
+            year_index,
+            day: offer.opening_day().min(last_day),
             playing: false,
             speed: Speed::Middling,
             voice: 0,

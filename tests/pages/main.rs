@@ -8,6 +8,7 @@ mod scenes;
 mod valleys;
 
 mod pictures;
+mod ring;
 mod room;
 mod sentences;
 mod sheets;

@@ -17,7 +17,8 @@ use super::scenes::{Land, Play, steep_valley};
 use super::valleys::{canal, on, random_valley};
 use super::{PAGES, TESTS, draw, draw_help, draw_term, facts, skill};
 
-const SIZES: [(u16, u16); 7] = [(240, 240), (240, 320), (320, 240), (480, 320), (800, 480), (1280, 720), (1920, 1080)];
+pub const SIZES: [(u16, u16); 7] =
+    [(240, 240), (240, 320), (320, 240), (480, 320), (800, 480), (1280, 720), (1920, 1080)];
 
 /// Draws everything of a scene in a language and gives the faults that were found.
 fn faults(what: &str, scene: &Scene<'_>, words: &Words) -> Vec<String> {

@@ -13,7 +13,7 @@ use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
 use crate::picture::views::{Scene, help, term};
 use crate::place::{Place, Setting};
-use crate::session::answer::{Asked, Source};
+use crate::session::answer::{Asked, Source, YearDetail};
 use crate::session::hand::{HandTold, Told};
 use crate::session::help::key_lines;
 use crate::session::point::{Finger, Phase};
@@ -80,6 +80,7 @@ impl Player {
         })
         .map_err(|_| no_run())?;
         let (offer, settings) = with_droughts(offer, &place.dials, &answers.rest().run.years);
+        let offer = offer.with_opening_day(survey_day(&place, &answers.rest().year));
         let captions = voices.iter().map(|(words, _)| caption(&place, words)).collect();
         let percent_per_degree = place.evaporation_percent_per_degree();
         let voice_names = voices.iter().map(voice_name).collect();
@@ -135,7 +136,8 @@ impl Player {
     /// Lets the help card have as many pages as it needs on a screen of this size, in any language.
     fn make_room_for_help(&mut self, size: FrameSize) {
         let (size, keys) = (Size::new(size.width.into(), size.height.into()), key_lines());
-        let sheets = |(words, second): &(Words, Option<Words>)| help::sheet_count(size, &keys, (words, second.as_ref()));
+        let sheets =
+            |(words, second): &(Words, Option<Words>)| help::sheet_count(size, &keys, (words, second.as_ref()));
         let most = self.voices.iter().map(sheets).max().unwrap_or(1);
         let most = u8::try_from(most).unwrap_or(u8::MAX);
         if most > self.offer.help_pages() {
@@ -254,9 +256,7 @@ impl Instrument for Player {
             let shown = *self.state.shown();
             // Taken out while the scene borrows everything else.
             let mut drawing = std::mem::replace(&mut self.drawings[at], Drawing::none());
-            self.with_scene(|scene, speech| {
-                drawing.draw(shown.view, shown.card, scene, shown.shade, speech)
-            });
+            self.with_scene(|scene, speech| drawing.draw(shown.view, shown.card, scene, shown.shade, speech));
             drawing.stamp = Some(self.stamp);
             let sheets = drawing.sheets;
             self.drawings[at] = drawing;
@@ -301,6 +301,13 @@ fn voices(speech: &Speech, region: &str) -> Vec<(Words, Option<Words>)> {
     let words = |tag: &str| Words::for_place(tag, second_region).0;
 
     vec![(asked, None), (words(other), None), (speech.for_place(region), Some(words(other)))]
+}
+
+/// The day of the snow survey in a year, counted from 0: snow lies, the river rises, and a turn of a dial shows.
+fn survey_day(place: &Place, year: &YearDetail) -> u16 {
+    let days = place.calendar.get(year.year.first..year.year.first + year.year.days).unwrap_or_default();
+    let at = days.iter().position(|day| day.month_day == place.valley.survey);
+    at.and_then(|at| u16::try_from(at).ok()).unwrap_or(0)
 }
 
 fn voice_name((first, second): &(Words, Option<Words>)) -> String {

@@ -192,7 +192,8 @@ fn card(
     fit(canvas, &value, area(left, below.top_left.y, taken, below.size.height as i32), figure, look.text, Across::Left);
     let track = area(left + taken + pad, below.top_left.y, wide - taken - pad, below.size.height as i32);
     if track.size.width as i32 >= least_track {
-        let chosen = scene.hand.focus.is_in_dial() && scene.chosen.is_some_and(|at| scene.dials.get(at) == Some(setting));
+        let chosen =
+            scene.hand.focus.is_in_dial() && scene.chosen.is_some_and(|at| scene.dials.get(at) == Some(setting));
         draw_track(canvas, setting, track, look, scene.hand.end.filter(|_| chosen), theme);
     }
 }

@@ -86,7 +86,7 @@ impl DateLine {
         let today = scene.today().map(|today| day_short(today, &scene.year, words)).unwrap_or_default();
         let play = area(x, y, layout.label.cap_px() * 5 / 6 + 1, high);
         let day_face = Face::bold(layout.label.px());
-        let day = area(right(play) + layout.gap, y, measure(&today, day_face).width as i32, high);
+        let day = area(right(play) + layout.gap * 3 / 2 + 1, y, measure(&today, day_face).width as i32, high);
         let dots = area(right(day) + layout.gap, y, if scene.stale { dot_px(layout) * 8 } else { 0 }, high);
         let room = x + wide - right(dots) - layout.gap;
         let name = year_name(&scene.year, words);

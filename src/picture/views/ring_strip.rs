@@ -84,8 +84,16 @@ pub(super) fn draw_ring(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<
     let tall = f64::from(layout.label.cap_px()) / 2.0;
     let y = f64::from(place.card.top_left.y) + f64::from(place.card.size.height) / 2.0;
     let (left, end) = (f64::from(place.before.top_left.x), f64::from(right(place.after)));
-    triangle(canvas, [Spot::new(left + tall * 1.4, y - tall), Spot::new(left, y), Spot::new(left + tall * 1.4, y + tall)], theme.lack);
-    triangle(canvas, [Spot::new(end - tall * 1.4, y - tall), Spot::new(end, y), Spot::new(end - tall * 1.4, y + tall)], theme.lack);
+    triangle(
+        canvas,
+        [Spot::new(left + tall * 1.4, y - tall), Spot::new(left, y), Spot::new(left + tall * 1.4, y + tall)],
+        theme.lack,
+    );
+    triangle(
+        canvas,
+        [Spot::new(end - tall * 1.4, y - tall), Spot::new(end, y), Spot::new(end - tall * 1.4, y + tall)],
+        theme.lack,
+    );
     let Some(at) = at.filter(|_| ring.len() > 2) else { return };
     let taken = (tall * 1.4) as i32 + layout.gap;
     let (before, after) = (ring[(at + ring.len() - 1) % ring.len()], ring[(at + 1) % ring.len()]);
@@ -199,7 +207,13 @@ fn draw_places(canvas: &mut Canvas<'_>, room: Rectangle, scene: &Scene<'_>, them
 }
 
 /// A bar across the end that a turn wanted to go beyond.
-pub(super) fn draw_end(canvas: &mut Canvas<'_>, (from, to): (f64, f64), room: Rectangle, end: Option<End>, colour: Rgb565) {
+pub(super) fn draw_end(
+    canvas: &mut Canvas<'_>,
+    (from, to): (f64, f64),
+    room: Rectangle,
+    end: Option<End>,
+    colour: Rgb565,
+) {
     let Some(end) = end else { return };
     let high = (room.size.height as i32 * 3 / 4).min(24);
     let middle = (room.top_left.y + bottom(room)) / 2;

@@ -141,9 +141,8 @@ impl Rows {
         let below = layout.label.line_px() + months_height(layout.note) + marks_high;
         let each = (room.size.height as i32 - below) / charts.len() as i32;
         let most: Vec<f64> = charts.iter().map(|&chart| greatest(chart, scene)).collect();
-        let range = |(chart, most): (&Chart, &f64)| {
-            format!("0–{}", words.quantity(*most, chart.quantity(), scene.units, 2))
-        };
+        let range =
+            |(chart, most): (&Chart, &f64)| format!("0–{}", words.quantity(*most, chart.quantity(), scene.units, 2));
         let ranges: Vec<String> = charts.iter().zip(&most).map(range).collect();
         let side = charts.iter().zip(&ranges).map(|(chart, range)| {
             let name = measure(&words.say(chart.title_id(), &[]), layout.strong).width;
@@ -183,7 +182,9 @@ fn draw_chart(canvas: &mut Canvas<'_>, layout: &Layout, chart: Chart, plot: &Plo
         Chart::Reservoir => doubt.storage_hm3,
         Chart::Snow | Chart::Canals => None,
     });
-    let (was, now) = (chart.of(&scene.was).iter().copied(), chart.of(&scene.now).iter().copied());
+    // At rest both runs are one.
+    let was = if scene.changed() { chart.of(&scene.was) } else { &[] };
+    let (was, now) = (was.iter().copied(), chart.of(&scene.now).iter().copied());
     let look = LinePair { width_px: layout.line_px, line: theme.water, area: Some(chart.fill(theme)), lack: None };
     let lack = matches!(chart, Chart::Reservoir | Chart::Canals).then(|| theme.lack_hatch());
     line_pair(canvas, plot, was, now, LinePair { lack, ..look }, theme);

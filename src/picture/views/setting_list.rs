@@ -99,14 +99,16 @@ pub fn draw(canvas: &mut Canvas<'_>, list: &SettingList<'_>, note: &str, theme: 
         let (face, ink) =
             if open { (Face::bold(layout.label.px()), theme.on_chosen) } else { (layout.label, theme.ink) };
         let pad = layout.gap * 2;
-        let inside = area(row.top_left.x + pad, row.top_left.y, row.size.width as i32 - 2 * pad, row.size.height as i32);
+        let inside =
+            area(row.top_left.x + pad, row.top_left.y, row.size.width as i32 - 2 * pad, row.size.height as i32);
         fit(canvas, &list.lines[entry].name, inside, face, ink, Across::Left);
     }
     let shown = parts.entries(count);
     let tall = f64::from(layout.gap) * 1.2;
     let x = f64::from(right(parts.rows)) - tall * 1.5;
     let mut more = |y: f64, way: f64| {
-        let corners = [Spot::new(x - tall, y - way * tall), Spot::new(x, y + way * tall), Spot::new(x + tall, y - way * tall)];
+        let corners =
+            [Spot::new(x - tall, y - way * tall), Spot::new(x, y + way * tall), Spot::new(x + tall, y - way * tall)];
         triangle(canvas, corners, theme.lack);
     };
     let half_row = f64::from(parts.row_high) / 2.0;
@@ -117,7 +119,8 @@ pub fn draw(canvas: &mut Canvas<'_>, list: &SettingList<'_>, note: &str, theme: 
         more(f64::from(bottom(parts.rows)) - half_row, 1.0);
     }
     if let Some(line) = list.lines.get(list.open).filter(|line| !line.text.is_empty()) {
-        let rule = area(parts.text.top_left.x, parts.text.top_left.y - layout.gap / 2 - 1, parts.text.size.width as i32, 1);
+        let rule =
+            area(parts.text.top_left.x, parts.text.top_left.y - layout.gap / 2 - 1, parts.text.size.width as i32, 1);
         canvas.fill(rule, theme.faint);
         let room = area(
             parts.text.top_left.x,

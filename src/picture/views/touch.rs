@@ -17,7 +17,7 @@ use crate::words::Words;
 const EDGE_PERCENT: i32 = 8;
 const EDGE_PX: i32 = 20;
 /// Marks of pages that stand closer are too small to be hit one by one: a tap goes a page on or back.
-const APART_PX: i32 = 12;
+const APART_PX: i32 = 10;
 
 /// What can be touched.
 #[derive(Clone, Copy, Debug, PartialEq)]

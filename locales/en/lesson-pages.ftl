@@ -23,7 +23,7 @@ lesson-do-more = More
 lesson-do-again = Begin again
 lesson-do-leave = End the lesson
 
-lesson-hint-list = Turn: choose. Press: open.
+lesson-hint-list = Turn: choose. Press: open. Hold: more.
 lesson-hint-start = Turn: how many groups. Press: begin. Hold: back to the list.
 lesson-hint-on = Press: do it. Turn: something else. Hold: begin again.
 lesson-hint-look = Press: go on

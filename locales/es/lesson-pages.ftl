@@ -23,7 +23,7 @@ lesson-do-more = Más
 lesson-do-again = Empezar de nuevo
 lesson-do-leave = Salir de la lección
 
-lesson-hint-list = Gire: elegir. Presione: abrir.
+lesson-hint-list = Gire: elegir. Presione: abrir. Mantenga presionado: más.
 lesson-hint-start = Gire: cuántos grupos. Presione: empezar. Mantenga presionado: volver a la lista.
 lesson-hint-on = Presione: hacerlo. Gire: otra cosa. Mantenga presionado: empezar de nuevo.
 lesson-hint-look = Presione: seguir

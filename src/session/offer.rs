@@ -74,6 +74,7 @@ pub struct Offer {
     settings: Vec<NamedSetting>,
     help_pages: u8,
     about_sheets: u8,
+    opening_day: u16,
 }
 
 impl Offer {
@@ -114,11 +115,28 @@ impl Offer {
             settings: input.settings,
             help_pages: input.help_pages,
             about_sheets: 1,
+            opening_day: 0,
         };
         for (index, named) in offer.settings.iter().enumerate() {
             named.setting.fits(&offer).map_err(|misfit| OfferFault::Setting(index, misfit))?;
         }
         Ok(offer)
+    }
+
+    /// The same with the day of the water year that a session opens on, counted from 0: one on which a turn of a dial
+    /// shows.
+    #[must_use]
+    pub fn with_opening_day(self, opening_day: u16) -> Self {
+        Self { opening_day, ..self }
+    }
+
+    /// The same with those of `settings` that go with it, beside those that it has.
+    #[must_use]
+    pub fn with_settings(mut self, settings: Vec<NamedSetting>) -> Self {
+        let fitting: Vec<NamedSetting> =
+            settings.into_iter().filter(|named| named.setting.fits(&self).is_ok()).collect();
+        self.settings.extend(fitting);
+        self
     }
 
     /// The same with so many sheets of the about view, as the picture counts them for a screen; 0 counts as 1.
@@ -191,6 +209,11 @@ impl Offer {
     /// Settings that come as data.
     pub fn settings(&self) -> &[NamedSetting] {
         &self.settings
+    }
+
+    /// The day of the water year that a session opens on, counted from 0.
+    pub fn opening_day(&self) -> u16 {
+        self.opening_day
     }
 
     /// Pages of the help card; at least one.

@@ -127,6 +127,7 @@ impl Album<'_> {
         }
         self.count += 1;
         let size = self.request.size;
+        player.settle();
         let frame = player.frame(size, false);
         let name = format!("{:03}-{}", self.count, name.replace(|c: char| !c.is_ascii_alphanumeric() && c != '_', "-"));
         self.contact.add(&name, frame.pixels);

@@ -2,9 +2,9 @@
 
 use std::path::{Path, PathBuf};
 
-use embedded_graphics::geometry::Size;
+use embedded_graphics::geometry::{Point, Size};
 
-use super::drawing::theme;
+use super::drawing::{Drawing, theme};
 use super::player::Player;
 use crate::board::FrameSize;
 use crate::commands::failure::Failure;
@@ -12,10 +12,10 @@ use crate::commands::settings::{SettingText, read_text};
 use crate::commands::snippets::{Texts, report};
 use crate::commands::speech::Speech;
 use crate::lesson::{Lesson, lessons};
-use crate::picture::views::lesson as page;
+use crate::picture::views::lesson::{self as page, LessonTouched};
 use crate::place::Place;
 use crate::session::lesson::{Course, Led, NotOpened, Pass, ShelfEntry, Taken, Voices};
-use crate::session::{Command, Event, View};
+use crate::session::{Command, Event, Focus, Item, View};
 use crate::words::{Words, nearest};
 
 /// A lesson's file, before it is read for a place.
@@ -159,6 +159,31 @@ impl Player {
         page::strip_px(Size::new(size.width.into(), size.height.into()), two) as u16
     }
 
+    /// Whether the lesson's own page is on the screen, with no card or list over it.
+    fn is_lesson_page(&self) -> bool {
+        let shown = self.state.shown();
+        shown.view == View::Lesson && shown.card.is_none() && shown.focus != Focus::In(Item::Settings)
+    }
+
+    /// A finger or a mouse on the lesson's page, as an event; `false` where another page is on the screen.
+    pub(super) fn point_at_lesson(&mut self, is_down: bool, is_up: bool, at: Point, size: Size) -> bool {
+        if !self.is_lesson_page() {
+            return false;
+        }
+        let touched = page::touched(size, &self.led.scene(self.spoken()), at);
+        match touched {
+            // The guess follows the finger; whatever acts waits until it is lifted.
+            LessonTouched::Guess(share) if !is_up => {
+                self.led.guess_at(share);
+                self.stamp += 1;
+            }
+            LessonTouched::Step(steps) if is_down => self.step(Event::Command(Command::Turn(steps))),
+            LessonTouched::Take if is_up => self.step(Event::Press),
+            _ => {}
+        }
+        true
+    }
+
     fn spoken(&self) -> Voices<'_> {
         let shown = self.state.shown();
         let (words, second) = &self.voices[shown.voice];
@@ -166,16 +191,16 @@ impl Player {
     }
 
     /// Draws what the lesson adds to a frame: its own page over the whole of it, or the strip under a view.
-    pub(super) fn draw_lesson(&mut self, at: usize) {
+    pub(super) fn draw_lesson(&self, drawing: &mut Drawing) {
         let shown = self.state.shown();
         let theme = theme(shown.shade);
         let voices = self.spoken();
-        if shown.view == View::Lesson && shown.card.is_none() {
+        if self.is_lesson_page() {
             let scene = self.led.scene(voices);
-            self.drawings[at].draw_over(|canvas, _| page::draw(canvas, &scene, theme));
+            drawing.draw_over(|canvas, _| page::draw(canvas, &scene, theme));
         } else if let Some((saying, step, hint)) = self.led.strip(voices) {
             let beside = (step.as_str(), hint.as_str());
-            self.drawings[at].draw_foot(|canvas, screen| page::draw_strip(canvas, screen, &saying, beside, theme));
+            drawing.draw_foot(|canvas, screen| page::draw_strip(canvas, screen, &saying, beside, theme));
         }
     }
 }

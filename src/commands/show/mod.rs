@@ -1,6 +1,7 @@
 //! `show`: the running instrument on whatever screens are at hand, or as pictures in a folder.
 
 mod drawing;
+mod droughts;
 mod hands;
 mod leading;
 mod pictures;

@@ -20,7 +20,7 @@ pub fn dial_name(dial: Dial, words: &Words) -> String {
 }
 
 /// Where a dial stands, with its sign where it means more or less, and its unit.
-pub(super) fn dial_value(setting: &DialSetting, units: System, words: &Words) -> String {
+pub fn dial_value(setting: &DialSetting, units: System, words: &Words) -> String {
     let Some(value) = setting.value else { return words.say("picture-carried-over", &[]) };
     let written = match setting.dial.unit() {
         DialUnit::Celsius => words.quantity(value, Quantity::TemperatureChange, units, 2),

@@ -387,7 +387,7 @@ impl Led {
             return Taken::here();
         }
         match self.part {
-            Part::List => Taken::default(),
+            Part::List => Taken { pass: Pass::Ring, ..Taken::here() },
             Part::Start => self.leave(),
             _ if self.is_guessing() => {
                 self.bar = Some(0);

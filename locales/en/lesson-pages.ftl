@@ -9,6 +9,7 @@ lesson-groups = { $n ->
 lesson-for-leader = For whoever leads
 lesson-may-turn = Then it is your turn: { $dials }
 lesson-nothing = It does not happen.
+lesson-unchanged = This is the year as it was. Nothing has changed.
 
 ## What can be done
 
@@ -23,13 +24,19 @@ lesson-do-more = More
 lesson-do-again = Begin again
 lesson-do-leave = End the lesson
 
-lesson-hint-list = Turn: choose. Press: open. Hold: more.
-lesson-hint-start = Turn: how many groups. Press: begin. Hold: back to the list.
-lesson-hint-on = Press: do it. Turn: something else. Hold: begin again.
+lesson-hint-list = Turn to a lesson. Press to open it. Hold for more.
+    .short = Turn, press to open. Hold: more.
+lesson-hint-start = Turn to the number of groups. Press to begin. Hold for the list.
+    .short = Turn: groups. Press: begin. Hold: list.
+lesson-hint-on = Press takes it. Turn for other things. Hold to start over.
+    .short = Press: take it. Turn: more. Hold: restart.
 lesson-hint-look = Press: go on
-lesson-hint-guess = Turn: your guess. Press: it is in. Hold: more.
-lesson-hint-choose = Press: do it. Turn: something else.
-lesson-hint-word = Turn: a letter. Press: take it. Hold: leave.
+lesson-hint-guess = Turn to your guess. Press to put it in. Hold for more.
+    .short = Turn: guess. Press: it is in. Hold: more.
+lesson-hint-choose = Press takes it. Turn for other things.
+    .short = Press: take it. Turn: more.
+lesson-hint-word = Turn to a letter. Press to take it. Hold to leave.
+    .short = Turn: letter. Press: take it. Hold: leave.
 
 ## Notes
 

@@ -10,7 +10,7 @@ lesson-over = The lesson is over. Thank you.
 lesson-result = The model says
 lesson-usual = Many people say
 lesson-word = Your word:
-lesson-word-wrong = This word does not fit here. Read it again, letter by letter.
+lesson-word-wrong = This word does not fit here. Read it again.
 
 ## Signs that lessons read
 

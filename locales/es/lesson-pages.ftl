@@ -9,6 +9,7 @@ lesson-groups = { $n ->
 lesson-for-leader = Para quien guía
 lesson-may-turn = Después les toca mover: { $dials }
 lesson-nothing = No llega a pasar.
+lesson-unchanged = Así fue el año, sin ningún cambio.
 
 ## Lo que se puede hacer
 
@@ -23,13 +24,19 @@ lesson-do-more = Más
 lesson-do-again = Empezar de nuevo
 lesson-do-leave = Salir de la lección
 
-lesson-hint-list = Gire: elegir. Presione: abrir. Mantenga presionado: más.
-lesson-hint-start = Gire: cuántos grupos. Presione: empezar. Mantenga presionado: volver a la lista.
-lesson-hint-on = Presione: hacerlo. Gire: otra cosa. Mantenga presionado: empezar de nuevo.
+lesson-hint-list = Gire hasta una lección. Presione para abrirla. Mantenga presionado para más.
+    .short = Gire y presione. Mantenga: más.
+lesson-hint-start = Gire hasta el número de grupos. Presione para empezar. Mantenga presionado para la lista.
+    .short = Gire: grupos. Presione: empezar.
+lesson-hint-on = Presione para tomarlo. Gire para ver otras cosas. Mantenga presionado para empezar de nuevo.
+    .short = Presione: tomar. Gire: más opciones.
 lesson-hint-look = Presione: seguir
-lesson-hint-guess = Gire: su respuesta. Presione: queda puesta. Mantenga presionado: más.
-lesson-hint-choose = Presione: hacerlo. Gire: otra cosa.
-lesson-hint-word = Gire: una letra. Presione: ponerla. Mantenga presionado: salir.
+lesson-hint-guess = Gire hasta su respuesta. Presione para ponerla. Mantenga presionado para más.
+    .short = Gire y presione. Mantenga: más.
+lesson-hint-choose = Presione para tomarlo. Gire para ver otras cosas.
+    .short = Presione: tomar. Gire: más opciones.
+lesson-hint-word = Gire hasta una letra. Presione para ponerla. Mantenga presionado para salir.
+    .short = Gire: letra. Presione: tomar.
 
 ## Avisos
 
@@ -108,7 +115,7 @@ help-rehearse-more =
     La lista lleva una acción por renglón; lo que sigue a # es un comentario:
       turn 3            la perilla, tantos pasos; -3 hacia el otro lado
       press             el botón
-      hold              el botón, sostenido
+      hold              el botón, presionado un rato
       key L             una tecla: una letra, o Up, Down, Left, Right, PageUp,
                         PageDown, Home, Enter, Escape, Tab, Space
       dial warming 2    la perilla propia de un cambio

@@ -10,7 +10,7 @@ lesson-over = Aquí termina la lección. Gracias.
 lesson-result = El modelo dice
 lesson-usual = Muchos dicen
 lesson-word = Su palabra:
-lesson-word-wrong = Esa palabra no va aquí. Léala otra vez, letra por letra.
+lesson-word-wrong = Esa palabra no va aquí. Léala otra vez.
 
 ## Señales que leen las lecciones
 

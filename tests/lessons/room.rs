@@ -1,6 +1,7 @@
 //! A room with one board: a led lesson and the session beside it, without water or screens.
 
 use std::path::Path;
+use std::sync::Mutex;
 
 use deshielo::lesson::lessons;
 use deshielo::picture::views::lesson::LessonScene;
@@ -45,10 +46,17 @@ pub fn offer() -> Offer {
         .clone()
 }
 
-/// A lesson that is part of the program, opened for the demo place.
+/// A lesson that is part of the program, opened for the demo place; each is opened once.
 pub fn course(name: &str) -> Course {
+    static OPENED: Mutex<Vec<Course>> = Mutex::new(Vec::new());
+    let mut opened = OPENED.lock().unwrap();
+    if let Some(course) = opened.iter().find(|course| course.key == name) {
+        return course.clone();
+    }
     let (_, text) = lessons().iter().find(|(known, _)| *known == name).unwrap();
-    Course::open(name, Path::new(name), text, demo()).unwrap()
+    let course = Course::open(name, Path::new(name), text, demo()).unwrap();
+    opened.push(course.clone());
+    course
 }
 
 impl Room {

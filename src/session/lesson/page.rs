@@ -219,7 +219,9 @@ impl Led {
             (Part::Steps, _) if self.phase() == Some(Phase::Guess) => "lesson-hint-choose",
             _ => "lesson-hint-on",
         };
-        Foot { choice, hint: words.say(hint, &[]), note: self.note.map(|note| self.note_text(note, words)) }
+        let hint_short = words.say(&format!("{hint}.short"), &[]);
+        let note = self.note.map(|note| self.note_text(note, words));
+        Foot { choice, hint: words.say(hint, &[]), hint_short, note }
     }
 
     fn note_text(&self, note: Note, words: &Words) -> String {

@@ -5,7 +5,7 @@ use embedded_graphics::primitives::Rectangle;
 
 use super::marks::{Look, draw_group, draw_usual, tie};
 use super::{Axis, RevealShown};
-use crate::picture::lettering::{Across, draw as draw_text, measure};
+use crate::picture::lettering::{Across, draw as draw_text, lines, measure};
 use crate::picture::line::segment;
 use crate::picture::shape::{rounded_box, triangle};
 use crate::picture::views::layout::{Layout, area, right};
@@ -42,10 +42,24 @@ impl Line {
     }
 }
 
+/// Whether there is room to say under the axis where it was, which the ticks show in bold.
+fn says_rest(layout: &Layout, axis: &Axis) -> bool {
+    layout.roomy && axis.rest.is_some()
+}
+
+/// The face of the title and its lines: one where it fits, else as many as it needs in the smallest face.
+fn title_face(layout: &Layout, title: &str, wide: u32) -> (Face, i32) {
+    match Face::bold(layout.label.px()).fitting(title, wide, 9) {
+        Some(face) => (face, 1),
+        None => (Face::bold(9), lines(title, Face::bold(9), wide).count() as i32),
+    }
+}
+
 /// How high the ticks, their names and the title under an axis are.
-pub(super) fn under_px(layout: &Layout, axis: &Axis) -> i32 {
-    let rest = if axis.rest.is_some() { layout.label.line_px() } else { 0 };
-    layout.gap * 2 + layout.label.line_px() * 2 + rest
+pub(super) fn under_px(layout: &Layout, axis: &Axis, wide: u32) -> i32 {
+    let rest = if says_rest(layout, axis) { layout.label.line_px() } else { 0 };
+    let (face, lines) = title_face(layout, &axis.title, wide);
+    layout.gap * 2 + layout.label.line_px() + rest + face.line_px() * lines
 }
 
 /// Draws the line, its ticks with as many names as there is room for, and the title under them.
@@ -106,7 +120,7 @@ pub(super) fn draw_axis(
         }
     }
     let mut y = names_top + face.line_px();
-    if let Some((share, text)) = &axis.rest {
+    if let Some((share, text)) = axis.rest.as_ref().filter(|_| says_rest(layout, axis)) {
         let (left, wide) = place(*share, text, face);
         fit(
             canvas,
@@ -118,8 +132,12 @@ pub(super) fn draw_axis(
         );
         y += face.line_px();
     }
-    let title = area(room.top_left.x, y, room.size.width as i32, face.line_px());
-    fit(canvas, &axis.title, title, Face::bold(face.px()), theme.ink, Across::Centre);
+    let (face, _) = title_face(layout, &axis.title, room.size.width);
+    for text in lines(&axis.title, face, room.size.width) {
+        let row = area(room.top_left.x, y, room.size.width as i32, face.line_px());
+        fit(canvas, text, row, face, theme.ink, Across::Centre);
+        y += face.line_px();
+    }
 }
 
 /// The guess of the group at hand: its mark on a pin.
@@ -145,7 +163,7 @@ pub(super) fn draw_hand(
 
 /// Where the marks of all guesses stand: each as low as it can over its place, aside where the pile is too high.
 fn piled(line: Line, guesses: &[(u8, f64)], radius: f64, room: Rectangle) -> Vec<(u8, f64, Spot)> {
-    let (wide, high) = (radius * 2.5, radius * 2.5);
+    let (wide, high) = (radius * 2.7, radius * 2.5);
     let floor = f64::from(line.y) - radius * 1.8;
     let rows = libm::floor((floor - radius - f64::from(room.top_left.y)) / high) as i64 + 1;
     let (least, most) = (f64::from(room.top_left.x) + radius, f64::from(right(room)) - radius);
@@ -199,7 +217,7 @@ pub(super) fn draw_result(
         let x = line.x(result);
         let top = f64::from(room.top_left.y);
         let wide = (radius * 0.8).max(layout.line_px * 1.6);
-        segment(canvas, Spot::new(x, top), Spot::new(x, y + wide), Stroke::solid(wide), theme.water);
+        segment(canvas, Spot::new(x, top), Spot::new(x, y + 1.0), Stroke::solid(wide), theme.water);
         let half = wide * 1.6;
         triangle(
             canvas,

@@ -47,9 +47,9 @@ pub(super) fn draw_group(
     shape(canvas, group, middle, radius_px, edge);
     shape(canvas, group, middle, radius_px - width, fill);
     let drop = if group % SHAPES == 2 {
-        radius_px * 0.2
+        radius_px * 0.25
     } else if group % SHAPES == 4 {
-        -radius_px * 0.2
+        -radius_px * 0.25
     } else {
         0.0
     };
@@ -66,9 +66,9 @@ fn shape(canvas: &mut Canvas<'_>, group: u8, middle: Spot, radius: f64, colour: 
     match group % SHAPES {
         0 => disc(canvas, middle, radius, colour),
         1 => of(canvas, &[(-0.88, -0.88), (0.88, -0.88), (0.88, 0.88), (-0.88, 0.88)]),
-        2 => of(canvas, &[(0.0, -1.18), (1.14, 0.86), (-1.14, 0.86)]),
+        2 => of(canvas, &[(0.0, -1.32), (1.32, 0.92), (-1.32, 0.92)]),
         3 => of(canvas, &[(0.0, -1.2), (1.2, 0.0), (0.0, 1.2), (-1.2, 0.0)]),
-        4 => of(canvas, &[(0.0, 1.18), (1.14, -0.86), (-1.14, -0.86)]),
+        4 => of(canvas, &[(0.0, 1.32), (1.32, -0.92), (-1.32, -0.92)]),
         _ => of(canvas, &[(-0.55, -0.98), (0.55, -0.98), (1.1, 0.0), (0.55, 0.98), (-0.55, 0.98), (-1.1, 0.0)]),
     }
 }

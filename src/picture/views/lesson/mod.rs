@@ -161,6 +161,8 @@ pub struct Foot {
     pub choice: Option<(String, usize, usize)>,
     /// What a turn and a press do.
     pub hint: String,
+    /// The same in short, for a small screen.
+    pub hint_short: String,
     /// A note to the person at the knob.
     pub note: Option<String>,
 }

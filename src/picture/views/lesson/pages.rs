@@ -76,9 +76,9 @@ fn foot_px(layout: &Layout) -> i32 {
     layout.label.line_px() + layout.gap * 2 + hint_px(layout)
 }
 
-/// A narrow screen has room for what a turn and a press do in two lines.
+/// A small screen says in short what a turn and a press do; a tall one has room for two lines.
 fn hint_px(layout: &Layout) -> i32 {
-    layout.note.line_px() * if layout.form == Form::Wide { 1 } else { 2 }
+    layout.note.line_px() * if layout.roomy && layout.form == Form::Tall { 2 } else { 1 }
 }
 
 /// Where the name of what is at hand stands, right of the first arrow where there are more.
@@ -131,7 +131,7 @@ fn draw_foot(canvas: &mut Canvas<'_>, layout: &Layout, row: Rectangle, foot: &Fo
             small(note, layout.label, theme.lack_ink);
         }
         note => {
-            small(&foot.hint, layout.note, theme.quiet);
+            small(if layout.roomy { &foot.hint } else { &foot.hint_short }, layout.note, theme.quiet);
             if let Some(note) = note {
                 fit(canvas, note, notes, layout.label, theme.lack_ink, Across::Left);
             }
@@ -227,7 +227,12 @@ fn draw_prompt(canvas: &mut Canvas<'_>, layout: &Layout, room: Rectangle, prompt
 /// Radius of a group's mark and the face of its letter: larger where few groups share the axis.
 fn mark(layout: &Layout, groups: usize) -> (f64, Face) {
     let px = u16::from(layout.label.px());
-    let face = Face::bold((if groups > 6 { px } else { px * 3 / 2 }).min(255) as u8);
+    let px = match (groups, layout.form) {
+        (7.., _) | (_, Form::Narrow) => px,
+        _ if layout.roomy => px * 3 / 2,
+        _ => px * 5 / 4,
+    };
+    let face = Face::bold(px.min(255) as u8);
     (f64::from(face.px()) * 0.72, face)
 }
 
@@ -235,7 +240,7 @@ fn mark(layout: &Layout, groups: usize) -> (f64, Face) {
 pub(super) fn guess_line(layout: &Layout, room: Rectangle, shown: &GuessShown) -> Line {
     let (radius, _) = mark(layout, shown.is_in.len());
     let groups_top = bottom(room) - (radius * 2.6) as i32;
-    Line::across(room, radius, groups_top - layout.gap - under_px(layout, &shown.axis))
+    Line::across(room, radius, groups_top - layout.gap - under_px(layout, &shown.axis, room.size.width))
 }
 
 fn draw_guess(canvas: &mut Canvas<'_>, layout: &Layout, room: Rectangle, shown: &GuessShown, theme: &Theme) {
@@ -314,15 +319,16 @@ fn draw_reveal(canvas: &mut Canvas<'_>, layout: &Layout, room: Rectangle, shown:
     let verdict_high = verdict_face.line_px() * lines_of(verdict_face).min(2);
     let usual_high = if shown.usual.is_some() { layout.label.line_px() } else { 0 };
     let below = area(x, bottom(room) - verdict_high - usual_high, wide, verdict_high + usual_high);
-    let line_y = below.top_left.y - layout.gap / 2 - under_px(layout, &shown.axis);
+    let line_y = below.top_left.y - layout.gap / 2 - under_px(layout, &shown.axis, room.size.width);
     let line = Line::across(room, radius, line_y);
-    let result_face = figure_within(Face::bold(layout.figure.px()), high / 6);
+    let result_face = figure_within(Face::bold(layout.figure.px()), high / 7);
     let chip_high = result_face.line_px() + layout.gap;
-    // The marks of the guesses need two rows at least; the sentence gets what is left.
-    let pile_high = (radius * 6.0) as i32;
-    let head_high = line_y - pile_high - chip_high - layout.gap * 2 - room.top_left.y;
+    // The guesses have two rows where the sentence leaves room for them, and one at least.
+    let free = line_y - chip_high - layout.gap * 2 - room.top_left.y;
+    let needed = paragraph_height(&shown.reveal.first, Face::bold(9), room.size.width) as i32;
+    let head_high = (free - (radius * 6.0) as i32).max(needed.min(free - (radius * 3.4) as i32));
     let most = layout.title.line_px() * if shown.reveal.second.is_some() { 5 } else { 3 };
-    let head = area(x, room.top_left.y, wide, head_high.min(most));
+    let head = area(x, room.top_left.y, wide, head_high.min(most.max(needed)));
     let face_head = fitted(&shown.reveal, head, large(layout, 2));
     let end = write(canvas, &shown.reveal, head, face_head, (theme.ink, theme.quiet), false);
     // The result in large figures, on the ground of water, which its line shares.

@@ -4,8 +4,9 @@ use embedded_graphics::geometry::{Point, Size};
 
 use super::Saying;
 use super::pages::{fitted, write};
-use crate::picture::lettering::{draw as draw_text, measure};
+use crate::picture::lettering::{Across, draw as draw_text, measure};
 use crate::picture::views::layout::{Form, Layout, area, right};
+use crate::picture::views::wording::fit;
 use crate::picture::{Align, Canvas, Face, Theme};
 
 /// How many pixels at the foot of a screen the strip takes; nothing on a screen too small for it.
@@ -15,6 +16,8 @@ pub fn strip_px(size: Size, two_languages: bool) -> u32 {
         return 0;
     }
     let lines = match (two_languages, layout.form) {
+        // Where views say their answer twice already, a small screen keeps the step and how to go on.
+        (true, _) if size.height < 440 => 1,
         (true, _) => 4,
         (false, Form::Wide) => 2,
         (false, _) => 3,
@@ -28,6 +31,19 @@ pub fn draw_strip(canvas: &mut Canvas<'_>, screen: Size, saying: &Saying, (step,
     let whole = canvas.frame();
     canvas.fill(whole, theme.chosen);
     let note = layout.note;
+    if whole.size.height < 2 * layout.label.line_px() as u32 {
+        let row = area(layout.margin, 0, whole.size.width as i32 - 2 * layout.margin, whole.size.height as i32);
+        draw_text(
+            canvas,
+            step,
+            Point::new(layout.margin, row.size.height as i32 / 2),
+            note,
+            theme.on_chosen,
+            Align::LEFT.cap_middle(),
+        );
+        fit(canvas, hint, row, note, theme.on_chosen, Across::Right);
+        return;
+    }
     let wide = measure(step, note).width.max(measure(hint, note).width) as i32;
     let (gap, margin) = (layout.gap, layout.margin);
     let (middle, end) = (whole.size.height as i32 / 2, right(whole) - margin);

@@ -80,7 +80,10 @@ impl Player {
         })
         .map_err(|_| no_run())?;
         let (offer, settings) = with_droughts(offer, &place.dials, &answers.rest().run.years);
-        let offer = offer.with_opening_day(survey_day(&place, &answers.rest().year));
+        let mut offer = offer.with_opening_day(survey_day(&place, &answers.rest().year));
+        if let Some(leap) = place.calendar.iter().find(|day| (day.month_day.month, day.month_day.day) == (2, 29)) {
+            offer = offer.with_leap_day(leap.day_of_water_year - 1);
+        }
         let captions = voices.iter().map(|(words, _)| caption(&place, words)).collect();
         let percent_per_degree = place.evaporation_percent_per_degree();
         let voice_names = voices.iter().map(voice_name).collect();

@@ -150,9 +150,11 @@ fn two_lines(
         fit(canvas, name, area(x, y, wide, high), layout.strong, value_ink, Across::Centre);
         return;
     }
-    let upper = high * 46 / 100;
-    fit(canvas, name, area(x, y + 2, wide, upper), layout.label, name_ink, Across::Centre);
-    fit(canvas, value, area(x, y + upper, wide, high - upper - 2), layout.strong, value_ink, Across::Centre);
+    // On a low card the name is smaller, so that its feet keep clear of the value's heads.
+    let face = if layout.dial_rows == 1 { layout.note } else { layout.label };
+    let upper = high * 44 / 100;
+    fit(canvas, name, area(x, y + 2, wide, upper - 2), face, name_ink, Across::Centre);
+    fit(canvas, value, area(x, y + upper, wide, high - upper - 1), layout.strong, value_ink, Across::Centre);
 }
 
 /// Draws the thing in hand that is no dial, as the first of the cards.

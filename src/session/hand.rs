@@ -60,7 +60,7 @@ impl HandTold {
             end: shown.at_end,
             stands: stands(item, shown, told),
             place: place(item, shown, offer),
-            note: note(shown, told),
+            note: note_in_both(shown, told),
             lines: if is_list { lines(shown, told) } else { Vec::new() },
             open: shown.entry,
         }
@@ -137,6 +137,14 @@ fn place(item: Item, shown: &Shown, offer: &Offer) -> Option<(usize, usize)> {
     })
 }
 
+fn note_in_both(shown: &Shown, told: &Told<'_>) -> String {
+    let first = note(shown, told);
+    match told.second {
+        Some(second) if !first.is_empty() => format!("{first}\n{}", note(shown, &Told { words: second, ..*told })),
+        _ => first,
+    }
+}
+
 /// What is said at the foot: what was done, an end, or how to go on where that is not plain.
 fn note(shown: &Shown, told: &Told<'_>) -> String {
     let say = |id: &str| told.words.say(id, &[]);
@@ -174,7 +182,7 @@ fn done_note(done: Done, shown: &Shown, told: &Told<'_>) -> String {
         Done::Reset => say("ring-done-reset"),
         Done::Saved(index) => told.words.say("ring-done-saved", &[("n", (index + 1).into())]),
         Done::Forgot => say("ring-done-forgot"),
-        Done::Recalled(entry) => line(entry, shown, told).name,
+        Done::Recalled(entry) => line(entry, shown, &Told { second: None, ..*told }).name,
     }
 }
 

@@ -15,8 +15,9 @@
 //!   paused. View, year, language, units and colours stay, and undo brings the rest back.
 //!
 //! Fast turns go further ([`knob`]). Dials, days, years and lists stop at their ends and say so ([`Shown::at_end`]);
-//! the ring, views, languages and colours go round. Keys are a table ([`keys::KEYS`]). A finger taps to choose and drags
-//! to turn; the picture says what lies under it ([`Target`]).
+//! the ring, views, languages and colours go round. Keys are a table ([`keys::KEYS`]); in a list, on a card and
+//! on the ring arrows go the way they point. A finger taps to choose and drags to turn ([`point::Finger`]); the picture
+//! says what lies under it. What the hand is at, what was just done and how to go on is said at the foot ([`hand`]).
 //!
 //! # Undo
 //!

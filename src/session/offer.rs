@@ -75,6 +75,7 @@ pub struct Offer {
     help_pages: u8,
     about_sheets: u8,
     opening_day: u16,
+    leap_day: Option<u16>,
 }
 
 impl Offer {
@@ -116,6 +117,7 @@ impl Offer {
             help_pages: input.help_pages,
             about_sheets: 1,
             opening_day: 0,
+            leap_day: None,
         };
         for (index, named) in offer.settings.iter().enumerate() {
             named.setting.fits(&offer).map_err(|misfit| OfferFault::Setting(index, misfit))?;
@@ -128,6 +130,13 @@ impl Offer {
     #[must_use]
     pub fn with_opening_day(self, opening_day: u16) -> Self {
         Self { opening_day, ..self }
+    }
+
+    /// The same with the place of 29 February in a water year of 366 days, counted from 0: the marked day then stays the
+    /// same date from year to year.
+    #[must_use]
+    pub fn with_leap_day(self, leap_day: u16) -> Self {
+        Self { leap_day: Some(leap_day), ..self }
     }
 
     /// The same with those of `settings` that go with it, beside those that it has.
@@ -214,6 +223,11 @@ impl Offer {
     /// The day of the water year that a session opens on, counted from 0.
     pub fn opening_day(&self) -> u16 {
         self.opening_day
+    }
+
+    /// The place of 29 February in a water year of 366 days, counted from 0, where it is known.
+    pub fn leap_day(&self) -> Option<u16> {
+        self.leap_day
     }
 
     /// Pages of the help card; at least one.

@@ -3,6 +3,7 @@
 use embedded_graphics::geometry::{Point, Size};
 use embedded_graphics::primitives::Rectangle;
 
+use super::foot::note_within;
 use super::layout::{Layout, area, bottom};
 use super::wording::fit;
 use crate::picture::lettering::{Across, Face};
@@ -113,6 +114,6 @@ impl CardPlace {
             self.foot.size.width as i32 - taken,
             self.foot.size.height as i32,
         );
-        fit(canvas, hint, left, layout.note, theme.quiet, Across::Left);
+        fit(canvas, &note_within(hint, layout.note, left), left, layout.note, theme.quiet, Across::Left);
     }
 }

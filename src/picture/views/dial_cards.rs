@@ -7,7 +7,7 @@ use super::hand::{End, Focus};
 use super::layout::{Layout, area, right};
 use super::ring_strip;
 use super::scene::{DialSetting, Scene};
-use super::wording::{dial_name, dial_value, fit};
+use super::wording::{dial_name, dial_value, fit, in_both};
 use crate::picture::lettering::{Across, Face, measure};
 use crate::picture::shape::{bead, rounded_box, rounded_frame};
 use crate::picture::{Canvas, Spot, Theme};
@@ -184,6 +184,7 @@ fn card(
         return;
     }
     let name_high = layout.label.line_px();
+    let name = in_both(name, scene.second.map(|second| dial_name(setting.dial, second)), layout.label, wide);
     fit(canvas, &name, area(left, top + 1, wide, name_high), layout.label, look.name, Across::Left);
     let figure = Face::bold(layout.strong.px() + 2);
     let least_track = i32::from(layout.label.px()) * 3;

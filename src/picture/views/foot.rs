@@ -8,11 +8,11 @@ use super::frame::focus_mark;
 use super::hand::Item;
 use super::layout::{Form, Layout, area, right};
 use super::scene::Scene;
-use super::wording::{DOT, fit, name_within};
+use super::wording::{DOT, fit, in_both, name_within};
 use crate::picture::lettering::{Across, draw, measure};
 use crate::picture::line::segment;
 use crate::picture::shape::{ring, rounded_box};
-use crate::picture::{Align, Canvas, Spot, Stroke, Theme};
+use crate::picture::{Align, Canvas, Face, Spot, Stroke, Theme};
 use crate::words::Words;
 
 /// Boxes of the foot.
@@ -78,7 +78,7 @@ pub(super) fn draw_foot(
     }
     small_knob(canvas, foot.knob, theme);
     if !scene.hand.note.is_empty() {
-        fit(canvas, scene.hand.note, foot.text, face, theme.ink, Across::Left);
+        fit(canvas, &note_within(scene.hand.note, face, foot.text), foot.text, face, theme.ink, Across::Left);
         return;
     }
     let mut remarks = String::new();
@@ -92,6 +92,13 @@ pub(super) fn draw_foot(
     let name = name_within(scene.place_name, face, foot.text.size.width.saturating_sub(taken));
     let text = if name.is_empty() { remarks.trim_start_matches(DOT).to_owned() } else { name + &remarks };
     fit(canvas, &text, foot.text, face, theme.quiet, Across::Left);
+}
+
+/// A note in as many of its languages as fit, which a line feed parts.
+pub(super) fn note_within(note: &str, face: Face, room: Rectangle) -> String {
+    let (first, second) =
+        note.split_once('\n').map_or((note, None), |(first, second)| (first, Some(second.to_owned())));
+    in_both(first.to_owned(), second, face, room.size.width as i32)
 }
 
 /// The knob from above, as on the help card: here a finger opens the ring.

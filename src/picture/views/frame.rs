@@ -58,12 +58,30 @@ fn headline(canvas: &mut Canvas<'_>, layout: &Layout, text: &str, theme: &Theme)
         paragraph(canvas, text, room, face, theme.ink, Across::Left);
         return;
     }
-    let used = paragraph_height(text, face, room.size.width) as i32;
+    let wide = without_orphan(text, face, room.size.width);
+    let used = paragraph_height(text, face, wide) as i32;
     let mut baseline = room.top_left.y + (room.size.height as i32 - used) / 2 + face.ascent_px();
-    for line in lines(text, face, room.size.width) {
+    for line in lines(text, face, wide) {
         draw(canvas, line, Point::new(room.top_left.x, baseline), face, theme.ink, Align::LEFT);
         baseline += face.line_px();
     }
+}
+
+/// A width up to `width_px` in which no sentence leaves a single word to its last line, where that takes no more lines.
+fn without_orphan(text: &str, face: Face, width_px: u32) -> u32 {
+    let orphan = |width: u32| {
+        text.split('\n').any(|sentence| {
+            let last = lines(sentence, face, width).last().unwrap_or_default().trim();
+            last.len() < sentence.trim().len() && !last.contains(' ')
+        })
+    };
+    let count = |width: u32| lines(text, face, width).count();
+    if !orphan(width_px) {
+        return width_px;
+    }
+    let narrower =
+        (1..=16).map(|step| width_px - width_px * step / 40).take_while(|&width| count(width) == count(width_px));
+    narrower.into_iter().find(|&width| !orphan(width)).unwrap_or(width_px)
 }
 
 /// Boxes of the line with day and year.

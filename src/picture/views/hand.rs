@@ -107,7 +107,8 @@ pub struct Hand<'a> {
     pub stands: &'a str,
     /// The place of the thing at hand in its own list, and how long that is.
     pub place: Option<(usize, usize)>,
-    /// What is said at the foot instead of the place's name; empty for nothing.
+    /// What is said at the foot instead of the place's name, in one language or two with a line feed between; empty for
+    /// nothing.
     pub note: &'a str,
     /// The list of settings, while it is open.
     pub list: Option<SettingList<'a>>,

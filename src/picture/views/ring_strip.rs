@@ -10,7 +10,7 @@ use embedded_graphics::primitives::Rectangle;
 use super::hand::{End, Focus, Item};
 use super::layout::{Form, Layout, area, bottom, right};
 use super::scene::Scene;
-use super::wording::{day_short, dial_name, dial_value, fit, year_name};
+use super::wording::{day_short, dial_name, dial_value, fit, in_both, year_name};
 use crate::picture::lettering::{Across, Face, draw as draw_text, lines, measure};
 use crate::picture::shape::{disc, rounded_box, rounded_frame, triangle};
 use crate::picture::{Align, Canvas, Spot, Theme};
@@ -57,6 +57,10 @@ pub(super) fn item_name(item: Item, words: &Words) -> String {
     }
 }
 
+fn name_in_both(item: Item, scene: &Scene<'_>, words: &Words, face: Face, wide: i32) -> String {
+    in_both(item_name(item, words), scene.second.map(|second| item_name(item, second)), face, wide)
+}
+
 /// How a thing stands.
 fn stands(item: Item, scene: &Scene<'_>, words: &Words) -> String {
     match item {
@@ -77,7 +81,8 @@ pub(super) fn draw_ring(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<
     let radius = f64::from(layout.gap);
     rounded_box(canvas, place.card, radius, theme.card);
     rounded_frame(canvas, place.card, radius, layout.line_px.max(2.0), theme.lack);
-    let (name, value) = (item_name(item, words), stands(item, scene, words));
+    let inner = place.card.size.width as i32 - 2 * (layout.gap + 2);
+    let (name, value) = (name_in_both(item, scene, words, layout.label, inner), stands(item, scene, words));
     two_lines(canvas, layout, place.card, (&name, &value), (theme.quiet, theme.ink));
     let ring = scene.hand.ring;
     let at = ring.iter().position(|other| *other == item);
@@ -145,9 +150,11 @@ fn two_lines(
         fit(canvas, name, area(x, y, wide, high), layout.strong, value_ink, Across::Centre);
         return;
     }
-    let upper = high * 46 / 100;
-    fit(canvas, name, area(x, y + 2, wide, upper), layout.label, name_ink, Across::Centre);
-    fit(canvas, value, area(x, y + upper, wide, high - upper - 2), layout.strong, value_ink, Across::Centre);
+    // On a low card the name is smaller, so that its feet keep clear of the value's heads.
+    let face = if layout.dial_rows == 1 { layout.note } else { layout.label };
+    let upper = high * 44 / 100;
+    fit(canvas, name, area(x, y + 2, wide, upper - 2), face, name_ink, Across::Centre);
+    fit(canvas, value, area(x, y + upper, wide, high - upper - 1), layout.strong, value_ink, Across::Centre);
 }
 
 /// Draws the thing in hand that is no dial, as the first of the cards.
@@ -175,6 +182,7 @@ pub(super) fn draw_in_hand(
         area(x + name_wide + layout.gap * 2, y, rest - taken - layout.gap * 2, high)
     } else {
         let name_high = layout.label.line_px();
+        let name = name_in_both(item, scene, words, layout.label, wide);
         fit(canvas, &name, area(x, y + 1, wide, name_high), layout.label, theme.on_chosen, Across::Left);
         let (below, below_high) = (y + name_high, high - name_high - 1);
         let taken = (measure(&value, layout.strong).width as i32 + 1).min(wide);

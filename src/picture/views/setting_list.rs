@@ -38,38 +38,49 @@ struct Parts {
     first: usize,
     shown: usize,
     text: Rectangle,
+    face: Face,
     text_face: Face,
 }
+
+/// So many rows are shown at least, before the text under them is set smaller.
+const LEAST_ROWS: usize = 4;
 
 impl Parts {
     fn of(size: Size, list: &SettingList<'_>) -> Self {
         let layout = Layout::of(size, false);
-        let card = CardPlace::large(size, &layout);
-        let room = card.body;
-        let high = room.size.height as i32;
-        let row_high = layout.label.line_px() + layout.gap;
+        let most = CardPlace::large(size, &layout).body;
+        let count = list.lines.len().max(1);
         // Room for the longest text of any entry, so that rows stay where they are while the hand turns.
-        let most = high - 4 * row_high;
         let longest = |face: Face| {
             let heights = list.lines.iter().map(|line| match line.text.as_str() {
                 "" => 0,
-                text => paragraph_height(text, face, room.size.width) as i32,
+                text => paragraph_height(text, face, most.size.width) as i32,
             });
-            heights.max().unwrap_or(0)
+            heights.max().unwrap_or(0) + layout.gap * 2
         };
-        let mut text_face = layout.label;
-        while longest(text_face) > most {
+        let row = |face: Face| face.line_px() + layout.gap;
+        let (high, least_rows) = (most.size.height as i32, count.min(LEAST_ROWS) as i32);
+        // As large as all of it fits; where it never does, rows go first and then the text grows small.
+        let mut face = Face::regular(layout.label.px() + layout.label.px() / 2);
+        let fits_all = |face: Face| count as i32 * row(face) + longest(face) <= high;
+        while face.px() > layout.label.px() && !fits_all(face) {
+            face = face.smaller().unwrap_or(layout.label);
+        }
+        let mut text_face = face;
+        while least_rows * row(face) + longest(text_face) > high {
             let Some(smaller) = text_face.smaller() else { break };
             text_face = smaller;
         }
-        let text_high = longest(text_face).min(most.max(0)) + layout.gap;
-        let count = list.lines.len();
-        let shown = (((high - text_high - layout.gap) / row_high).max(1) as usize).min(count.max(1));
-        let half = shown / 2;
-        let first = list.open.saturating_sub(half).min(count.saturating_sub(shown));
+        let row_high = row(face);
+        let text_high = longest(text_face).min(high - row_high);
+        let shown = (((high - text_high) / row_high).max(1) as usize).min(count);
+        let card = CardPlace::around(size, &layout, row_high * shown as i32 + text_high);
+        let room = card.body;
+        let first = list.open.saturating_sub(shown / 2).min(count - shown);
         let rows = area(room.top_left.x, room.top_left.y, room.size.width as i32, row_high * shown as i32);
-        let text = area(room.top_left.x, bottom(rows) + layout.gap, room.size.width as i32, text_high);
-        Self { card, rows, row_high, first, shown, text, text_face }
+        let text_top = bottom(rows) + layout.gap;
+        let text = area(room.top_left.x, text_top, room.size.width as i32, text_high - layout.gap);
+        Self { card, rows, row_high, first, shown, text, face, text_face }
     }
 
     fn row(&self, entry: usize) -> Rectangle {
@@ -96,8 +107,7 @@ pub fn draw(canvas: &mut Canvas<'_>, list: &SettingList<'_>, note: &str, theme: 
         if open {
             rounded_box(canvas, row, f64::from(layout.gap), theme.chosen);
         }
-        let (face, ink) =
-            if open { (Face::bold(layout.label.px()), theme.on_chosen) } else { (layout.label, theme.ink) };
+        let (face, ink) = if open { (Face::bold(parts.face.px()), theme.on_chosen) } else { (parts.face, theme.ink) };
         let pad = layout.gap * 2;
         let inside =
             area(row.top_left.x + pad, row.top_left.y, row.size.width as i32 - 2 * pad, row.size.height as i32);

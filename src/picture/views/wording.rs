@@ -72,6 +72,18 @@ pub(super) fn right_since(title: &CanalTitle<'_>, words: &Words) -> String {
     }
 }
 
+/// A name in the room's two languages where both fit on a line of that width, else in the first.
+pub(super) fn in_both(first: String, second: Option<String>, face: Face, width_px: i32) -> String {
+    match second.filter(|second| *second != first) {
+        None => first,
+        Some(second) => {
+            let both = format!("{first}{DOT}{second}");
+            let fits = face.fitting(&both, width_px.max(0) as u32, 9).is_some();
+            if fits { both } else { first }
+        }
+    }
+}
+
 /// A place's own name, shortened with an ellipsis where there is no room for it. Only names are ever shortened: a place
 /// may have any, and the words of the program are made to fit.
 pub(super) fn name_within(name: &str, face: Face, width_px: u32) -> String {

@@ -28,6 +28,7 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(tell(words))
         .subcommand(check(words))
         .subcommand(map(words))
+        .subcommand(rehearse(words))
         .subcommand(weather(words))
         .subcommand(super::place::line::command(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
@@ -42,6 +43,8 @@ fn show(words: &Words) -> Command {
         .arg(text("size", "value-size", "help-size", words))
         .arg(path_option("into", "value-folder", "help-show-into", words))
         .arg(path_option("board", "value-file", "help-board", words))
+        .arg(path_option("lesson", "value-lesson", "help-lesson", words))
+        .arg(text("groups", "value-number", "help-groups", words))
         .arg(text("units", "value-units", "help-units", words))
         .arg(text("theme", "value-theme", "help-theme", words).help(with_usual("help-theme", "light", words)))
         .args(common(words))
@@ -93,6 +96,19 @@ fn map(words: &Words) -> Command {
         .arg(path_option("out", "value-file", "help-out", words))
         .args(common(words))
         .after_help(say("help-map-more"))
+}
+
+fn rehearse(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("rehearse", "help-usage-rehearse", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(path_option("lesson", "value-lesson", "help-lesson", words))
+        .arg(path_option("steps", "value-file", "help-steps", words))
+        .arg(path_option("into", "value-folder", "help-rehearse-into", words))
+        .arg(text("size", "value-size", "help-size", words).help(with_usual("help-size", "800x480", words)))
+        .arg(text("groups", "value-number", "help-groups", words).help(with_usual("help-groups", "4", words)))
+        .args(common(words))
+        .after_help(words.say("help-rehearse-more", &[]))
 }
 
 fn weather(words: &Words) -> Command {

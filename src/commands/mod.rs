@@ -12,6 +12,7 @@ mod output;
 mod place;
 mod places;
 mod problem_words;
+mod rehearse;
 mod settings;
 mod show;
 mod snippets;
@@ -57,6 +58,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("check", matches)) => check::run(speech, matches),
         Some(("show", matches)) => show::run(speech, matches),
         Some(("map", matches)) => map::run(speech, matches),
+        Some(("rehearse", matches)) => rehearse::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
         Some(("place", matches)) => place::run(speech, matches),
         _ => show::usual(speech),

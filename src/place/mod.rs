@@ -46,6 +46,7 @@ use std::path::PathBuf;
 use chrono::NaiveDate;
 
 use crate::water::calendar::CalendarDay;
+use crate::water::evaporation::{SkyTable, percent_per_degree};
 use crate::water::valley::Valley;
 use crate::water::weather::StationDay;
 
@@ -97,6 +98,16 @@ pub struct Place {
     pub diversions: Vec<Diversion>,
     /// What the about view tells of how the place was read.
     pub notes: Notes,
+}
+
+impl Place {
+    /// By how many percent reference evaporation grows with the first degree of warming, over the record; `None` where
+    /// nothing evaporates or the latitude is none.
+    pub fn evaporation_percent_per_degree(&self) -> Option<f64> {
+        let sky = SkyTable::at_latitude(self.valley.latitude_deg)?;
+        let record = self.calendar.iter().zip(&self.days).map(|(day, record)| (day.day_of_year, record.air));
+        percent_per_degree(&self.valley.evaporation.method, &sky, record)
+    }
 }
 
 /// The units that people are shown.

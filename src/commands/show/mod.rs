@@ -2,7 +2,9 @@
 
 mod board;
 mod drawing;
+mod droughts;
 mod hands;
+mod leading;
 mod pictures;
 mod player;
 mod request;
@@ -20,8 +22,10 @@ use crate::board::surroundings::{Surroundings, WindowChance};
 use crate::board::terminal::{Ability, Terminal};
 use crate::board::{Choice, FrameSize, Post, ScreenError, ScreenKind, Stage, run as play};
 use crate::words::Words;
-use player::Player;
+pub(super) use leading::LessonText;
+pub(super) use player::Player;
 use request::Request;
+pub(super) use request::groups;
 
 /// Opens the place and shows it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
@@ -83,7 +87,14 @@ fn open(speech: &Speech, request: &Request) -> Result<Player, Failure> {
     let place = places::open(&request.place, speech)?;
     drop(spinner);
     let _spinner = Spinner::start(speech.words.say("progress-running", &[]));
-    Player::new(place, speech, request.shade, request.units)
+    let mut player = Player::new(place, speech, request.shade, request.units)?;
+    if let Some(groups) = request.groups {
+        player.ask_groups(groups);
+    }
+    if let Some(name) = &request.lesson {
+        player.lead(&LessonText::find(name, &speech.words)?, speech)?;
+    }
+    Ok(player)
 }
 
 /// Why nothing is shown, or no longer.

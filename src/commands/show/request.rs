@@ -10,6 +10,7 @@ use crate::board::{FrameSize, LAYOUTS, ScreenKind};
 use crate::commands::failure::Failure;
 use crate::commands::places;
 use crate::commands::usage::{mistake, unknown_choice};
+use crate::lesson::MOST_GROUPS;
 use crate::session::Shade;
 use crate::words::{System, Words};
 
@@ -32,6 +33,10 @@ pub(super) struct Request {
     pub units: Option<System>,
     /// Colours to begin with.
     pub shade: Shade,
+    /// The lesson to lead.
+    pub lesson: Option<PathBuf>,
+    /// How many groups guess, where it was said.
+    pub groups: Option<u8>,
 }
 
 impl Default for Request {
@@ -45,6 +50,8 @@ impl Default for Request {
             one_language: false,
             units: None,
             shade: Shade::Light,
+            lesson: None,
+            groups: None,
         }
     }
 }
@@ -93,6 +100,21 @@ impl Request {
             one_language: text("lang").is_some(),
             units,
             shade,
+            lesson: path("lesson"),
+            groups: groups(matches, "show", words)?,
         })
+    }
+}
+
+/// How many groups guess; `None` where it was not said.
+pub(in crate::commands) fn groups(matches: &ArgMatches, command: &str, words: &Words) -> Result<Option<u8>, Failure> {
+    let Some(text) = matches.get_one::<String>("groups") else { return Ok(None) };
+    match text.parse() {
+        Ok(groups) if (1..=MOST_GROUPS).contains(&usize::from(groups)) => Ok(Some(groups)),
+        _ => {
+            let arguments =
+                [("option", "--groups".into()), ("low", 1_u32.into()), ("high", (MOST_GROUPS as u32).into())];
+            Err(mistake(&words.say("error-option-number", &arguments), Some(command), words))
+        }
     }
 }

@@ -315,14 +315,7 @@ impl Plots {
     /// Lets the season of a plot move on a day, and gives the day's crop coefficient. `ends` is set where the season ends
     /// today.
     #[inline(always)]
-    fn coefficient(
-        &self,
-        stores: &mut PlotStores,
-        today: u16,
-        in_season: f64,
-        index: usize,
-        ends: &mut bool,
-    ) -> f64 {
+    fn coefficient(&self, stores: &mut PlotStores, today: u16, in_season: f64, index: usize, ends: &mut bool) -> f64 {
         let day_of_season = &mut stores.day_of_season[index];
         let plot = match self.plots.get(index) {
             Some(plot) if in_season > 0.0 => plot,

@@ -71,9 +71,8 @@ fn assert_snow(snowfall: &[f64], snow_water: &[f64]) {
 #[test]
 fn snow_over_the_bands_of_one_run() {
     let valley = basin();
-    let [snowfall, snow_water, recharge] = sums(&Slopes::of_one(&valley), |day| {
-        [day.snowfall_mm, day.snow_water_mm, day.recharge_mm].map(total_of_one)
-    });
+    let [snowfall, snow_water, recharge] =
+        sums(&Slopes::of_one(&valley), |day| [day.snowfall_mm, day.snow_water_mm, day.recharge_mm].map(total_of_one));
     assert_snow(&snowfall, &snow_water);
     assert!(recharge.iter().sum::<f64>() > 0.0, "the bands' soil passes nothing on");
 }

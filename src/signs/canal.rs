@@ -113,8 +113,7 @@ impl CanalReader {
     fn judge_round(&mut self) {
         let span = core::mem::take(&mut self.span);
         let (Some(first), Some(last)) = (span.first, span.last) else { return };
-        let due_m3 =
-            if self.asks_again { span.delivered_before_today_m3 + span.asked_today_m3 } else { span.asked_m3 };
+        let due_m3 = if self.asks_again { span.delivered_before_today_m3 + span.asked_today_m3 } else { span.asked_m3 };
         self.judge(due_m3, span.delivered_m3, span.days, first, last);
     }
 

@@ -349,12 +349,7 @@ impl<'v, const L: usize> Basins<'v, L> {
     /// The basins of `valleys` under `dials`, side by side. The valleys must be one place: the same latitude, bands, kind
     /// of split and way to reference evaporation; parameters may differ.
     pub fn new(valleys: [&'v Valley; L], dials: [&Dials; L]) -> Self {
-        Self {
-            valleys,
-            sky: sky_of(valleys[0]),
-            slopes: Slopes::of_many(valleys),
-            course: Course::new(valleys, dials),
-        }
+        Self { valleys, sky: sky_of(valleys[0]), slopes: Slopes::of_many(valleys), course: Course::new(valleys, dials) }
     }
 
     /// What is in store on the first morning, as the places say.

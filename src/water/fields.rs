@@ -78,6 +78,8 @@ pub struct Plots {
     area_ha: f64,
     /// Length of each crop's season, days; 0 where there is none.
     season_days: [u32; MOST_PLOTS],
+    /// Days of each season with a day after them.
+    days_but_last: [u32; MOST_PLOTS],
     /// [`MonthDay::rank`] of each crop's planting, or [`NEVER`].
     planting: [u16; MOST_PLOTS],
     off_season_coefficient: PlotLanes,
@@ -101,6 +103,7 @@ impl Plots {
             plots: Vec::new(),
             area_ha: 0.0,
             season_days: [0; MOST_PLOTS],
+            days_but_last: [0; MOST_PLOTS],
             planting: [NEVER; MOST_PLOTS],
             off_season_coefficient: none,
             m3_per_mm: none,
@@ -136,6 +139,7 @@ impl Plots {
         let m3_per_mm = area_ha * M3_PER_MM_HECTARE;
         self.area_ha += area_ha;
         self.season_days[lane] = crop.traits.season_days();
+        self.days_but_last[lane] = self.season_days[lane].saturating_sub(1);
         if self.season_days[lane] > 0 {
             self.planting[lane] = crop.planting.rank();
         }
@@ -190,8 +194,8 @@ impl Plots {
     #[inline(always)]
     fn in_season(&self, stores: &PlotStores, today: u16, pair: usize) -> Lanes<2> {
         let of_plot = |index: usize| {
-            // Below the end of a season, and neither 0, which is no season, nor beyond.
-            let grows = stores.day_of_season[index].wrapping_sub(1) < self.season_days[index].saturating_sub(1);
+            // From 1 on, since 0 is no season and wraps far beyond any.
+            let grows = stores.day_of_season[index].wrapping_sub(1) < self.days_but_last[index];
             f64::from(u8::from(grows | (self.planting[index] == today)))
         };
         Lanes([of_plot(2 * pair), of_plot(2 * pair + 1)])
@@ -311,14 +315,7 @@ impl Plots {
     /// Lets the season of a plot move on a day, and gives the day's crop coefficient. `ends` is set where the season ends
     /// today.
     #[inline(always)]
-    fn coefficient(
-        &self,
-        stores: &mut PlotStores,
-        today: u16,
-        in_season: f64,
-        index: usize,
-        ends: &mut bool,
-    ) -> f64 {
+    fn coefficient(&self, stores: &mut PlotStores, today: u16, in_season: f64, index: usize, ends: &mut bool) -> f64 {
         let day_of_season = &mut stores.day_of_season[index];
         let plot = match self.plots.get(index) {
             Some(plot) if in_season > 0.0 => plot,

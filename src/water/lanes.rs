@@ -36,9 +36,7 @@ pub fn square_root(x: f64) -> f64 {
 }
 
 /// A number, or a few side by side: what a chain of stores is written for once.
-pub trait Number:
-    Copy + Add<Output = Self> + Sub<Output = Self> + Mul<Output = Self> + Div<Output = Self>
-{
+pub trait Number: Copy + Add<Output = Self> + Sub<Output = Self> + Mul<Output = Self> + Div<Output = Self> {
     /// The same number in every lane.
     fn splat(x: f64) -> Self;
     /// The smaller, lane by lane.

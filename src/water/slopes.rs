@@ -326,13 +326,7 @@ impl<const L: usize> Slopes<L> {
     /// The month's rows of a day on which the wet bulb at the station's humidity tells rain from snow.
     #[cold]
     #[inline(never)]
-    fn wet_bulb(
-        &self,
-        calendar: &CalendarDay,
-        temperature_c: Lanes<L>,
-        humidity_percent: f64,
-        out: &mut MonthRows<L>,
-    ) {
+    fn wet_bulb(&self, calendar: &CalendarDay, temperature_c: Lanes<L>, humidity_percent: f64, out: &mut MonthRows<L>) {
         let month = calendar.month_index();
         let rows = out.iter_mut().zip(&self.months[month]).zip(&self.offset_c[month]);
         for ((out, row), offset_c) in rows.take(self.used) {

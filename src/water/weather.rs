@@ -109,7 +109,9 @@ impl<const L: usize> Delta<Lanes<L>> {
     pub fn by_lane(lanes: [Delta; L]) -> Self {
         Self {
             warming_c: core::array::from_fn(|month| Lanes(lanes.map(|lane| lane.warming_c[month]))),
-            precipitation_factor: core::array::from_fn(|month| Lanes(lanes.map(|lane| lane.precipitation_factor[month]))),
+            precipitation_factor: core::array::from_fn(|month| {
+                Lanes(lanes.map(|lane| lane.precipitation_factor[month]))
+            }),
         }
     }
 

@@ -84,7 +84,7 @@ fn broken_grids_are_told_at_their_line() {
     assert_eq!(told_of(&text.replacen("nrows 80", "nrows 99999", 1)), [("problem-grid-few", 0)]);
     assert_eq!(told_of(&text.replacen("cellsize 90.0", "cellsize -90", 1)), [("problem-terrain-place", 0)]);
     assert_eq!(told_of(&text.replacen("-9999.000 ", "1,5 ", 1)), [("problem-grid-number", 7)]);
-    assert_eq!(told_of(&text[..text.len() / 2]), [("problem-grid-few", 0)]);
+    assert_eq!(told_of(&text[..text.len() / 2]), [("problem-grid-few", 46)]);
     assert_eq!(told_of("ncols 3"), [("problem-grid-lacks", 0)]);
     assert_eq!(told_of(""), [("problem-grid-lacks", 0)]);
     let cut = curve(&files(&HEIGHTS_TIFF[..HEIGHTS_TIFF.len() / 2], BASIN)).unwrap_err();

@@ -129,7 +129,7 @@ pub fn measure_of_words(name: &str) -> Option<Measure> {
     // A bare "minimum" beside no other word that could be measured is a temperature in every station's table.
     if starts(&["temp", "air", "aire"])
         || is(&["t"])
-        || (words.len() == 1 && (starts(&LOWEST[..1]) || starts(&HIGHEST[..1])))
+        || (words.len() == 1 && (starts(&LOWEST[..2]) || starts(&HIGHEST[..2])))
     {
         return match extreme() {
             Some(false) => Some(Measure::TemperatureMin),
@@ -188,6 +188,7 @@ mod tests {
             ("Temp Max", Some(TemperatureMax)),
             ("tempMin", Some(TemperatureMin)),
             ("min", Some(TemperatureMin)),
+            ("High", Some(TemperatureMax)),
             ("PRCP", Some(Precipitation)),
             ("Lluvia (mm)", Some(Precipitation)),
             ("Precipitación", Some(Precipitation)),

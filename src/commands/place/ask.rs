@@ -59,6 +59,11 @@ impl Answers {
         Ok(Self { name, name_es: text("name-es").filter(|name| !name.is_empty()), region, latitude_deg, station, rule })
     }
 
+    /// Whether the place is known to lie in the south.
+    pub fn is_southern(&self) -> bool {
+        self.latitude_deg.is_some_and(|latitude| latitude < 0.0)
+    }
+
     /// Asks for what is not known yet, if a person sits there or `always`; an empty answer leaves it open.
     pub fn ask(&mut self, always: bool, words: &Words) {
         if !always && !(std::io::stdin().is_terminal() && std::io::stderr().is_terminal()) {

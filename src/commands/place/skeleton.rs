@@ -54,7 +54,9 @@ pub(super) fn write(known: &Known<'_>, words: &Words) -> String {
     page.line(&format!("rule = {}", text_value(rule)));
     page.gap();
     page.explain("skeleton-canal");
-    page.off(CANAL);
+    // The season that is shown is that of the place's own summer.
+    let south = CANAL.replace("\"04-15\"", "\"10-01\"").replace("\"10-15\"", "\"04-15\"");
+    page.off(if known.answers.is_southern() { &south } else { CANAL });
     page.gap();
     page.explain("skeleton-town");
     page.off(TOWN);
@@ -138,7 +140,7 @@ fn about(answers: &Answers, page: &mut Page<'_>) {
     page.key("skeleton-region", "region", answers.region.as_deref().map(text_value), "\"es-CL\"");
     page.key("skeleton-latitude", "latitude_deg", answers.latitude_deg.map(|latitude| latitude.to_string()), "-33.4");
     page.explain("skeleton-year");
-    page.off("water_year_starts = \"october\"\nsurvey_day = \"04-01\"\nspring_months = [\"april\", \"july\"]");
+    page.off(if answers.is_southern() { CALENDAR_SOUTH } else { CALENDAR_NORTH });
     page.explain("skeleton-source");
     page.off("source = { en = \"…\", es = \"…\" }");
     page.gap();
@@ -179,6 +181,18 @@ fn mountain(known: &Known<'_>, page: &mut Page<'_>) {
     }
     page.gap();
 }
+
+const CALENDAR_NORTH: &str = r#"
+water_year_starts = "october"
+survey_day = "04-01"
+spring_months = ["april", "july"]
+"#;
+
+const CALENDAR_SOUTH: &str = r#"
+water_year_starts = "april"
+survey_day = "10-01"
+spring_months = ["october", "january"]
+"#;
 
 const WEATHER: &str = r#"
 [record]

@@ -73,7 +73,8 @@ pub(super) fn open<'f>(files: &TerrainFiles<'f>) -> Result<(Geometry, AsciiCells
     loop {
         let before = tokens.clone();
         let Some(key) = tokens.next() else { break };
-        if number(key.text).is_some() {
+        // Words make the head; what begins like a number is a height, good or not.
+        if !key.text[0].is_ascii_alphabetic() || key.text.eq_ignore_ascii_case(b"nan") {
             tokens = before;
             break;
         }

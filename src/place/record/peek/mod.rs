@@ -175,9 +175,16 @@ fn role_of<'c>(
     marks: &mut Vec<String>,
 ) -> ColumnRole {
     let (mut numbers, mut others): (Vec<f64>, Vec<&str>) = (Vec::new(), Vec::new());
+    // Numbers that are usual marks, as the file writes them: a plan compares what is written.
+    let mut suspects: Vec<(f64, &str)> = Vec::new();
     for cell in cells.filter(|cell| !cell.is_empty()) {
         match parse_number(cell, decimal_comma) {
-            Ok(number) => numbers.push(number),
+            Ok(number) => {
+                numbers.push(number);
+                if USUAL_MISSING.contains(&number) && !suspects.iter().any(|(_, text)| *text == cell) {
+                    suspects.push((number, cell));
+                }
+            }
             Err(_) => others.push(cell),
         }
     }
@@ -195,10 +202,10 @@ fn role_of<'c>(
         note_mark(mark, marks);
     }
     let (low, high) = measure.bounds();
-    for number in USUAL_MISSING.iter().filter(|number| numbers.contains(number)) {
-        let value = unit.to_si(*number);
-        if value < low || value > high || (*number < 0.0 && low == f64::NEG_INFINITY) {
-            note_mark(&number.to_string(), marks);
+    for (number, text) in suspects {
+        let value = unit.to_si(number);
+        if value < low || value > high || (number < 0.0 && low == f64::NEG_INFINITY) {
+            note_mark(text, marks);
         }
     }
     ColumnRole::Measured { measure, unit, reason }

@@ -84,12 +84,15 @@ fn by_size(measure: Measure, numbers: &[f64]) -> Option<MeasureUnit> {
     let mean = numbers.iter().sum::<f64>() / numbers.len() as f64;
     let year = mean * 365.25;
     let whole = numbers.iter().all(|number| number % 1.0 == 0.0);
+    // A year whose warmest day stays under 50 °F grows no crops, and few valleys have many days under 0 °F.
+    let often_below_zero = numbers.iter().filter(|number| **number < 0.0).count() * 7 > numbers.len();
+    let warm_days_of_a_year = measure == Measure::TemperatureMax && numbers.len() >= 330;
     if measure.is_temperature() || measure == Measure::DewPoint {
         return match (lowest, highest) {
             (lowest, highest) if lowest > 150.0 && highest < 340.0 => Some(MeasureUnit::Kelvin),
             (_, highest) if highest > 140.0 && whole => Some(MeasureUnit::TenthCelsius),
             (_, highest) if highest > 57.0 && highest < 140.0 => Some(MeasureUnit::Fahrenheit),
-            (lowest, highest) if highest < 50.0 && lowest < 5.0 => Some(MeasureUnit::Celsius),
+            (_, highest) if highest < 50.0 && (often_below_zero || warm_days_of_a_year) => Some(MeasureUnit::Celsius),
             _ => None,
         };
     }

@@ -82,7 +82,7 @@ lesson-parts-more = { $n } de cada 100 más
 ## Las respuestas y el resultado
 
 lesson-usual-value = Muchos dicen: { $value }
-lesson-verdict = Ustedes dijeron de { $least } a { $most }.
+lesson-verdict = Ustedes dijeron entre { $least } y { $most }.
 lesson-none-near = Nadie anduvo cerca.
 lesson-near = { $n ->
     [one] Un grupo anduvo cerca.

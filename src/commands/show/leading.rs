@@ -159,6 +159,13 @@ impl Player {
         page::strip_px(Size::new(size.width.into(), size.height.into()), two) as u16
     }
 
+    /// What the foot of a view says while a lesson looks at it: the step, and that a press goes on.
+    pub(super) fn led_note(&self) -> Option<String> {
+        let opens_nothing = matches!(self.state.shown().focus, Focus::In(item) if item != Item::Settings);
+        let (_, step, hint) = self.led.strip(self.spoken()).filter(|_| opens_nothing)?;
+        Some(format!("{step} · {hint}"))
+    }
+
     /// Whether the lesson's own page is on the screen, with no card or list over it.
     fn is_lesson_page(&self) -> bool {
         let shown = self.state.shown();

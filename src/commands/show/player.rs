@@ -12,6 +12,7 @@ use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument, PointerPhas
 use crate::commands::failure::Failure;
 use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
+use crate::picture::views::hand::Hand;
 use crate::picture::views::{Scene, help, term};
 use crate::place::{Place, Setting};
 use crate::session::answer::{Asked, Source, YearDetail};
@@ -225,7 +226,10 @@ impl Player {
             },
         );
         let facts = facts_of(&self.place, self.percent_per_degree, tag);
-        let scene = Scene { facts, sheet: shown.sheet.into(), hand: in_hand.hand(), ..scene };
+        let note = self.led_note();
+        let hand = in_hand.hand();
+        let hand = Hand { note: note.as_deref().unwrap_or(hand.note), ..hand };
+        let scene = Scene { facts, sheet: shown.sheet.into(), hand, ..scene };
         look(&scene, (words, second.as_ref()))
     }
 

@@ -38,7 +38,6 @@ use embedded_graphics::geometry::OriginDimensions;
 pub use answer::Answer;
 pub use layout::{Form, Layout};
 pub use scene::Scene;
-pub use wording::dial_name as wording_of_dial;
 
 use super::Canvas;
 

@@ -4,7 +4,7 @@ use super::sayings::{Sayings, in_units};
 use super::{Choice, Led, Note, Part};
 use crate::lesson::{Guess, GuessPage, Page, Phase, Quantity, Shape, WORD_LETTERS};
 use crate::picture::views::lesson::{Axis, Body, Foot, GuessShown, LessonScene, RevealShown, Saying};
-use crate::picture::views::wording_of_dial;
+use crate::picture::views::wording::dial_name;
 use crate::place::Text;
 use crate::words::{System, Words};
 
@@ -117,7 +117,7 @@ impl Led {
         if step.guess.is_some() {
             return words.say("lesson-guess-first", &[]);
         }
-        let names: Vec<String> = step.allowed.iter().map(|allowed| wording_of_dial(allowed.dial, words)).collect();
+        let names: Vec<String> = step.allowed.iter().map(|allowed| dial_name(allowed.dial, words)).collect();
         match names.as_slice() {
             [] => String::new(),
             names => words.say("lesson-may-turn", &[("dials", names.join(" · ").into())]),
@@ -177,12 +177,15 @@ impl Led {
             guesses,
             spread: spread.map(|spread| (share(spread.least), share(spread.middle), share(spread.most))),
             usual,
-            verdict: self.verdict(shown, guess, &value, words),
+            verdict: self.verdict(shown, guess, voices),
         }
     }
 
     /// The guesses in a sentence.
-    fn verdict(&self, shown: &GuessPage, guess: &Guess, value: &dyn Fn(f64) -> String, words: &Words) -> String {
+    fn verdict(&self, shown: &GuessPage, guess: &Guess, voices: Voices<'_>) -> String {
+        let words = voices.words;
+        let value =
+            |value: f64| self.sayings(guess, words, voices.system).map_or(String::new(), |say| say.in_sentence(value));
         let Some(spread) = shown.spread else { return words.say("lesson-skipped", &[]) };
         let Some(result) = shown.result else { return String::new() };
         let values = shown.groups.iter().filter_map(|group| group.value);

@@ -124,6 +124,14 @@ impl Sayings<'_> {
         }
     }
 
+    /// The same within a sentence: "el 30 jun".
+    pub fn in_sentence(&self, value: f64) -> String {
+        match self.reading().quantity() {
+            Quantity::Date => self.words.date(self.date(value), DateStyle::InSentence),
+            _ => self.value(value),
+        }
+    }
+
     /// Marks along the axis, in the unit that is read: the value and what stands beside it.
     pub fn ticks(&self) -> Vec<(f64, String)> {
         let (least, most) = (self.guess.least, self.guess.most());

@@ -174,7 +174,7 @@ fn piled(line: Line, guesses: &[(u8, f64)], radius: f64, room: Rectangle) -> Vec
         let x = line.x(share);
         let asides = (0..24).map(|step: i32| f64::from((step + 1) / 2 * if step % 2 == 0 { 1 } else { -1 }) * wide);
         let spots = asides.flat_map(|aside| {
-            (0..rows.max(1)).map(move |row| Spot::new((x + aside).clamp(least, most), floor - row as f64 * high))
+            (0..rows.max(1)).map(move |row| Spot::new((x + aside).min(most).max(least), floor - row as f64 * high))
         });
         let is_free = |spot: &Spot| {
             placed

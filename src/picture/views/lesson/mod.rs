@@ -6,6 +6,7 @@
 
 mod axis;
 mod marks;
+mod openers;
 mod pages;
 mod strip;
 mod touch;

@@ -5,7 +5,7 @@ use embedded_graphics::geometry::{Point, Size};
 use super::Saying;
 use super::pages::{fitted, write};
 use crate::picture::lettering::{Across, draw as draw_text, measure};
-use crate::picture::views::layout::{Form, Layout, area, right};
+use crate::picture::views::layout::{Layout, area, right};
 use crate::picture::views::wording::fit;
 use crate::picture::{Align, Canvas, Face, Theme};
 
@@ -15,12 +15,12 @@ pub fn strip_px(size: Size, two_languages: bool) -> u32 {
     if size.height < 240 {
         return 0;
     }
-    let lines = match (two_languages, layout.form) {
+    let lines = match (two_languages, layout.roomy) {
         // Where views say their answer twice already, a small screen keeps the step and how to go on.
         (true, _) if size.height < 440 => 1,
         (true, _) => 4,
-        (false, Form::Wide) => 2,
-        (false, _) => 3,
+        (false, true) => 2,
+        (false, false) => 3,
     };
     (layout.label.line_px() * lines + layout.gap * 2) as u32
 }
@@ -44,6 +44,14 @@ pub fn draw_strip(canvas: &mut Canvas<'_>, screen: Size, saying: &Saying, (step,
         fit(canvas, hint, row, note, theme.on_chosen, Across::Right);
         return;
     }
+    let high = whole.size.height as i32;
+    if !layout.roomy {
+        // A small screen gives all of it to the sentence; the foot of the view says how to go on.
+        let room = area(layout.margin, layout.gap / 2, whole.size.width as i32 - 2 * layout.margin, high - layout.gap);
+        let face = fitted(saying, room, Face::regular(layout.label.px()));
+        write(canvas, saying, room, face, (theme.on_chosen, theme.on_chosen), true);
+        return;
+    }
     let wide = measure(step, note).width.max(measure(hint, note).width) as i32;
     let (gap, margin) = (layout.gap, layout.margin);
     let (middle, end) = (whole.size.height as i32 / 2, right(whole) - margin);
@@ -51,7 +59,6 @@ pub fn draw_strip(canvas: &mut Canvas<'_>, screen: Size, saying: &Saying, (step,
     for (text, y) in [(step, middle - apart), (hint, middle + apart)] {
         draw_text(canvas, text, Point::new(end, y), note, theme.on_chosen, Align::RIGHT.cap_middle());
     }
-    let high = whole.size.height as i32;
     let room = area(margin, gap / 2, whole.size.width as i32 - 2 * margin - wide - gap * 2, high - gap);
     let face = fitted(saying, room, Face::bold(layout.strong.px()));
     write(canvas, saying, room, face, (theme.on_chosen, theme.on_chosen), true);

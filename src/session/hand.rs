@@ -193,23 +193,23 @@ fn lines(shown: &Shown, told: &Told<'_>) -> Vec<SettingLine> {
 }
 
 fn line(entry: SettingEntry, shown: &Shown, told: &Told<'_>) -> SettingLine {
-    let both = |say: &dyn Fn(&Words) -> String, between: &str| match told.second {
-        Some(second) => format!("{}{between}{}", say(told.words), say(second)),
+    let both = |say: &dyn Fn(&Words) -> String| match told.second {
+        Some(second) => format!("{}\n{}", say(told.words), say(second)),
         None => say(told.words),
     };
-    let name = |id: &str| both(&|words| words.say(id, &[]), " · ");
+    let name = |id: &str| both(&|words| words.say(id, &[]));
     let plain = |id: &str| SettingLine { name: name(id), text: String::new() };
     match entry {
         SettingEntry::Back => plain("setting-back"),
         SettingEntry::Offered(index) => match told.settings.get(index) {
             None => SettingLine::default(),
             Some(setting) => SettingLine {
-                name: both(&|words| setting.name.get(words.tag()).to_owned(), " · "),
-                text: both(&|words| told_text(setting, words), "\n"),
+                name: both(&|words| setting.name.get(words.tag()).to_owned()),
+                text: both(&|words| told_text(setting, words)),
             },
         },
         SettingEntry::Own(index) => SettingLine {
-            name: both(&|words| words.say("setting-own", &[("n", (index + 1).into())]), " · "),
+            name: both(&|words| words.say("setting-own", &[("n", (index + 1).into())])),
             text: shown.own.get(index).map(|own| in_words(&own, shown, told)).unwrap_or_default(),
         },
         SettingEntry::Save => {

@@ -214,7 +214,8 @@ fn draw_track(
         return;
     }
     let radius = f64::from(place.size.height.min(16)) / 4.0;
-    let (from, to) = (f64::from(place.top_left.x) + radius, f64::from(right(place)) - radius);
+    // Room at both ends for the bar that marks an end.
+    let (from, to) = (f64::from(place.top_left.x) + radius + 4.0, f64::from(right(place)) - radius - 4.0);
     let y = place.top_left.y + place.size.height as i32 / 2;
     let x = |value: f64| from + (to - from) * (value - range.least) / (range.most - range.least);
     let bar = |canvas: &mut Canvas<'_>, one: f64, other: f64, thick: i32, colour: Rgb565| {

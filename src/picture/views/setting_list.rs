@@ -4,6 +4,7 @@ use embedded_graphics::geometry::{OriginDimensions, Point, Size};
 use embedded_graphics::primitives::Rectangle;
 
 use super::card::CardPlace;
+use super::foot::note_within;
 use super::layout::{Layout, area, bottom, right};
 use super::wording::fit;
 use crate::picture::lettering::{Across, Face, paragraph_height};
@@ -14,7 +15,7 @@ use crate::words::Words;
 /// One entry, in words.
 #[derive(Clone, Debug, Default, PartialEq, Eq)]
 pub struct SettingLine {
-    /// Its name, in one language or two.
+    /// Its name, in one language or two, one line feed between them.
     pub name: String,
     /// What it is, in one language or two, one line feed between them; may be empty.
     pub text: String,
@@ -111,7 +112,9 @@ pub fn draw(canvas: &mut Canvas<'_>, list: &SettingList<'_>, note: &str, theme: 
         let pad = layout.gap * 2;
         let inside =
             area(row.top_left.x + pad, row.top_left.y, row.size.width as i32 - 2 * pad, row.size.height as i32);
-        fit(canvas, &list.lines[entry].name, inside, face, ink, Across::Left);
+        // As many languages as fit in bold, so that a row says the same at hand and not.
+        let name = note_within(&list.lines[entry].name, Face::bold(parts.face.px()), inside);
+        fit(canvas, &name, inside, face, ink, Across::Left);
     }
     let shown = parts.entries(count);
     let tall = f64::from(layout.gap) * 1.2;

@@ -133,9 +133,18 @@ fn draw_mountain(
         let mm = run.snow_water_mm.get(scene.day).copied().unwrap_or(f64::NAN);
         words.quantity(mm, Quantity::SnowWater, scene.units, 2)
     };
-    let face = if layout.roomy { layout.figure } else { Face::bold(layout.strong.px() + 4) };
     let (was, now) = (depth(&scene.was), depth(&scene.now));
     let same = was == now;
+    let largest = if layout.roomy { layout.figure } else { Face::bold(layout.strong.px() + 4) };
+    let rows =
+        |face: Face, labels: i32| labels * layout.label.line_px() + face.line_px() <= room.size.height as i32 + 2;
+    // Smaller where the rock is low, so that all of it is on the rock; what was goes before that is too small.
+    let faces = || {
+        core::iter::successors(Some(largest), |face| face.smaller()).take_while(|face| face.px() > layout.label.px())
+    };
+    let labels = if scene.changed() && !same { 2 } else { 1 };
+    let face = faces().find(|face| rows(*face, labels)).or_else(|| faces().find(|face| rows(*face, 1)));
+    let face = face.unwrap_or(Face::bold(layout.label.px()));
     line(canvas, &words.say("picture-snow", &[("amount", now.into())]), face);
     if scene.changed() && !same {
         line(canvas, &words.say("picture-was", &[("value", was.into())]), layout.label);

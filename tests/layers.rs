@@ -27,7 +27,7 @@ const MAY_NAME: [(&str, &[&str]); 12] = [
     ),
     ("session", &["picture", "words", "signs", "water", "place", "lesson"]),
     ("board", &["picture", "session"]),
-    ("keep", &["water::dials", "session"]),
+    ("keep", &["water::dials", "session", "lesson::Progress"]),
 ];
 const ROOTS: [&str; 3] = ["commands", "lib", "main"];
 

@@ -39,6 +39,7 @@ mod command;
 mod event;
 pub mod help;
 pub mod keys;
+pub mod kiosk;
 pub mod knob;
 mod needs;
 mod offer;
@@ -51,6 +52,7 @@ mod state;
 mod touch;
 mod turn;
 mod view;
+mod whereabouts;
 mod year;
 
 pub use answer::Answers;
@@ -65,4 +67,5 @@ pub use setting::{MOST_OWN_SETTINGS, Misfit, NamedSetting, OwnSettings, Setting,
 pub use state::{Act, Card, Explained, Focus, Invalid, Shown, State, Undo};
 pub use turn::TURN_ENDS_MS;
 pub use view::{Shade, Speed, VIEWS, View};
+pub use whereabouts::{Look, Whereabouts};
 pub use year::{Third, YearChoice, YearList};

@@ -6,6 +6,7 @@
 mod built_in;
 mod check;
 mod failure;
+mod keep_folder;
 mod line;
 mod map;
 mod output;
@@ -16,6 +17,7 @@ mod show;
 mod snippets;
 mod speech;
 mod spinner;
+mod tally;
 mod tell;
 mod usage;
 mod weather;
@@ -57,6 +59,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("show", matches)) => show::run(speech, matches),
         Some(("map", matches)) => map::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        Some(("tally", matches)) => tally::run(speech, matches),
         _ => show::usual(speech),
     }
 }

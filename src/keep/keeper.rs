@@ -8,7 +8,7 @@ use super::guesses::Guesses;
 use super::layer::FileLayer;
 use super::seal::Damage;
 use super::settings::{Messages, Settings};
-use super::slot::Slot;
+use super::slot::{Opened, Slot};
 use super::tally::Tally;
 
 /// What is kept.
@@ -97,6 +97,12 @@ impl<L: FileLayer> Keep<L> {
         self.open::<Tally>(Kept::Tally).unwrap_or_default().tidied()
     }
 
+    /// The tally without touching any file, for another process than the one that counts.
+    pub fn look_at_tally(&mut self) -> (Tally, Vec<Note>) {
+        let tally = self.read::<Tally>(Kept::Tally, |slot, layer| slot.look(&*layer));
+        (tally.unwrap_or_default().tidied(), self.take_notes())
+    }
+
     /// The message of the day from the file that the staff writes, `message.toml`, and how many lines of it are no good.
     pub fn messages(&self) -> (Messages, usize) {
         const MOST_BYTES: usize = 16 * 1024;
@@ -142,7 +148,11 @@ impl<L: FileLayer> Keep<L> {
     }
 
     fn open<T: serde::de::DeserializeOwned>(&mut self, kept: Kept) -> Option<T> {
-        let opened = self.slots[kept as usize].open(&mut self.layer);
+        self.read(kept, Slot::open)
+    }
+
+    fn read<T>(&mut self, kept: Kept, read: impl FnOnce(&mut Slot, &mut L) -> Opened<T>) -> Option<T> {
+        let opened = read(&mut self.slots[kept as usize], &mut self.layer);
         if let Some(damage) = opened.damage {
             self.notes.push(Note::Damaged { kept, damage, afresh: opened.value.is_none() });
         }

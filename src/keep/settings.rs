@@ -21,6 +21,8 @@ pub struct Settings {
     pub place: String,
     /// Where the instrument was, and a person's own settings.
     pub whereabouts: Option<Whereabouts>,
+    /// Whether it was left alone there.
+    pub left_alone: bool,
     /// What the staff wishes of the kiosk.
     pub wishes: Wishes,
     /// The PIN of the staff menu; without one it stays closed.

@@ -12,7 +12,7 @@ use super::disk::Disk;
 fn settings(place: &str) -> Settings {
     let pin = PinHash::with_salt("4711", [3; 16]).unwrap();
     let wishes = Wishes { light_percent: 70, ..Wishes::default() };
-    Settings { place: place.to_owned(), wishes, pin: Some(pin), wrong_pins: 2, whereabouts: None }
+    Settings { place: place.to_owned(), wishes, pin: Some(pin), wrong_pins: 2, whereabouts: None, left_alone: false }
 }
 
 #[test]

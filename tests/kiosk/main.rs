@@ -6,6 +6,10 @@ mod goldens;
 #[path = "../session/host.rs"]
 #[allow(dead_code, reason = "each test takes what it needs")]
 mod host;
+#[cfg(target_os = "linux")]
+#[path = "../screens/pseudo_terminal.rs"]
+#[allow(dead_code, reason = "each test takes what it needs")]
+mod pseudo_terminal;
 #[path = "../support/scenes.rs"]
 mod scenes;
 #[path = "../support/valleys.rs"]
@@ -14,7 +18,10 @@ mod valleys;
 mod cuts;
 mod disk;
 mod kept;
+#[cfg(target_os = "linux")]
+mod live;
 mod month;
+mod pictures;
 
 use std::alloc::{GlobalAlloc, Layout, System};
 use std::cell::Cell;

@@ -77,7 +77,8 @@ impl Host {
 
     /// Bytes in hand without the tally, which grows with its days up to a bound of its own.
     fn held_beside_tally(&mut self) -> isize {
-        assert_eq!(self.keep.keep_tally(&std::mem::take(&mut self.tally)), None);
+        assert_eq!(self.keep.keep_tally(&self.tally), None);
+        drop(std::mem::take(&mut self.tally));
         let held = held_bytes();
         self.tally = self.keep.tally();
         held

@@ -2,6 +2,7 @@
 
 mod drawing;
 mod hands;
+mod kiosk;
 mod pictures;
 mod player;
 mod request;
@@ -16,15 +17,18 @@ use super::tell;
 use crate::board::choose::{Why, can_show, choose};
 use crate::board::surroundings::{Surroundings, WindowChance};
 use crate::board::terminal::{Ability, Terminal};
-use crate::board::{Choice, FrameSize, Post, ScreenError, ScreenKind, Stage, run as play};
+use crate::board::{Choice, FrameSize, Instrument, Post, ScreenError, ScreenKind, Stage, run as play};
+use crate::session::View;
 use crate::words::Words;
+use kiosk::KioskPlayer;
+pub(super) use kiosk::note_words;
 use player::Player;
 use request::Request;
 
 /// Opens the place and shows it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
     let request = Request::read(matches, &speech.words)?;
-    show(speech, &request)
+    if request.set_pin { kiosk::set_pin(&request, &speech.words) } else { show(speech, &request) }
 }
 
 /// What the program does when it is not told what to do: the usual place on the best screen at hand.
@@ -103,7 +107,19 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
     }
     let asked = |kind| screens.iter().filter(move |&&screen| screen == kind).count();
     let (windows, terminals) = (asked(ScreenKind::Window), asked(ScreenKind::Terminal));
-    let mut stage = Stage::new(player);
+    if request.kiosk && windows + terminals > 0 {
+        let kiosk = KioskPlayer::new(player, request, speech.in_language(speech.words.tag()));
+        return play_on(Stage::new(kiosk), windows, terminals, request);
+    }
+    play_on(Stage::new(player), windows, terminals, request)
+}
+
+fn play_on<I: Instrument + 'static>(
+    mut stage: Stage<I>,
+    windows: usize,
+    terminals: usize,
+    request: &Request,
+) -> Result<(), Trouble> {
     if windows > 0 {
         return show_in_windows(stage, windows, terminals > 0, request.size);
     }
@@ -116,8 +132,8 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
 }
 
 #[cfg(feature = "window")]
-fn show_in_windows(
-    mut stage: Stage<Player>,
+fn show_in_windows<I: Instrument + 'static>(
+    mut stage: Stage<I>,
     windows: usize,
     with_terminal: bool,
     size: Option<FrameSize>,
@@ -132,7 +148,7 @@ fn show_in_windows(
 }
 
 #[cfg(not(feature = "window"))]
-fn show_in_windows(_: Stage<Player>, _: usize, _: bool, _: Option<FrameSize>) -> Result<(), Trouble> {
+fn show_in_windows<I>(_: Stage<I>, _: usize, _: bool, _: Option<FrameSize>) -> Result<(), Trouble> {
     Err(ScreenError::new(ScreenKind::Window, "not built").into())
 }
 
@@ -140,6 +156,11 @@ fn terminal(ability: Option<Ability>, size: Option<FrameSize>, post: &Post) -> R
     let ability = ability.or_else(|| Ability::of_environment(|name| std::env::var(name).ok()));
     let ability = ability.ok_or_else(|| ScreenError::new(ScreenKind::Terminal, "TERM"))?;
     Terminal::open(ability, size, post)
+}
+
+/// The stable key of a view.
+pub(super) fn view_key(view: View) -> &'static str {
+    drawing::page(view).key()
 }
 
 fn tell_choice(choice: Choice, words: &Words) {

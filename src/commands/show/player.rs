@@ -4,18 +4,20 @@ use std::time::Duration;
 
 use embedded_graphics::geometry::Size;
 
-use super::drawing::{Drawing, VIEWS, page};
+use super::drawing::{Drawing, VIEWS, page, theme};
 use super::hands::Clock;
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument};
 use crate::commands::failure::Failure;
 use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
+use crate::picture::Theme;
 use crate::picture::views::{Scene, help, term};
 use crate::place::Place;
 use crate::session::answer::{Asked, Source};
 use crate::session::help::key_lines;
 use crate::session::scene::{Moment, PlaceTold, Stage, facts_of, settings};
 use crate::session::{Answers, Event, Needs, Offer, OfferInput, Shade, State, View, Voice, YearList};
+use crate::session::{Look, Shown, Whereabouts};
 use crate::words::{System, Words};
 
 /// The languages that are offered beside the one asked for.
@@ -119,6 +121,64 @@ impl Player {
         if self.answers.ask(Asked::from(self.state.shown())) {
             let _ = self.answers.finish(&source);
         }
+    }
+}
+
+/// What an unattended instrument asks of it.
+impl Player {
+    /// What is offered.
+    pub fn offer(&self) -> &Offer {
+        &self.offer
+    }
+
+    /// What the session shows.
+    pub fn shown(&self) -> &Shown {
+        self.state.shown()
+    }
+
+    /// Goes up with everything that can be seen.
+    pub fn stamp(&self) -> u64 {
+        self.stamp
+    }
+
+    /// The words of the language on show.
+    pub fn words(&self) -> &Words {
+        &self.voices[self.state.shown().voice].0
+    }
+
+    /// The colours on show.
+    pub fn theme(&self) -> &'static Theme {
+        theme(self.state.shown().shade)
+    }
+
+    /// Where it is, to go back there.
+    pub fn whereabouts(&self) -> Whereabouts {
+        self.state.whereabouts(&self.offer)
+    }
+
+    /// Goes back there.
+    pub fn return_to(&mut self, place: &Whereabouts) {
+        self.state.return_to(place, &self.offer);
+        self.seen_anew();
+    }
+
+    /// Shows what is wished for.
+    pub fn look(&mut self, look: Look) {
+        let needs = self.state.look(look, &self.offer);
+        if needs.redraw {
+            self.seen_anew();
+        }
+    }
+
+    /// Begins as at the first start.
+    pub fn start_again(&mut self) {
+        self.state = State::new(&self.offer);
+        self.seen_anew();
+    }
+
+    fn seen_anew(&mut self) {
+        self.asked_water = true;
+        self.stamp += 1;
     }
 }
 

@@ -28,6 +28,12 @@ pub(super) struct Request {
     pub units: Option<System>,
     /// Colours to begin with.
     pub shade: Shade,
+    /// Whether nobody watches over it.
+    pub kiosk: bool,
+    /// Where what is kept is kept, where a folder was named.
+    pub keep: Option<PathBuf>,
+    /// Only the PIN of the staff menu is set.
+    pub set_pin: bool,
 }
 
 impl Default for Request {
@@ -40,6 +46,9 @@ impl Default for Request {
             one_language: false,
             units: None,
             shade: Shade::Light,
+            kiosk: false,
+            keep: None,
+            set_pin: false,
         }
     }
 }
@@ -84,6 +93,9 @@ impl Request {
             one_language: text("lang").is_some(),
             units,
             shade,
+            kiosk: matches.get_flag("kiosk"),
+            keep: path("keep"),
+            set_pin: matches.get_flag("set-pin"),
         })
     }
 }

@@ -22,6 +22,8 @@ pub mod page_answer;
 pub mod scene;
 pub mod season;
 mod sheets;
+pub mod staff;
+pub mod stroll;
 pub mod term;
 pub mod trust;
 pub mod valley;

@@ -51,8 +51,10 @@ const DIM_PERCENT: u8 = 20;
 pub enum Hand {
     /// The knob was turned, or an arrow key pressed.
     Turn(i32),
-    /// The button, or the enter key.
+    /// The button.
     Press,
+    /// The enter key: like the button, but after digits that were typed it ends them.
+    Enter,
     /// The button was held.
     Hold,
     /// A digit was typed.
@@ -219,6 +221,12 @@ impl Kiosk {
         }
     }
 
+    /// The same for one that was left alone before the power went: it strolls at once.
+    #[must_use]
+    pub fn left_alone(self) -> Self {
+        Self { phase: Phase::Visit { idle_ms: VISIT_ENDS_MS }, ..self }
+    }
+
     /// A lesson is under way, or is over.
     pub fn set_lesson(&mut self, under_way: bool) {
         self.has_lesson = under_way;
@@ -267,7 +275,9 @@ impl Kiosk {
     /// What lies over the page.
     pub fn over(&self) -> Over {
         match &self.phase {
-            Phase::Visit { idle_ms } if self.visit_left_ms(*idle_ms) <= ASKS_BEFORE_MS => Over::AnyoneThere,
+            Phase::Visit { idle_ms } if self.used.is_counted && self.visit_left_ms(*idle_ms) <= ASKS_BEFORE_MS => {
+                Over::AnyoneThere
+            }
             Phase::Visit { .. } => Over::Nothing,
             Phase::Stroll(stroll) => match stroll.says() {
                 Some(message) => Over::Says { message, dial: stroll.dial() },
@@ -378,6 +388,7 @@ impl Kiosk {
                 let act = match hand {
                     Hand::Turn(steps) => Act::Turn(steps),
                     Hand::Press => Act::Press,
+                    Hand::Enter => Act::Done,
                     Hand::Digit(digit) => Act::Digit(digit),
                     Hand::Back | Hand::Hold => Act::Back,
                     Hand::StaffKey | Hand::Corner | Hand::Other => return reaction,
@@ -399,7 +410,7 @@ impl Kiosk {
             }
             Phase::Stroll(_) | Phase::Asleep => {
                 let in_the_dark = self.phase == Phase::Asleep;
-                reaction.pass = !in_the_dark && !matches!(hand, Hand::Press | Hand::Hold);
+                reaction.pass = !in_the_dark && !matches!(hand, Hand::Press | Hand::Enter | Hand::Hold);
                 self.used = Used { is_counted: true, ..Used::default() };
                 self.phase = Phase::Visit { idle_ms: 0 };
                 reaction.orders.give(Order::CountVisit);

@@ -215,7 +215,7 @@ impl Staff {
     pub fn act(&mut self, act: Act, tries: Tries, wishes: &mut Wishes, orders: &mut Orders) -> bool {
         match &mut self.page {
             Page::NoPin => false,
-            Page::Pin { .. } if tries.wait_ms > 0 => !matches!(act, Act::Press | Act::Back),
+            Page::Pin { .. } if tries.wait_ms > 0 => !matches!(act, Act::Press | Act::Done | Act::Back),
             Page::Pin { digits, wheel, .. } => {
                 let act = match (act, Wheel::at(*wheel)) {
                     (Act::Turn(steps), _) => {

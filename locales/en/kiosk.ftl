@@ -22,7 +22,7 @@ stroll-lining = What if the canals let less water seep away?
 stroll-years = One year is only one. How do all the years go?
 stroll-trust = How far can you believe this? Here is what was tested.
 stroll-caution = This helps you learn. It does not forecast.
-stroll-take-over = Turn the knob or touch the screen: it is yours.
+stroll-take-over = Turn the knob: it is yours.
 stroll-message-of-day = Today
 kiosk-anyone-there = Is anyone there? Turn the knob to go on.
 

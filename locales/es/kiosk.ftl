@@ -22,7 +22,7 @@ stroll-lining = ¿Y si los canales perdieran menos agua en el camino?
 stroll-years = Un año es solo uno. ¿Cómo salen todos los años?
 stroll-trust = ¿Hasta dónde se le puede creer? Aquí está lo que se probó.
 stroll-caution = Esto sirve para aprender. No es un pronóstico.
-stroll-take-over = Gire la perilla o toque la pantalla: es suya.
+stroll-take-over = Gire la perilla: es suya.
 stroll-message-of-day = Hoy
 kiosk-anyone-there = ¿Hay alguien? Gire la perilla para seguir.
 

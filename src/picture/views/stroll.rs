@@ -9,7 +9,7 @@ use super::emblem::{Hand, knob};
 use super::layout::{Layout, area, bottom, right};
 use super::scene::DialSetting;
 use super::wording::{dial_name, dial_value, fit};
-use crate::picture::lettering::{Across, Face, draw_in, lines, measure, paragraph_height};
+use crate::picture::lettering::{Across, Face, lines, measure, paragraph_height};
 use crate::picture::shape::{rounded_box, rounded_frame};
 use crate::picture::{Canvas, Paint, Spot, Theme};
 use crate::words::{System, Words};
@@ -101,8 +101,8 @@ pub fn draw_message(canvas: &mut Canvas<'_>, text: &str, theme: &Theme, words: &
     let mut y = room.top_left.y + (room.size.height as i32 - high).max(0) / 2;
     for line in lines(text, face, room.size.width) {
         let line = super::wording::name_within(line, face, room.size.width);
-        let box_of_line = area(room.top_left.x, y, room.size.width as i32, face.line_px() + face.descent_px());
-        draw_in(canvas, &line, box_of_line, face, theme.ink, Across::Left);
+        let place = area(room.top_left.x, y, room.size.width as i32, face.line_px());
+        fit(canvas, &line, place, face, theme.ink, Across::Left);
         y += face.line_px();
     }
     fit(canvas, &words.say("stroll-take-over", &[]), place.foot, layout.note, theme.quiet, Across::Left);

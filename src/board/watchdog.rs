@@ -44,24 +44,24 @@ impl Watchdog {
     /// A frame was drawn: says so where it is time, and that the service is ready the first time.
     pub fn feed(&mut self) {
         if !std::mem::replace(&mut self.is_ready, true) {
-            self.say("READY=1\nWATCHDOG=1");
+            self.notify("READY=1\nWATCHDOG=1");
             self.fed = Some(Instant::now());
             return;
         }
         let Some(interval) = self.interval else { return };
         // Frames come faster than the manager wants to hear of them.
         if self.fed.is_none_or(|fed| fed.elapsed() >= interval / 2) {
-            self.say("WATCHDOG=1");
+            self.notify("WATCHDOG=1");
             self.fed = Some(Instant::now());
         }
     }
 
     /// The program ends on purpose.
     pub fn stopping(&self) {
-        self.say("STOPPING=1");
+        self.notify("STOPPING=1");
     }
 
-    fn say(&self, text: &str) {
+    fn notify(&self, text: &str) {
         #[cfg(unix)]
         if let Some(socket) = &self.socket {
             // A manager that does not listen any more starts us anew, which is what it is for.

@@ -141,7 +141,9 @@ fn where_it_was_elsewhere_does_no_harm() {
     let mut next = super::valleys::numbers(6);
     let mut state = State::new(&rich);
     for seed in 0..400 {
-        (0..9).for_each(|_| drop(state.step(super::random_event(&mut next), &rich)));
+        for _ in 0..9 {
+            state.step(super::random_event(&mut next), &rich);
+        }
         let mut input = super::everything();
         input.dials.truncate((seed % 11) as usize);
         input.views.truncate(1 + (seed % 8) as usize);

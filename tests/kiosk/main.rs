@@ -22,6 +22,7 @@ mod kept;
 mod live;
 mod month;
 mod pictures;
+mod rules;
 
 use std::alloc::{GlobalAlloc, Layout, System};
 use std::cell::Cell;

@@ -43,8 +43,8 @@ impl Host {
         let day = self.kiosk.clock().ok().map(|wall| wall.local_day);
         for order in orders.iter() {
             match *order {
-                Order::Session(event) => drop(self.state.step(event, &self.offer)),
-                Order::Look(look) => drop(self.state.look(look, &self.offer)),
+                Order::Session(event) => _ = self.state.step(event, &self.offer),
+                Order::Look(look) => _ = self.state.look(look, &self.offer),
                 Order::Leave => {
                     self.state.step(Event::LongPress, &self.offer);
                     self.save();
@@ -231,8 +231,8 @@ fn a_stroll_of_a_day_holds_not_one_byte_more() {
     for _ in 0..500_000 {
         for order in kiosk.tick(173, None, &offer).iter() {
             match *order {
-                Order::Session(event) => drop(state.step(event, &offer)),
-                Order::Look(look) => drop(state.look(look, &offer)),
+                Order::Session(event) => _ = state.step(event, &offer),
+                Order::Look(look) => _ = state.look(look, &offer),
                 _ => {}
             }
         }

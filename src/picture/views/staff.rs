@@ -115,8 +115,9 @@ fn draw_pin(
             ring(canvas, spot, radius * 0.8, (radius / 4.0).max(1.0), theme.rule);
         }
     }
-    let face = Face::bold(layout.figure.px());
-    let wheel_high = (unit * 3).max(face.line_px());
+    let wheel_high = unit * 3;
+    // One figure that is read from two metres away.
+    let face = Face::bold((wheel_high * 2 / 3).clamp(18, 64) as u8);
     let wheel_place = area(middle - wide / 4, room.top_left.y + unit * 2 + unit / 4, wide / 2, wheel_high);
     rounded_box(canvas, wheel_place, f64::from(layout.gap) * 1.5, theme.chosen);
     let inside =
@@ -149,7 +150,8 @@ fn draw_list(
     theme: &Theme,
 ) {
     let (x, wide, high) = (room.top_left.x, room.size.width as i32, room.size.height as i32);
-    let face = layout.label;
+    // A few facts have room to be read from further away.
+    let face = if at.is_some() { layout.label } else { Face::regular(layout.label.px() + layout.label.px() / 3) };
     let least = face.line_px() + 2;
     let seen = usize::try_from(high / least).unwrap_or(0).clamp(1, lines.len().max(1));
     let row_high = (high / seen as i32).min(least * 2);

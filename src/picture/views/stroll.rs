@@ -23,7 +23,7 @@ pub type Turned<'a> = (&'a DialSetting, System);
 /// The strip along the bottom that the line stands on; the page's dials and footer lie under it.
 pub fn strip(size: Size) -> Rectangle {
     let layout = Layout::of(size, false);
-    let top = layout.dials.top_left.y - layout.gap;
+    let top = layout.dials.top_left.y - layout.gap / 2;
     area(0, top, size.width as i32, size.height as i32 - top)
 }
 
@@ -36,11 +36,11 @@ pub fn draw(canvas: &mut Canvas<'_>, says: &str, turned: Option<Turned<'_>>, the
     canvas.fill(strip, theme.chosen);
     let on_strip = Theme { ink: theme.on_chosen, lack: theme.on_chosen, ..*theme };
     let high = strip.size.height as i32;
-    let radius = f64::from(high) * 0.3;
+    let radius = f64::from(high) * 0.26;
     let middle =
-        Spot::new(f64::from(layout.margin) + radius + 1.0, f64::from(strip.top_left.y) + f64::from(high) / 2.0);
+        Spot::new(f64::from(layout.margin) + radius * 1.25, f64::from(strip.top_left.y) + f64::from(high) / 2.0);
     knob(canvas, middle, radius, Hand::Turn, &on_strip);
-    let x = layout.margin * 2 + (radius * 2.0) as i32 + 2;
+    let x = layout.margin * 2 + (radius * 2.5) as i32;
     let wide = right(strip) - layout.margin - x;
     let below = turned.map_or_else(
         || (words.say("stroll-take-over", &[]), Face::regular(layout.label.px())),

@@ -304,7 +304,7 @@ impl Kiosk {
         match &self.phase {
             Phase::Asleep => 0,
             Phase::Stroll(_) if self.is_night() => full.min(DIM_PERCENT),
-            Phase::Stroll(_) if self.wishes.low_power => full * 3 / 5,
+            Phase::Stroll(_) if self.wishes.low_power => full / 5 * 3,
             _ => full,
         }
     }

@@ -38,6 +38,8 @@ const SYSTEM_FILES: &str = "/sys";
 const POWER_EVERY: Duration = Duration::from_secs(10);
 /// Where the instrument is goes to the card when it has been left there so long.
 const SETTLES_MS: u32 = 3000;
+/// What the staff has set goes to the card when nothing more was set for so long.
+const WISHES_SETTLE_MS: u32 = 1000;
 /// The tally goes to the card no more often.
 const TALLY_EVERY_MS: u32 = 600_000;
 
@@ -68,6 +70,7 @@ pub(super) struct KioskPlayer {
     kept_stamp: u64,
     seen_stamp: u64,
     still_ms: u32,
+    wishes_wait_ms: Option<u32>,
     tally_waits: bool,
     since_tally_ms: u32,
     has_ended: bool,
@@ -120,6 +123,7 @@ impl KioskPlayer {
             kept_stamp: stamp,
             seen_stamp: stamp,
             still_ms: 0,
+            wishes_wait_ms: None,
             tally_waits: false,
             since_tally_ms: TALLY_EVERY_MS,
             has_ended: false,

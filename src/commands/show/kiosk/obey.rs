@@ -1,7 +1,7 @@
 //! What the kiosk's orders do, and when what is brought to the card.
 
 use super::note_words::note_words;
-use super::{KioskPlayer, SETTLES_MS, TALLY_EVERY_MS, log};
+use super::{KioskPlayer, SETTLES_MS, TALLY_EVERY_MS, WISHES_SETTLE_MS, log};
 use crate::keep::Note;
 use crate::session::Event;
 use crate::session::kiosk::{Count, Order, Orders};
@@ -40,8 +40,8 @@ impl KioskPlayer {
                 }
                 Order::KeepWishes => {
                     self.settings.wishes = *self.kiosk.wishes();
-                    self.keep_settings();
-                    self.read_messages();
+                    // A value that is being turned does not go to the card at every detent.
+                    self.wishes_wait_ms = Some(0);
                 }
                 Order::KeepWrongPins(wrong) => {
                     self.settings.wrong_pins = wrong;
@@ -84,6 +84,10 @@ impl KioskPlayer {
         if self.tally_waits && self.since_tally_ms >= TALLY_EVERY_MS {
             self.keep_tally();
         }
+        self.wishes_wait_ms = self.wishes_wait_ms.map(|waits| waits.saturating_add(elapsed_ms));
+        if self.wishes_wait_ms.is_some_and(|waits| waits >= WISHES_SETTLE_MS) {
+            self.keep_settings();
+        }
         let stamp = self.player.stamp();
         let is_still = std::mem::replace(&mut self.seen_stamp, stamp) == stamp;
         self.still_ms = if is_still { self.still_ms.saturating_add(elapsed_ms) } else { 0 };
@@ -93,10 +97,12 @@ impl KioskPlayer {
         }
     }
 
-    /// When where it is wants to be kept, ms.
+    /// When something wants to be kept, ms.
     pub(super) fn settles_in_ms(&self) -> Option<u32> {
         let waits = self.kiosk.is_visit() && self.player.stamp() != self.kept_stamp;
-        waits.then(|| SETTLES_MS.saturating_sub(self.still_ms).max(100))
+        let place = waits.then(|| SETTLES_MS.saturating_sub(self.still_ms));
+        let wishes = self.wishes_wait_ms.map(|waits| WISHES_SETTLE_MS.saturating_sub(waits));
+        place.into_iter().chain(wishes).min().map(|ms| ms.max(100))
     }
 
     fn keep_where(&mut self, left_alone: bool) {
@@ -108,6 +114,7 @@ impl KioskPlayer {
     }
 
     fn keep_settings(&mut self) {
+        self.wishes_wait_ms = None;
         let note = self.keep.as_mut().and_then(|keep| keep.keep_settings(&self.settings));
         self.note(note);
     }
@@ -130,6 +137,8 @@ impl KioskPlayer {
     pub(super) fn end(&mut self) {
         if self.kiosk.is_visit() {
             self.keep_where(false);
+        } else if self.wishes_wait_ms.is_some() {
+            self.keep_settings();
         }
         self.keep_tally();
         self.watchdog.stopping();

@@ -15,9 +15,16 @@
 
 pub mod backlight;
 pub mod choose;
+pub mod file;
 pub mod hands;
+pub mod light;
+pub mod monitor;
+#[cfg(all(feature = "board", target_os = "linux"))]
+pub mod panel;
 pub mod pictures;
+pub mod placing;
 pub mod power;
+pub mod reviving;
 mod run;
 pub mod screen;
 pub mod size;
@@ -30,6 +37,7 @@ pub mod window;
 
 pub use choose::{Choice, ScreenKind};
 pub use hands::{HandEvent, Key, PointerPhase, Post};
+pub use light::Light;
 pub use run::run;
 pub use screen::{Caption, Frame, Instrument, PlacedText, PlacedTexts, Screen, ScreenError};
 pub use size::{FrameSize, LAYOUTS};

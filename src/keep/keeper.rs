@@ -4,12 +4,12 @@ use std::io::ErrorKind;
 
 use serde::Serialize;
 
-use super::guesses::Guesses;
 use super::layer::FileLayer;
 use super::seal::Damage;
 use super::settings::{Messages, Settings};
 use super::slot::{Opened, Slot};
 use super::tally::Tally;
+use crate::session::lesson::Kept as Guesses;
 
 /// What is kept.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]

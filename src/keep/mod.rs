@@ -23,7 +23,6 @@
 //! that was kept: the instrument goes on with what it has in memory and tries again later.
 
 mod folder;
-mod guesses;
 mod keeper;
 mod layer;
 mod pin;
@@ -32,8 +31,8 @@ mod settings;
 mod slot;
 mod tally;
 
+pub use crate::session::lesson::Kept as Guesses;
 pub use folder::Folder;
-pub use guesses::Guesses;
 pub use keeper::{Keep, Kept, Note, Trouble};
 pub use layer::FileLayer;
 pub use pin::{LEAST_PIN_DIGITS, MOST_PIN_DIGITS, PinFault, PinHash};

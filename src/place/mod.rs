@@ -18,11 +18,15 @@ mod crops;
 pub(crate) mod dated;
 pub mod demo;
 pub(crate) mod dial_plan;
+pub mod exchange;
 mod fields;
 mod gates;
+mod measure_words;
+pub mod preparing;
 pub mod problem;
 mod reading;
 pub mod record;
+mod record_file;
 mod records;
 mod reservoir;
 mod rights_file;
@@ -32,6 +36,7 @@ mod slopes;
 mod small_table;
 mod source;
 mod station_days;
+pub mod terrain;
 pub(crate) mod text;
 pub(crate) mod tree;
 pub(crate) mod unit_suffix;
@@ -41,6 +46,7 @@ use std::path::PathBuf;
 use chrono::NaiveDate;
 
 use crate::water::calendar::CalendarDay;
+use crate::water::evaporation::{SkyTable, percent_per_degree};
 use crate::water::valley::Valley;
 use crate::water::weather::StationDay;
 
@@ -92,6 +98,16 @@ pub struct Place {
     pub diversions: Vec<Diversion>,
     /// What the about view tells of how the place was read.
     pub notes: Notes,
+}
+
+impl Place {
+    /// By how many percent reference evaporation grows with the first degree of warming, over the record; `None` where
+    /// nothing evaporates or the latitude is none.
+    pub fn evaporation_percent_per_degree(&self) -> Option<f64> {
+        let sky = SkyTable::at_latitude(self.valley.latitude_deg)?;
+        let record = self.calendar.iter().zip(&self.days).map(|(day, record)| (day.day_of_year, record.air));
+        percent_per_degree(&self.valley.evaporation.method, &sky, record)
+    }
 }
 
 /// The units that people are shown.

@@ -2,12 +2,12 @@
 
 use super::command::Command;
 use super::event::Event;
-use super::keys::command_of;
+use super::keys::{Key, PAGE, command_of};
 use super::knob::{Turn, around};
 use super::offer::Offer;
 use super::ring::Item;
 use super::setting::{Setting, SettingEntry};
-use super::state::{Act, Card, Focus, State};
+use super::state::{Act, Card, Done, Focus, State};
 use super::view::View;
 use crate::water::dials::Dials;
 
@@ -17,7 +17,7 @@ impl State {
         // Time, a resting potentiometer and a finger on its way say nothing new about ends or turns by themselves.
         let goes_on = matches!(event, Event::Tick { .. } | Event::SetDial { .. } | Event::TouchMove(_));
         if !goes_on {
-            self.shown.at_end = None;
+            (self.shown.at_end, self.shown.done) = (None, None);
         }
         self.turned = false;
         match event {
@@ -28,7 +28,7 @@ impl State {
             Event::TurnDial { dial, detents, since_ms } => self.turn_dial(dial, Turn { detents, since_ms }, offer),
             Event::SetDial { dial, share } => self.set_dial(dial, share, offer),
             Event::Key(key) => {
-                if let Some(command) = command_of(key) {
+                if let Some(command) = self.along(key).or_else(|| command_of(key)) {
                     self.command(command, offer);
                 }
             }
@@ -41,6 +41,22 @@ impl State {
         if !goes_on && !self.turned {
             self.gesture = None;
         }
+    }
+
+    /// What an arrow means where a list, the sheets of a card, the ring or a thing that is no dial is open: the way that it
+    /// points.
+    fn along(&self, key: Key) -> Option<Command> {
+        let downwards = self.shown.card.is_some() || self.shown.focus == Focus::In(Item::Settings);
+        let steps = match key {
+            Key::Left => -1,
+            Key::Right => 1,
+            Key::Up if downwards => -1,
+            Key::Down if downwards => 1,
+            Key::PageUp if downwards => -PAGE,
+            Key::PageDown if downwards => PAGE,
+            _ => return None,
+        };
+        (downwards || !self.shown.focus.is_in_dial()).then_some(Command::Turn(steps))
     }
 
     /// Does what was asked.
@@ -65,6 +81,7 @@ impl State {
                     self.show(*view, offer);
                 }
             }
+            Command::Set(setting) => self.stand(setting, offer),
             Command::StepView(steps) => self.step_view(steps.into(), offer),
             Command::PlayOrPause if self.shown.playing => self.pause(),
             Command::PlayOrPause => self.play(offer),
@@ -161,6 +178,9 @@ impl State {
             self.shown.view = view;
             self.shown.sheet = 0;
             self.shown.card = None;
+            if self.shown.focus == Focus::In(Item::Settings) {
+                self.go_home();
+            }
         }
     }
 
@@ -171,16 +191,18 @@ impl State {
     }
 
     fn keep(&mut self) {
-        self.shown.beside = match self.shown.beside {
-            Some(_) => None,
-            None => Some(self.shown.dials),
+        let (beside, done) = match self.shown.beside {
+            Some(_) => (None, Done::LetGo),
+            None => (Some(self.shown.dials), Done::Kept),
         };
+        (self.shown.beside, self.shown.done) = (beside, Some(done));
     }
 
     fn reset(&mut self) {
         if self.shown.dials != Dials::REST || self.shown.beside.is_some() {
             self.remember(Act::Reset);
         }
+        self.shown.done = Some(Done::Reset);
         self.shown.dials = Dials::REST;
         self.shown.beside = None;
         self.shown.card = None;
@@ -191,7 +213,11 @@ impl State {
 
     /// Takes back the last act by changing what it changed with what it was; the next undo changes it again.
     fn undo(&mut self, offer: &Offer) {
-        let Some(undo) = self.shown.undo else { return };
+        let Some(undo) = self.shown.undo else {
+            self.shown.done = Some(Done::NothingToUndo);
+            return;
+        };
+        self.shown.done = Some(if undo.undone { Done::DoneAgain } else { Done::Undone });
         self.remember(undo.act);
         if let Some(again) = &mut self.shown.undo {
             again.undone = !undo.undone;
@@ -210,22 +236,26 @@ impl State {
     /// Does what an entry of the list of settings says.
     pub(super) fn do_entry(&mut self, entry: usize, offer: &Offer) {
         let own = &mut self.shown.own;
-        let recalled = match own.entry(offer, entry) {
+        let chosen = own.entry(offer, entry);
+        let recalled = match chosen {
             None => return,
             Some(SettingEntry::Back) => None,
             Some(SettingEntry::Offered(index)) => offer.settings().get(index).map(|named| named.setting),
             Some(SettingEntry::Own(index)) => own.get(index),
             Some(SettingEntry::Save) => {
                 own.push(Setting { dials: self.shown.dials, year: Some(self.shown.year) });
+                self.shown.done = Some(Done::Saved(own.count() - 1));
                 None
             }
             Some(SettingEntry::ForgetLast) => {
                 own.pop();
+                self.shown.done = Some(Done::Forgot);
                 None
             }
         };
         if let Some(setting) = recalled {
             self.remember(Act::Recall);
+            self.shown.done = chosen.map(Done::Recalled);
             self.shown.dials = setting.dials;
             if let Some(year) = setting.year {
                 self.set_year(year, offer);

@@ -1,5 +1,7 @@
 //! The year and the day that are shown, and playing from day to day.
 
+use std::cmp::Ordering;
+
 use super::knob::along;
 use super::offer::Offer;
 use super::state::State;
@@ -8,14 +10,23 @@ use super::year::{Third, YearChoice};
 const MILLIDAYS: u64 = 1000;
 
 impl State {
-    /// Shows another year. The day stays the same day of the water year; a year's last day stays the last.
+    /// Shows another year. The day stays the same date (or, where nobody told where a leap day lies, the same day of the
+    /// water year); a year's last day stays the last.
     pub(super) fn set_year(&mut self, choice: YearChoice, offer: &Offer) {
         let years = offer.years();
         let Some(index) = years.index(choice) else { return };
         let was_last = self.last_day(offer);
+        let marked = self.shown.day;
         (self.shown.year, self.shown.year_index) = (choice, index);
         let last = self.last_day(offer);
-        if self.shown.day == was_last || self.shown.day > last {
+        if let Some(leap_day) = offer.leap_day() {
+            self.shown.day = match last.cmp(&was_last) {
+                Ordering::Less if marked > leap_day => marked - 1,
+                Ordering::Greater if marked >= leap_day => marked + 1,
+                _ => marked,
+            };
+        }
+        if marked == was_last || self.shown.day > last {
             self.shown.day = last;
         }
     }

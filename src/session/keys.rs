@@ -47,7 +47,7 @@ const fn row(key: Key, command: Command, message: &'static str) -> KeyRow {
 }
 
 /// Steps of a page key.
-const PAGE: i32 = 5;
+pub(super) const PAGE: i32 = 5;
 /// Days of the longer day keys.
 const WEEK: i32 = 7;
 

@@ -9,6 +9,8 @@
 //! | 60 to 119 | 2 | 3 |
 //! | under 60 | 4 | 10 |
 
+pub use crate::picture::views::hand::End;
+
 /// Pace from which a detent is one step, ms.
 pub const SLOW_MS: u32 = 120;
 /// Pace from which a detent is a few steps, ms; faster is the fastest.
@@ -24,15 +26,6 @@ pub const STEPS: Gear = Gear([1, 2, 4]);
 pub const DAYS: Gear = Gear([1, 3, 10]);
 /// For short lists: never more than one step a detent.
 pub const LIST: Gear = Gear([1, 1, 1]);
-
-/// An end of what can be turned through.
-#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord, Hash)]
-pub enum End {
-    /// The lowest, or the first.
-    First,
-    /// The highest, or the last.
-    Last,
-}
 
 /// A turn of the one encoder, as it came.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]

@@ -15,8 +15,9 @@
 //!   paused. View, year, language, units and colours stay, and undo brings the rest back.
 //!
 //! Fast turns go further ([`knob`]). Dials, days, years and lists stop at their ends and say so ([`Shown::at_end`]);
-//! the ring, views, languages and colours go round. Keys are a table ([`keys::KEYS`]). A finger taps to choose and drags
-//! to turn; the picture says what lies under it ([`Target`]).
+//! the ring, views, languages and colours go round. Keys are a table ([`keys::KEYS`]); in a list, on a card and
+//! on the ring arrows go the way they point. A finger taps to choose and drags to turn ([`point::Finger`]); the picture
+//! says what lies under it. What the hand is at, what was just done and how to go on is said at the foot ([`hand`]).
 //!
 //! # Undo
 //!
@@ -37,12 +38,15 @@ pub mod answer;
 mod calendar;
 mod command;
 mod event;
+pub mod hand;
 pub mod help;
 pub mod keys;
 pub mod kiosk;
 pub mod knob;
+pub mod lesson;
 mod needs;
 mod offer;
+pub mod point;
 mod refit;
 mod ring;
 mod scale;
@@ -58,13 +62,14 @@ mod year;
 pub use answer::Answers;
 pub use command::Command;
 pub use event::{Event, Target};
+pub use knob::End;
 pub use needs::Needs;
 pub use offer::{Offer, OfferFault, OfferInput, Voice};
 pub use refit::Refit;
 pub use ring::{Item, MOST_ITEMS};
 pub use scale::{DialScale, MOST_STOPS};
 pub use setting::{MOST_OWN_SETTINGS, Misfit, NamedSetting, OwnSettings, Setting, SettingEntry};
-pub use state::{Act, Card, Explained, Focus, Invalid, Shown, State, Undo};
+pub use state::{Act, Card, Done, Explained, Focus, Invalid, Shown, State, Undo};
 pub use turn::TURN_ENDS_MS;
 pub use view::{Shade, Speed, VIEWS, View};
 pub use whereabouts::{Look, Whereabouts};

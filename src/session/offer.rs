@@ -74,6 +74,8 @@ pub struct Offer {
     settings: Vec<NamedSetting>,
     help_pages: u8,
     about_sheets: u8,
+    opening_day: u16,
+    leap_day: Option<u16>,
 }
 
 impl Offer {
@@ -114,11 +116,36 @@ impl Offer {
             settings: input.settings,
             help_pages: input.help_pages,
             about_sheets: 1,
+            opening_day: 0,
+            leap_day: None,
         };
         for (index, named) in offer.settings.iter().enumerate() {
             named.setting.fits(&offer).map_err(|misfit| OfferFault::Setting(index, misfit))?;
         }
         Ok(offer)
+    }
+
+    /// The same with the day of the water year that a session opens on, counted from 0: one on which a turn of a dial
+    /// shows.
+    #[must_use]
+    pub fn with_opening_day(self, opening_day: u16) -> Self {
+        Self { opening_day, ..self }
+    }
+
+    /// The same with the place of 29 February in a water year of 366 days, counted from 0: the marked day then stays the
+    /// same date from year to year.
+    #[must_use]
+    pub fn with_leap_day(self, leap_day: u16) -> Self {
+        Self { leap_day: Some(leap_day), ..self }
+    }
+
+    /// The same with those of `settings` that go with it, beside those that it has.
+    #[must_use]
+    pub fn with_settings(mut self, settings: Vec<NamedSetting>) -> Self {
+        let fitting: Vec<NamedSetting> =
+            settings.into_iter().filter(|named| named.setting.fits(&self).is_ok()).collect();
+        self.settings.extend(fitting);
+        self
     }
 
     /// The same with so many sheets of the about view, as the picture counts them for a screen; 0 counts as 1.
@@ -131,6 +158,16 @@ impl Offer {
     #[must_use]
     pub fn with_help_pages(self, pages: u8) -> Self {
         Self { help_pages: pages.max(1), ..self }
+    }
+
+    /// The same with these dials and settings alone, as a lesson allows them; `None` where they make no sense.
+    pub fn with_dials(self, dials: &[(Dial, DialRange)], settings: &[NamedSetting]) -> Option<Self> {
+        let mut scales = [None; DIALS];
+        for &(dial, range) in dials {
+            scales[dial as usize] = Some(DialScale::new(dial, range)?);
+        }
+        let offer = Self { scales, settings: settings.to_vec(), ..self };
+        offer.settings.iter().all(|named| named.setting.fits(&offer).is_ok()).then_some(offer)
     }
 
     /// The stops of a dial; `None` where the place does not offer it.
@@ -181,6 +218,16 @@ impl Offer {
     /// Settings that come as data.
     pub fn settings(&self) -> &[NamedSetting] {
         &self.settings
+    }
+
+    /// The day of the water year that a session opens on, counted from 0.
+    pub fn opening_day(&self) -> u16 {
+        self.opening_day
+    }
+
+    /// The place of 29 February in a water year of 366 days, counted from 0, where it is known.
+    pub fn leap_day(&self) -> Option<u16> {
+        self.leap_day
     }
 
     /// Pages of the help card; at least one.

@@ -2,6 +2,7 @@
 
 use crate::picture::chart::DayMark;
 use crate::picture::views::facts::{AllYears, PlaceFacts, YearMeasure};
+use crate::picture::views::hand::Hand;
 use crate::picture::views::scene::{
     CanalShown, CanalTitle, DialSetting, Doubt, ReservoirShown, RunShown, Scene, YearKind, YearShown,
 };
@@ -210,6 +211,7 @@ impl<'a> Stage<'a> {
             facts: PlaceFacts::default(),
             skill: None,
             sheet: 0,
+            hand: Hand::default(),
         }
     }
 }

@@ -5,20 +5,13 @@ use super::knob::End;
 use super::needs::Needs;
 use super::offer::Offer;
 use super::ring::{Item, ring};
-use super::setting::{Misfit, OwnSettings, Setting};
+use super::setting::{Misfit, OwnSettings, Setting, SettingEntry};
 use super::view::{Shade, Speed, View};
 use super::year::{Third, YearChoice};
 use crate::water::dials::{Dial, Dials};
 use crate::words::System;
 
-/// Where the encoder's turns go.
-#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord, Hash)]
-pub enum Focus {
-    /// Into this thing: turning changes it.
-    In(Item),
-    /// Along the ring, which lies open at this thing: a press goes in.
-    Ring(Item),
-}
+pub use crate::picture::views::hand::Focus;
 
 /// A card that lies over the view.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord, Hash)]
@@ -39,6 +32,29 @@ pub enum Explained {
     Term(u16),
     /// What a dial stands for.
     Dial(Dial),
+}
+
+/// What was just done, said until the next event.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Done {
+    /// What is dialled was kept beside.
+    Kept,
+    /// What was kept beside was let go.
+    LetGo,
+    /// The last act was taken back.
+    Undone,
+    /// What was taken back was done again.
+    DoneAgain,
+    /// There was nothing to take back.
+    NothingToUndo,
+    /// Everything was set back to rest.
+    Reset,
+    /// A setting was called up, by its entry.
+    Recalled(SettingEntry),
+    /// What is dialled was saved as one's own, counted from 0.
+    Saved(usize),
+    /// The last of one's own was forgotten.
+    Forgot,
 }
 
 /// What an undo takes back.
@@ -78,6 +94,8 @@ pub struct Shown {
     pub card: Option<Card>,
     /// The last turn wanted to go beyond this end.
     pub at_end: Option<End>,
+    /// What the last event did, where it cannot be seen otherwise.
+    pub done: Option<Done>,
     /// The view.
     pub view: View,
     /// Its sheet, counted from 0.
@@ -157,21 +175,24 @@ pub enum Invalid {
 }
 
 impl State {
-    /// The state at the start: dials at rest, the first dial in hand, the first view, the middling year's first day.
+    /// The state at the start: dials at rest, the first dial in hand, the first view, the middling year's opening day.
     pub fn new(offer: &Offer) -> Self {
         let chosen = offer.dials().next();
         let year = YearChoice::Of(Third::Middling);
+        let year_index = offer.years().index(year).unwrap_or(0);
+        let last_day = offer.years().days(year_index).unwrap_or(1) - 1;
         let shown = Shown {
             dials: Dials::REST,
             chosen,
             focus: Focus::In(chosen.map_or(Item::View, Item::Dial)),
             card: None,
             at_end: None,
+            done: None,
             view: offer.views()[0],
             sheet: 0,
             year,
-            year_index: offer.years().index(year).unwrap_or(0),
-            day: 0,
+            year_index,
+            day: offer.opening_day().min(last_day),
             playing: false,
             speed: Speed::Middling,
             voice: 0,

@@ -46,7 +46,7 @@ impl State {
         }
         let last = (scale.stops() - 1) as f64;
         // Whatever goes beyond the ends is cut here, where a number too large for counting could come in.
-        let steps = libm::round((by_share * last).clamp(-last, last)) as i64;
+        let steps = libm::round((by_share * last).clamp(-last - 1.0, last + 1.0)) as i64;
         let (stop, end) = super::knob::along(from, scale.stops(), steps);
         self.shown.at_end = end;
         // A finger that has not left its stop leaves a value between two stops alone.

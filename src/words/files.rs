@@ -24,6 +24,8 @@ macro_rules! embedded {
 /// Every `.ftl` file under `locales/`; a test holds this against the folder.
 pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en":
+        "board-problems.ftl",
+        "board.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",
@@ -33,6 +35,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "kiosk.ftl",
         "languages.ftl",
         "ledger.ftl",
+        "lesson-pages.ftl",
         "lesson-problems.ftl",
         "lesson.ftl",
         "map.ftl",
@@ -40,8 +43,11 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "pages.ftl",
         "patterns.ftl",
         "picture.ftl",
+        "preparing.ftl",
         "problems.ftl",
+        "readers.ftl",
         "record-problems.ftl",
+        "ring.ftl",
         "show.ftl",
         "signs.ftl",
         "tell.ftl",
@@ -56,6 +62,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "terms.ftl",
         "units.ftl";
     "es":
+        "board-problems.ftl",
+        "board.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",
@@ -65,6 +73,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "kiosk.ftl",
         "languages.ftl",
         "ledger.ftl",
+        "lesson-pages.ftl",
         "lesson-problems.ftl",
         "lesson.ftl",
         "map.ftl",
@@ -72,8 +81,11 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "pages.ftl",
         "patterns.ftl",
         "picture.ftl",
+        "preparing.ftl",
         "problems.ftl",
+        "readers.ftl",
         "record-problems.ftl",
+        "ring.ftl",
         "show.ftl",
         "signs.ftl",
         "tell.ftl",

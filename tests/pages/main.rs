@@ -8,6 +8,7 @@ mod scenes;
 mod valleys;
 
 mod pictures;
+mod ring;
 mod room;
 mod sentences;
 mod sheets;
@@ -65,10 +66,10 @@ pub fn draw(view: View, canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Them
 
 /// Draws a sheet of the help card.
 pub fn draw_help(canvas: &mut Canvas<'_>, open: usize, theme: &Theme, words: &Words) {
-    help::draw(canvas, open, &key_lines(), theme, words);
+    help::draw(canvas, open, &key_lines(), theme, (words, None));
 }
 
 /// Draws an explanation.
 pub fn draw_term(canvas: &mut Canvas<'_>, what: Explained<'_>, scene: &Scene<'_>, theme: &Theme, words: &Words) {
-    term::draw(canvas, what, (2, 9), scene.units, theme, words);
+    term::draw(canvas, what, (2, 9), scene.units, theme, (words, None));
 }

@@ -31,7 +31,7 @@ fn dry() -> Play<'static> {
 }
 
 /// Draws the valley first and without a witness, as a card lies over whatever is open.
-fn over(canvas: &mut Canvas<'_>, scene: &Scene<'_>, words: &Words, card: impl FnOnce(&mut Canvas<'_>)) {
+pub fn over(canvas: &mut Canvas<'_>, scene: &Scene<'_>, words: &Words, card: impl FnOnce(&mut Canvas<'_>)) {
     let size = canvas.frame().size;
     let mut under = vec![Theme::LIGHT.paper; (size.width * size.height) as usize];
     if let Ok(mut below) = Canvas::new(&mut under, size.width as u16, size.height as u16) {

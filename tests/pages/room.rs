@@ -17,7 +17,8 @@ use super::scenes::{Land, Play, steep_valley};
 use super::valleys::{canal, on, random_valley};
 use super::{PAGES, TESTS, draw, draw_help, draw_term, facts, skill};
 
-const SIZES: [(u16, u16); 7] = [(240, 240), (240, 320), (320, 240), (480, 320), (800, 480), (1280, 720), (1920, 1080)];
+pub const SIZES: [(u16, u16); 7] =
+    [(240, 240), (240, 320), (320, 240), (480, 320), (800, 480), (1280, 720), (1920, 1080)];
 
 /// Draws everything of a scene in a language and gives the faults that were found.
 fn faults(what: &str, scene: &Scene<'_>, words: &Words) -> Vec<String> {
@@ -193,7 +194,7 @@ fn every_sheet_of_the_help_card_and_every_explanation() {
         let (words, _) = Words::new(tag);
         land.show(Play { units: words.system(), dials: all_turned(1.0), ..Play::warm() }, |scene| {
             for (wide, high) in SIZES {
-                for sheet in 0..help::sheet_count(Size::new(wide.into(), high.into()), &key_lines(), &words) {
+                for sheet in 0..help::sheet_count(Size::new(wide.into(), high.into()), &key_lines(), (&words, None)) {
                     let (_, strict) = paint(wide, high, |canvas| draw_help(canvas, sheet, &Theme::LIGHT, &words));
                     let at = format!("help {sheet} in {tag} at {wide}x{high}");
                     found.extend(strict.faults().iter().map(|fault| format!("{at}: {fault}")));

@@ -35,7 +35,7 @@ fn every_caution_is_on_a_sheet_in_every_language_and_size() {
             for (wide, high) in [(240, 240), (320, 240), (800, 480)] {
                 let size = Size::new(wide.into(), high.into());
                 let mut on_help = String::new();
-                for sheet in 0..help::sheet_count(size, &key_lines(), &words) {
+                for sheet in 0..help::sheet_count(size, &key_lines(), (&words, None)) {
                     let (_, strict) = paint(wide, high, |canvas| draw_help(canvas, sheet, &Theme::LIGHT, &words));
                     on_help += &written(&strict);
                 }
@@ -127,7 +127,7 @@ fn the_key_table_names_every_key_once_in_words() {
             assert!(words.has(line.message), "{tag} lacks {}", line.message);
         }
         let mut seen = String::new();
-        for sheet in 0..help::sheet_count(Size::new(320, 240), &lines, &words) {
+        for sheet in 0..help::sheet_count(Size::new(320, 240), &lines, (&words, None)) {
             let (_, strict) = paint(320, 240, |canvas| draw_help(canvas, sheet, &Theme::LIGHT, &words));
             seen += &written(&strict);
         }

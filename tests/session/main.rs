@@ -2,8 +2,11 @@
 
 mod answers;
 mod host;
+mod pointer;
 mod properties;
 mod reach;
+#[path = "../support/scenes.rs"]
+mod scenes;
 mod steps;
 #[path = "../support/valleys.rs"]
 mod valleys;

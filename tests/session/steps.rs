@@ -369,3 +369,27 @@ fn an_offer_that_makes_no_sense_is_refused() {
     let one = OfferInput { voices: vec![voice("es-CL", None)], system: System::Metric, ..everything() };
     assert_eq!(State::new(&Offer::new(one).unwrap()).shown().system, System::Metric);
 }
+
+#[test]
+fn the_marked_day_stays_the_same_date_from_year_to_year() {
+    // Every fourth year has 366 days; its 29 February is day 151 of a water year from October.
+    let offer = offer().with_leap_day(151);
+    let mut state = State::new(&offer);
+    let go = |state: &mut State, command| state.step(Event::Command(command), &offer);
+    state.step(Event::TouchDown(Target::Year(3)), &offer);
+    state.step(Event::TouchUp(Target::Year(3)), &offer);
+    for (leap, plain) in [(10, 10), (150, 150), (152, 151), (200, 199), (365, 364)] {
+        go(&mut state, Command::StepDay(-400));
+        go(&mut state, Command::StepDay(leap));
+        go(&mut state, Command::StepYear(1));
+        assert_eq!(i32::from(state.shown().day), plain);
+        go(&mut state, Command::StepYear(-1));
+        assert_eq!(i32::from(state.shown().day), leap, "and back");
+    }
+    // 29 February itself is 1 March in a plain year.
+    go(&mut state, Command::StepDay(-400));
+    go(&mut state, Command::StepDay(151));
+    go(&mut state, Command::StepYear(1));
+    assert_eq!(state.shown().day, 151);
+    assert_eq!(state.check(&offer), Ok(()));
+}

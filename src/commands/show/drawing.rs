@@ -1,10 +1,12 @@
 //! The frame of a view in one size, kept until something that can be seen changes.
 
+use embedded_graphics::geometry::{Point, Size};
 use embedded_graphics::pixelcolor::{Rgb565, RgbColor};
+use embedded_graphics::primitives::Rectangle;
 
 use crate::board::{Frame, FrameSize, PlacedText, PlacedTexts};
 use crate::picture::views::{
-    Scene, View as Page, about, canals, help, ledger, many_years, season, term, trust, valley,
+    Scene, View as Page, about, canals, help, ledger, many_years, season, setting_list, term, trust, valley,
 };
 use crate::picture::{Canvas, Theme};
 use crate::session::help::key_lines;
@@ -20,6 +22,9 @@ pub(super) fn page(view: View) -> Page {
     Page::ALL[view as usize]
 }
 
+/// The language, and the second one where two are spoken.
+type Speech<'w> = (&'w Words, Option<&'w Words>);
+
 /// A frame that was drawn.
 #[derive(Debug)]
 pub(super) struct Drawing {
@@ -27,15 +32,24 @@ pub(super) struct Drawing {
     with_texts: bool,
     pixels: Vec<Rgb565>,
     texts: Vec<PlacedText>,
+    /// How many sheets its view has.
+    pub sheets: u8,
     /// Which state it shows.
     pub stamp: Option<u64>,
+    /// Rows at the foot that the view leaves to a lesson.
+    pub foot: u16,
 }
 
 impl Drawing {
     /// Room for a frame of that size.
     pub fn new(size: FrameSize, with_texts: bool) -> Self {
         let pixels = vec![Rgb565::BLACK; size.pixels()];
-        Self { size, with_texts, pixels, texts: Vec::new(), stamp: None }
+        Self { size, with_texts, pixels, texts: Vec::new(), sheets: 1, stamp: None, foot: 0 }
+    }
+
+    /// Nothing, which no screen asks for.
+    pub fn none() -> Self {
+        Self::new(FrameSize::new(0, 0), false)
     }
 
     /// Whether it is the frame that a screen asks for.
@@ -43,12 +57,16 @@ impl Drawing {
         self.size == size && self.with_texts == with_texts
     }
 
-    /// Draws a view of the scene and the card over it; gives how many sheets the view has in this size.
-    pub fn draw(&mut self, view: View, card: Option<Card>, scene: &Scene<'_>, shade: Shade, words: &Words) -> u8 {
+    /// Draws a view of the scene and the card over it.
+    pub fn draw(&mut self, view: View, card: Option<Card>, scene: &Scene<'_>, shade: Shade, speech: Speech<'_>) {
+        let (words, _) = speech;
         let (mut texts, mut over) = (PlacedTexts::default(), PlacedTexts::default());
-        let Ok(mut canvas) = Canvas::new(&mut self.pixels, self.size.width, self.size.height) else { return 1 };
+        let rows = self.size.height - self.foot;
+        let pixels = &mut self.pixels[..usize::from(rows) * usize::from(self.size.width)];
+        let Ok(mut canvas) = Canvas::new(pixels, self.size.width, rows) else { return };
         // Letters of the page must not be set over a card.
-        if self.with_texts && card.is_none() {
+        let covered = card.is_some() || scene.hand.list.is_some();
+        if self.with_texts && !covered {
             canvas = canvas.with_witness(&mut texts);
         }
         let theme = theme(shade);
@@ -66,10 +84,43 @@ impl Drawing {
             if self.with_texts {
                 canvas = canvas.with_witness(&mut over);
             }
-            draw_card(&mut canvas, view, card, scene, theme, words);
+            draw_card(&mut canvas, view, card, scene, theme, speech);
+        } else if let Some(list) = scene.hand.list {
+            if self.with_texts {
+                canvas = canvas.with_witness(&mut over);
+            }
+            setting_list::draw(&mut canvas, &list, scene.hand.note, theme, words);
         }
-        self.texts = if card.is_some() { over.0 } else { texts.0 };
-        u8::try_from(sheets).unwrap_or(u8::MAX)
+        self.texts = if covered { over.0 } else { texts.0 };
+        self.sheets = u8::try_from(sheets).unwrap_or(u8::MAX);
+    }
+
+    /// Draws over the whole frame, in place of what was there.
+    pub fn draw_over(&mut self, draw: impl FnOnce(&mut Canvas<'_>, Size)) {
+        let mut texts = PlacedTexts::default();
+        let screen = Size::new(self.size.width.into(), self.size.height.into());
+        let Ok(canvas) = Canvas::new(&mut self.pixels, self.size.width, self.size.height) else { return };
+        draw(&mut canvas.with_witness(&mut texts), screen);
+        self.texts = if self.with_texts { texts.0 } else { Vec::new() };
+    }
+
+    /// Draws into the rows that the view left free, on a canvas of their own.
+    pub fn draw_foot(&mut self, draw: impl FnOnce(&mut Canvas<'_>, Size)) {
+        let mut texts = PlacedTexts::default();
+        let screen = Size::new(self.size.width.into(), self.size.height.into());
+        let above = self.size.height - self.foot;
+        let from = usize::from(above) * usize::from(self.size.width);
+        let Ok(canvas) = Canvas::new(&mut self.pixels[from..], self.size.width, self.foot) else { return };
+        draw(&mut canvas.with_witness(&mut texts), screen);
+        if self.with_texts {
+            let down = Point::new(0, above.into());
+            let moved = |text: PlacedText| PlacedText {
+                ink: Rectangle::new(text.ink.top_left + down, text.ink.size),
+                given: text.given.map(|given| Rectangle::new(given.top_left + down, given.size)),
+                ..text
+            };
+            self.texts.extend(texts.0.into_iter().map(moved));
+        }
     }
 
     /// What a screen gets.
@@ -78,10 +129,10 @@ impl Drawing {
     }
 }
 
-fn draw_card(canvas: &mut Canvas<'_>, view: View, card: Card, scene: &Scene<'_>, theme: &Theme, words: &Words) {
+fn draw_card(canvas: &mut Canvas<'_>, view: View, card: Card, scene: &Scene<'_>, theme: &Theme, speech: Speech<'_>) {
     let terms = term::terms(page(view));
     let (explained, index) = match card {
-        Card::Help { page } => return help::draw(canvas, page.into(), &key_lines(), theme, words),
+        Card::Help { page } => return help::draw(canvas, page.into(), &key_lines(), theme, speech),
         Card::Explain(Explained::Term(index)) => {
             let Some(id) = terms.get(usize::from(index)) else { return };
             (term::Explained::Term(id), index.into())
@@ -91,7 +142,7 @@ fn draw_card(canvas: &mut Canvas<'_>, view: View, card: Card, scene: &Scene<'_>,
             (term::Explained::Dial(&scene.dials[index]), terms.len() + index)
         }
     };
-    term::draw(canvas, explained, (index, terms.len() + scene.dials.len()), scene.units, theme, words);
+    term::draw(canvas, explained, (index, terms.len() + scene.dials.len()), scene.units, theme, speech);
 }
 
 /// The colours of a set.

@@ -11,7 +11,13 @@ pub(super) struct Clock {
     rest: Duration,
     /// Since the encoder was last turned; `None` before its first turn.
     since_turn: Option<Duration>,
+    /// What the first turn of those that came at once was told, and how many they are by now.
+    at_once: (u32, u32),
 }
+
+/// No hand turns so fast: turns that come closer were waiting while something else was done, and share the time before
+/// the first of them. Otherwise a slow board would take a slow hand for a fast one.
+const AT_ONCE_MS: u32 = 3;
 
 impl Clock {
     /// The event for the session, if it is one that the session knows.
@@ -26,6 +32,12 @@ impl Clock {
             }
             HandEvent::Turn(detents) => {
                 let since_ms = self.since_turn.replace(Duration::ZERO).map_or(u32::MAX, whole_ms);
+                self.at_once = match self.at_once {
+                    (first, count) if since_ms < AT_ONCE_MS => (first, count.saturating_add(1)),
+                    _ => (since_ms, 1),
+                };
+                let (first, count) = self.at_once;
+                let since_ms = if first == u32::MAX { first } else { first / count };
                 Event::Turn { detents, since_ms }
             }
             HandEvent::Press => Event::Press,
@@ -84,5 +96,19 @@ mod tests {
         clock.event(HandEvent::Key(Key::End));
         clock.event(HandEvent::Time(Duration::from_millis(2)));
         assert_eq!(clock.event(HandEvent::Turn(-2)), Some(Event::Turn { detents: -2, since_ms: 42 }));
+    }
+
+    #[test]
+    fn turns_that_waited_share_the_time_before_them() {
+        let mut clock = Clock::default();
+        clock.event(HandEvent::Turn(1));
+        clock.event(HandEvent::Time(Duration::from_millis(300)));
+        let since = |clock: &mut Clock| match clock.event(HandEvent::Turn(1)) {
+            Some(Event::Turn { since_ms, .. }) => since_ms,
+            other => panic!("{other:?}"),
+        };
+        assert_eq!([(); 3].map(|()| since(&mut clock)), [300, 150, 100]);
+        clock.event(HandEvent::Time(Duration::from_millis(40)));
+        assert_eq!(since(&mut clock), 40, "a fast hand is told as one");
     }
 }

@@ -30,14 +30,25 @@ pub(super) fn write(player: &mut Player, request: &Request, words: &Words) -> Re
     for language in &languages {
         for view in VIEWS {
             player.step(Event::Command(Command::Show(view)));
-            let name = file_name(page(view).key(), language, size);
-            let frame = player.frame(size, false);
-            write_picture(folder, &name, size, frame.pixels).map_err(|error| {
-                let arguments =
-                    [("path", folder.display().to_string().into()), ("reason", reason(&error, words).into())];
-                Failure::Input(vec![words.say("show-folder-unwritable", &arguments)])
-            })?;
-            count += 1;
+            player.settle();
+            // How many sheets there are shows when the first is drawn.
+            player.frame(size, false);
+            let sheets = player.sheets(size);
+            for sheet in 0..sheets {
+                let key = page(view).key();
+                let what = if sheet == 0 { key.to_owned() } else { format!("{key}-{}", sheet + 1) };
+                let name = file_name(&what, language, size);
+                let frame = player.frame(size, false);
+                write_picture(folder, &name, size, frame.pixels).map_err(|error| {
+                    let arguments =
+                        [("path", folder.display().to_string().into()), ("reason", reason(&error, words).into())];
+                    Failure::Input(vec![words.say("show-folder-unwritable", &arguments)])
+                })?;
+                count += 1;
+                if sheet + 1 < sheets {
+                    player.step(Event::Command(Command::StepView(1)));
+                }
+            }
         }
         player.step(Event::Command(Command::NextVoice));
     }

@@ -1,43 +1,63 @@
 //! The instrument that is played: a place, the session on it, the answers of the water, and the frames of the views.
 
-use std::time::Duration;
+use std::time::{Duration, Instant};
 
-use embedded_graphics::geometry::Size;
+use embedded_graphics::geometry::{Point, Size};
 
-use super::drawing::{Drawing, VIEWS, page, theme};
+use super::drawing::{Drawing, VIEWS, page};
+use super::droughts::with_droughts;
 use super::hands::Clock;
-use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument};
+use super::leading::{LessonText, shelf};
+use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument, PointerPhase};
 use crate::commands::failure::Failure;
 use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
-use crate::picture::Theme;
 use crate::picture::views::{Scene, help, term};
-use crate::place::Place;
-use crate::session::answer::{Asked, Source};
+use crate::place::{Place, Setting};
+use crate::session::answer::{Asked, Source, YearDetail};
+use crate::session::hand::{HandTold, Told};
 use crate::session::help::key_lines;
+use crate::session::lesson::Led;
+use crate::session::point::{Finger, Phase};
 use crate::session::scene::{Moment, PlaceTold, Stage, facts_of, settings};
 use crate::session::{Answers, Event, Needs, Offer, OfferInput, Shade, State, View, Voice, YearList};
-use crate::session::{Look, Shown, Whereabouts};
 use crate::words::{System, Words};
 
 /// The languages that are offered beside the one asked for.
 const LANGUAGES: [&str; 2] = ["en", "es"];
 
 /// A session under way.
-pub(super) struct Player {
-    place: Place,
-    gate_names: Vec<String>,
-    offer: Offer,
-    state: State,
+pub(in crate::commands) struct Player {
+    pub(super) place: Place,
+    percent_per_degree: Option<f64>,
+    pub(super) offer: Offer,
+    /// What the settings of the offer are called.
+    settings: Vec<Setting>,
+    voice_names: Vec<String>,
+    pub(super) state: State,
     answers: Answers,
     /// One entry for each voice of the offer: the first language and the second, if there are two.
-    voices: Vec<(Words, Option<Words>)>,
+    pub(super) voices: Vec<(Words, Option<Words>)>,
     clock: Clock,
-    drawings: Vec<Drawing>,
+    pub(super) drawings: Vec<Drawing>,
     /// Goes up with everything that can be seen.
-    stamp: u64,
-    asked_water: bool,
+    pub(super) stamp: u64,
+    pub(super) asked_water: bool,
+    finger: Finger,
+    /// How long the water took for its last answer.
+    work_takes: Duration,
+    /// An answer that takes longer than this is announced first.
+    patience: Duration,
+    /// The old answer is, or will be, on the screen with its mark.
+    told_stale: bool,
+    /// Time went by since, so that the answer may be worked out.
+    may_work: bool,
+    /// The water could not answer what is asked.
+    pub(super) gave_up: bool,
     captions: Vec<[String; 3]>,
+    pub(super) led: Led,
+    /// The lessons of the list, in its order.
+    pub(super) shelf: Vec<LessonText>,
 }
 
 impl Player {
@@ -55,7 +75,7 @@ impl Player {
         let offer = Offer::new(OfferInput {
             dials: place.dials.open().collect(),
             years,
-            views: VIEWS.to_vec(),
+            views: VIEWS.into_iter().chain([View::Lesson]).collect(),
             terms: View::ALL.map(|view| term::terms(page(view)).len() as u16),
             voices: tags.collect(),
             system: units.unwrap_or_else(|| usual_system(&place)),
@@ -64,12 +84,21 @@ impl Player {
             help_pages: 1,
         })
         .map_err(|_| no_run())?;
+        let (offer, settings) = with_droughts(offer, &place.dials, &answers.rest().run.years);
+        let mut offer = offer.with_opening_day(survey_day(&place, &answers.rest().year));
+        if let Some(leap) = place.calendar.iter().find(|day| (day.month_day.month, day.month_day.day) == (2, 29)) {
+            offer = offer.with_leap_day(leap.day_of_water_year - 1);
+        }
         let captions = voices.iter().map(|(words, _)| caption(&place, words)).collect();
-        let gate_names = place.gates.iter().map(|gate| gate.name.get(voices[0].0.tag()).to_owned()).collect();
+        let percent_per_degree = place.evaporation_percent_per_degree();
+        let voice_names = voices.iter().map(voice_name).collect();
         let state = State::new(&offer);
+        let (shelf, entries) = shelf(&place, &LessonText::built_in()).into_iter().unzip();
         Ok(Self {
-            gate_names,
             place,
+            percent_per_degree,
+            settings,
+            voice_names,
             offer,
             state,
             answers,
@@ -78,15 +107,32 @@ impl Player {
             drawings: Vec::new(),
             stamp: 0,
             asked_water: false,
+            finger: Finger::default(),
+            work_takes: Duration::ZERO,
+            patience: PATIENCE,
+            told_stale: false,
+            may_work: false,
+            gave_up: false,
             captions,
+            led: Led::new(entries),
+            shelf,
         })
     }
 
-    /// Takes an event of the session.
+    /// Takes an event: the lesson first, then the session.
     pub fn step(&mut self, event: Event) {
+        if let Some(event) = self.led_first(event) {
+            self.step_session(event);
+        }
+    }
+
+    /// Takes an event of the session.
+    pub(super) fn step_session(&mut self, event: Event) {
         let Needs { redraw, .. } = {
             let needs = self.state.step(event, &self.offer);
-            self.asked_water |= needs.answer();
+            if needs.answer() {
+                (self.asked_water, self.gave_up) = (true, false);
+            }
             needs
         };
         if redraw {
@@ -100,90 +146,122 @@ impl Player {
         single.map(|(words, _)| words.tag().to_owned()).collect()
     }
 
+    /// How many sheets the view on show has, as it was last drawn in this size.
+    pub fn sheets(&self, size: FrameSize) -> u8 {
+        self.drawings.iter().find(|drawing| drawing.is(size, false)).map_or(1, |drawing| drawing.sheets)
+    }
+
     /// Lets the help card have as many pages as it needs on a screen of this size, in any language.
     fn make_room_for_help(&mut self, size: FrameSize) {
         let (size, keys) = (Size::new(size.width.into(), size.height.into()), key_lines());
-        let most = self.voices.iter().map(|(words, _)| help::sheet_count(size, &keys, words)).max().unwrap_or(1);
+        let sheets =
+            |(words, second): &(Words, Option<Words>)| help::sheet_count(size, &keys, (words, second.as_ref()));
+        let most = self.voices.iter().map(sheets).max().unwrap_or(1);
         let most = u8::try_from(most).unwrap_or(u8::MAX);
         if most > self.offer.help_pages() {
             self.offer = self.offer.clone().with_help_pages(most);
         }
     }
 
-    /// Brings the answers to what the state asks.
+    /// Asks the water what the state asks, and answers at once where that is quick. Where it is not, the old answer is
+    /// shown once, marked as old, and the new one is worked out before the next frame.
     fn ask_water(&mut self) {
-        if !std::mem::take(&mut self.asked_water) {
+        if std::mem::take(&mut self.asked_water) {
+            self.answers.ask(Asked::from(self.state.shown()));
+        }
+        if self.answers.is_current() || self.gave_up {
             return;
         }
+        if self.work_takes > self.patience && !std::mem::take(&mut self.may_work) {
+            if !std::mem::replace(&mut self.told_stale, true) {
+                self.stamp += 1;
+            }
+            return;
+        }
+        let begun = Instant::now();
         let source = Source { valley: &self.place.valley, calendar: &self.place.calendar, record: &self.place.days };
         // The offer lets no dial out of its range, so a river that makes no sense cannot come of it; should it, the old
         // answer stands and is marked as old.
-        if self.answers.ask(Asked::from(self.state.shown())) {
-            let _ = self.answers.finish(&source);
-        }
-    }
-}
-
-/// What an unattended instrument asks of it.
-impl Player {
-    /// What is offered.
-    pub fn offer(&self) -> &Offer {
-        &self.offer
-    }
-
-    /// What the session shows.
-    pub fn shown(&self) -> &Shown {
-        self.state.shown()
-    }
-
-    /// Goes up with everything that can be seen.
-    pub fn stamp(&self) -> u64 {
-        self.stamp
-    }
-
-    /// The words of the language on show.
-    pub fn words(&self) -> &Words {
-        &self.voices[self.state.shown().voice].0
-    }
-
-    /// The colours on show.
-    pub fn theme(&self) -> &'static Theme {
-        theme(self.state.shown().shade)
-    }
-
-    /// Where it is, to go back there.
-    pub fn whereabouts(&self) -> Whereabouts {
-        self.state.whereabouts(&self.offer)
-    }
-
-    /// Goes back there.
-    pub fn return_to(&mut self, place: &Whereabouts) {
-        self.state.return_to(place, &self.offer);
-        self.seen_anew();
-    }
-
-    /// Shows what is wished for.
-    pub fn look(&mut self, look: Look) {
-        let needs = self.state.look(look, &self.offer);
-        if needs.redraw {
-            self.seen_anew();
-        }
-    }
-
-    /// Begins as at the first start.
-    pub fn start_again(&mut self) {
-        self.state = State::new(&self.offer);
-        self.seen_anew();
-    }
-
-    fn seen_anew(&mut self) {
-        self.asked_water = true;
+        self.gave_up = self.answers.finish(&source).is_err();
+        self.work_takes = begun.elapsed();
+        self.told_stale = false;
         self.stamp += 1;
+    }
+
+    /// Answers whatever is asked before the next frame, however long it takes.
+    pub fn settle(&mut self) {
+        self.may_work = true;
+        self.ask_water();
+    }
+
+    /// Puts the scene of the moment together.
+    fn with_scene<T>(&self, look: impl FnOnce(&Scene<'_>, (&Words, Option<&Words>)) -> T) -> T {
+        let shown = self.state.shown();
+        let (words, second) = &self.voices[shown.voice];
+        let tag = words.tag();
+        let names: Vec<&str> = self.place.gates.iter().map(|gate| gate.name.get(tag)).collect();
+        let told = PlaceTold {
+            name: self.place.name.get(tag),
+            invented: self.place.invented,
+            // No place holds a fit to its gauge yet.
+            fitted: false,
+            gate_names: &names,
+        };
+        let source = Source { valley: &self.place.valley, calendar: &self.place.calendar, record: &self.place.days };
+        let stage = Stage::new(told, &source, &self.answers);
+        let props = stage.props();
+        let dials = settings(&self.offer, &shown.dials);
+        let moment = Moment::of(shown, &dials, &self.answers, second.as_ref());
+        let scene = stage.scene(&props, moment);
+        let in_hand = HandTold::of(
+            &self.state,
+            &Told {
+                offer: &self.offer,
+                settings: &self.settings,
+                voices: &self.voice_names,
+                words,
+                second: second.as_ref(),
+                stale: moment.stale,
+            },
+        );
+        let facts = facts_of(&self.place, self.percent_per_degree, tag);
+        let scene = Scene { facts, sheet: shown.sheet.into(), hand: in_hand.hand(), ..scene };
+        look(&scene, (words, second.as_ref()))
+    }
+
+    /// A finger or a mouse on a screen.
+    fn point(&mut self, phase: PointerPhase, at: Point, on: FrameSize) {
+        let phase = match phase {
+            PointerPhase::Down => Phase::Down,
+            PointerPhase::Move => Phase::Move,
+            PointerPhase::Up => Phase::Up,
+        };
+        let size = Size::new(on.width.into(), on.height.into());
+        if self.point_at_lesson(phase == Phase::Down, phase == Phase::Up, at, size) {
+            return;
+        }
+        // The view ends where the lesson's strip begins; a tap on the strip goes on.
+        let size = Size::new(size.width, size.height - u32::from(self.strip_px(on)));
+        if at.y >= size.height as i32 && size.height < u32::from(on.height) {
+            if phase == Phase::Up {
+                self.step(Event::Press);
+            }
+            return;
+        }
+        let mut finger = self.finger;
+        let event = self.with_scene(|scene, (words, _)| finger.event((phase, at), size, &self.state, scene, words));
+        self.finger = finger;
+        self.step(event);
     }
 }
 
 impl Instrument for Player {
     fn event(&mut self, event: HandEvent) {
+        match event {
+            HandEvent::Time(_) => self.may_work |= self.told_stale,
+            HandEvent::Pointer { phase, x, y, on } => return self.point(phase, Point::new(x, y), on),
+            _ => {}
+        }
         if let Some(event) = self.clock.event(event) {
             self.step(event);
         }
@@ -204,35 +282,28 @@ impl Instrument for Player {
             }
         };
         if self.drawings[at].stamp != Some(self.stamp) {
-            let shown = self.state.shown();
-            let (words, second) = &self.voices[shown.voice];
-            let names: Vec<&str> = self.gate_names.iter().map(String::as_str).collect();
-            let told = PlaceTold {
-                name: self.place.name.get(words.tag()),
-                invented: self.place.invented,
-                // No place holds a fit to its gauge yet.
-                fitted: false,
-                gate_names: &names,
-            };
-            let source =
-                Source { valley: &self.place.valley, calendar: &self.place.calendar, record: &self.place.days };
-            let stage = Stage::new(told, &source, &self.answers);
-            let props = stage.props();
-            let dials = settings(&self.offer, &shown.dials);
-            let scene = stage.scene(&props, Moment::of(shown, &dials, &self.answers, second.as_ref()));
-            let facts = facts_of(&self.place, None, words.tag());
-            let scene = Scene { facts, sheet: shown.sheet.into(), ..scene };
-            let sheets = self.drawings[at].draw(shown.view, shown.card, &scene, shown.shade, words);
+            let shown = *self.state.shown();
+            // Taken out while the scene borrows everything else.
+            let mut drawing = std::mem::replace(&mut self.drawings[at], Drawing::none());
+            drawing.foot = self.strip_px(size);
+            self.with_scene(|scene, speech| drawing.draw(shown.view, shown.card, scene, shown.shade, speech));
+            self.draw_lesson(&mut drawing);
+            drawing.stamp = Some(self.stamp);
+            let sheets = drawing.sheets;
+            self.drawings[at] = drawing;
             if sheets > self.offer.sheets(shown.view) {
                 self.offer = self.offer.clone().with_about_sheets(sheets);
             }
-            self.drawings[at].stamp = Some(self.stamp);
         }
         self.drawings[at].frame()
     }
 
     fn wants_tick(&self) -> Option<Duration> {
         let shown = self.state.shown();
+        if self.told_stale {
+            // As soon as the old answer is on the screen.
+            return Some(Duration::ZERO);
+        }
         shown.playing.then(|| Duration::from_millis(1000 / u64::from(shown.speed.days_per_second())))
     }
 
@@ -245,6 +316,9 @@ impl Instrument for Player {
         Caption { title, hint, too_small }
     }
 }
+
+/// Longer than this and a hand would think that nothing happens.
+const PATIENCE: Duration = Duration::from_millis(40);
 
 /// Frames that are kept: those of a few screens at once.
 const MOST_DRAWINGS: usize = 4;
@@ -260,7 +334,102 @@ fn voices(speech: &Speech, region: &str) -> Vec<(Words, Option<Words>)> {
     vec![(asked, None), (words(other), None), (speech.for_place(region), Some(words(other)))]
 }
 
+/// The day of the snow survey in a year, counted from 0: snow lies, the river rises, and a turn of a dial shows.
+fn survey_day(place: &Place, year: &YearDetail) -> u16 {
+    let days = place.calendar.get(year.year.first..year.year.first + year.year.days).unwrap_or_default();
+    let at = days.iter().position(|day| day.month_day == place.valley.survey);
+    at.and_then(|at| u16::try_from(at).ok()).unwrap_or(0)
+}
+
+fn voice_name((first, second): &(Words, Option<Words>)) -> String {
+    let name = |words: &Words| words.say("language-name", &[]);
+    match second {
+        None => name(first),
+        Some(second) => format!("{} + {}", name(first), name(second)),
+    }
+}
+
 fn caption(place: &Place, words: &Words) -> [String; 3] {
     let name = place.name.get(words.tag());
     [words.say("show-title", &[("place", name.into())]), words.say("show-hint", &[]), words.say("show-too-small", &[])]
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::place::demo::demo_files;
+    use crate::place::{Source as PlaceSource, read};
+    use crate::session::Command;
+    use crate::water::dials::Dial;
+
+    const SIZE: FrameSize = FrameSize::new(320, 240);
+
+    fn player() -> Player {
+        let place = read(PlaceSource::Embedded(demo_files())).place.unwrap();
+        let speech = Speech::choose(&["--lang".into(), "en-US".into()]);
+        Player::new(place, &speech, Shade::Light, None).ok().unwrap()
+    }
+
+    fn pixels(player: &mut Player) -> Vec<embedded_graphics::pixelcolor::Rgb565> {
+        player.frame(SIZE, false).pixels.to_vec()
+    }
+
+    #[test]
+    fn a_slow_water_shows_its_old_answer_with_a_mark_and_then_the_new_one() {
+        let mut player = player();
+        pixels(&mut player);
+        player.step(Event::Command(Command::Turn(2)));
+        let quick = pixels(&mut player);
+        assert_eq!(player.wants_tick(), None, "a quick water needs no second look");
+        player.step(Event::LongPress);
+        pixels(&mut player);
+        // Now every answer takes too long.
+        (player.patience, player.work_takes) = (Duration::ZERO, Duration::from_secs(1));
+        player.step(Event::Command(Command::Turn(2)));
+        let marked = pixels(&mut player);
+        assert_ne!(marked, quick);
+        assert!(!player.answers.is_current());
+        assert_eq!(player.wants_tick(), Some(Duration::ZERO));
+        assert_eq!(pixels(&mut player), marked, "nothing is worked out before the mark was seen");
+        player.event(HandEvent::Time(Duration::from_millis(1)));
+        assert_eq!(pixels(&mut player), quick, "then the new answer is there, and no mark");
+        assert_eq!(player.wants_tick(), None);
+    }
+
+    #[test]
+    fn nothing_is_drawn_again_when_nothing_changed() {
+        let mut player = player();
+        pixels(&mut player);
+        let stamp = player.stamp;
+        player.event(HandEvent::Time(Duration::from_secs(5)));
+        player.event(HandEvent::Key(crate::board::Key::End));
+        player.event(HandEvent::Pointer { phase: PointerPhase::Up, x: 3, y: 3, on: SIZE });
+        pixels(&mut player);
+        assert_eq!((player.stamp, player.drawings[0].stamp), (stamp, Some(stamp)));
+    }
+
+    #[test]
+    fn a_finger_drags_the_dial_that_it_went_down_on() {
+        let mut player = player();
+        pixels(&mut player);
+        let point = |phase, x| HandEvent::Pointer { phase, x, y: 205, on: SIZE };
+        player.event(point(PointerPhase::Down, 40));
+        player.event(point(PointerPhase::Move, 140));
+        player.event(point(PointerPhase::Up, 140));
+        let warmer = player.state.shown().dials.get(Dial::Warming).unwrap();
+        assert!((1.5..=2.5).contains(&warmer), "a third of the card is a third of the way: {warmer}");
+    }
+
+    #[test]
+    fn all_four_droughts_are_in_the_list_and_each_is_called_up() {
+        let mut player = player();
+        assert_eq!(player.settings.len(), 4);
+        for entry in 1..=4 {
+            player.step(Event::Command(Command::Settings));
+            player.step(Event::Command(Command::Turn(entry)));
+            player.step(Event::Press);
+            let asked = player.offer.settings()[entry as usize - 1].setting;
+            assert_eq!(player.state.shown().dials, asked.dials);
+        }
+    }
 }

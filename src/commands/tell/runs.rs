@@ -7,7 +7,6 @@ use crate::place::{Place, Setting, UnitSystem, Years};
 use crate::signs::{YearReport, read_run};
 use crate::water::basin::{Basin, BasinDay};
 use crate::water::dials::{Dials, Stage};
-use crate::water::evaporation::{SkyTable, percent_per_degree};
 use crate::water::run::run_basin;
 use crate::water::works::Works;
 use crate::words::{System, Words};
@@ -64,10 +63,7 @@ impl Told {
         let ends =
             [as_it_was.years.first(), as_it_was.years.last()].map(|year| year.map_or(0, |year| year.year.water_year));
         let record_years = (ends[0], ends[1], as_it_was.years.len());
-        let percent_per_degree = SkyTable::at_latitude(place.valley.latitude_deg).and_then(|sky| {
-            let record = place.calendar.iter().zip(&place.days).map(|(day, record)| (day.day_of_year, record.air));
-            percent_per_degree(&place.valley.evaporation.method, &sky, record)
-        });
+        let percent_per_degree = place.evaporation_percent_per_degree();
         Ok(Told {
             setting,
             dials,

@@ -54,17 +54,59 @@ pub fn line_pair(
     theme: &Theme,
 ) {
     let place = |(day, value): (usize, f64)| plot.spot(plot.across.0 + day as f64 + 0.5, value);
-    let was = was.enumerate().map(place);
-    let now = now.enumerate().map(place);
-    let base = plot.y(plot.up.0);
+    let stride = days_a_pixel(plot);
     if let Some(paint) = look.area {
-        under(canvas, now.clone(), base, paint);
+        let now = Outstanding::of(now.clone(), stride).map(place);
+        under(canvas, now, plot.y(plot.up.0), paint);
     }
     if let Some(paint) = look.lack {
-        between(canvas, was.clone(), now.clone(), Between::FirstHigher, paint);
+        let (was, now) = (was.clone().enumerate().map(place), now.clone().enumerate().map(place));
+        between(canvas, was, now, Between::FirstHigher, paint);
     }
+    let (was, now) = (Outstanding::of(was, stride).map(place), Outstanding::of(now, stride).map(place));
     polyline(canvas, now, Stroke::solid(look.width_px).with_round_ends(), look.line);
     polyline(canvas, was, as_it_was(look.width_px), theme.ink);
+}
+
+/// How many days share a pixel of the plot, rounded; at least one.
+fn days_a_pixel(plot: &Plot) -> usize {
+    let days = (plot.across.1 - plot.across.0).abs();
+    // The cast takes what is no number as zero.
+    (libm::round(days / f64::from(plot.area.size.width.max(1))) as usize).max(1)
+}
+
+/// Of the days that share a pixel the one that stands out most from what came before, so that a line costs what its
+/// width costs and no peak is lost. The first day stands by itself, and a gap stays one.
+#[derive(Clone)]
+struct Outstanding<I> {
+    values: core::iter::Enumerate<I>,
+    stride: usize,
+    before: Option<f64>,
+}
+
+impl<I: Iterator<Item = f64>> Outstanding<I> {
+    fn of(values: I, stride: usize) -> Self {
+        Self { values: values.enumerate(), stride, before: None }
+    }
+}
+
+impl<I: Iterator<Item = f64>> Iterator for Outstanding<I> {
+    type Item = (usize, f64);
+
+    fn next(&mut self) -> Option<Self::Item> {
+        let mut best = self.values.next()?;
+        if let Some(before) = self.before {
+            for _ in 1..self.stride {
+                let Some(next) = self.values.next() else { break };
+                // What is no number compares as nothing does, and stays.
+                if !next.1.is_finite() || (next.1 - before).abs() > (best.1 - before).abs() {
+                    best = next;
+                }
+            }
+        }
+        self.before = Some(best.1);
+        Some(best)
+    }
 }
 
 /// Draws the range in which the answer lies, from `low` to `high` day by day: a thin wash of `colour` under fine
@@ -111,4 +153,26 @@ fn ends(area: Rectangle, width_px: f64) -> (Spot, Spot) {
     let half = width_px / 2.0;
     let middle = libm::round(f64::from(y) + f64::from(area.size.height) / 2.0 - half) + half;
     (Spot::new(f64::from(x), middle), Spot::new(f64::from(x) + f64::from(area.size.width), middle))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn days_that_share_a_pixel_are_told_by_the_one_that_stands_out() {
+        let picked = |values: &[f64], stride| {
+            let mut out = [(0, 0.0); 8];
+            let count =
+                Outstanding::of(values.iter().copied(), stride).zip(&mut out).map(|(day, to)| *to = day).count();
+            (out, count)
+        };
+        let values = [1.0, 1.0, 9.0, 8.0, 0.0, 0.5];
+        let (out, count) = picked(&values, 2);
+        assert_eq!(out[..count], [(0, 1.0), (2, 9.0), (4, 0.0), (5, 0.5)]);
+        let (out, count) = picked(&values, 1);
+        assert_eq!((count, out[3]), (6, (3, 8.0)));
+        let (out, count) = picked(&[1.0, 2.0, f64::NAN, 3.0, 4.0], 2);
+        assert!(count == 3 && out[1].0 == 2 && out[1].1.is_nan(), "a gap stays a gap: {out:?}");
+    }
 }

@@ -6,6 +6,7 @@ use embedded_graphics::primitives::Rectangle;
 use super::layout::{Layout, area, bottom, right};
 use super::months::{draw_months, months_height};
 use super::scene::{CanalShown, CanalTitle, Scene};
+use super::touch::day_on;
 use super::wording::{change_ink, day_short, fit, name_within, right_since};
 use super::{Answer, View, frame, layout_of};
 use crate::picture::chart::{DayMark, Plot, as_it_was, day_cursor, swatch, swatch_as_it_was, year_strip};
@@ -36,21 +37,16 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
         return;
     }
     let room = layout.content;
-    let legend_high = line_high(layout.note) + 1;
-    let foot = months_height(layout.note) + legend_high;
-    let rows = area(room.top_left.x, room.top_left.y, room.size.width as i32, room.size.height as i32 - foot);
+    let (rows, legend_high) = rows_of(&layout);
     let grid = grid_of(&layout, rows, scene, words);
     let (from, to) = window(scene);
-    let across = (from as f64, to as f64);
-    let mut y = rows.top_left.y;
-    let note_at = y;
     if !grid.named {
-        y += layout.note.line_px();
         let text = words.say("picture-names-elsewhere", &[("n", scene.canals.len().into())]);
-        let note = area(rows.top_left.x, note_at, rows.size.width as i32, layout.note.line_px());
+        let note = area(rows.top_left.x, rows.top_left.y, rows.size.width as i32, layout.note.line_px());
         fit(canvas, &text, note, layout.note, theme.quiet, Across::Left);
     }
-    let first = y;
+    let axis = axis_of(&layout, rows, &grid, scene);
+    let mut y = axis.area.top_left.y;
     for (title, (was, now)) in scene.canals.iter().zip(scene.was.canals.iter().zip(scene.now.canals)) {
         let row = area(rows.top_left.x, y, rows.size.width as i32, grid.row_high);
         y += grid.row_high;
@@ -59,13 +55,48 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
             draw_words(canvas, &layout, &grid, row, title, scene, theme, words);
         }
     }
-    let axis = Plot { area: area(grid.strip_left, first, grid.strip_wide, y - first), across, up: (0.0, 1.0) };
     if (from..to).contains(&scene.day) {
         day_cursor(canvas, &axis, scene.day as f64 + 0.5, theme.lack);
     }
     draw_months(canvas, &axis, &scene.year, layout.note, theme, words);
     let legend = area(room.top_left.x, bottom(room) - legend_high, room.size.width as i32, legend_high);
     draw_legend(canvas, &layout, legend, scene, theme, words);
+}
+
+/// The box of the rows, and the height of the legend.
+fn rows_of(layout: &Layout) -> (Rectangle, i32) {
+    let room = layout.content;
+    let legend_high = line_high(layout.note) + 1;
+    let foot = months_height(layout.note) + legend_high;
+    (area(room.top_left.x, room.top_left.y, room.size.width as i32, room.size.height as i32 - foot), legend_high)
+}
+
+/// The days that the strips show, over the height of all of them.
+fn axis_of(layout: &Layout, rows: Rectangle, grid: &Grid, scene: &Scene<'_>) -> Plot {
+    let (from, to) = window(scene);
+    let first = rows.top_left.y + if grid.named { 0 } else { layout.note.line_px() };
+    let count = scene.canals.len().min(scene.was.canals.len()).min(scene.now.canals.len()) as i32;
+    Plot {
+        area: area(grid.strip_left, first, grid.strip_wide, grid.row_high * count),
+        across: (from as f64, to as f64),
+        up: (0.0, 1.0),
+    }
+}
+
+/// Which day of the year a place on the strips stands for, counted from 0; `None` off them.
+pub fn day_at(layout: &Layout, scene: &Scene<'_>, words: &Words, x: i32, y: i32) -> Option<usize> {
+    if scene.canals.is_empty() {
+        return None;
+    }
+    let (rows, _) = rows_of(layout);
+    let axis = axis_of(layout, rows, &grid_of(layout, rows, scene, words), scene);
+    let touched = area(
+        axis.area.top_left.x,
+        axis.area.top_left.y,
+        axis.area.size.width as i32,
+        axis.area.size.height as i32 + months_height(layout.note),
+    );
+    touched.contains(Point::new(x, y)).then(|| day_on(&axis, scene, x))
 }
 
 fn grid_of(layout: &Layout, rows: Rectangle, scene: &Scene<'_>, words: &Words) -> Grid {

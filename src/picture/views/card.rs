@@ -1,8 +1,9 @@
 //! A card that lies over a page until it is closed.
 
-use embedded_graphics::geometry::Size;
+use embedded_graphics::geometry::{Point, Size};
 use embedded_graphics::primitives::Rectangle;
 
+use super::foot::note_within;
 use super::layout::{Layout, area, bottom};
 use super::wording::fit;
 use crate::picture::lettering::{Across, Face};
@@ -25,6 +26,12 @@ pub(super) struct CardPlace {
     pub foot: Rectangle,
     pub title_face: Face,
     pad: i32,
+}
+
+/// Whether a finger at this place of a screen with a card asks for the next sheet: it is in the right third. Anywhere
+/// else it closes the card.
+pub fn next_at(size: Size, at: Point) -> bool {
+    i64::from(at.x) * 3 >= i64::from(size.width) * 2
 }
 
 impl CardPlace {
@@ -71,6 +78,22 @@ impl CardPlace {
         theme: &Theme,
         words: &Words,
     ) {
+        let id = if place.1 > 1 { "page-card-turn" } else { "page-card-press" };
+        self.draw_saying(canvas, layout, title, place, &words.say(id, &[]), theme, words);
+    }
+
+    /// The same with `hint` at its foot.
+    #[allow(clippy::too_many_arguments, reason = "a card, drawn from two places")]
+    pub fn draw_saying(
+        &self,
+        canvas: &mut Canvas<'_>,
+        layout: &Layout,
+        title: &str,
+        place: (usize, usize),
+        hint: &str,
+        theme: &Theme,
+        words: &Words,
+    ) {
         // The page behind steps back.
         canvas.paint(canvas.frame(), Paint::Wash { colour: theme.paper, share: BEHIND });
         let radius = f64::from(self.pad) * 0.8;
@@ -78,7 +101,6 @@ impl CardPlace {
         rounded_frame(canvas, self.card, radius, layout.line_px, theme.ink);
         fit(canvas, title, self.title, self.title_face, theme.ink, Across::Left);
         let (open, count) = place;
-        let id = if count > 1 { "page-card-turn" } else { "page-card-press" };
         let mark = words.say("page-sheet", &[("n", (open + 1).into()), ("of", count.into())]);
         let taken = if count > 1 {
             super::about::sheet_mark(canvas, layout, self.foot, place, theme, words);
@@ -92,6 +114,6 @@ impl CardPlace {
             self.foot.size.width as i32 - taken,
             self.foot.size.height as i32,
         );
-        fit(canvas, &words.say(id, &[]), left, layout.note, theme.quiet, Across::Left);
+        fit(canvas, &note_within(hint, layout.note, left), left, layout.note, theme.quiet, Across::Left);
     }
 }

@@ -1,14 +1,17 @@
 //! What every page has: the answer on top, day and year under it, the dials along the bottom, place and page at the foot.
 
 use embedded_graphics::geometry::Point;
+use embedded_graphics::primitives::Rectangle;
 
 use super::dial_cards;
-use super::layout::{Form, Layout, area, bottom, right};
+use super::foot;
+use super::hand::Item;
+use super::layout::{Layout, area, bottom, right};
 use super::scene::Scene;
-use super::wording::{DOT, day_short, fit, name_within, year_name};
+use super::wording::{day_short, fit, year_name};
 use super::{Answer, View};
 use crate::picture::lettering::{Across, draw, lines, measure, paragraph, paragraph_height};
-use crate::picture::shape::{disc, rounded_box, triangle};
+use crate::picture::shape::{disc, rounded_frame, triangle};
 use crate::picture::{Align, Canvas, Face, Spot, Theme};
 use crate::words::Words;
 
@@ -26,15 +29,7 @@ pub fn draw_frame(
     headline(canvas, layout, &sentences(scene, answer, words), theme);
     date_line(canvas, layout, scene, theme, words);
     dial_cards::draw_dials(canvas, layout, scene, theme, words);
-    footer(canvas, layout, scene, view, theme, words);
-}
-
-/// Which of the scene's dials lies under a finger, and how far along its card, 0 to 1; `None` off the cards.
-pub fn dial_at(layout: &Layout, scene: &Scene<'_>, x: i32, y: i32) -> Option<(usize, f64)> {
-    let finger = Point::new(x, y);
-    let (index, card) = dial_cards::places(layout, scene).find(|(_, card)| card.contains(finger))?;
-    let share = (f64::from(x - card.top_left.x) + 0.5) / f64::from(card.size.width.max(1));
-    Some((index, share))
+    foot::draw_foot(canvas, layout, scene, view, theme, words);
 }
 
 /// The answer in the room's one or two languages, one line feed between them.
@@ -63,99 +58,114 @@ fn headline(canvas: &mut Canvas<'_>, layout: &Layout, text: &str, theme: &Theme)
         paragraph(canvas, text, room, face, theme.ink, Across::Left);
         return;
     }
-    let used = paragraph_height(text, face, room.size.width) as i32;
+    let wide = without_orphan(text, face, room.size.width);
+    let used = paragraph_height(text, face, wide) as i32;
     let mut baseline = room.top_left.y + (room.size.height as i32 - used) / 2 + face.ascent_px();
-    for line in lines(text, face, room.size.width) {
+    for line in lines(text, face, wide) {
         draw(canvas, line, Point::new(room.top_left.x, baseline), face, theme.ink, Align::LEFT);
         baseline += face.line_px();
     }
 }
 
+/// A width up to `width_px` in which no sentence leaves a single word to its last line, where that takes no more lines.
+fn without_orphan(text: &str, face: Face, width_px: u32) -> u32 {
+    let orphan = |width: u32| {
+        text.split('\n').any(|sentence| {
+            let last = lines(sentence, face, width).last().unwrap_or_default().trim();
+            last.len() < sentence.trim().len() && !last.contains(' ')
+        })
+    };
+    let count = |width: u32| lines(text, face, width).count();
+    if !orphan(width_px) {
+        return width_px;
+    }
+    let narrower =
+        (1..=16).map(|step| width_px - width_px * step / 40).take_while(|&width| count(width) == count(width_px));
+    narrower.into_iter().find(|&width| !orphan(width)).unwrap_or(width_px)
+}
+
+/// Boxes of the line with day and year.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub(super) struct DateLine {
+    /// The mark that plays the year or pauses it.
+    pub play: Rectangle,
+    /// The day.
+    pub day: Rectangle,
+    /// Three dots while an answer is on its way.
+    pub dots: Rectangle,
+    /// The year, as wide as it is written.
+    pub year: Rectangle,
+}
+
+impl DateLine {
+    pub fn of(layout: &Layout, scene: &Scene<'_>, words: &Words) -> Self {
+        let Rectangle { top_left: Point { x, y }, size } = layout.date;
+        let (wide, high) = (size.width as i32, size.height as i32);
+        let today = scene.today().map(|today| day_short(today, &scene.year, words)).unwrap_or_default();
+        let play = area(x, y, layout.label.cap_px() * 5 / 6 + 1, high);
+        let day_face = Face::bold(layout.label.px());
+        let day = area(right(play) + layout.gap * 3 / 2 + 1, y, measure(&today, day_face).width as i32, high);
+        let dots = area(right(day) + layout.gap, y, if scene.stale { dot_px(layout) * 8 } else { 0 }, high);
+        let room = x + wide - right(dots) - layout.gap;
+        let name = year_name(&scene.year, words);
+        let face = layout.label.fitting(&name, room.max(0) as u32, 9).unwrap_or(layout.label);
+        let year_wide = (measure(&name, face).width as i32).min(room);
+        Self { play, day, dots, year: area(x + wide - year_wide, y, year_wide, high) }
+    }
+}
+
+fn dot_px(layout: &Layout) -> i32 {
+    (i32::from(layout.label.px()) / 5).max(2)
+}
+
 fn date_line(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, theme: &Theme, words: &Words) {
     let row = layout.date;
-    let mut x = row.top_left.x;
+    let places = DateLine::of(layout, scene, words);
     let middle = row.top_left.y + row.size.height as i32 / 2;
     if let Some(today) = scene.today() {
-        if scene.playing {
-            let (tall, y) = (f64::from(layout.label.cap_px()) / 2.0, f64::from(middle));
-            let left = f64::from(x);
-            let tip = Spot::new(left + tall * 1.6, y);
-            triangle(canvas, [Spot::new(left, y - tall), tip, Spot::new(left, y + tall)], theme.lack);
-            x += (tall * 1.6) as i32 + layout.gap;
-        }
-        let face = Face::bold(layout.label.px());
+        play_mark(canvas, layout, places.play, scene.playing, theme);
         let text = day_short(today, &scene.year, words);
-        x += draw(canvas, &text, Point::new(x, middle), face, theme.ink, Align::LEFT.cap_middle()).advance_px as i32;
+        let at = Point::new(places.day.top_left.x, middle);
+        draw(canvas, &text, at, Face::bold(layout.label.px()), theme.ink, Align::LEFT.cap_middle());
     }
     if scene.stale {
         // Three dots: the answer on show is the old one, the new one is on its way.
-        let radius = f64::from(layout.label.px()) / 8.0;
-        for step in 1..=3 {
-            let place = f64::from(x) + f64::from(step) * radius * 4.0;
-            disc(canvas, Spot::new(place, f64::from(middle)), radius, theme.lack);
+        let step = f64::from(dot_px(layout)) * 2.0;
+        for dot in 0..3 {
+            let x = f64::from(places.dots.top_left.x) + step * (f64::from(dot) + 0.5);
+            disc(canvas, Spot::new(x, f64::from(middle)), step / 4.0, theme.lack);
         }
-        x += (radius * 16.0) as i32;
     }
-    let rest = area(x + layout.gap, row.top_left.y, right(row) - x - layout.gap, row.size.height as i32);
-    fit(canvas, &year_name(&scene.year, words), rest, layout.label, theme.quiet, Across::Right);
+    fit(canvas, &year_name(&scene.year, words), places.year, layout.label, theme.quiet, Across::Right);
     let line = layout.across(area(row.top_left.x, bottom(row) + layout.gap / 2, row.size.width as i32, 1));
     canvas.fill(line, theme.faint);
-}
-
-/// Place and remarks on the left, a mark for every page on the right.
-fn footer(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, view: View, theme: &Theme, words: &Words) {
-    let row = layout.footer;
-    let face = layout.note;
-    let middle = row.top_left.y + row.size.height as i32 / 2;
-    let mut end = right(row);
-    if layout.form == Form::Wide {
-        let wide = page_marks_px(layout);
-        page_marks(canvas, layout, Point::new(end - wide, middle), view, theme);
-        end -= wide + layout.gap * 2;
-    } else {
-        // A narrow foot belongs to the place; day and year leave room between them.
-        let left = row.top_left.x + (row.size.width as i32 - page_marks_px(layout)) / 2;
-        let date = layout.date.top_left.y + layout.date.size.height as i32 / 2;
-        page_marks(canvas, layout, Point::new(left, date), view, theme);
-    }
-    if layout.roomy {
-        let name = words.say(&format!("view-{}", view.key()), &[]);
-        let wide = measure(&name, face).width as i32;
-        draw(canvas, &name, Point::new(end, middle), face, theme.quiet, Align::RIGHT.cap_middle());
-        end -= wide + layout.gap * 2;
-    }
-    let mut remarks = String::new();
-    for (holds, id) in [(scene.invented, "picture-invented"), (!scene.fitted, "picture-not-fitted")] {
-        if holds {
-            remarks.push_str(DOT);
-            remarks.push_str(&words.say(id, &[]));
+    for (item, place) in [(Item::Play, places.play), (Item::Day, places.day), (Item::Year, places.year)] {
+        if scene.hand.focus.is_at(item) {
+            focus_mark(canvas, layout, place, theme);
         }
     }
-    let room = (end - row.top_left.x).max(0);
-    let taken = measure(&remarks, face).width as i32;
-    let name = name_within(scene.place_name, face, (room - taken).max(0) as u32);
-    let text = if name.is_empty() { remarks.trim_start_matches(DOT).to_owned() } else { name + &remarks };
-    let inside = area(row.top_left.x, row.top_left.y, room, row.size.height as i32);
-    fit(canvas, &text, inside, face, theme.quiet, Across::Left);
 }
 
-fn mark_px(layout: &Layout) -> i32 {
-    let px = i32::from(layout.note.px());
-    if layout.form == Form::Wide { (px / 3).max(3) } else { 2 }
+/// A frame around what the hand is at.
+pub(super) fn focus_mark(canvas: &mut Canvas<'_>, layout: &Layout, place: Rectangle, theme: &Theme) {
+    let (apart, thick) = (layout.gap / 2 + 1, (layout.line_px * 0.8).max(1.5));
+    let Rectangle { top_left: Point { x, y }, size } = place;
+    let around = area(x - apart, y - 1, size.width as i32 + 2 * apart, size.height as i32 + 2);
+    rounded_frame(canvas, around, f64::from(layout.gap), thick, theme.lack);
 }
 
-/// Width of all marks.
-fn page_marks_px(layout: &Layout) -> i32 {
-    mark_px(layout) * (2 * (View::ALL.len() as i32 - 1) + 3)
-}
-
-/// A dot for every page, a bar for this one.
-fn page_marks(canvas: &mut Canvas<'_>, layout: &Layout, at: Point, view: View, theme: &Theme) {
-    let tall = mark_px(layout);
-    let mut x = at.x;
-    for page in View::ALL {
-        let (wide, colour) = if page == view { (tall * 3, theme.ink) } else { (tall, theme.rule) };
-        rounded_box(canvas, area(x, at.y - tall / 2, wide, tall), f64::from(tall) / 2.0, colour);
-        x += wide + tall;
+/// What a tap would do: a wedge plays the year, two bars pause it.
+fn play_mark(canvas: &mut Canvas<'_>, layout: &Layout, place: Rectangle, playing: bool, theme: &Theme) {
+    let (left, wide) = (place.top_left.x, place.size.width as i32);
+    let tall = layout.label.cap_px();
+    let top = place.top_left.y + (place.size.height as i32 - tall) / 2;
+    if playing {
+        let bar = (wide / 3).max(2);
+        canvas.fill(area(left, top, bar, tall), theme.lack);
+        canvas.fill(area(left + wide - bar, top, bar, tall), theme.lack);
+    } else {
+        let (x, y, high) = (f64::from(left), f64::from(top), f64::from(tall));
+        let tip = Spot::new(x + f64::from(wide), y + high / 2.0);
+        triangle(canvas, [Spot::new(x, y), tip, Spot::new(x, y + high)], theme.rule);
     }
 }

@@ -1,4 +1,4 @@
-//! The help card: what one knob and one button do, the keys, and the cautions, over whatever page is open.
+//! The help card: what one knob and one button do, what a finger does, the keys, and the cautions, over whatever page is open.
 
 use embedded_graphics::geometry::{OriginDimensions, Size};
 
@@ -40,20 +40,33 @@ struct Part {
 }
 
 /// How many sheets the card has on a screen of this size; at least one.
-pub fn sheet_count(size: Size, keys: &[KeyLine], words: &Words) -> usize {
+pub fn sheet_count(size: Size, keys: &[KeyLine], words: (&Words, Option<&Words>)) -> usize {
     let layout = Layout::of(size, false);
-    parts(&CardPlace::large(size, &layout), &layout, keys, words).iter().map(|part| part.sheets.len()).sum()
+    let place = CardPlace::large(size, &layout);
+    let count = |words| parts(&place, &layout, keys, words).iter().map(|part| part.sheets.len()).sum::<usize>();
+    count(words.0) + words.1.map_or(0, count)
 }
 
-/// Draws the card over what is there, with the sheet that is open, the last one where `open` is beyond.
-pub fn draw(canvas: &mut Canvas<'_>, open: usize, keys: &[KeyLine], theme: &Theme, words: &Words) {
+/// Draws the card over what is there, with the sheet that is open, the last one where `open` is beyond. In two languages
+/// all sheets come in the first, then in the second.
+pub fn draw(
+    canvas: &mut Canvas<'_>,
+    open: usize,
+    keys: &[KeyLine],
+    theme: &Theme,
+    (words, second): (&Words, Option<&Words>),
+) {
     let layout = Layout::of(canvas.size(), false);
     let place = CardPlace::large(canvas.size(), &layout);
-    let parts = parts(&place, &layout, keys, words);
-    let count: usize = parts.iter().map(|part| part.sheets.len()).sum();
+    let spoken: Vec<(Part, &Words)> = [Some(words), second]
+        .into_iter()
+        .flatten()
+        .flat_map(|words| parts(&place, &layout, keys, words).into_iter().map(move |part| (part, words)))
+        .collect();
+    let count: usize = spoken.iter().map(|(part, _)| part.sheets.len()).sum();
     let open = open.min(count - 1);
     let mut sheet = open;
-    for part in &parts {
+    for (part, words) in &spoken {
         if let Some(placed) = part.sheets.get(sheet) {
             place.draw(canvas, &layout, &words.say(part.title, &[]), (open, count), theme, words);
             sheets::draw(canvas, &part.pieces, placed, part.setting, theme);
@@ -78,8 +91,12 @@ fn parts(place: &CardPlace, layout: &Layout, keys: &[KeyLine], words: &Words) ->
     };
     let hands = [(Hand::Turn, "help-turn"), (Hand::Press, "help-press"), (Hand::Hold, "help-hold")];
     let hands: Vec<Piece> = hands.into_iter().map(hand).collect();
+    let touch = ["help-touch-dial", "help-touch-day", "help-touch-view", "help-touch-ring", "help-touch-wheel"];
+    let touch: Vec<Piece> =
+        touch.map(|id| Piece { sign: Sign::Bead, head: String::new(), text: words.say(id, &[]) }).into();
     let cautions = CAUTIONS.iter().map(|id| caution(id, words)).collect();
     let mut parts = vec![part("help-title", hands.clone(), larger.fitting_one_sheet(&hands, place.body))];
+    parts.push(part("help-touch", touch.clone(), larger.fitting_one_sheet(&touch, place.body)));
     if !keys.is_empty() {
         let columns = if place.body.size.width as i32 >= i32::from(layout.label.px()) * 40 { 2 } else { 1 };
         let lines = keys.iter().map(|line| key_piece(line, words)).collect();

@@ -28,35 +28,13 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
     let layout = layout_of(canvas, scene);
     let answer = Answer::Page(PageAnswer::years(scene));
     frame::draw_frame(canvas, &layout, scene, View::Years, &answer, theme, words);
-    let count = scene.now.years.len().min(scene.was.years.len());
+    let count = year_count(scene);
     if count == 0 {
         return;
     }
-    let measure_of = shown_measure(scene);
     let room = layout.content;
-    let legend = legend_rows(&layout, room.size.width as i32, legend_entries(scene, measure_of, words));
+    let Charts { measure_of, texts, legend, main, river } = Charts::of(&layout, scene, words);
     let legend_high = legend.len() as i32 * layout.note.line_px();
-    let names_high = layout.note.line_px() + layout.gap * 2;
-    let charts = room.size.height as i32 - legend_high - names_high - layout.gap;
-    let river_high = charts / 4;
-    let texts = side_texts(scene, measure_of, words);
-    let side = texts.iter().map(|text| measure(text, layout.note).width as i32).max().unwrap_or(0);
-    let side = side + layout.gap * 2;
-    let widest = i32::from(layout.label.px()) * WIDEST_SLOT * count as i32;
-    let wide = (room.size.width as i32 - side).min(widest);
-    let x = room.top_left.x + side;
-    let (low, high) = reach(scene, measure_of);
-    let main = Plot {
-        area: area(x, room.top_left.y + layout.gap, wide, charts - river_high - layout.gap * 2),
-        across: (0.0, count as f64),
-        up: (low, high),
-    };
-    let most_flow = greatest_flow(scene);
-    let river = Plot {
-        area: area(x, bottom(main.area) + layout.gap, wide, river_high),
-        across: main.across,
-        up: (0.0, most_flow),
-    };
     chosen_band(canvas, &layout, &main, &river, scene, theme);
     river_bars(canvas, &river, scene, theme);
     lines_across(canvas, &layout, &main, measure_of, scene, theme);
@@ -73,6 +51,64 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
     year_names(canvas, &layout, &river, scene, theme, words);
     let top = bottom(room) - legend_high;
     draw_legend(canvas, &layout, area(room.top_left.x, top, room.size.width as i32, legend_high), &legend, theme);
+}
+
+fn year_count(scene: &Scene<'_>) -> usize {
+    scene.now.years.len().min(scene.was.years.len())
+}
+
+/// Which year a place on the charts stands for, counted from 0; `None` off them.
+pub fn year_at(layout: &Layout, scene: &Scene<'_>, words: &Words, x: i32, y: i32) -> Option<usize> {
+    let count = year_count(scene);
+    if count == 0 {
+        return None;
+    }
+    let Charts { main, river, .. } = Charts::of(layout, scene, words);
+    let names_high = layout.note.line_px() + layout.gap;
+    let high = bottom(river.area) + names_high - main.area.top_left.y;
+    let touched = area(main.area.top_left.x, main.area.top_left.y, main.area.size.width as i32, high);
+    // The cast takes what is below zero as zero.
+    touched.contains(Point::new(x, y)).then(|| (main.across_at(f64::from(x) + 0.5) as usize).min(count - 1))
+}
+
+/// Both charts in their places, and what is written around them.
+struct Charts {
+    measure_of: YearMeasure,
+    texts: [String; 5],
+    legend: Vec<Vec<(Sample, String)>>,
+    main: Plot,
+    river: Plot,
+}
+
+impl Charts {
+    fn of(layout: &Layout, scene: &Scene<'_>, words: &Words) -> Self {
+        let count = year_count(scene);
+        let measure_of = shown_measure(scene);
+        let room = layout.content;
+        let legend = legend_rows(layout, room.size.width as i32, legend_entries(scene, measure_of, words));
+        let legend_high = legend.len() as i32 * layout.note.line_px();
+        let names_high = layout.note.line_px() + layout.gap * 2;
+        let charts = room.size.height as i32 - legend_high - names_high - layout.gap;
+        let river_high = charts / 4;
+        let texts = side_texts(scene, measure_of, words);
+        let side = texts.iter().map(|text| measure(text, layout.note).width as i32).max().unwrap_or(0);
+        let side = side + layout.gap * 2;
+        let widest = i32::from(layout.label.px()) * WIDEST_SLOT * count as i32;
+        let wide = (room.size.width as i32 - side).min(widest);
+        let x = room.top_left.x + side;
+        let (low, high) = reach(scene, measure_of);
+        let main = Plot {
+            area: area(x, room.top_left.y + layout.gap, wide, charts - river_high - layout.gap * 2),
+            across: (0.0, count as f64),
+            up: (low, high),
+        };
+        let river = Plot {
+            area: area(x, bottom(main.area) + layout.gap, wide, river_high),
+            across: main.across,
+            up: (0.0, greatest_flow(scene)),
+        };
+        Self { measure_of, texts, legend, main, river }
+    }
 }
 
 /// Lowest and highest value of the marks' chart. Shares begin low enough to tell years apart, and say where.

@@ -7,33 +7,40 @@
 pub mod about;
 pub mod answer;
 pub mod canals;
-mod card;
+pub mod card;
 mod dial_cards;
 mod emblem;
 pub mod facts;
+mod foot;
 pub mod frame;
 pub mod grid;
+pub mod hand;
 pub mod help;
 pub mod layout;
 pub mod ledger;
+pub mod lesson;
 pub mod many_years;
 mod months;
 pub mod page_answer;
+mod ring_strip;
 pub mod scene;
 pub mod season;
+pub mod setting_list;
 mod sheets;
 pub mod staff;
 pub mod stroll;
 pub mod term;
+pub mod touch;
 pub mod trust;
 pub mod valley;
-mod wording;
+pub mod wording;
 
 use embedded_graphics::geometry::OriginDimensions;
 
 pub use answer::Answer;
 pub use layout::{Form, Layout};
 pub use scene::Scene;
+pub use wording::dial_name as wording_of_dial;
 
 use super::Canvas;
 

@@ -4,6 +4,7 @@
 //! has no such thing. Canals stand in order of right, the oldest first, in every list of a scene.
 
 use super::facts::{AllYears, PlaceFacts, Skill};
+use super::hand::Hand;
 use crate::picture::chart::DayMark;
 use crate::signs::{CanalSigns, YearReport, YearSigns};
 use crate::water::calendar::CalendarDay;
@@ -58,6 +59,8 @@ pub struct Scene<'a> {
     pub skill: Option<Skill<'a>>,
     /// Which sheet of a page with several is on show, counted from 0.
     pub sheet: usize,
+    /// What the hand is at.
+    pub hand: Hand<'a>,
 }
 
 impl Scene<'_> {

@@ -6,6 +6,7 @@ use embedded_graphics::primitives::Rectangle;
 use super::layout::{Layout, area, bottom, right};
 use super::months::{draw_months, months_height};
 use super::scene::{RunShown, Scene};
+use super::touch::day_on;
 use super::wording::fit;
 use super::{Answer, View, frame, layout_of};
 use crate::picture::chart::{
@@ -73,54 +74,95 @@ pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &W
     let layout = layout_of(canvas, scene);
     frame::draw_frame(canvas, &layout, scene, View::Season, &Answer::season(scene), theme, words);
 
-    let mut charts = vec![Chart::Snow, Chart::River];
-    charts.extend(scene.now.reservoir.map(|_| Chart::Reservoir));
-    if !scene.canals.is_empty() {
-        charts.push(Chart::Canals);
-    }
-    let room = layout.content;
-    let legend_high = layout.label.line_px();
-    let marks_high = i32::from(layout.note.px()) * 2 / 3;
-    let count = charts.len() as i32;
-    let each = (room.size.height as i32 - legend_high - months_height(layout.note) - marks_high) / count;
-    let tops: Vec<String> = charts.iter().map(|&chart| top_of(chart, scene, words)).collect();
-    let side = charts.iter().zip(&tops).map(|(chart, top)| {
-        let name = measure(&words.say(chart.title_id(), &[]), layout.strong).width;
-        name.max(measure(top, layout.note).width) as i32
-    });
-    let side = side.max().unwrap_or(0) + layout.gap * 2;
-    let mut y = room.top_left.y;
-    let mut last = None;
-    for (&chart, top) in charts.iter().zip(&tops) {
-        let plot = Plot {
-            area: area(room.top_left.x + side, y + layout.gap, room.size.width as i32 - side, each - layout.gap),
-            across: (0.0, scene.year.calendar.len() as f64),
-            up: (0.0, greatest(chart, scene) * 1.05),
-        };
-        draw_chart(canvas, &layout, chart, &plot, scene, theme);
-        let (x, middle) = (room.top_left.x, y + layout.gap + (each - layout.gap) / 2);
-        let name = words.say(chart.title_id(), &[]);
+    let rows = Rows::of(&layout, scene, words);
+    let (side, each, room) = (rows.side, rows.each, layout.content);
+    for row in &rows.charts {
+        draw_chart(canvas, &layout, row.chart, &row.plot, scene, theme);
+        let (x, middle) = (room.top_left.x, row.top + layout.gap + (each - layout.gap) / 2);
+        let name = words.say(row.chart.title_id(), &[]);
         let (name_high, top_high) = (layout.strong.line_px(), layout.note.line_px());
         if each >= name_high + top_high {
             let name_area = area(x, middle - name_high, side - layout.gap, name_high);
             fit(canvas, &name, name_area, layout.strong, theme.ink, Across::Left);
-            fit(canvas, top, area(x, middle, side - layout.gap, top_high), layout.note, theme.quiet, Across::Left);
+            let range = area(x, middle, side - layout.gap, top_high);
+            fit(canvas, &row.range, range, layout.note, theme.quiet, Across::Left);
         } else {
             let name_area = area(x, middle - name_high / 2, side - layout.gap, name_high);
             fit(canvas, &name, name_area, layout.strong, theme.ink, Across::Left);
         }
-        y += each;
-        if chart == Chart::River {
-            half_marks(canvas, &layout, &plot, scene, theme);
-            y += marks_high;
+        if row.chart == Chart::River {
+            half_marks(canvas, &layout, &row.plot, scene, theme);
         }
-        last = Some(plot);
     }
-    if let Some(plot) = last {
-        draw_months(canvas, &plot, &scene.year, layout.note, theme, words);
+    if let Some(row) = rows.charts.last() {
+        draw_months(canvas, &row.plot, &scene.year, layout.note, theme, words);
     }
+    let legend_high = layout.label.line_px();
     let legend = area(room.top_left.x, bottom(room) - legend_high, room.size.width as i32, legend_high);
     draw_legend(canvas, &layout, legend, scene, theme, words);
+}
+
+/// Which day of the year a place on the charts stands for, counted from 0; `None` off them.
+pub fn day_at(layout: &Layout, scene: &Scene<'_>, words: &Words, x: i32, y: i32) -> Option<usize> {
+    let rows = Rows::of(layout, scene, words);
+    let plot = rows.charts.first()?.plot;
+    let room = layout.content;
+    let charts = area(plot.area.top_left.x, room.top_left.y, plot.area.size.width as i32, room.size.height as i32);
+    charts.contains(Point::new(x, y)).then(|| day_on(&plot, scene, x))
+}
+
+/// A chart in its place.
+struct Row {
+    chart: Chart,
+    range: String,
+    /// The first row of pixels that is its own.
+    top: i32,
+    plot: Plot,
+}
+
+/// The charts, one under another.
+struct Rows {
+    /// From the left edge of the page to the charts.
+    side: i32,
+    /// Height of each.
+    each: i32,
+    charts: Vec<Row>,
+}
+
+impl Rows {
+    fn of(layout: &Layout, scene: &Scene<'_>, words: &Words) -> Self {
+        let mut charts = vec![Chart::Snow, Chart::River];
+        charts.extend(scene.now.reservoir.map(|_| Chart::Reservoir));
+        if !scene.canals.is_empty() {
+            charts.push(Chart::Canals);
+        }
+        let room = layout.content;
+        let marks_high = i32::from(layout.note.px()) * 2 / 3;
+        let below = layout.label.line_px() + months_height(layout.note) + marks_high;
+        let each = (room.size.height as i32 - below) / charts.len() as i32;
+        let most: Vec<f64> = charts.iter().map(|&chart| greatest(chart, scene)).collect();
+        let range =
+            |(chart, most): (&Chart, &f64)| format!("0–{}", words.quantity(*most, chart.quantity(), scene.units, 2));
+        let ranges: Vec<String> = charts.iter().zip(&most).map(range).collect();
+        let side = charts.iter().zip(&ranges).map(|(chart, range)| {
+            let name = measure(&words.say(chart.title_id(), &[]), layout.strong).width;
+            name.max(measure(range, layout.note).width) as i32
+        });
+        let side = side.max().unwrap_or(0) + layout.gap * 2;
+        let mut top = room.top_left.y;
+        let charts = charts.into_iter().zip(ranges).zip(most).map(|((chart, range), most)| {
+            let (x, wide) = (room.top_left.x + side, room.size.width as i32 - side);
+            let plot = Plot {
+                area: area(x, top + layout.gap, wide, each - layout.gap),
+                across: (0.0, scene.year.calendar.len() as f64),
+                up: (0.0, most * 1.05),
+            };
+            let row = Row { chart, range, top, plot };
+            top += each + if chart == Chart::River { marks_high } else { 0 };
+            row
+        });
+        Self { side, each, charts: charts.collect() }
+    }
 }
 
 /// The highest value of a chart in either run; what the axis is named by.
@@ -134,17 +176,15 @@ fn greatest(chart: Chart, scene: &Scene<'_>) -> f64 {
     if most > 0.0 { most } else { 1.0 }
 }
 
-fn top_of(chart: Chart, scene: &Scene<'_>, words: &Words) -> String {
-    format!("0–{}", words.quantity(greatest(chart, scene), chart.quantity(), scene.units, 2))
-}
-
 fn draw_chart(canvas: &mut Canvas<'_>, layout: &Layout, chart: Chart, plot: &Plot, scene: &Scene<'_>, theme: &Theme) {
     let doubt = scene.doubt.and_then(|doubt| match chart {
         Chart::River => doubt.natural_flow_m3s,
         Chart::Reservoir => doubt.storage_hm3,
         Chart::Snow | Chart::Canals => None,
     });
-    let (was, now) = (chart.of(&scene.was).iter().copied(), chart.of(&scene.now).iter().copied());
+    // At rest both runs are one.
+    let was = if scene.changed() { chart.of(&scene.was) } else { &[] };
+    let (was, now) = (was.iter().copied(), chart.of(&scene.now).iter().copied());
     let look = LinePair { width_px: layout.line_px, line: theme.water, area: Some(chart.fill(theme)), lack: None };
     let lack = matches!(chart, Chart::Reservoir | Chart::Canals).then(|| theme.lack_hatch());
     line_pair(canvas, plot, was, now, LinePair { lack, ..look }, theme);

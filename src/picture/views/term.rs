@@ -8,7 +8,7 @@ use super::card::CardPlace;
 use super::layout::Layout;
 use super::scene::DialSetting;
 use super::sheets::{self, Piece, Setting, Sign};
-use super::wording::dial_value;
+use super::wording::{DOT, dial_value};
 use crate::picture::{Canvas, Face, Theme};
 use crate::words::{System, Words};
 
@@ -79,21 +79,29 @@ pub const fn terms(view: View) -> &'static [&'static str] {
     }
 }
 
-/// Draws the card over what is there. `place` is which of how many explanations this is, counted from 0.
+/// Draws the card over what is there, in one language or two. `place` is which of how many explanations this is, counted
+/// from 0.
 pub fn draw(
     canvas: &mut Canvas<'_>,
     explained: Explained<'_>,
     place: (usize, usize),
     units: System,
     theme: &Theme,
-    words: &Words,
+    (words, second): (&Words, Option<&Words>),
 ) {
     let size = canvas.size();
     let layout = Layout::of(size, false);
-    let (title, pieces) = match explained {
+    let told = |words: &Words| match explained {
         Explained::Term(id) => term(id, words),
         Explained::Dial(setting) => dial(setting, units, words),
     };
+    let (mut title, mut pieces) = told(words);
+    if let Some((other, more)) = second.map(told) {
+        if other != title {
+            title = format!("{title}{DOT}{other}");
+        }
+        pieces.extend(more);
+    }
     let (card, setting) = card_for(size, &layout, &pieces);
     card.draw(canvas, &layout, &title, place, theme, words);
     let sheets = sheets::set(&pieces, card.body, setting);

@@ -9,6 +9,7 @@ mod list;
 mod season_line;
 
 use super::layout::{Form, Layout, area, bottom, right};
+use super::touch::day_on;
 use super::{Answer, Scene, View, frame, layout_of};
 use crate::picture::{Canvas, Theme};
 use crate::words::Words;
@@ -149,7 +150,5 @@ pub fn day_at(layout: &Layout, scene: &Scene<'_>, words: &Words, x: i32, y: i32)
     if !touched.contains(Point::new(x, y)) {
         return None;
     }
-    let day = plot.across_at(f64::from(x) + 0.5);
-    // The cast takes what is below zero as zero.
-    Some((day as usize).min(scene.year.calendar.len().saturating_sub(1)))
+    Some(day_on(&plot, scene, x))
 }

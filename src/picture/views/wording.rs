@@ -15,12 +15,12 @@ use crate::words::{DateStyle, Quantity, System, Words};
 pub(super) const DOT: &str = " · ";
 
 /// The short name of a dial.
-pub(super) fn dial_name(dial: Dial, words: &Words) -> String {
+pub fn dial_name(dial: Dial, words: &Words) -> String {
     words.say(&format!("{}.short", Words::key_id("dial", dial.key())), &[])
 }
 
 /// Where a dial stands, with its sign where it means more or less, and its unit.
-pub(super) fn dial_value(setting: &DialSetting, units: System, words: &Words) -> String {
+pub fn dial_value(setting: &DialSetting, units: System, words: &Words) -> String {
     let Some(value) = setting.value else { return words.say("picture-carried-over", &[]) };
     let written = match setting.dial.unit() {
         DialUnit::Celsius => words.quantity(value, Quantity::TemperatureChange, units, 2),
@@ -69,6 +69,18 @@ pub(super) fn right_since(title: &CanalTitle<'_>, words: &Words) -> String {
     match title.right_year {
         Some(year) => words.say("picture-since", &[("year", words.year(year).into())]),
         None => words.say("tell-right-before-all", &[]),
+    }
+}
+
+/// A name in the room's two languages where both fit on a line of that width, else in the first.
+pub(super) fn in_both(first: String, second: Option<String>, face: Face, width_px: i32) -> String {
+    match second.filter(|second| *second != first) {
+        None => first,
+        Some(second) => {
+            let both = format!("{first}{DOT}{second}");
+            let fits = face.fitting(&both, width_px.max(0) as u32, 9).is_some();
+            if fits { both } else { first }
+        }
     }
 }
 

@@ -7,6 +7,7 @@ mod hands;
 mod note_words;
 mod obey;
 mod over;
+mod player;
 mod set_pin;
 mod staff_words;
 mod wall;
@@ -18,12 +19,14 @@ use std::time::{Duration, Instant};
 use super::player::Player;
 use super::request::Request;
 use crate::board::backlight::Backlight;
+use crate::board::light::Light;
 use crate::board::power::PowerWatch;
 use crate::board::watchdog::Watchdog;
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument};
 use crate::commands::keep_folder::keep_folder;
 use crate::commands::tell_standard_error;
 use crate::keep::{Folder, Guesses, Keep, Messages, Settings, Tally};
+use crate::session::kiosk::wishes::LEAST_LIGHT;
 use crate::session::kiosk::{Kiosk, Over};
 use crate::words::Words;
 use hands::Fingers;
@@ -53,7 +56,7 @@ pub(super) struct KioskPlayer {
     keep: Option<Keep<Folder>>,
     settings: Settings,
     tally: Tally,
-    /// Kept as they came, until a lesson takes them up.
+    /// As they are on the card.
     guesses: Option<Guesses>,
     messages: Messages,
     found_damage: bool,
@@ -71,6 +74,8 @@ pub(super) struct KioskPlayer {
     seen_stamp: u64,
     still_ms: u32,
     wishes_wait_ms: Option<u32>,
+    /// The lesson that was counted in this visit.
+    counted_lesson: Option<String>,
     tally_waits: bool,
     since_tally_ms: u32,
     has_ended: bool,
@@ -97,7 +102,14 @@ impl KioskPlayer {
                     kiosk = kiosk.left_alone();
                 }
             }
+            None if player.has_lesson() => {}
             None => kiosk = kiosk.left_alone(),
+        }
+        // A lesson that the command line names goes before one that was under way.
+        if let Some(kept) = guesses.as_ref().filter(|_| settings.place == place && !player.has_lesson()) {
+            if player.take_up(kept, &words) {
+                kiosk.set_lesson(true);
+            }
         }
         let stamp = player.stamp();
         let system_files = Path::new(SYSTEM_FILES);
@@ -124,6 +136,7 @@ impl KioskPlayer {
             seen_stamp: stamp,
             still_ms: 0,
             wishes_wait_ms: None,
+            counted_lesson: None,
             tally_waits: false,
             since_tally_ms: TALLY_EVERY_MS,
             has_ended: false,
@@ -141,6 +154,7 @@ impl KioskPlayer {
             let reaction = self.kiosk.hand(hand);
             self.obey(&reaction.orders);
         }
+        self.kiosk.set_lesson(self.player.has_lesson());
         let wall = self.wall.read();
         let orders = self.kiosk.tick(elapsed_ms, wall, self.player.offer());
         self.obey(&orders);
@@ -182,6 +196,7 @@ impl Instrument for KioskPlayer {
                 }
                 let orders = self.kiosk.noticed(&before, self.player.shown());
                 self.obey(&orders);
+                self.count_lesson();
             }
         }
     }
@@ -198,6 +213,14 @@ impl Instrument for KioskPlayer {
         let settles = self.settles_in_ms().map(|ms| Duration::from_millis(ms.into()));
         let others = [self.player.wants_tick(), self.watchdog.interval(), self.fingers.due(), settles];
         others.into_iter().flatten().chain([due]).min()
+    }
+
+    fn light(&self) -> Light {
+        match self.kiosk.light_percent() {
+            0 => Light::Off,
+            percent if percent < LEAST_LIGHT.saturating_add(1) => Light::Dim,
+            _ => Light::Full,
+        }
     }
 
     fn done(&self) -> bool {

@@ -3,7 +3,6 @@
 use super::note_words::note_words;
 use super::{KioskPlayer, SETTLES_MS, TALLY_EVERY_MS, WISHES_SETTLE_MS, log};
 use crate::keep::Note;
-use crate::session::Event;
 use crate::session::kiosk::{Count, Order, Orders};
 
 impl KioskPlayer {
@@ -11,10 +10,12 @@ impl KioskPlayer {
     pub(super) fn obey(&mut self, orders: &Orders) {
         for order in orders.iter() {
             match *order {
-                Order::Session(event) => self.player.step(event),
+                Order::Session(event) => self.player.step_session(event),
                 Order::Look(look) => self.player.look(look),
                 Order::Leave => {
-                    self.player.step(Event::LongPress);
+                    self.player.leave();
+                    self.counted_lesson = None;
+                    self.keep_guesses();
                     self.read_messages();
                     self.keep_where(true);
                 }
@@ -48,9 +49,8 @@ impl KioskPlayer {
                     self.keep_settings();
                 }
                 Order::ForgetGuesses => {
-                    self.guesses = None;
-                    let note = self.keep.as_mut().and_then(|keep| keep.keep_guesses(None));
-                    self.note(note);
+                    self.player.leave();
+                    self.keep_guesses();
                 }
                 Order::StartAgain => {
                     self.player.start_again();
@@ -65,6 +65,25 @@ impl KioskPlayer {
         let day = self.kiosk.clock().ok().map(|wall| wall.local_day);
         self.tally.add(count, day);
         self.tally_waits = true;
+    }
+
+    /// A lesson that was begun counts once a visit.
+    pub(super) fn count_lesson(&mut self) {
+        let open = self.player.lesson_key();
+        if let Some(key) = open.filter(|key| self.counted_lesson.as_deref() != Some(key)).map(str::to_owned) {
+            self.count(&Count::Lesson(&key));
+            self.counted_lesson = Some(key);
+        }
+    }
+
+    /// The guesses go to the card where they have changed.
+    fn keep_guesses(&mut self) {
+        let now = self.player.led().kept();
+        if now != self.guesses {
+            self.guesses = now;
+            let note = self.keep.as_mut().and_then(|keep| keep.keep_guesses(self.guesses.as_ref()));
+            self.note(note);
+        }
     }
 
     /// The message of the day may have been written anew.
@@ -94,6 +113,7 @@ impl KioskPlayer {
         // What the stroll shows is nobody's place to go back to.
         if self.kiosk.is_visit() && stamp != self.kept_stamp && self.still_ms >= SETTLES_MS {
             self.keep_where(false);
+            self.keep_guesses();
         }
     }
 
@@ -140,6 +160,7 @@ impl KioskPlayer {
         } else if self.wishes_wait_ms.is_some() {
             self.keep_settings();
         }
+        self.keep_guesses();
         self.keep_tally();
         self.watchdog.stopping();
         self.has_ended = true;

@@ -37,7 +37,7 @@ impl KioskPlayer {
         let veil = match self.kiosk.light_percent() {
             0 => 255,
             _ if self.light.is_there() => 0,
-            percent => ((100 - u32::from(percent.min(100))) * 3 / 2 * 255 / 160).min(200) as u8,
+            percent => (100 - percent.min(100)) / 2 * 3,
         };
         if over == Over::Nothing && veil == 0 {
             self.covered.clear();

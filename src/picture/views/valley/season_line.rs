@@ -74,6 +74,8 @@ pub(super) fn draw_season_line(
         range_band(canvas, &plot, low.iter().copied(), high.iter().copied(), theme.water, theme);
     }
     let look = LinePair::water(layout.line_px, theme).with_lack(theme);
+    // At rest both runs are one.
+    let was = if scene.changed() { was } else { &[] };
     line_pair(canvas, &plot, was.iter().copied(), now.iter().copied(), look, theme);
     if let Some(beside) = &scene.beside {
         draw_beside(canvas, layout, &plot, of_run(beside, quantity), theme);

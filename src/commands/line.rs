@@ -30,6 +30,7 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(map(words))
         .subcommand(rehearse(words))
         .subcommand(weather(words))
+        .subcommand(tally(words))
         .subcommand(super::place::line::command(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
@@ -47,6 +48,9 @@ fn show(words: &Words) -> Command {
         .arg(text("groups", "value-number", "help-groups", words))
         .arg(text("units", "value-units", "help-units", words))
         .arg(text("theme", "value-theme", "help-theme", words).help(with_usual("help-theme", "light", words)))
+        .arg(flag("kiosk", "help-kiosk", words))
+        .arg(path_option("keep", "value-folder", "help-keep", words))
+        .arg(flag("set-pin", "help-set-pin", words))
         .args(common(words))
 }
 
@@ -120,6 +124,16 @@ fn weather(words: &Words) -> Command {
         .arg(text("seed", "value-number", "help-seed", words).help(with_usual("help-seed", "1", words)))
         .arg(path_option("out", "value-file", "help-out", words))
         .arg(path_option("recipe-out", "value-file", "help-recipe-out", words))
+        .args(common(words))
+}
+
+fn tally(words: &Words) -> Command {
+    subcommand("tally", "help-usage-tally", words)
+        .arg(text("from", "value-date", "help-tally-from", words))
+        .arg(text("to", "value-date", "help-tally-to", words))
+        .arg(text("form", "value-form", "help-tally-form", words).help(with_usual("help-tally-form", "table", words)))
+        .arg(path_option("keep", "value-folder", "help-keep", words))
+        .arg(path_option("out", "value-file", "help-out", words))
         .args(common(words))
 }
 

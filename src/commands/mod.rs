@@ -6,6 +6,7 @@
 mod built_in;
 mod check;
 mod failure;
+mod keep_folder;
 mod line;
 mod map;
 mod output;
@@ -18,6 +19,7 @@ mod show;
 mod snippets;
 mod speech;
 mod spinner;
+mod tally;
 mod tell;
 mod usage;
 mod weather;
@@ -60,6 +62,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("map", matches)) => map::run(speech, matches),
         Some(("rehearse", matches)) => rehearse::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        Some(("tally", matches)) => tally::run(speech, matches),
         Some(("place", matches)) => place::run(speech, matches),
         _ => show::usual(speech),
     }

@@ -145,6 +145,7 @@ fn draw_card(canvas: &mut Canvas<'_>, view: View, card: Card, scene: &Scene<'_>,
     term::draw(canvas, explained, (index, terms.len() + scene.dials.len()), scene.units, theme, speech);
 }
 
+/// The colours of a set.
 pub(super) fn theme(shade: Shade) -> &'static Theme {
     match shade {
         Shade::Light => &Theme::LIGHT,

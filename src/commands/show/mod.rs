@@ -4,6 +4,7 @@ mod board;
 mod drawing;
 mod droughts;
 mod hands;
+mod kiosk;
 mod leading;
 mod pictures;
 mod player;
@@ -20,8 +21,11 @@ use crate::board::choose::{Why, can_show, choose};
 use crate::board::file::BoardFile;
 use crate::board::surroundings::{Surroundings, WindowChance};
 use crate::board::terminal::{Ability, Terminal};
-use crate::board::{Choice, FrameSize, Post, ScreenError, ScreenKind, Stage, run as play};
+use crate::board::{Choice, FrameSize, Instrument, Post, ScreenError, ScreenKind, Stage, run as play};
+use crate::session::View;
 use crate::words::Words;
+use kiosk::KioskPlayer;
+pub(super) use kiosk::note_words;
 pub(super) use leading::LessonText;
 pub(super) use player::Player;
 use request::Request;
@@ -30,7 +34,7 @@ pub(super) use request::groups;
 /// Opens the place and shows it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
     let request = Request::read(matches, &speech.words)?;
-    show(speech, &request)
+    if request.set_pin { kiosk::set_pin(&request, &speech.words) } else { show(speech, &request) }
 }
 
 /// What the program does when it is not told what to do: the usual place on the best screen at hand.
@@ -125,7 +129,21 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
     }
     let asked = |kind| screens.iter().filter(move |&&screen| screen == kind).count();
     let (windows, terminals) = (asked(ScreenKind::Window), asked(ScreenKind::Terminal));
-    let mut stage = Stage::new(player);
+    let on_board = screens.iter().any(|kind| matches!(kind, ScreenKind::Panel | ScreenKind::Framebuffer));
+    if request.kiosk && (on_board || windows + terminals > 0) {
+        let kiosk = KioskPlayer::new(player, request, speech.in_language(speech.words.tag()));
+        return play_on(Stage::new(kiosk), screens, (windows, terminals), speech, request);
+    }
+    play_on(Stage::new(player), screens, (windows, terminals), speech, request)
+}
+
+fn play_on<I: Instrument + 'static>(
+    mut stage: Stage<I>,
+    screens: &[ScreenKind],
+    (windows, terminals): (usize, usize),
+    speech: &Speech,
+    request: &Request,
+) -> Result<(), Trouble> {
     let on_board = add_board_screens(&mut stage, screens, speech, request)?;
     if windows > 0 {
         return show_in_windows(stage, windows, terminals > 0, request.size);
@@ -142,8 +160,8 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
 }
 
 /// Adds the panels and monitors among `screens`; `true` where there are any.
-fn add_board_screens(
-    stage: &mut Stage<Player>,
+fn add_board_screens<I: Instrument>(
+    stage: &mut Stage<I>,
     screens: &[ScreenKind],
     speech: &Speech,
     request: &Request,
@@ -163,8 +181,8 @@ fn add_board_screens(
 }
 
 #[cfg(feature = "window")]
-fn show_in_windows(
-    mut stage: Stage<Player>,
+fn show_in_windows<I: Instrument + 'static>(
+    mut stage: Stage<I>,
     windows: usize,
     with_terminal: bool,
     size: Option<FrameSize>,
@@ -179,7 +197,7 @@ fn show_in_windows(
 }
 
 #[cfg(not(feature = "window"))]
-fn show_in_windows(_: Stage<Player>, _: usize, _: bool, _: Option<FrameSize>) -> Result<(), Trouble> {
+fn show_in_windows<I>(_: Stage<I>, _: usize, _: bool, _: Option<FrameSize>) -> Result<(), Trouble> {
     Err(ScreenError::new(ScreenKind::Window, "not built").into())
 }
 
@@ -187,6 +205,11 @@ fn terminal(ability: Option<Ability>, size: Option<FrameSize>, post: &Post) -> R
     let ability = ability.or_else(|| Ability::of_environment(|name| std::env::var(name).ok()));
     let ability = ability.ok_or_else(|| ScreenError::new(ScreenKind::Terminal, "TERM"))?;
     Terminal::open(ability, size, post)
+}
+
+/// The stable key of a view.
+pub(super) fn view_key(view: View) -> &'static str {
+    drawing::page(view).key()
 }
 
 fn tell_choice(choice: Choice, words: &Words) {

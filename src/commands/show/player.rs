@@ -54,7 +54,7 @@ pub(in crate::commands) struct Player {
     /// Time went by since, so that the answer may be worked out.
     may_work: bool,
     /// The water could not answer what is asked.
-    gave_up: bool,
+    pub(super) gave_up: bool,
     captions: Vec<[String; 3]>,
     pub(super) led: Led,
     /// The lessons of the list, in its order.

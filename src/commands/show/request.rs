@@ -33,6 +33,12 @@ pub(super) struct Request {
     pub units: Option<System>,
     /// Colours to begin with.
     pub shade: Shade,
+    /// Whether nobody watches over it.
+    pub kiosk: bool,
+    /// Where what is kept is kept, where a folder was named.
+    pub keep: Option<PathBuf>,
+    /// Only the PIN of the staff menu is set.
+    pub set_pin: bool,
     /// The lesson to lead.
     pub lesson: Option<PathBuf>,
     /// How many groups guess, where it was said.
@@ -50,6 +56,9 @@ impl Default for Request {
             one_language: false,
             units: None,
             shade: Shade::Light,
+            kiosk: false,
+            keep: None,
+            set_pin: false,
             lesson: None,
             groups: None,
         }
@@ -100,6 +109,9 @@ impl Request {
             one_language: text("lang").is_some(),
             units,
             shade,
+            kiosk: matches.get_flag("kiosk"),
+            keep: path("keep"),
+            set_pin: matches.get_flag("set-pin"),
             lesson: path("lesson"),
             groups: groups(matches, "show", words)?,
         })

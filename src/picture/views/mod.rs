@@ -27,6 +27,8 @@ pub mod scene;
 pub mod season;
 pub mod setting_list;
 mod sheets;
+pub mod staff;
+pub mod stroll;
 pub mod term;
 pub mod touch;
 pub mod trust;

@@ -47,6 +47,12 @@ impl Led {
         narrow
     }
 
+    /// Closes the lesson, as when everybody has left; [`Led::arrange`] then offers everything again.
+    pub fn leave(&mut self) {
+        let (shelf, free) = (std::mem::take(&mut self.shelf), self.free.take());
+        *self = Self { free, ..Self::new(shelf) };
+    }
+
     /// The view of the step at hand, where the ring of everything else is shown.
     pub fn view_behind(&self, offer: &Offer) -> View {
         let step = self.course.as_ref().zip(self.progress.as_ref());

@@ -16,8 +16,12 @@ pub mod commands;
 pub mod fit;
 #[cfg(feature = "std")]
 pub mod generator;
+#[cfg(feature = "pdf")]
+pub mod handout;
 #[cfg(feature = "std")]
 pub mod lesson;
+#[cfg(feature = "std")]
+pub mod open_data;
 #[cfg(feature = "std")]
 pub mod place;
 #[cfg(feature = "std")]

@@ -27,6 +27,8 @@ const MAY_NAME: [(&str, &[&str]); 12] = [
     ),
     ("session", &["picture", "words", "signs", "water", "place", "lesson"]),
     ("board", &["picture", "session"]),
+    ("open_data", &[]),
+    ("handout", &["picture", "words", "signs", "water"]),
     ("keep", &["water::dials", "session"]),
 ];
 const ROOTS: [&str; 3] = ["commands", "lib", "main"];

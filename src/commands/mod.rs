@@ -5,7 +5,10 @@
 
 mod built_in;
 mod check;
+mod data;
 mod failure;
+#[cfg(feature = "pdf")]
+mod handout;
 mod line;
 mod map;
 mod output;
@@ -53,10 +56,13 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
     };
     match matches.subcommand() {
         Some(("tell", matches)) => tell::run(speech, matches),
+        Some(("data", matches)) => data::run(speech, matches),
         Some(("check", matches)) => check::run(speech, matches),
         Some(("show", matches)) => show::run(speech, matches),
         Some(("map", matches)) => map::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        #[cfg(feature = "pdf")]
+        Some(("handout", matches)) => handout::run(speech, matches),
         _ => show::usual(speech),
     }
 }

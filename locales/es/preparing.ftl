@@ -148,7 +148,7 @@ place-curve-empty = El { $percent } % de la cuenca no tiene altura en la malla. 
 
 ## add
 
-place-add-no-place = En { $path } no hay un place.toml. Se escribe con «place new».
+place-add-no-place = En { $path } no hay un place.toml. Con «place new» se hace uno.
 place-add-canal = Diga qué canal: --canal CLAVE
 place-add-canal-only = La opción --canal va solo con --as canal.
 place-add-as = Las columnas no dicen para qué es el registro. Agregue --as y una de estas: { $choices }

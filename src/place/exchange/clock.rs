@@ -86,7 +86,7 @@ impl Since {
         let seconds = self.from.second + count * self.unit_s;
         // A thousandth of a second is the noise of a count in days.
         let day = libm::floor((seconds + 1e-3) / SECONDS_PER_DAY);
-        if !(day.abs() < 1.0e7) {
+        if day.is_nan() || day.abs() > 1.0e7 {
             return None;
         }
         let (whole, past) = (day.abs() as u64, day < 0.0);

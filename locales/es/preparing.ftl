@@ -55,7 +55,7 @@ place-file-name = { $path } no tiene un nombre que sirva en un lugar.
 
 ## new
 
-place-exists = { $path } ya existe. No se escribió nada. Con --replace se escribe encima.
+place-exists = { $path } ya existe. No se escribió nada. Para reemplazarlo agregue --replace.
 place-not-folder = { $path } no es una carpeta. No se escribió nada.
 place-file-twice = Dos registros se llamarían { $file } en el lugar. Póngale otro nombre a uno.
 place-no-column = { $path } no tiene una columna que sirva para [{ $table }].
@@ -87,7 +87,7 @@ skeleton-year = El calendario usual. Vale aunque no esté escrito.
 skeleton-source = De dónde salen los números. La gente va a preguntar.
 skeleton-station = La altura de la estación del tiempo sobre el mar.
 skeleton-weather = El tiempo: una fila por día, sin saltar ninguno.
-skeleton-weather-missing = FALTA: ponga el registro en esta carpeta. Con «place add» estos renglones se escriben solos.
+skeleton-weather-missing = FALTA: ponga el registro en esta carpeta. «place add» pone estos renglones por usted.
 skeleton-curve = La superficie de la cuenca debajo de cada altura, según la malla de alturas. Se corta en zonas de igual altura.
 skeleton-bands = FALTA: zonas de altura, de la más baja a la más alta, sin el lago ni las parcelas. «place new --grid» las saca de una malla de alturas.
 skeleton-usual = Valores usuales de la montaña. Valen aunque no estén escritos. El ajuste con una estación de aforo reemplaza la mayoría.
@@ -96,7 +96,7 @@ skeleton-minimum = Agua que debe quedar en el río, si la hay.
 skeleton-sharing = Cómo se reparte el río: "seniority" (primero el derecho más antiguo), "proportional" (a todos la misma parte) o "rotation" (por turnos).
 skeleton-canal = Los canales, en el orden en que los encuentra el río. Con "seniority" hacen falta «right» y «rate»; con "rotation", «turn_days».
 skeleton-town = Un pueblo que toma agua.
-skeleton-compare = Registros para comparar, si los hay. Con «place add» estos renglones se escriben solos.
+skeleton-compare = Registros para comparar, si los hay. «place add» pone estos renglones por usted.
 skeleton-gauge = ¿La estación de aforo está antes de todos los canales? Entonces «natural» está bien. Si está después, escriba "below_diversions".
 
 ## peek
@@ -148,7 +148,7 @@ place-curve-empty = El { $percent } % de la cuenca no tiene altura en la malla. 
 
 ## add
 
-place-add-no-place = En { $path } no hay un place.toml. Se escribe con «place new».
+place-add-no-place = En { $path } no hay un place.toml. Con «place new» se hace uno.
 place-add-canal = Diga qué canal: --canal CLAVE
 place-add-canal-only = La opción --canal va solo con --as canal.
 place-add-as = Las columnas no dicen para qué es el registro. Agregue --as y una de estas: { $choices }

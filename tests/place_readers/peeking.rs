@@ -31,9 +31,40 @@ fn the_shipped_records_are_recognised() {
     assert_eq!(seattle.record.as_ref().map(|record| record.days), Some(1461));
 
     let us = look(include_bytes!("../records/us.csv"));
-    assert!(
-        measured(&us).contains(&("High", Measure::TemperatureMax, "°C", UnitReason::Usual)),
-        "nothing says °F here"
+    assert!(measured(&us).contains(&("High", Measure::TemperatureMax, "°C", UnitReason::Usual)), "nothing says °F");
+    let comma = look(include_bytes!("../records/decimal_comma.csv"));
+    assert!(comma.plan.decimal_comma);
+    let latin = look(include_bytes!("../records/latin1.csv"));
+    assert_eq!(latin.plan.encoding, Encoding::Latin1);
+}
+
+/// Rows of a made-up office: `count` days from 28 December 2003 with the cells that `cells` gives.
+fn rows(form: &str, count: u64, cells: impl Fn(u64) -> String) -> String {
+    let first = chrono::NaiveDate::from_ymd_opt(2003, 12, 28).unwrap();
+    let row = |day| format!("{}{}\r\n", (first + chrono::Days::new(day)).format(form), cells(day));
+    (0..count).map(row).collect()
+}
+
+#[test]
+fn headers_below_titles_decimal_commas_and_marks_are_seen() {
+    let body = rows("%d/%m/%Y", 60, |day| {
+        let wind = if day == 9 { "-99,9".to_owned() } else { format!("{},5", day % 7) };
+        let snow = if day == 4 { "s/d".to_owned() } else { format!("{},25", day) };
+        format!(";{wind};{snow};bien")
+    });
+    let text = format!("Estación Uno;inventada\r\n\r\nFecha;Viento km/h;Agua en la nieve (mm);Nota\r\n{body}");
+    let peek = look(text.as_bytes());
+    assert_eq!((peek.header_line, peek.plan.skip_lines, peek.plan.delimiter), (3, 2, Some(';')));
+    assert!(peek.plan.decimal_comma);
+    assert_eq!(peek.plan.missing, ["-99,9", "s/d"]);
+    let wanted = DatePlan::Column { name: "Fecha".into(), order: DateOrder::DayMonthYear };
+    assert_eq!((&peek.plan.date, peek.date_reason), (&wanted, DateReason::Only));
+    assert_eq!(
+        measured(&peek),
+        [
+            ("Viento km/h", Measure::Wind, "km/h", UnitReason::Name),
+            ("Agua en la nieve (mm)", Measure::SnowWater, "mm", UnitReason::Name)
+        ]
     );
     assert_eq!(peek.columns[3].role, ColumnRole::Text);
     assert_eq!(peek.problems, []);

@@ -66,7 +66,8 @@ impl Answers {
 
     /// Asks for what is not known yet, if a person sits there or `always`; an empty answer leaves it open.
     pub fn ask(&mut self, always: bool, words: &Words) {
-        if !always && !(std::io::stdin().is_terminal() && std::io::stderr().is_terminal()) {
+        let somebody_sits_there = std::io::stdin().is_terminal() && std::io::stderr().is_terminal();
+        if !always && !somebody_sits_there {
             return;
         }
         let mut lines = std::io::stdin().lock().lines();

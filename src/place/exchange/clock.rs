@@ -37,7 +37,11 @@ pub(super) fn parse_instant(text: &str) -> Option<Instant> {
 fn seconds_of(clock: &str) -> Option<f64> {
     let end = clock.find(|letter: char| !(letter.is_ascii_digit() || letter == ':' || letter == '.'));
     let (time, zone) = clock.split_at(end.unwrap_or(clock.len()));
-    if zone.len() > 12 || zone.chars().any(|letter| letter.is_control()) {
+    let zone = zone.trim();
+    let is_zone = zone.is_empty()
+        || zone.starts_with(['Z', 'z', '+', '-'])
+        || ["utc", "gmt"].iter().any(|name| zone.eq_ignore_ascii_case(name));
+    if zone.len() > 12 || !is_zone {
         return None;
     }
     if time.is_empty() {
@@ -82,7 +86,7 @@ impl Since {
         let seconds = self.from.second + count * self.unit_s;
         // A thousandth of a second is the noise of a count in days.
         let day = libm::floor((seconds + 1e-3) / SECONDS_PER_DAY);
-        if !(day.abs() < 1.0e7) {
+        if day.is_nan() || day.abs() > 1.0e7 {
             return None;
         }
         let (whole, past) = (day.abs() as u64, day < 0.0);

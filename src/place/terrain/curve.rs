@@ -55,7 +55,7 @@ impl Default for HeightBins {
 impl HeightBins {
     /// Adds a cell; `false` where its height cannot be one on land.
     pub fn add(&mut self, height_m: f64, km2: f64) -> bool {
-        if !(height_m >= LOWEST_M && height_m < HIGHEST_M) {
+        if !(LOWEST_M..HIGHEST_M).contains(&height_m) {
             return false;
         }
         self.km2[(height_m - LOWEST_M) as usize] += km2;

@@ -25,18 +25,18 @@ lesson-do-again = Begin again
 lesson-do-leave = End the lesson
 
 lesson-hint-list = Turn to a lesson. Press to open it. Hold for more.
-    .short = Turn, press to open. Hold: more.
+    .small = Turn, press to open. Hold: more.
 lesson-hint-start = Turn to the number of groups. Press to begin. Hold for the list.
-    .short = Turn: groups. Press: begin. Hold: list.
+    .small = Turn: groups. Press: begin. Hold: list.
 lesson-hint-on = Press takes it. Turn for other things. Hold to start over.
-    .short = Press: take it. Turn: more. Hold: restart.
+    .small = Press: take it. Turn: more. Hold: restart.
 lesson-hint-look = Press: go on
 lesson-hint-guess = Turn to your guess. Press to put it in. Hold for more.
-    .short = Turn: guess. Press: it is in. Hold: more.
+    .small = Turn: guess. Press: it is in. Hold: more.
 lesson-hint-choose = Press takes it. Turn for other things.
-    .short = Press: take it. Turn: more.
+    .small = Press: take it. Turn: more.
 lesson-hint-word = Turn to a letter. Press to take it. Hold to leave.
-    .short = Turn: letter. Press: take it. Hold: leave.
+    .small = Turn: letter. Press: take it. Hold: leave.
 
 ## Notes
 

@@ -25,18 +25,18 @@ lesson-do-again = Empezar de nuevo
 lesson-do-leave = Salir de la lección
 
 lesson-hint-list = Gire hasta una lección. Presione para abrirla. Mantenga presionado para más.
-    .short = Gire y presione. Mantenga: más.
+    .small = Gire y presione. Mantenga: más.
 lesson-hint-start = Gire hasta el número de grupos. Presione para empezar. Mantenga presionado para la lista.
-    .short = Gire: grupos. Presione: empezar.
+    .small = Gire: grupos. Presione: empezar.
 lesson-hint-on = Presione para tomarlo. Gire para ver otras cosas. Mantenga presionado para empezar de nuevo.
-    .short = Presione: tomar. Gire: más opciones.
+    .small = Presione: tomar. Gire: más opciones.
 lesson-hint-look = Presione: seguir
 lesson-hint-guess = Gire hasta su respuesta. Presione para ponerla. Mantenga presionado para más.
-    .short = Gire y presione. Mantenga: más.
+    .small = Gire y presione. Mantenga: más.
 lesson-hint-choose = Presione para tomarlo. Gire para ver otras cosas.
-    .short = Presione: tomar. Gire: más opciones.
+    .small = Presione: tomar. Gire: más opciones.
 lesson-hint-word = Gire hasta una letra. Presione para ponerla. Mantenga presionado para salir.
-    .short = Gire: letra. Presione: tomar.
+    .small = Gire: letra. Presione: tomar.
 
 ## Avisos
 

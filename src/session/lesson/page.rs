@@ -222,7 +222,7 @@ impl Led {
             (Part::Steps, _) if self.phase() == Some(Phase::Guess) => "lesson-hint-choose",
             _ => "lesson-hint-on",
         };
-        let hint_short = words.say(&format!("{hint}.short"), &[]);
+        let hint_short = words.say(&format!("{hint}.small"), &[]);
         let note = self.note.map(|note| self.note_text(note, words));
         Foot { choice, hint: words.say(hint, &[]), hint_short, note }
     }

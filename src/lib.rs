@@ -17,6 +17,8 @@ pub mod fit;
 #[cfg(feature = "std")]
 pub mod generator;
 #[cfg(feature = "std")]
+pub mod keep;
+#[cfg(feature = "std")]
 pub mod lesson;
 #[cfg(feature = "std")]
 pub mod place;

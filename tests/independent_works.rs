@@ -35,7 +35,7 @@ fn basin() -> Valley {
 }
 
 /// The basin's bands run by `lanes` of them a row, and the sums of every day.
-fn sums<const L: usize>(slopes: &Slopes<L>, total: impl Fn([LaneSums<L>; 2]) -> [f64; 3]) -> [Vec<f64>; 3] {
+fn sums<const L: usize>(slopes: &Slopes<L>, total: impl Fn(LaneSums<L>) -> [f64; 3]) -> [Vec<f64>; 3] {
     let forcing = Columns::read("forcing.csv");
     let dates = forcing.texts("date");
     let (precipitation, temperature) = (forcing.numbers("precip_mm"), forcing.numbers("tmean_c"));
@@ -49,10 +49,9 @@ fn sums<const L: usize>(slopes: &Slopes<L>, total: impl Fn([LaneSums<L>; 2]) -> 
             precipitation_mm: Lanes::splat(precipitation[day]),
             reference_evaporation_mm: Lanes::splat(0.0),
             melt_factor: Lanes::splat(melt_factor_mm_c_day(&traits, calendar.day_of_year, false)),
-            most_sublimation_mm: Lanes::splat(0.0),
             split_humidity_percent: None,
         };
-        let mut day = [[LaneSums::default(); 2]];
+        let mut day = [LaneSums::default()];
         slopes.days::<true>(Halves::<5>, &[calendar], &[weather], &mut stores, &mut day);
         let day = total(day[0]);
         for (column, value) in columns.iter_mut().zip(day) {
@@ -72,10 +71,8 @@ fn assert_snow(snowfall: &[f64], snow_water: &[f64]) {
 #[test]
 fn snow_over_the_bands_of_one_run() {
     let valley = basin();
-    let both = |sums: [LaneSums<2>; 2], of: fn(&LaneSums<2>) -> Lanes<2>| total_of_one(of(&sums[0]) + of(&sums[1]));
-    let [snowfall, snow_water, recharge] = sums(&Slopes::of_one(&valley), |day| {
-        [both(day, |sum| sum.snowfall_mm), both(day, |sum| sum.snow_water_mm), both(day, |sum| sum.recharge_mm)]
-    });
+    let [snowfall, snow_water, recharge] =
+        sums(&Slopes::of_one(&valley), |day| [day.snowfall_mm, day.snow_water_mm, day.recharge_mm].map(total_of_one));
     assert_snow(&snowfall, &snow_water);
     assert!(recharge.iter().sum::<f64>() > 0.0, "the bands' soil passes nothing on");
 }
@@ -84,9 +81,8 @@ fn snow_over_the_bands_of_one_run() {
 fn snow_over_the_bands_of_runs_side_by_side() {
     let valley = basin();
     for lane in 0..4 {
-        let [snowfall, snow_water, _] = sums(&Slopes::of_many([&valley; 4]), |[even, odd]| {
-            let lane_of = |of: fn(&LaneSums<4>) -> Lanes<4>| of(&even).0[lane] + of(&odd).0[lane];
-            [lane_of(|sum| sum.snowfall_mm), lane_of(|sum| sum.snow_water_mm), lane_of(|sum| sum.recharge_mm)]
+        let [snowfall, snow_water, _] = sums(&Slopes::of_many([&valley; 4]), |day| {
+            [day.snowfall_mm, day.snow_water_mm, day.recharge_mm].map(|sum| sum.0[lane])
         });
         assert_snow(&snowfall, &snow_water);
     }

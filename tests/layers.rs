@@ -9,13 +9,15 @@ use std::path::{Path, PathBuf};
 /// * `water` is the ground floor; `signs` read it and change nothing.
 /// * `place`, `generator`, `fit`, `whatif` and `lesson` bring values to the water, and never words: what is wrong is told as data.
 ///   A lesson is read for a place, and with its reader of files.
+/// * `place` takes from `words` only the comparing of names that were mistyped.
 /// * `words` know units and the keys of what they name, no numbers of a run.
 /// * `picture` draws values: plain data of the water and the signs, never what runs them.
-/// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not water.
+/// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not
+///   water: of a place it has the reader of files, of the water the names of the dials.
 const MAY_NAME: [(&str, &[&str]); 12] = [
     ("water", &[]),
     ("signs", &["water"]),
-    ("place", &["water", "signs"]),
+    ("place", &["water", "signs", "words::nearest"]),
     ("generator", &["water", "signs"]),
     ("fit", &["water", "signs", "generator::random"]),
     ("whatif", &["water", "signs"]),
@@ -26,7 +28,20 @@ const MAY_NAME: [(&str, &[&str]); 12] = [
         &["signs", "words", "water::valley", "water::calendar", "water::dials", "water::ledger", "water::units"],
     ),
     ("session", &["picture", "words", "signs", "water", "place", "lesson"]),
-    ("board", &["picture", "session"]),
+    (
+        "board",
+        &[
+            "picture",
+            "session",
+            "place::Text",
+            "place::problem",
+            "place::section",
+            "place::text",
+            "place::tree",
+            "place::unit_suffix",
+            "water::dials",
+        ],
+    ),
     ("keep", &["water::dials", "session"]),
 ];
 const ROOTS: [&str; 3] = ["commands", "lib", "main"];

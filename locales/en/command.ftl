@@ -9,7 +9,7 @@ help-arguments = Arguments
 help-options = Options
 help-default = default: { $value }
 help-tell = Says in numbers what a run gives, as it was and with your changes.
-help-check = Checks places, settings and lessons, with every mistake at its line.
+help-check = Checks places, settings, lessons and board files, with every mistake at its line.
 help-weather = Makes a long weather record, or makes a short one longer.
 help-help = Shows this help.
 help-version = Shows the version.
@@ -24,7 +24,7 @@ help-units = Units for people: metric or us. JSON and CSV are always metric.
 help-lang = Language: en, es, or a full tag such as es-MX.
 help-locales = A folder with more languages.
 help-out = Writes to this file and not to the screen.
-help-paths = What to check: place folders, setting files or lesson files.
+help-paths = What to check: place folders, setting files, lesson files or board files.
 help-seed = The number that the random weather starts from. The same number gives the same weather.
 help-length = How many years to make.
 help-from = The first water year to make, four digits.
@@ -84,7 +84,7 @@ check-notes = { $n ->
     [one] { $path }: { $n } note.
    *[other] { $path }: { $n } notes.
 }
-check-not-known = { $path } is not a place, a setting or a lesson, so there is nothing to check.
+check-not-known = { $path } is not a place, a setting, a lesson or a board file, so there is nothing to check.
 
 ## weather
 

@@ -4,20 +4,35 @@ problem-lesson-long = A lesson has at most { $most } steps, and this is one more
     .remedy = Make two lessons of it.
 problem-lesson-text-long = “{ $key }” has { $letters } letters in “{ $language }”. The screen has room for { $most }.
     .remedy = Say it in fewer words, or in two steps.
-problem-lesson-year = The record has no year “{ $value }”. Did you mean “{ $nearest }”?
+problem-lesson-year = { $near ->
+        [0] The record has no year “{ $value }”.
+       *[other] The record has no year “{ $value }”. Did you mean “{ $nearest }”?
+    }
     .remedy = Write "dry", "middling", "wet", "driest", "wettest", or a water year from { $first } to { $last }.
 problem-lesson-dial-absent = This place does not have the dial “{ $dial }”, so this step cannot be shown here.
     .remedy = Take the step out, or use the lesson with a place that has this dial.
 problem-lesson-dial-outside = The dial “{ $dial }” stands at { $value }, but this step allows only { $least } to { $most }.
     .remedy = Set it inside these limits, or widen them.
 problem-lesson-sign = There is no sign “{ $value }” to read.
-    .remedy = Did you mean “{ $nearest }”?
+    .remedy = { $near ->
+        [0] Known here: { $choices }.
+       *[other] Did you mean “{ $nearest }”?
+    }
 problem-lesson-canal-sign = There is no sign “{ $value }” of a canal.
-    .remedy = Did you mean “{ $nearest }”?
+    .remedy = { $near ->
+        [0] Known here: { $choices }.
+       *[other] Did you mean “{ $nearest }”?
+    }
 problem-lesson-canal = This place has no canal “{ $value }”.
-    .remedy = Write "oldest", "newest", "town" or a canal's key. Did you mean “{ $nearest }”?
+    .remedy = { $near ->
+        [0] Write "oldest", "newest", "town" or a canal's key.
+       *[other] Write "oldest", "newest", "town" or a canal's key. Did you mean “{ $nearest }”?
+    }
 problem-lesson-step-unknown = No step has the key “{ $key }”.
-    .remedy = Did you mean “{ $nearest }”? The word "end" ends the lesson.
+    .remedy = { $near ->
+        [0] Known here: { $choices }. The word "end" ends the lesson.
+       *[other] Did you mean “{ $nearest }”? The word "end" ends the lesson.
+    }
 problem-lesson-step-back = The step “{ $key }” does not come later, and a lesson only goes on.
     .remedy = Name a step further down in the file.
 problem-lesson-unreachable = No step leads to “{ $key }”, so nobody will see it.

@@ -3,14 +3,14 @@
 lesson-step = Step { $step } of { $steps }
 lesson-guess-first = Guess first.
 lesson-group = Group { $group }
-lesson-needs-guess = No guess is in yet. Turn and press, or hold to skip.
+lesson-needs-guess = No guess is in yet. Turn and press.
 lesson-closed = The result is out. Guesses are closed.
 lesson-skipped = You went on without a guess.
 lesson-over = The lesson is over. Thank you.
 lesson-result = The model says
 lesson-usual = Many people say
 lesson-word = Your word:
-lesson-word-wrong = This word does not fit here. Read it again, letter by letter.
+lesson-word-wrong = This word does not fit here. Read it again.
 
 ## Signs that lessons read
 

@@ -13,6 +13,8 @@ problem-file-unreadable = The file “{ $file }” cannot be opened.
     .remedy = Check that you may read it and that no other program holds it.
 problem-file-no-file = “{ $file }” is not a file.
     .remedy = Give the name of a file, not of a folder or a device.
+problem-utf16 = This text is stored with two bytes for each letter (UTF-16).
+    .remedy = In your text editor choose “Save as”, and there the encoding UTF-8.
 problem-not-utf8 = There is a letter here that is not UTF-8.
     .remedy = Save the file as UTF-8.
 
@@ -31,11 +33,17 @@ problem-bracket = A bracket opens here and does not close.
 problem-key-twice = “{ $key }” is here twice.
     .remedy = Keep one of the two.
 problem-table-unknown = This file has no part called “{ $key }”.
-    .remedy = Did you mean “{ $nearest }”?
+    .remedy = { $near ->
+        [0] Known here: { $choices }.
+       *[other] Did you mean “{ $nearest }”?
+    }
 problem-table-missing = The table [{ $table }] is missing.
     .remedy = Add it. PLACE.md shows what goes into it.
 problem-key-unknown = There is no key “{ $key }” in [{ $table }].
-    .remedy = Did you mean “{ $nearest }”?
+    .remedy = { $near ->
+        [0] Known here: { $choices }.
+       *[other] Did you mean “{ $nearest }”?
+    }
 problem-key-unit = “{ $key }” does not say a unit that fits.
     .remedy = Write one of these: { $choices }.
 problem-two-units = “{ $key }” and “{ $other }” say the same thing twice.
@@ -78,7 +86,10 @@ problem-list-short = “{ $key }” needs two values at least.
     .remedy = Add the missing values.
 problem-number-range = “{ $key }” is { $value }. It must be between { $least } and { $most }.
     .remedy = Check the number, its sign and its unit.
-problem-choice = “{ $value }” is not known for “{ $key }”. Did you mean “{ $nearest }”?
+problem-choice = { $near ->
+        [0] “{ $value }” is not known for “{ $key }”.
+       *[other] “{ $value }” is not known for “{ $key }”. Did you mean “{ $nearest }”?
+    }
     .remedy = Write one of these: { $choices }.
 problem-not-rising = “{ $key }” does not rise: this value is not above the one before it.
     .remedy = List the values from low to high, each once.
@@ -103,7 +114,10 @@ problem-same-key = The key “{ $key }” is here twice.
 
 ## Days and years
 
-problem-month = “{ $value }” is not a month, in “{ $key }”. Did you mean “{ $nearest }”?
+problem-month = { $near ->
+        [0] “{ $value }” is not a month, in “{ $key }”.
+       *[other] “{ $value }” is not a month, in “{ $key }”. Did you mean “{ $nearest }”?
+    }
     .remedy = Write a month's name, or its number from 1 to 12.
 problem-month-day = “{ $key }” must be a month and a day.
     .remedy = Write the month first, in quotation marks: "04-15" is April 15.
@@ -115,7 +129,10 @@ problem-right-date = “{ $key }” is not a date that a right can have.
     .remedy = Write a year (1905), a date (1905-05-14) or "before_all".
 problem-date-twice = “{ $key }” has the same day twice.
     .remedy = Give each day once.
-problem-years = “{ $value }” does not say which years. Did you mean “{ $nearest }”?
+problem-years = { $near ->
+        [0] “{ $value }” does not say which years.
+       *[other] “{ $value }” does not say which years. Did you mean “{ $nearest }”?
+    }
     .remedy = Write "all", "dry", "middling", "wet", a year ("2012") or some years ("2011..2014").
 
 ## The valley and its station
@@ -200,7 +217,10 @@ problem-too-many-gates = There are { $found } canals and towns. At most { $most 
 problem-too-many-fields = This canal has { $found } fields. At most { $most } fit.
     .remedy = Join fields with the same crop and the same way of watering.
 problem-gate-unknown = No canal or town has the key “{ $value }”.
-    .remedy = Did you mean “{ $nearest }”?
+    .remedy = { $near ->
+        [0] Known here: { $choices }.
+       *[other] Did you mean “{ $nearest }”?
+    }
 problem-right-twice = The right of “{ $key }” is here and in the list of rights.
     .remedy = Keep one of the two.
 problem-right-too-large = The right of “{ $key }” ({ $rate } m³/s) is { $times } times what its canal can carry ({ $capacity } m³/s).
@@ -241,7 +261,10 @@ problem-loss-too-large = The canal would lose { $lost } m³/s of the { $capacity
 
 ## Fields and crops
 
-problem-crop-unknown = There is no crop “{ $value }”. Did you mean “{ $nearest }”?
+problem-crop-unknown = { $near ->
+        [0] There is no crop “{ $value }”.
+       *[other] There is no crop “{ $value }”. Did you mean “{ $nearest }”?
+    }
     .remedy = Use a crop of the table, or describe your own as a [[crop]].
 problem-crop-stages = A crop needs four stages, of 1 to 366 days in all. This one has { $found } and { $total } days.
     .remedy = Write the days of start, growth, middle and end: [20, 35, 50, 30].
@@ -253,7 +276,10 @@ problem-swap-absent = No field grows “{ $value }”, which the crop mix is to 
 ## Dials
 
 problem-dial-unknown = There is no dial “{ $key }”.
-    .remedy = Did you mean “{ $nearest }”?
+    .remedy = { $near ->
+        [0] Known here: { $choices }.
+       *[other] Did you mean “{ $nearest }”?
+    }
 problem-dial-form = “{ $dial }” needs a range, or to be hidden.
     .remedy = Write least = … and most = … in braces, or "hidden".
 problem-dial-range = The range of “{ $dial }”, { $least } to { $most }, does not hold 0, where the dial rests.
@@ -271,7 +297,10 @@ problem-row-length = { $found ->
     }
     .remedy = Give each row as many cells as the header.
 problem-column-unknown = There is no column “{ $key }” in this table.
-    .remedy = Did you mean “{ $nearest }”?
+    .remedy = { $near ->
+        [0] Known here: { $choices }.
+       *[other] Did you mean “{ $nearest }”?
+    }
 problem-column-missing = The table has no column “{ $key }”.
     .remedy = Add it to the header and to each row.
 problem-cell-empty = The cell “{ $key }” of this row is empty.

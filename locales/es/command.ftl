@@ -9,7 +9,7 @@ help-arguments = Qué se le da
 help-options = Opciones
 help-default = si no se indica: { $value }
 help-tell = Para ver en números lo que resulta, sin cambios y con sus cambios.
-help-check = Para revisar lugares, combinaciones y lecciones, renglón por renglón.
+help-check = Para revisar lugares, combinaciones, lecciones y archivos de placa, renglón por renglón.
 help-weather = Para hacer un registro largo del tiempo, o alargar uno corto.
 help-help = Esta ayuda.
 help-version = La versión del programa.
@@ -24,7 +24,7 @@ help-units = Unidades para la gente: metric (métricas) o us (de Estados Unidos)
 help-lang = Idioma: en, es, o una etiqueta completa como es-MX.
 help-locales = Una carpeta con más idiomas.
 help-out = El archivo donde queda la respuesta, en lugar de la pantalla.
-help-paths = Qué revisar: carpetas de lugares, combinaciones o lecciones.
+help-paths = Qué revisar: carpetas de lugares, combinaciones, lecciones o archivos de placa.
 help-seed = El número con que empieza el azar. Con el mismo número sale el mismo tiempo.
 help-length = Cuántos años hacer.
 help-from = El primer año de agua que se hace, con cuatro cifras.
@@ -84,7 +84,7 @@ check-notes = { $n ->
     [one] { $path }: { $n } nota.
    *[other] { $path }: { $n } notas.
 }
-check-not-known = { $path } no es un lugar, ni una combinación, ni una lección; no hay qué revisar.
+check-not-known = { $path } no es un lugar, ni una combinación, ni una lección, ni el archivo de una placa; no hay qué revisar.
 
 ## weather
 

@@ -4,20 +4,35 @@ problem-lesson-long = Una lección tiene { $most } pasos cuando mucho, y este ya
     .remedy = Haga dos lecciones.
 problem-lesson-text-long = «{ $key }» tiene { $letters } letras en «{ $language }». En la pantalla caben { $most }.
     .remedy = Dígalo con menos palabras, o en dos pasos.
-problem-lesson-year = El registro no tiene el año «{ $value }». ¿Quiso decir «{ $nearest }»?
+problem-lesson-year = { $near ->
+        [0] El registro no tiene el año «{ $value }».
+       *[other] El registro no tiene el año «{ $value }». ¿Quiso decir «{ $nearest }»?
+    }
     .remedy = Escriba "dry" (seco), "middling" (regular), "wet" (húmedo), "driest" (el más seco), "wettest" (el más húmedo) o un año hidrológico entre { $first } y { $last }.
 problem-lesson-dial-absent = Este lugar no tiene la perilla «{ $dial }»; aquí no se puede mostrar este paso.
     .remedy = Quite el paso, o use la lección con un lugar que tenga esa perilla.
 problem-lesson-dial-outside = La perilla «{ $dial }» está en { $value }, pero este paso solo permite entre { $least } y { $most }.
     .remedy = Póngala dentro de esos límites, o amplíelos.
 problem-lesson-sign = No hay ninguna señal «{ $value }» que leer.
-    .remedy = ¿Quiso decir «{ $nearest }»?
+    .remedy = { $near ->
+        [0] Aquí se conocen: { $choices }.
+       *[other] ¿Quiso decir «{ $nearest }»?
+    }
 problem-lesson-canal-sign = Los canales no tienen ninguna señal «{ $value }».
-    .remedy = ¿Quiso decir «{ $nearest }»?
+    .remedy = { $near ->
+        [0] Aquí se conocen: { $choices }.
+       *[other] ¿Quiso decir «{ $nearest }»?
+    }
 problem-lesson-canal = Este lugar no tiene ningún canal «{ $value }».
-    .remedy = Escriba "oldest" (el más antiguo), "newest" (el más reciente), "town" (el pueblo) o la clave de un canal. ¿Quiso decir «{ $nearest }»?
+    .remedy = { $near ->
+        [0] Escriba "oldest" (el más antiguo), "newest" (el más reciente), "town" (el pueblo) o la clave de un canal.
+       *[other] Escriba "oldest" (el más antiguo), "newest" (el más reciente), "town" (el pueblo) o la clave de un canal. ¿Quiso decir «{ $nearest }»?
+    }
 problem-lesson-step-unknown = Ningún paso tiene la clave «{ $key }».
-    .remedy = ¿Quiso decir «{ $nearest }»? Con "end" se termina la lección.
+    .remedy = { $near ->
+        [0] Aquí se conocen: { $choices }. Con "end" se termina la lección.
+       *[other] ¿Quiso decir «{ $nearest }»? Con "end" se termina la lección.
+    }
 problem-lesson-step-back = El paso «{ $key }» no viene después, y una lección solo va hacia adelante.
     .remedy = Nombre un paso que esté más abajo en el archivo.
 problem-lesson-unreachable = Ningún paso lleva a «{ $key }»: nadie lo va a ver.

@@ -3,14 +3,14 @@
 lesson-step = Paso { $step } de { $steps }
 lesson-guess-first = Primero, adivine.
 lesson-group = Grupo { $group }
-lesson-needs-guess = Falta una respuesta. Gire y oprima, o mantenga oprimido para seguir sin ella.
+lesson-needs-guess = Falta una respuesta. Gire y presione.
 lesson-closed = El resultado ya se vio; no se admiten más respuestas.
 lesson-skipped = Siguió sin responder.
 lesson-over = Aquí termina la lección. Gracias.
 lesson-result = El modelo dice
 lesson-usual = Muchos dicen
 lesson-word = Su palabra:
-lesson-word-wrong = Esa palabra no va aquí. Léala otra vez, letra por letra.
+lesson-word-wrong = Esa palabra no va aquí. Léala otra vez.
 
 ## Señales que leen las lecciones
 

@@ -13,6 +13,8 @@ problem-file-unreadable = No se puede abrir el archivo «{ $file }».
     .remedy = Revise que usted tenga permiso de leerlo y que otro programa no lo tenga abierto.
 problem-file-no-file = «{ $file }» no es un archivo.
     .remedy = Escriba el nombre de un archivo, no el de una carpeta ni el de un aparato.
+problem-utf16 = Este texto está guardado con dos bytes por letra (UTF-16).
+    .remedy = En su editor de texto elija «Guardar como» y ahí la codificación UTF-8.
 problem-not-utf8 = Aquí hay una letra que no está en UTF-8.
     .remedy = Guarde el archivo como UTF-8.
 
@@ -31,11 +33,17 @@ problem-bracket = Aquí se abre un corchete y no se cierra.
 problem-key-twice = «{ $key }» está dos veces.
     .remedy = Deje una de las dos.
 problem-table-unknown = Este archivo no tiene una parte llamada «{ $key }».
-    .remedy = ¿Quiso decir «{ $nearest }»?
+    .remedy = { $near ->
+        [0] Aquí se conocen: { $choices }.
+       *[other] ¿Quiso decir «{ $nearest }»?
+    }
 problem-table-missing = Falta la tabla [{ $table }].
     .remedy = Agréguela. PLACE.md muestra lo que lleva.
 problem-key-unknown = En [{ $table }] no existe la clave «{ $key }».
-    .remedy = ¿Quiso decir «{ $nearest }»?
+    .remedy = { $near ->
+        [0] Aquí se conocen: { $choices }.
+       *[other] ¿Quiso decir «{ $nearest }»?
+    }
 problem-key-unit = «{ $key }» no dice una unidad que sirva.
     .remedy = Escriba una de estas: { $choices }.
 problem-two-units = «{ $key }» y «{ $other }» dicen lo mismo dos veces.
@@ -78,7 +86,10 @@ problem-list-short = «{ $key }» lleva por lo menos dos valores.
     .remedy = Agregue los valores que faltan.
 problem-number-range = «{ $key }» vale { $value }. Debe estar entre { $least } y { $most }.
     .remedy = Revise el número, su signo y su unidad.
-problem-choice = «{ $value }» no se conoce para «{ $key }». ¿Quiso decir «{ $nearest }»?
+problem-choice = { $near ->
+        [0] «{ $value }» no se conoce para «{ $key }».
+       *[other] «{ $value }» no se conoce para «{ $key }». ¿Quiso decir «{ $nearest }»?
+    }
     .remedy = Escriba una de estas palabras: { $choices }.
 problem-not-rising = «{ $key }» no va subiendo: este valor no es mayor que el anterior.
     .remedy = Ponga los valores de menor a mayor, cada uno una sola vez.
@@ -103,7 +114,10 @@ problem-same-key = La clave «{ $key }» está dos veces.
 
 ## Días y años
 
-problem-month = «{ $value }» no es un mes, en «{ $key }». ¿Quiso decir «{ $nearest }»?
+problem-month = { $near ->
+        [0] «{ $value }» no es un mes, en «{ $key }».
+       *[other] «{ $value }» no es un mes, en «{ $key }». ¿Quiso decir «{ $nearest }»?
+    }
     .remedy = Escriba el nombre del mes o su número, de 1 a 12.
 problem-month-day = «{ $key }» debe ser un mes y un día.
     .remedy = Escriba primero el mes, entre comillas: "04-15" es el 15 de abril.
@@ -115,7 +129,10 @@ problem-right-date = «{ $key }» no es una fecha que un derecho pueda tener.
     .remedy = Escriba un año (1905), una fecha (1905-05-14) o "before_all".
 problem-date-twice = «{ $key }» tiene el mismo día dos veces.
     .remedy = Ponga cada día una sola vez.
-problem-years = «{ $value }» no dice qué años. ¿Quiso decir «{ $nearest }»?
+problem-years = { $near ->
+        [0] «{ $value }» no dice qué años.
+       *[other] «{ $value }» no dice qué años. ¿Quiso decir «{ $nearest }»?
+    }
     .remedy = Escriba "all", "dry", "middling", "wet", un año ("2012") o varios ("2011..2014").
 
 ## El valle y su estación
@@ -200,7 +217,10 @@ problem-too-many-gates = Hay { $found } canales y pueblos. Caben { $most } como 
 problem-too-many-fields = Este canal tiene { $found } parcelas. Caben { $most } como máximo.
     .remedy = Junte las parcelas con el mismo cultivo y la misma forma de riego.
 problem-gate-unknown = Ningún canal ni pueblo tiene la clave «{ $value }».
-    .remedy = ¿Quiso decir «{ $nearest }»?
+    .remedy = { $near ->
+        [0] Aquí se conocen: { $choices }.
+       *[other] ¿Quiso decir «{ $nearest }»?
+    }
 problem-right-twice = El derecho de «{ $key }» está aquí y también en la lista de derechos.
     .remedy = Déjelo en un solo lugar.
 problem-right-too-large = El derecho de «{ $key }» ({ $rate } m³/s) es { $times } veces lo que cabe en su canal ({ $capacity } m³/s).
@@ -241,7 +261,10 @@ problem-loss-too-large = El canal perdería { $lost } m³/s de los { $capacity }
 
 ## Parcelas y cultivos
 
-problem-crop-unknown = No hay un cultivo «{ $value }». ¿Quiso decir «{ $nearest }»?
+problem-crop-unknown = { $near ->
+        [0] No hay un cultivo «{ $value }».
+       *[other] No hay un cultivo «{ $value }». ¿Quiso decir «{ $nearest }»?
+    }
     .remedy = Use un cultivo de la tabla, o describa el suyo en [[crop]].
 problem-crop-stages = Un cultivo lleva cuatro etapas, de 1 a 366 días en total. Este tiene { $found } y { $total } días.
     .remedy = Escriba los días de inicio, crecimiento, mitad y final: [20, 35, 50, 30].
@@ -253,7 +276,10 @@ problem-swap-absent = Ninguna parcela tiene «{ $value }», el cultivo que se ib
 ## Perillas
 
 problem-dial-unknown = No hay una perilla «{ $key }».
-    .remedy = ¿Quiso decir «{ $nearest }»?
+    .remedy = { $near ->
+        [0] Aquí se conocen: { $choices }.
+       *[other] ¿Quiso decir «{ $nearest }»?
+    }
 problem-dial-form = «{ $dial }» lleva un rango, o va escondida.
     .remedy = Escriba least = … y most = … entre llaves, o "hidden".
 problem-dial-range = El rango de «{ $dial }», de { $least } a { $most }, no incluye el 0, donde la perilla descansa.
@@ -271,7 +297,10 @@ problem-row-length = { $found ->
     }
     .remedy = Ponga en cada fila tantas celdas como en el encabezado.
 problem-column-unknown = En esta tabla no hay una columna «{ $key }».
-    .remedy = ¿Quiso decir «{ $nearest }»?
+    .remedy = { $near ->
+        [0] Aquí se conocen: { $choices }.
+       *[other] ¿Quiso decir «{ $nearest }»?
+    }
 problem-column-missing = A la tabla le falta la columna «{ $key }».
     .remedy = Agréguela al encabezado y a cada fila.
 problem-cell-empty = La celda «{ $key }» de esta fila está vacía.

@@ -4,6 +4,9 @@ use std::str::FromStr;
 
 use super::surroundings::{Surroundings, TerminalChance, WindowChance};
 
+/// Whether this build can show on panels and framebuffers.
+pub const BOARD_BUILT: bool = cfg!(all(feature = "board", target_os = "linux"));
+
 /// A kind of screen, by the name that people give it.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, Hash)]
 pub enum ScreenKind {
@@ -77,6 +80,8 @@ pub enum Why {
     PlainTerminal,
     /// This build knows nothing of panels and framebuffers.
     BoardNotBuilt,
+    /// Nobody said how the panel is wired.
+    NoBoardFile,
 }
 
 impl Why {
@@ -92,6 +97,7 @@ impl Why {
             Self::NoTerminal => "show-why-no-terminal",
             Self::PlainTerminal => "show-why-plain-terminal",
             Self::BoardNotBuilt => "show-why-board-not-built",
+            Self::NoBoardFile => "show-why-no-board-file",
         }
     }
 }
@@ -99,6 +105,7 @@ impl Why {
 /// The best screen at hand: what the board file names, else a window, else the terminal, else pictures.
 pub fn choose(around: &Surroundings) -> Choice {
     if let Some(&kind) = around.board_file.first() {
+        // Whether it can be had or not: nobody looks for a window on a board.
         return Choice { kind, why: Why::BoardFile };
     }
     let no_window = match around.window {
@@ -121,7 +128,9 @@ pub fn choose(around: &Surroundings) -> Choice {
 /// Why not.
 pub fn can_show(kind: ScreenKind, around: &Surroundings) -> Result<(), Why> {
     match kind {
-        ScreenKind::Panel | ScreenKind::Framebuffer => Err(Why::BoardNotBuilt),
+        ScreenKind::Panel | ScreenKind::Framebuffer if !BOARD_BUILT => Err(Why::BoardNotBuilt),
+        ScreenKind::Panel if !around.board_file.contains(&kind) => Err(Why::NoBoardFile),
+        ScreenKind::Panel | ScreenKind::Framebuffer => Ok(()),
         ScreenKind::Window => match around.window {
             WindowChance::Ready => Ok(()),
             WindowChance::NoDesktop => Err(Why::NoDesktop),
@@ -154,7 +163,9 @@ mod tests {
             for terminal in [T::Ready, T::Plain, T::Missing] {
                 let around = around(window, terminal);
                 let choice = choose(&around);
-                let best = ScreenKind::ALL.into_iter().find(|&kind| can_show(kind, &around).is_ok());
+                let asked_for = [ScreenKind::Panel, ScreenKind::Framebuffer];
+                let mut kinds = ScreenKind::ALL.into_iter().filter(|kind| !asked_for.contains(kind));
+                let best = kinds.find(|&kind| can_show(kind, &around).is_ok());
                 assert_eq!(Some(choice.kind), best, "{around:?}");
             }
         }
@@ -167,6 +178,10 @@ mod tests {
         let mut around = around(WindowChance::Ready, TerminalChance::Ready);
         around.board_file = vec![ScreenKind::Panel, ScreenKind::Framebuffer];
         assert_eq!(choose(&around), Choice { kind: ScreenKind::Panel, why: Why::BoardFile });
+        assert_eq!(can_show(ScreenKind::Panel, &around).is_ok(), BOARD_BUILT);
+        around.board_file.clear();
+        let without = if BOARD_BUILT { Why::NoBoardFile } else { Why::BoardNotBuilt };
+        assert_eq!(can_show(ScreenKind::Panel, &around), Err(without));
     }
 
     #[test]

@@ -8,6 +8,7 @@ use embedded_graphics::primitives::Rectangle;
 
 use super::choose::ScreenKind;
 use super::hands::HandEvent;
+use super::light::Light;
 use super::size::FrameSize;
 use crate::picture::{TextMark, Witness};
 
@@ -73,6 +74,11 @@ pub trait Instrument {
 
     /// What is said around the picture.
     fn caption(&self) -> Caption<'_>;
+
+    /// How bright the screens shall be.
+    fn light(&self) -> Light {
+        Light::Full
+    }
 }
 
 /// Something that shows frames.
@@ -101,6 +107,22 @@ pub trait Screen {
     fn caption(&mut self, caption: &Caption<'_>) -> Result<(), ScreenError> {
         let _ = caption;
         Ok(())
+    }
+
+    /// Takes another brightness, where it can have one. `true` where it has lost what it showed.
+    fn light(&mut self, light: Light) -> bool {
+        let _ = light;
+        false
+    }
+
+    /// How often [`Screen::tend`] wants to be called; `None` for screens that look after themselves.
+    fn wants_tending(&self) -> Option<Duration> {
+        None
+    }
+
+    /// Looks whether it is still there, or there again. `true` where it has lost what it showed.
+    fn tend(&mut self) -> bool {
+        false
     }
 }
 

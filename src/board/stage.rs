@@ -7,6 +7,7 @@ use embedded_graphics::pixelcolor::Rgb565;
 use embedded_graphics::primitives::Rectangle;
 
 use super::hands::HandEvent;
+use super::light::Light;
 use super::screen::{Caption, Instrument, Screen, ScreenError};
 use super::size::FrameSize;
 use crate::picture::changes::changes;
@@ -28,6 +29,9 @@ struct Outlet {
     spoilt: bool,
     /// Title, hint and notice as the screen has them.
     said: [String; 3],
+    light: Light,
+    /// When it was last tended.
+    tended: Instant,
 }
 
 impl<I: Instrument> Stage<I> {
@@ -41,7 +45,8 @@ impl<I: Instrument> Stage<I> {
     pub fn add(&mut self, screen: Box<dyn Screen>) -> usize {
         let size = screen.size();
         let said = Default::default();
-        self.outlets.push(Outlet { screen, shown: Vec::new(), size, spoilt: true, said });
+        let (shown, light, tended) = (Vec::new(), Light::Full, Instant::now());
+        self.outlets.push(Outlet { screen, shown, size, spoilt: true, said, light, tended });
         self.outlets.len() - 1
     }
 
@@ -61,17 +66,22 @@ impl<I: Instrument> Stage<I> {
         }
     }
 
-    /// Passes on the time that went by.
+    /// Passes on the time that went by, and tends the screens that are due.
     pub fn tick(&mut self) {
         let now = Instant::now();
+        self.outlets.iter_mut().filter(|outlet| outlet.due().is_some_and(|due| due <= now)).for_each(|outlet| {
+            outlet.tended = now;
+            outlet.spoilt |= outlet.screen.tend();
+        });
         self.ticked = now;
         self.tell_time(now);
     }
 
-    /// When [`Stage::tick`] should be called next, or `None` while nothing moves.
+    /// When [`Stage::tick`] should be called next, or `None` while nothing moves and no screen wants tending.
     pub fn next_tick(&self) -> Option<Instant> {
-        let period = self.instrument.wants_tick()?;
-        self.ticked.checked_add(period)
+        let moves = self.instrument.wants_tick().and_then(|period| self.ticked.checked_add(period));
+        let tending = self.outlets.iter().filter_map(Outlet::due).min();
+        moves.into_iter().chain(tending).min()
     }
 
     /// Whether it is over.
@@ -93,6 +103,7 @@ impl<I: Instrument> Stage<I> {
     pub fn refresh(&mut self) -> Result<(), ScreenError> {
         for outlet in &mut self.outlets {
             outlet.tell(&self.instrument.caption())?;
+            outlet.shine(self.instrument.light());
             outlet.refresh(&mut self.instrument)?;
         }
         Ok(())
@@ -128,6 +139,18 @@ impl Outlet {
         self.shown.clear();
         self.shown.extend_from_slice(frame.pixels);
         Ok(())
+    }
+
+    /// When the screen wants to be tended next.
+    fn due(&self) -> Option<Instant> {
+        self.tended.checked_add(self.screen.wants_tending()?)
+    }
+
+    fn shine(&mut self, light: Light) {
+        if self.light != light {
+            self.light = light;
+            self.spoilt |= self.screen.light(light);
+        }
     }
 
     fn tell(&mut self, caption: &Caption<'_>) -> Result<(), ScreenError> {

@@ -28,7 +28,10 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(tell(words))
         .subcommand(check(words))
         .subcommand(map(words))
+        .subcommand(rehearse(words))
         .subcommand(weather(words))
+        .subcommand(tally(words))
+        .subcommand(super::place::line::command(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
 }
@@ -40,8 +43,14 @@ fn show(words: &Words) -> Command {
         .arg(text("screen", "value-screen", "help-screen", words).action(ArgAction::Append))
         .arg(text("size", "value-size", "help-size", words))
         .arg(path_option("into", "value-folder", "help-show-into", words))
+        .arg(path_option("board", "value-file", "help-board", words))
+        .arg(path_option("lesson", "value-lesson", "help-lesson", words))
+        .arg(text("groups", "value-number", "help-groups", words))
         .arg(text("units", "value-units", "help-units", words))
         .arg(text("theme", "value-theme", "help-theme", words).help(with_usual("help-theme", "light", words)))
+        .arg(flag("kiosk", "help-kiosk", words))
+        .arg(path_option("keep", "value-folder", "help-keep", words))
+        .arg(flag("set-pin", "help-set-pin", words))
         .args(common(words))
 }
 
@@ -93,6 +102,19 @@ fn map(words: &Words) -> Command {
         .after_help(say("help-map-more"))
 }
 
+fn rehearse(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("rehearse", "help-usage-rehearse", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(path_option("lesson", "value-lesson", "help-lesson", words))
+        .arg(path_option("steps", "value-file", "help-steps", words))
+        .arg(path_option("into", "value-folder", "help-rehearse-into", words))
+        .arg(text("size", "value-size", "help-size", words).help(with_usual("help-size", "800x480", words)))
+        .arg(text("groups", "value-number", "help-groups", words).help(with_usual("help-groups", "4", words)))
+        .args(common(words))
+        .after_help(words.say("help-rehearse-more", &[]))
+}
+
 fn weather(words: &Words) -> Command {
     subcommand("weather", "help-usage-weather", words)
         .arg(path("place", "value-place", "help-weather-place", words).required(false))
@@ -102,6 +124,16 @@ fn weather(words: &Words) -> Command {
         .arg(text("seed", "value-number", "help-seed", words).help(with_usual("help-seed", "1", words)))
         .arg(path_option("out", "value-file", "help-out", words))
         .arg(path_option("recipe-out", "value-file", "help-recipe-out", words))
+        .args(common(words))
+}
+
+fn tally(words: &Words) -> Command {
+    subcommand("tally", "help-usage-tally", words)
+        .arg(text("from", "value-date", "help-tally-from", words))
+        .arg(text("to", "value-date", "help-tally-to", words))
+        .arg(text("form", "value-form", "help-tally-form", words).help(with_usual("help-tally-form", "table", words)))
+        .arg(path_option("keep", "value-folder", "help-keep", words))
+        .arg(path_option("out", "value-file", "help-out", words))
         .args(common(words))
 }
 
@@ -119,7 +151,7 @@ fn subcommand(name: &'static str, usage_id: &str, words: &Words) -> Command {
     plain(Command::new(name), words).about(about).help_template(template)
 }
 
-fn plain(command: Command, words: &Words) -> Command {
+pub(super) fn plain(command: Command, words: &Words) -> Command {
     command
         .color(ColorChoice::Never)
         .styles(Styles::plain())
@@ -130,7 +162,7 @@ fn plain(command: Command, words: &Words) -> Command {
 }
 
 /// What every command takes.
-fn common(words: &Words) -> [Arg; 2] {
+pub(super) fn common(words: &Words) -> [Arg; 2] {
     [text("lang", "value-lang", "help-lang", words), path_option("locales", "value-folder", "help-locales", words)]
 }
 
@@ -139,21 +171,21 @@ fn with_usual(help_id: &str, usual: &str, words: &Words) -> String {
     format!("{} [{default}]", words.say(help_id, &[]))
 }
 
-fn text(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+pub(super) fn text(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
     let arg = Arg::new(name).long(name).value_name(words.say(value_id, &[])).help(words.say(help_id, &[]));
     arg.value_parser(StringValueParser::new()).action(ArgAction::Set).allow_negative_numbers(true)
 }
 
-fn path(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+pub(super) fn path(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
     let arg = Arg::new(name).value_name(words.say(value_id, &[])).help(words.say(help_id, &[]));
     arg.value_parser(PathBufValueParser::new())
 }
 
-fn path_option(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
+pub(super) fn path_option(name: &'static str, value_id: &str, help_id: &str, words: &Words) -> Arg {
     path(name, value_id, help_id, words).long(name).action(ArgAction::Set)
 }
 
-fn flag(name: &'static str, help_id: &str, words: &Words) -> Arg {
+pub(super) fn flag(name: &'static str, help_id: &str, words: &Words) -> Arg {
     Arg::new(name).long(name).action(ArgAction::SetTrue).help(words.say(help_id, &[]))
 }
 

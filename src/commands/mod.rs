@@ -6,16 +6,20 @@
 mod built_in;
 mod check;
 mod failure;
+mod keep_folder;
 mod line;
 mod map;
 mod output;
+mod place;
 mod places;
 mod problem_words;
+mod rehearse;
 mod settings;
 mod show;
 mod snippets;
 mod speech;
 mod spinner;
+mod tally;
 mod tell;
 mod usage;
 mod weather;
@@ -56,7 +60,10 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("check", matches)) => check::run(speech, matches),
         Some(("show", matches)) => show::run(speech, matches),
         Some(("map", matches)) => map::run(speech, matches),
+        Some(("rehearse", matches)) => rehearse::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        Some(("tally", matches)) => tally::run(speech, matches),
+        Some(("place", matches)) => place::run(speech, matches),
         _ => show::usual(speech),
     }
 }

@@ -5,10 +5,14 @@ use std::path::PathBuf;
 
 use super::failure::Failure;
 use super::tell_standard_error;
-use crate::words::{Fallback, Locales, Words};
+use crate::board::file::read_board;
+use crate::words::{Fallback, KNOWN_TAGS, Locales, Words};
 
 /// More faults of a locale folder than this help nobody.
 const MOST_LOCALE_FAULTS: usize = 20;
+
+/// A board file is a page of text; nothing near this size is one.
+const MOST_BOARD_BYTES: u64 = 1 << 20;
 
 /// The language of this call.
 pub(super) struct Speech {
@@ -21,14 +25,14 @@ pub(super) struct Speech {
 }
 
 impl Speech {
-    /// Settles on a language: `--lang`, else what the system says where there are words for it, else English.
+    /// Settles on a language: `--lang`, else what a board file says, else what the system says where there are words for it, else English.
     pub fn choose(arguments: &[OsString]) -> Self {
         let mut locales = Locales::embedded();
         let folder = value_of("--locales", arguments).map(PathBuf::from);
         let faults = folder.map(|folder| locales.add_directory(&folder)).unwrap_or_default();
         let asked = match value_of("--lang", arguments) {
             Some(tag) => tag.to_string_lossy().into_owned(),
-            None => of_the_system(&locales).unwrap_or_else(|| "en".to_owned()),
+            None => of_the_board(arguments).or_else(|| of_the_system(&locales)).unwrap_or_else(|| "en".to_owned()),
         };
         let (words, fallback) = locales.words(&asked, None);
         let mut locale_faults: Vec<String> =
@@ -75,6 +79,14 @@ fn value_of(option: &str, arguments: &[OsString]) -> Option<OsString> {
         }
     }
     None
+}
+
+/// The language that a board file starts with. What is wrong with the file is told later, by whoever needs it.
+fn of_the_board(arguments: &[OsString]) -> Option<String> {
+    let file = PathBuf::from(value_of("--board", arguments)?);
+    let size = std::fs::metadata(&file).ok().filter(std::fs::Metadata::is_file)?.len();
+    let text = (size <= MOST_BOARD_BYTES).then(|| std::fs::read_to_string(&file).ok()).flatten()?;
+    read_board(&file, &text, &KNOWN_TAGS).board?.start.language
 }
 
 /// The system's language, where there are words for it; `C` and the like are no language.

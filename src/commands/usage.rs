@@ -42,7 +42,8 @@ fn say(error: &clap::Error, command: &Command, inside: &Command, words: &Words) 
     match error.kind() {
         ErrorKind::InvalidSubcommand => {
             let asked = context(error, ContextKind::InvalidSubcommand);
-            let known: Vec<&str> = command.get_subcommands().map(Command::get_name).collect();
+            let among = if inside.has_subcommands() { inside } else { command };
+            let known: Vec<&str> = among.get_subcommands().map(Command::get_name).collect();
             let ids = ["error-command-unknown", "error-command-unknown-nearest"];
             unknown(ids, "command", &asked, nearest(&asked, known), words)
         }

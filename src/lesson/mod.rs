@@ -67,4 +67,4 @@ pub use script::{
 pub use shipped::lessons;
 pub use spread::{GuessSpread, guess_spread};
 pub use waters::Waters;
-pub use word::{WORD_LETTERS, WordFault, guess_of_word, word_of_guess};
+pub use word::{WORD_LETTERS, WordFault, guess_of_word, word_letter, word_letters, word_of_guess};

@@ -5,7 +5,7 @@ use super::script::{Lesson, MOST_NAME, MOST_PROMPT, MOST_STEPS, Step};
 use super::waters::Waters;
 use crate::place::Text;
 use crate::place::problem::{Location, Problem};
-use crate::place::section::{Limits, Section, nearest};
+use crate::place::section::{Limits, Section};
 use crate::place::text::need_names;
 use crate::place::unit_suffix::PLAIN;
 use crate::water::calendar::{CalendarDay, MonthDay};
@@ -111,7 +111,7 @@ fn later_step(keys: &[String], index: usize, key: &str, at: &Location, root: &Se
         Some(_) => root.sheet.tell(problem("problem-lesson-step-back")),
         None => {
             let later = keys.iter().skip(index + 1).cloned().chain([END.to_owned()]);
-            root.sheet.tell(problem("problem-lesson-step-unknown").with("nearest", nearest(key, later)));
+            root.sheet.tell(problem("problem-lesson-step-unknown").with_nearest(key, later));
         }
     }
     None

@@ -9,7 +9,7 @@ use super::waters::Waters;
 use crate::place::dated::month_day;
 use crate::place::dial_plan::unknown_dial;
 use crate::place::problem::{Location, Problem};
-use crate::place::section::{Limits, Section, nearest};
+use crate::place::section::{Limits, Section};
 use crate::place::tree::{Entry, Kind};
 use crate::place::unit_suffix::PLAIN;
 use crate::place::{DialOffer, DialPlan};
@@ -116,9 +116,8 @@ fn year(section: &Section<'_>, years: &[YearReport]) -> usize {
     found.unwrap_or_else(|| {
         let (first, last) = (years.first(), years.last());
         let edge = |report: Option<&YearReport>| report.map_or(0.0, |report| f64::from(report.year.water_year));
-        let near = nearest(&word, KINDS.iter().map(|kind| (*kind).to_owned()));
-        let told = Problem::error(section.value_at(value), "problem-lesson-year").with("value", word);
-        section.sheet.tell(told.with("nearest", near).with("first", edge(first)).with("last", edge(last)));
+        let told = Problem::error(section.value_at(value), "problem-lesson-year").with_nearest(&word, KINDS);
+        section.sheet.tell(told.with("value", word).with("first", edge(first)).with("last", edge(last)));
         0
     })
 }
@@ -274,9 +273,8 @@ fn reading(part: &Section<'_>, around: &Around<'_, '_>) -> Option<Reading> {
         None => Sign::ALL.map(Sign::key).into_iter().chain(LessonSign::ALL.map(LessonSign::key)).collect(),
     };
     if !known.contains(&word) {
-        let near = nearest(word, known.iter().map(|key| (*key).to_owned()));
         let message = if canal.is_some() { "problem-lesson-canal-sign" } else { "problem-lesson-sign" };
-        part.sheet.tell(Problem::error(at, message).with("value", word).with("nearest", near));
+        part.sheet.tell(Problem::error(at, message).with("value", word).with_nearest(word, known));
         return None;
     }
     let measure = match canal {
@@ -306,9 +304,8 @@ fn gate(part: &Section<'_>, word: &str, at: &Location, around: &Around<'_, '_>) 
     };
     if found.is_none() {
         let keys = around.waters.place().gates.iter().map(|names| names.key.clone());
-        let near = nearest(word, keys.chain(["oldest", "newest"].map(str::to_owned)));
         let told = Problem::error(at.clone(), "problem-lesson-canal").with("value", word);
-        part.sheet.tell(told.with("nearest", near));
+        part.sheet.tell(told.with_nearest(word, keys.chain(["oldest", "newest"].map(str::to_owned))));
     }
     found
 }

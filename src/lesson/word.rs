@@ -42,6 +42,22 @@ pub enum WordFault {
 const _: () = assert!(MOST_GUESS_STOPS * MOST_STEPS * MOST_GROUPS <= WORDS as usize);
 const _: () = assert!(STIR * SETTLE % WORDS as u64 == 1);
 
+/// The letters that can stand at a place of a word, counted from 0; none beyond its end.
+pub fn word_letters(place: usize) -> &'static [u8] {
+    match place {
+        0..WORD_LETTERS if place + 1 == WORD_LETTERS => CHECKS,
+        0..WORD_LETTERS if place % 2 == 0 => CONSONANTS,
+        0..WORD_LETTERS => VOWELS,
+        _ => &[],
+    }
+}
+
+/// The letter of a word that a typed letter means at a place: capitals and accents do not matter, and *b* is *v*.
+pub fn word_letter(place: usize, typed: char) -> Option<u8> {
+    let letter = plain_letter(typed);
+    word_letters(place).contains(&letter).then_some(letter)
+}
+
 /// The word of a guess in the lesson with this stamp; `None` for a guess that no lesson can have.
 pub fn word_of_guess(guess: GroupGuess, stamp: u8) -> Option<String> {
     let (stop, step, group) = (usize::from(guess.stop), usize::from(guess.step), usize::from(guess.group));

@@ -2,7 +2,7 @@
 
 use super::dated::month_day;
 use super::problem::{Location, Problem};
-use super::section::{Limits, Section, nearest};
+use super::section::{Limits, Section};
 use super::text::{Text, need_names};
 use super::unit_suffix::{METRES, PLAIN, SHARE};
 use crate::place::crop_table;
@@ -74,9 +74,9 @@ impl Crops {
             return Some(PlaceCrop { key: key.to_owned(), name: None, traits: row.traits, planting });
         }
         let known = self.own.iter().map(|crop| crop.key.clone());
-        let nearest = nearest(key, known.chain(crop_table::CROPS.iter().map(|row| row.key.to_owned())));
+        let known = known.chain(crop_table::CROPS.iter().map(|row| row.key.to_owned()));
         let problem = Problem::error(at.clone(), "problem-crop-unknown").with("value", key);
-        section.sheet.tell(problem.with("nearest", nearest));
+        section.sheet.tell(problem.with_nearest(key, known));
         None
     }
 }

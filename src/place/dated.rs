@@ -3,7 +3,7 @@
 use chrono::{Datelike, NaiveDate};
 
 use super::problem::{Location, Problem};
-use super::section::{Section, nearest};
+use super::section::Section;
 use super::tree::{Kind, Value};
 use crate::water::calendar::{MonthDay, Season};
 use crate::water::canals::PriorityDate;
@@ -42,11 +42,11 @@ pub(super) fn month(section: &Section<'_>, key: &str, value: &Value) -> Option<u
         }
         _ => String::new(),
     };
-    let names = MONTHS.iter().flat_map(|(english, spanish)| [(*english).to_owned(), (*spanish).to_owned()]);
+    let names = MONTHS.iter().flat_map(|(english, spanish)| [*english, *spanish]);
     section.sheet.tell(
         Problem::error(at, "problem-month")
             .with("key", key)
-            .with("nearest", nearest(&written.to_lowercase(), names))
+            .with_nearest(&written.to_lowercase(), names)
             .with("value", written),
     );
     None

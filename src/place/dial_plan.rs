@@ -1,7 +1,7 @@
 //! Which dials a place offers, and how far each may be turned.
 
 use super::problem::Problem;
-use super::section::{Limits, Section, nearest};
+use super::section::{Limits, Section};
 use super::tree::{Kind, Value};
 use super::unit_suffix::PLAIN;
 use crate::water::dials::{DIALS, Dial, DialRange};
@@ -82,8 +82,7 @@ pub(super) fn read(root: &Section<'_>, valley: &Valley) -> DialPlan {
 
 /// Tells that there is no such dial, with the nearest that there is.
 pub(crate) fn unknown_dial(at: super::problem::Location, key: &str) -> Problem {
-    let nearest = nearest(key, Dial::ALL.into_iter().map(|dial| dial.key().to_owned()));
-    Problem::error(at, "problem-dial-unknown").with("key", key).with("nearest", nearest)
+    Problem::error(at, "problem-dial-unknown").with("key", key).with_nearest(key, Dial::ALL.into_iter().map(Dial::key))
 }
 
 fn is_lacking(dial: Dial, valley: &Valley) -> bool {

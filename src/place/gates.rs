@@ -5,7 +5,7 @@ use super::dated::{month_day_or, priority, season, season_days};
 use super::fields::{FieldNames, ReadField, loss};
 use super::problem::{Location, Problem};
 use super::rights_file::RightsFile;
-use super::section::{Limits, Number, Section, nearest};
+use super::section::{Limits, Number, Section};
 use super::slopes::share;
 use super::text::{Text, need_names};
 use super::unit_suffix::{DAILY_M3, DAYS, FLOW_M3S, PLAIN, SHARE, VOLUME_HM3};
@@ -248,7 +248,7 @@ fn resolve_returns(root: &Section<'_>, gates: &mut [ReadGate]) {
                 None => {
                     let names = keys.iter().cloned().chain([BELOW_ALL.to_owned()]);
                     let problem = Problem::error(at.clone(), "problem-gate-unknown").with("value", name.clone());
-                    root.sheet.tell(problem.with("nearest", nearest(name, names)));
+                    root.sheet.tell(problem.with_nearest(name, names));
                     next
                 }
             },

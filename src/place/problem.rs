@@ -7,6 +7,11 @@ use std::path::PathBuf;
 
 use chrono::NaiveDate;
 
+use crate::words::nearest;
+
+/// Known names that a message repeats.
+const MOST_CHOICES: usize = 24;
+
 /// How bad a problem is.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
 pub enum Severity {
@@ -96,6 +101,26 @@ impl Problem {
     pub fn with(mut self, name: &'static str, argument: impl Into<Argument>) -> Self {
         self.arguments.push((name, argument.into()));
         self
+    }
+}
+
+impl Problem {
+    /// The same problem with the name of `known` that is nearest to `word` as `nearest`, and `near` 1; where none is near,
+    /// `near` is 0. All of them stand in `choices`, unless the problem has that already.
+    #[must_use]
+    pub fn with_nearest<N: AsRef<str>>(self, word: &str, known: impl IntoIterator<Item = N>) -> Self {
+        let names: Vec<N> = known.into_iter().collect();
+        let near = nearest(word, names.iter().map(AsRef::as_ref)).map(str::to_owned);
+        let has_choices = self.arguments.iter().any(|(name, _)| *name == "choices");
+        let told = self.with("near", usize::from(near.is_some())).with("nearest", near.unwrap_or_default());
+        if has_choices {
+            return told;
+        }
+        let mut choices: Vec<&str> = names.iter().take(MOST_CHOICES).map(AsRef::as_ref).collect();
+        if names.len() > MOST_CHOICES {
+            choices.push("…");
+        }
+        told.with("choices", choices.join(", "))
     }
 }
 

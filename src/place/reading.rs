@@ -328,9 +328,8 @@ fn diversion(section: &Section<'_>, source: Source<'_>, gates: &[ReadGate]) -> O
     let gate = section.need_text("gate").and_then(|(key, at)| {
         let found = gates.iter().position(|gate| gate.names.key == key);
         if found.is_none() {
-            let nearest = super::section::nearest(key, gates.iter().map(|gate| gate.names.key.clone()));
             let problem = Problem::error(at, "problem-gate-unknown").with("value", key);
-            section.sheet.tell(problem.with("nearest", nearest));
+            section.sheet.tell(problem.with_nearest(key, gates.iter().map(|gate| gate.names.key.as_str())));
         }
         found
     });

@@ -2,18 +2,15 @@
 
 use chrono::NaiveDate;
 
-use super::problem::{Location, Problem};
-use super::record::{
-    ColumnPlan, DateOrder, DatePlan, Encoding, GapFill, GapRule, Measure, MeasureUnit, ReadRecord, RecordPlan,
-    read_record,
-};
-use super::section::{Limits, Section, nearest, unknown_choice};
+use super::problem::Location;
+use super::record::{ColumnPlan, GapFill, GapRule, Measure, MeasureUnit, ReadRecord};
+use super::record_file::read;
+use super::section::{Limits, Section, unknown_choice};
 use super::source::Source;
-use super::tree::{Kind, Table, Value};
-use super::unit_suffix::{DAYS, PLAIN};
+use super::unit_suffix::DAYS;
 
 /// Columns of the weather record.
-const WEATHER: [Measure; 13] = [
+pub(super) const WEATHER: [Measure; 13] = [
     Measure::TemperatureMin,
     Measure::TemperatureMax,
     Measure::TemperatureMean,
@@ -74,6 +71,22 @@ pub struct Gauge {
 pub(super) fn weather(root: &Section<'_>, source: Source<'_>) -> (Option<NamedRecord>, f64) {
     let section = root.section("record");
     section.tell_if_absent();
+    let WeatherColumns { columns, all_readable, wind_height_m } = weather_columns(&section);
+    // The record is looked through for its own mistakes even when it lacks a column that could not be read.
+    (read(&section, source, columns).filter(|_| all_readable), wind_height_m)
+}
+
+/// What `[record.columns]` says.
+pub(super) struct WeatherColumns {
+    /// Every column that could be read.
+    pub columns: Vec<ColumnPlan>,
+    /// Whether that is all of them.
+    all_readable: bool,
+    wind_height_m: f64,
+}
+
+/// Reads `[record.columns]`.
+pub(super) fn weather_columns(section: &Section<'_>) -> WeatherColumns {
     let columns_section = section.section("columns");
     if section.present {
         columns_section.tell_if_absent();
@@ -102,8 +115,7 @@ pub(super) fn weather(root: &Section<'_>, source: Source<'_>) -> (Option<NamedRe
         }
     }
     let all_readable = columns.len() == declared;
-    // The record is looked through for its own mistakes even when it lacks a column that could not be read.
-    (read(&section, source, columns).filter(|_| all_readable), wind_height_m)
+    WeatherColumns { columns, all_readable, wind_height_m }
 }
 
 /// Reads one comparison record: `file`, date and one `column` in `unit`.
@@ -138,7 +150,7 @@ pub(super) fn gauge(root: &Section<'_>, source: Source<'_>) -> Option<(Gauge, Na
 }
 
 /// One column as the place declares it.
-fn column_plan(section: &Section<'_>, measure: Measure) -> Option<ColumnPlan> {
+pub(super) fn column_plan(section: &Section<'_>, measure: Measure) -> Option<ColumnPlan> {
     let name = section.need_text("column");
     let unit = unit(section, measure);
     let mut gaps = measure.default_gap_rule();
@@ -161,101 +173,4 @@ fn unit(section: &Section<'_>, measure: Measure) -> Option<MeasureUnit> {
         section.sheet.tell(unknown_choice(at, "unit", word, measure.units().iter().map(|unit| unit.key())));
     }
     unit
-}
-
-fn read(section: &Section<'_>, source: Source<'_>, columns: Vec<ColumnPlan>) -> Option<NamedRecord> {
-    let encodings = [("utf-8", Encoding::Utf8), ("latin-1", Encoding::Latin1)];
-    let encoding = section.choice("encoding", &encodings).map_or(Encoding::Utf8, |(encoding, _)| encoding);
-    let delimiters = [(",", ','), (";", ';'), ("tab", '\t'), ("|", '|')];
-    let delimiter = section.choice("delimiter", &delimiters).map(|(delimiter, _)| delimiter);
-    let decimal_comma = section.flag_or("decimal_comma", false);
-    let skip_lines = section.number_or("skip_lines", PLAIN, Limits(0.0, 1000.0), 0.0).value as usize;
-    let missing = missing(section);
-    let date = date(section);
-    let (file, at) = section.need_text("file")?;
-    let bytes = match source.record(file, &at) {
-        Ok(bytes) => bytes,
-        Err(problem) => {
-            section.sheet.tell(problem);
-            return None;
-        }
-    };
-    // Without columns nothing in the file can be judged; that they are lacking was told.
-    if columns.is_empty() {
-        return None;
-    }
-    let plan = RecordPlan {
-        encoding,
-        delimiter,
-        decimal_comma,
-        skip_lines,
-        missing,
-        ..RecordPlan::new(source.shown(file), date?, columns)
-    };
-    let mut problems = Vec::new();
-    let record = read_record(&plan, &bytes, &mut problems);
-    problems.into_iter().for_each(|problem| section.sheet.tell(problem));
-    Some(NamedRecord { file: file.to_owned(), record: record?, at })
-}
-
-/// Marks that stand for a missing value: texts, or numbers as they are written in the file.
-fn missing(section: &Section<'_>) -> Vec<String> {
-    let mut marks = Vec::new();
-    for value in section.list("missing").unwrap_or_default() {
-        match &value.kind {
-            Kind::Text(text) => marks.push(text.clone()),
-            Kind::Number(number) => marks.push(number.to_string()),
-            _ => {
-                section.sheet.tell(Problem::error(section.value_at(value), "problem-not-text").with("key", "missing"));
-            }
-        }
-    }
-    marks
-}
-
-/// Where the date of a row is: one column and the order in it, or two or three columns.
-fn date(section: &Section<'_>) -> Option<DatePlan> {
-    let value = section.get("date");
-    let order = date_order(section);
-    let Some(value) = value else {
-        section.tell_missing("date");
-        return None;
-    };
-    match &value.kind {
-        Kind::Text(name) => Some(DatePlan::Column { name: name.clone(), order: order? }),
-        Kind::Table(table) => date_parts(section, value, table),
-        _ => {
-            section.sheet.tell(Problem::error(section.value_at(value), "problem-not-text").with("key", "date"));
-            None
-        }
-    }
-}
-
-fn date_parts(section: &Section<'_>, value: &Value, table: &Table) -> Option<DatePlan> {
-    let parts = section.as_section(value, format!("{}.date", section.name));
-    let (year, _) = parts.need_text("year")?;
-    if table.get("day_of_year").is_some() {
-        let (day_of_year, _) = parts.text("day_of_year")?;
-        return Some(DatePlan::YearAndDay { year: year.to_owned(), day_of_year: day_of_year.to_owned() });
-    }
-    let (month, day) = (parts.need_text("month"), parts.need_text("day"));
-    Some(DatePlan::Parts { year: year.to_owned(), month: month?.0.to_owned(), day: day?.0.to_owned() })
-}
-
-fn date_order(section: &Section<'_>) -> Option<DateOrder> {
-    let Some((word, at)) = section.text("date_format") else {
-        return section.peek("date_format").is_none().then_some(DateOrder::YearMonthDay);
-    };
-    let order = DateOrder::from_key(word);
-    if order.is_none() {
-        let keys = DateOrder::ALL.map(DateOrder::key);
-        section.sheet.tell(
-            Problem::error(at, "problem-choice")
-                .with("key", "date_format")
-                .with("value", word)
-                .with("choices", keys.join(", "))
-                .with("nearest", nearest(word, keys.iter().map(|key| (*key).to_owned()))),
-        );
-    }
-    order
 }

@@ -3,7 +3,7 @@
 use super::dated::priority_from_text;
 use super::gates::FLOW;
 use super::problem::{Location, Problem};
-use super::section::{Number, Section, nearest};
+use super::section::{Number, Section};
 use super::small_table::SmallTable;
 use super::source::Source;
 use super::unit_suffix::FLOW_M3S;
@@ -70,7 +70,7 @@ impl RightsFile {
     pub fn tell_strangers(&self, known: &[String], root: &Section<'_>) {
         for right in self.0.iter().filter(|right| !known.contains(&right.key)) {
             let problem = Problem::error(right.at.clone(), "problem-gate-unknown").with("value", right.key.clone());
-            root.sheet.tell(problem.with("nearest", nearest(&right.key, known.iter().cloned())));
+            root.sheet.tell(problem.with_nearest(&right.key, known));
         }
     }
 }

@@ -3,11 +3,12 @@
 //! Every question is remembered. When a [`Section`] ends, an entry that nobody asked for is an unknown key, and the
 //! nearest key that somebody did ask for is offered.
 
-use std::cell::RefCell;
+use std::cell::{Cell, RefCell};
 
 use super::problem::{Location, Problem};
 use super::tree::{Entry, Kind, Sheet, Table, Value};
 use super::unit_suffix::{OTHER_SUFFIXES, UnitSuffix, Units};
+use crate::words::nearest;
 
 static NOTHING: Table = Table { entries: Vec::new() };
 
@@ -22,9 +23,6 @@ pub(crate) struct Number {
     /// Whether the file says it.
     pub stated: bool,
 }
-
-/// Letters that a part of a name must have to say more than the likeness of the whole.
-const SHORTEST_PART: usize = 3;
 
 /// Least and most value, in SI, both allowed.
 #[derive(Clone, Copy, Debug)]
@@ -50,7 +48,7 @@ pub(crate) struct Section<'a> {
     pub present: bool,
     asked: RefCell<Vec<(&'static str, Option<Units>)>>,
     missing: RefCell<Vec<(String, Missing)>>,
-    rest_is_free: bool,
+    rest_is_free: Cell<bool>,
 }
 
 impl<'a> Section<'a> {
@@ -69,14 +67,19 @@ impl<'a> Section<'a> {
             present,
             asked: RefCell::default(),
             missing: RefCell::default(),
-            rest_is_free: false,
+            rest_is_free: Cell::new(false),
         }
     }
 
     /// Entries in the order of the file, for tables whose keys are free; none of them is then unknown.
     pub fn free_entries(&mut self) -> &'a [Entry] {
-        self.rest_is_free = true;
+        self.allow_rest();
         &self.table.entries
+    }
+
+    /// Leaves every key that nobody asks for unjudged, where what may be there is not known.
+    pub fn allow_rest(&self) {
+        self.rest_is_free.set(true);
     }
 
     /// Where this entry's key stands.
@@ -300,12 +303,20 @@ impl<'a> Section<'a> {
         found.map(|(_, choice)| (*choice, at))
     }
 
+    /// One of a few words, which the file must give.
+    pub fn need_choice<T: Copy>(&self, key: &'static str, choices: &[(&'static str, T)]) -> Option<(T, Location)> {
+        if self.table.get(key).is_none() {
+            self.tell_missing(key);
+        }
+        self.choice(key, choices)
+    }
+
     /// Says that every key not asked for is unknown, then what is missing.
     fn conclude(&self) {
         let asked = self.asked.borrow();
         let names: Vec<String> = asked.iter().flat_map(|(base, units)| written(base, *units)).collect();
         let mut explained: Vec<String> = Vec::new();
-        for entry in self.table.entries.iter().filter(|entry| !self.rest_is_free && !names.contains(&entry.key)) {
+        for entry in self.table.entries.iter().filter(|entry| !self.rest_is_free.get() && !names.contains(&entry.key)) {
             let problem = |message| Problem::error(self.key_at(entry), message).with("key", entry.key.clone());
             let in_other_unit: Vec<String> = asked
                 .iter()
@@ -317,13 +328,13 @@ impl<'a> Section<'a> {
                 explained.extend(in_other_unit);
                 continue;
             }
-            let nearest = nearest(&entry.key, names.iter().cloned());
-            explained.push(nearest.clone());
-            self.sheet.tell(if self.name.is_empty() {
-                problem("problem-table-unknown").with("nearest", nearest)
+            explained.extend(nearest(&entry.key, names.iter().map(String::as_str)).map(str::to_owned));
+            let told = if self.name.is_empty() {
+                problem("problem-table-unknown")
             } else {
-                problem("problem-key-unknown").with("nearest", nearest).with("table", self.name.clone())
-            });
+                problem("problem-key-unknown").with("table", self.name.clone())
+            };
+            self.sheet.tell(told.with_nearest(&entry.key, &names));
         }
         // What is there in a wrong form was told as that.
         let is_there = |key: &String| {
@@ -375,20 +386,7 @@ pub(crate) fn unknown_choice(
         .with("key", key)
         .with("value", word)
         .with("choices", choices.join(", "))
-        .with("nearest", nearest(word, choices.iter().map(|choice| (*choice).to_owned())))
-}
-
-/// The name most like `word`, one that holds the whole of it first; empty when there is none at all.
-pub(crate) fn nearest(word: &str, names: impl Iterator<Item = String>) -> String {
-    let mut best: Option<(f64, String)> = None;
-    for name in names {
-        let holds = word.chars().count() >= SHORTEST_PART && name.contains(word);
-        let likeness = strsim::jaro_winkler(word, &name) + if holds { 1.0 } else { 0.0 };
-        if best.as_ref().is_none_or(|(most, _)| likeness > *most) {
-            best = Some((likeness, name));
-        }
-    }
-    best.map(|(_, name)| name).unwrap_or_default()
+        .with_nearest(word, &choices)
 }
 
 /// A bound as people would write it, six significant digits.

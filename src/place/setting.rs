@@ -4,7 +4,7 @@ use std::path::Path;
 
 use super::dial_plan::{DialOffer, DialPlan, unknown_dial};
 use super::problem::{Location, Problem, Severity};
-use super::section::{Limits, Section, nearest};
+use super::section::{Limits, Section};
 use super::text::{Text, need_names, optional_names};
 use super::tree::{Kind, Sheet};
 use crate::water::dials::{Dial, Dials};
@@ -120,8 +120,11 @@ fn years(root: &Section<'_>) -> Years {
     };
     Years::from_key(&word).unwrap_or_else(|| {
         let at: Location = root.value_at(value);
-        let near = nearest(&word, ["all", "dry", "middling", "wet"].iter().map(|name| (*name).to_owned()));
-        root.sheet.tell(Problem::error(at, "problem-years").with("value", word).with("nearest", near));
+        root.sheet.tell(
+            Problem::error(at, "problem-years")
+                .with_nearest(&word, ["all", "dry", "middling", "wet"])
+                .with("value", word),
+        );
         Years::All
     })
 }

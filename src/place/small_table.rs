@@ -6,7 +6,7 @@
 use std::path::PathBuf;
 
 use super::problem::{Location, Problem};
-use super::section::{Limits, Number, nearest};
+use super::section::{Limits, Number};
 use super::unit_suffix::{UnitSuffix, Units};
 
 /// A cell and where it starts.
@@ -73,7 +73,7 @@ impl SmallTable {
             problems.push(
                 Problem::error(self.at(self.header_line, cell.column), "problem-column-unknown")
                     .with("key", cell.text.clone())
-                    .with("nearest", nearest(&cell.text, known.iter().cloned())),
+                    .with_nearest(&cell.text, &known),
             );
         }
     }

@@ -82,12 +82,23 @@ impl Source<'_> {
 
 /// Bytes as text; a byte-order mark at the start is passed over.
 pub(super) fn text(bytes: Vec<u8>, shown: PathBuf) -> Result<String, Problem> {
+    if is_two_byte_text(&bytes) {
+        return Err(Problem::error(Location::whole_file(shown), "problem-utf16"));
+    }
     let text = String::from_utf8(bytes).map_err(|error| {
         let good = error.utf8_error().valid_up_to();
         let before = String::from_utf8_lossy(&error.as_bytes()[..good]);
         Problem::error(Location::of_span(shown, &before, good..good), "problem-not-utf8")
     })?;
     Ok(text.strip_prefix('\u{feff}').map(str::to_owned).unwrap_or(text))
+}
+
+/// Whether text is stored with two bytes a letter: by its mark, or by a zero beside every letter of plain English.
+pub(super) fn is_two_byte_text(bytes: &[u8]) -> bool {
+    let marked = bytes.starts_with(b"\xFF\xFE") || bytes.starts_with(b"\xFE\xFF");
+    let start = &bytes[..bytes.len().min(256)];
+    let zeros = |first: usize| start.iter().skip(first).step_by(2).filter(|byte| **byte == 0).count();
+    marked || (start.len() >= 8 && zeros(0).abs_diff(zeros(1)) * 2 > start.len() / 2)
 }
 
 #[cfg(test)]
@@ -124,5 +135,8 @@ mod tests {
         let problem = text(b"a = 1\nb = \"\xf1\"".to_vec(), "place.toml".into()).unwrap_err();
         assert_eq!((problem.at.line, problem.at.column), (2, 6));
         assert_eq!(text("\u{feff}a".into(), "x".into()).unwrap(), "a");
+        for utf16 in [&b"\xff\xfe[\0p\0"[..], b"\xfe\xff\0[\0p", b"[\0p\0l\0a\0c\0e\0]\0"] {
+            assert_eq!(text(utf16.to_vec(), "x".into()).unwrap_err().message, "problem-utf16");
+        }
     }
 }

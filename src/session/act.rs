@@ -81,6 +81,7 @@ impl State {
                     self.show(*view, offer);
                 }
             }
+            Command::Set(setting) => self.stand(setting, offer),
             Command::StepView(steps) => self.step_view(steps.into(), offer),
             Command::PlayOrPause if self.shown.playing => self.pause(),
             Command::PlayOrPause => self.play(offer),

@@ -1,6 +1,7 @@
 //! What a key, a button or a lesson can ask for.
 
 use super::ring::Item;
+use super::setting::Setting;
 use super::view::View;
 
 /// One thing that the session can be asked to do.
@@ -24,6 +25,8 @@ pub enum Command {
     ShowNumber(u8),
     /// Show the view that many further on.
     StepView(i32),
+    /// Stand as a lesson says: these dials and this year, with nothing to undo. What does not fit changes nothing.
+    Set(Setting),
     /// Play the year, or pause it.
     PlayOrPause,
     /// Go that many days on.

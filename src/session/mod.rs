@@ -41,7 +41,9 @@ mod event;
 pub mod hand;
 pub mod help;
 pub mod keys;
+pub mod kiosk;
 pub mod knob;
+pub mod lesson;
 mod needs;
 mod offer;
 pub mod point;
@@ -54,6 +56,7 @@ mod state;
 mod touch;
 mod turn;
 mod view;
+mod whereabouts;
 mod year;
 
 pub use answer::Answers;
@@ -69,4 +72,5 @@ pub use setting::{MOST_OWN_SETTINGS, Misfit, NamedSetting, OwnSettings, Setting,
 pub use state::{Act, Card, Done, Explained, Focus, Invalid, Shown, State, Undo};
 pub use turn::TURN_ENDS_MS;
 pub use view::{Shade, Speed, VIEWS, View};
+pub use whereabouts::{Look, Whereabouts};
 pub use year::{Third, YearChoice, YearList};

@@ -160,6 +160,16 @@ impl Offer {
         Self { help_pages: pages.max(1), ..self }
     }
 
+    /// The same with these dials and settings alone, as a lesson allows them; `None` where they make no sense.
+    pub fn with_dials(self, dials: &[(Dial, DialRange)], settings: &[NamedSetting]) -> Option<Self> {
+        let mut scales = [None; DIALS];
+        for &(dial, range) in dials {
+            scales[dial as usize] = Some(DialScale::new(dial, range)?);
+        }
+        let offer = Self { scales, settings: settings.to_vec(), ..self };
+        offer.settings.iter().all(|named| named.setting.fits(&offer).is_ok()).then_some(offer)
+    }
+
     /// The stops of a dial; `None` where the place does not offer it.
     pub fn scale(&self, dial: Dial) -> Option<&DialScale> {
         self.scales[dial as usize].as_ref()

@@ -86,8 +86,15 @@ impl CanalReader {
             self.signs.last_water_date = Some(evening.today);
         }
         let by_turns = evening.cycle_days > 0;
-        if !by_turns || evening.rotation_day.is_multiple_of(evening.cycle_days) {
-            self.judge(by_turns);
+        if !by_turns {
+            // A span of a day needs no store to go through.
+            if demand_m3 > 0.0 {
+                self.judge(demand_m3, delivered_m3, 1, evening.today, evening.today);
+            }
+            return;
+        }
+        if evening.rotation_day.is_multiple_of(evening.cycle_days) {
+            self.judge_round();
         }
         if demand_m3 > 0.0 {
             let span = &mut self.span;
@@ -99,41 +106,38 @@ impl CanalReader {
             span.first = span.first.or(Some(evening.today));
             span.last = Some(evening.today);
         }
-        if !by_turns {
-            self.judge(false);
-        }
     }
 
-    /// Judges the span that ends here. In a round of turns a field's demand of a later day holds what the earlier days
-    /// left unmet, so that what was due is what came before the last day and what was asked on it.
-    fn judge(&mut self, by_turns: bool) {
+    /// Judges the round of turns that ends here. A field's demand of a later day holds what the earlier days left unmet, so
+    /// that what was due is what came before the last day and what was asked on it.
+    fn judge_round(&mut self) {
         let span = core::mem::take(&mut self.span);
-        if span.days == 0 {
-            return;
-        }
-        let due_m3 = if by_turns && self.asks_again {
-            span.delivered_before_today_m3 + span.asked_today_m3
-        } else {
-            span.asked_m3
-        };
+        let (Some(first), Some(last)) = (span.first, span.last) else { return };
+        let due_m3 = if self.asks_again { span.delivered_before_today_m3 + span.asked_today_m3 } else { span.asked_m3 };
+        self.judge(due_m3, span.delivered_m3, span.days, first, last);
+    }
+
+    /// Judges a span of `days`, of which `first` and `last` had a demand.
+    #[inline(always)]
+    fn judge(&mut self, due_m3: f64, delivered_m3: f64, days: u16, first: CalendarDay, last: CalendarDay) {
         self.demand_m3 += due_m3;
-        self.delivered_m3 += span.delivered_m3;
+        self.delivered_m3 += delivered_m3;
         let signs = &mut self.signs;
-        if span.delivered_m3 >= FULL_SHARE * due_m3 {
-            signs.days_full += span.days;
-            signs.last_full_date = span.last;
+        if delivered_m3 >= FULL_SHARE * due_m3 {
+            signs.days_full += days;
+            signs.last_full_date = Some(last);
         } else {
-            signs.first_short_date = signs.first_short_date.or(span.first);
-            if span.delivered_m3 < CUT_SHARE * due_m3 {
-                signs.days_cut += span.days;
+            signs.first_short_date = signs.first_short_date.or(Some(first));
+            if delivered_m3 < CUT_SHARE * due_m3 {
+                signs.days_cut += days;
             } else {
-                signs.days_short += span.days;
+                signs.days_short += days;
             }
         }
     }
 
     pub(super) fn close(mut self) -> CanalSigns {
-        self.judge(true);
+        self.judge_round();
         let ratio = (self.demand_m3 > 0.0).then(|| self.delivered_m3 / self.demand_m3);
         CanalSigns {
             demand_hm3: self.demand_m3 / M3_PER_HM3,

@@ -9,12 +9,12 @@ use super::dials::Dials;
 use super::evaporation::{DayBeforeWarming, SkyTable};
 use super::ground::{Ground, GroundStores};
 use super::lanes::Lanes;
-use super::power::{AnyPower, Halves, HalvesByLane, PowerCurve};
+use super::power::{AnyPower, CurveByPairs, Halves, HalvesByLane};
 use super::slopes::{LaneSums, LaneWeather, RowStore, Slopes, total_of_one};
 use super::snow::melt_factor_mm_c_day;
 use super::units::M3_PER_MM_KM2;
 use super::valley::{MOST_BANDS, Valley};
-use super::weather::{Delta, DialledDay, StationDay, is_cold_half, precipitation_factor_at};
+use super::weather::{Delta, StationDay, precipitation_factor_at};
 
 /// Days that go through weather, slopes and ground together: each stage keeps its constants in registers, and the blocks
 /// of the widest lanes still fit the nearest cache.
@@ -52,24 +52,25 @@ pub struct BasinDay {
 pub struct BasinStores<const L: usize> {
     /// Snow and soil, row by row.
     pub rows: [RowStore<L>; MOST_BANDS],
-    /// Ground, lane by lane (the first lane alone in a single run).
-    pub ground: [GroundStores; L],
+    /// Ground, mm, lane by lane (the same in both lanes of a single run).
+    pub ground: GroundStores<Lanes<L>>,
     /// Channel, mm, likewise.
-    pub channel: [ChannelStore; L],
+    pub channel: ChannelStore<Lanes<L>>,
 }
 
-/// The constants of a basin's run, beside the rows of its bands.
+/// What a basin's run is about beside its bands: constants, and what of the weather they make.
 #[derive(Clone, Debug)]
-struct Course {
-    delta: Delta,
-    ground: Ground,
-    channel: Channel,
+struct Course<const L: usize> {
+    delta: Delta<Lanes<L>>,
+    ground: Ground<Lanes<L>>,
+    channel: Channel<Lanes<L>>,
     /// Area-weighted precipitation factor of the bands.
-    mean_precipitation_factor: f64,
+    mean_precipitation_factor: Lanes<L>,
     /// Share of corrected snowfall that the catch correction added.
-    added_by_catch: f64,
-    valley_precipitation_factor: f64,
-    area_km2: f64,
+    added_by_catch: Lanes<L>,
+    valley_precipitation_factor: Lanes<L>,
+    m3_per_mm: Lanes<L>,
+    melt_factor: [Lanes<L>; 366],
 }
 
 /// A basin ready to run: one setting of the dials.
@@ -78,57 +79,115 @@ pub struct Basin<'v> {
     valley: &'v Valley,
     sky: SkyTable,
     slopes: Slopes<2>,
-    course: Course,
-    melt_factor: [f64; 366],
+    /// The same in both lanes.
+    course: Course<2>,
 }
 
-/// `L` basins ready to run side by side: the same bands under different dials or parameters.
+/// `L` basins ready to run side by side: the same bands under different dials or parameters. `L` is even.
 #[derive(Clone, Debug)]
 pub struct Basins<'v, const L: usize> {
     valleys: [&'v Valley; L],
     sky: SkyTable,
     slopes: Slopes<L>,
-    courses: [Course; L],
-    melt_factor: [Lanes<L>; 366],
+    course: Course<L>,
 }
 
-impl Course {
-    fn new(valley: &Valley, dials: &Dials) -> Self {
-        let climb = &valley.climb;
-        let factor_at = |elevation_m| precipitation_factor_at(climb, valley.station_elevation_m, elevation_m);
-        let area_km2 = valley.band_area_km2();
-        let weighted: f64 = valley.bands.iter().map(|band| band.area_km2 * factor_at(band.elevation_m)).sum();
+impl<const L: usize> Course<L> {
+    fn new(valleys: [&Valley; L], dials: [&Dials; L]) -> Self {
+        let lanes = |read: fn(&Valley) -> f64| Lanes(valleys.map(read));
+        let dialled = |lane: usize| Delta::new(&valleys[lane].climb, valleys[lane].is_southern(), dials[lane]);
         Self {
-            delta: Delta::new(climb, valley.is_southern(), dials),
-            ground: Ground::new(&valley.ground),
-            channel: Channel::new(&valley.channel),
-            mean_precipitation_factor: weighted / area_km2,
-            added_by_catch: 1.0 - 1.0 / climb.snow_catch_factor,
-            valley_precipitation_factor: factor_at(valley.evaporation.reference_elevation_m),
-            area_km2,
+            delta: Delta::by_lane(core::array::from_fn(dialled)),
+            ground: Ground::by_lane(valleys.map(|valley| &valley.ground)),
+            channel: Channel::by_lane(valleys.map(|valley| &valley.channel)),
+            mean_precipitation_factor: lanes(|valley| {
+                let bands = valley.bands.iter();
+                let weighted = bands.map(|band| band.area_km2 * precipitation_factor(valley, band.elevation_m));
+                weighted.sum::<f64>() / valley.band_area_km2()
+            }),
+            added_by_catch: lanes(|valley| 1.0 - 1.0 / valley.climb.snow_catch_factor),
+            valley_precipitation_factor: lanes(|valley| {
+                precipitation_factor(valley, valley.evaporation.reference_elevation_m)
+            }),
+            m3_per_mm: lanes(|valley| valley.band_area_km2() * M3_PER_MM_KM2),
+            melt_factor: core::array::from_fn(|index| {
+                let on = |valley: &Valley| melt_factor_mm_c_day(&valley.snow, index as u16 + 1, valley.is_southern());
+                Lanes(valleys.map(on))
+            }),
         }
     }
 
-    /// What the weather alone gives of a day.
+    /// The weather of a few days under the dials. `valley` is any of the lanes: they are one place.
     #[inline(always)]
-    fn open(&self, weather: &DialledDay) -> BasinDay {
-        BasinDay {
-            precipitation_mm: weather.precipitation_mm * self.mean_precipitation_factor,
-            reference_evaporation_mm: weather.reference_evaporation_mm,
-            valley_precipitation_mm: weather.precipitation_mm * self.valley_precipitation_factor,
-            ..BasinDay::default()
+    fn weather(
+        &self,
+        valley: &Valley,
+        sky: &SkyTable,
+        calendar: &[CalendarDay],
+        record: &[StationDay],
+        out: &mut [LaneWeather<L>; BLOCK_DAYS],
+    ) {
+        for ((today, record), out) in calendar.iter().zip(record).zip(out) {
+            let air = DayBeforeWarming::new(&valley.evaporation.method, sky, today.day_of_year, &record.air);
+            let dialled = self.delta.day(today, record, &air);
+            *out = LaneWeather {
+                temperature_c: dialled.temperature_c,
+                precipitation_mm: dialled.precipitation_mm,
+                reference_evaporation_mm: dialled.reference_evaporation_mm,
+                melt_factor: self.melt_factor[usize::from(today.day_of_year - 1) % 366],
+                split_humidity_percent: split_humidity(valley, record),
+            };
         }
     }
 
-    /// Sends the slopes' water through ground and channel; the sums of the slopes are in `day`.
+    /// A day whole: sends what the slopes gave through ground and channel.
     #[inline(always)]
-    fn close(&self, day: &mut BasinDay, recharge_mm: f64, ground: &mut GroundStores, channel: &mut ChannelStore) {
-        day.precipitation_mm += day.snowfall_mm * self.added_by_catch;
-        let flows = self.ground.day(ground, recharge_mm);
+    fn day(
+        &self,
+        weather: &LaneWeather<L>,
+        sums: &LaneSums<L>,
+        ground: &mut GroundStores<Lanes<L>>,
+        channel: &mut ChannelStore<Lanes<L>>,
+    ) -> LaneDay<L> {
+        let flows = self.ground.day(ground, sums.recharge_mm);
         let arrived_mm = self.channel.day(channel, flows.quick_flow_mm + flows.slow_flow_mm);
-        day.ground_mm = ground.quick_mm + ground.slow_mm;
-        day.channel_mm = self.channel.in_transit(channel);
-        day.inflow_m3 = arrived_mm * self.area_km2 * M3_PER_MM_KM2;
+        LaneDay {
+            precipitation_mm: weather.precipitation_mm * self.mean_precipitation_factor
+                + sums.snowfall_mm * self.added_by_catch,
+            ground_mm: ground.quick_mm + ground.slow_mm,
+            channel_mm: self.channel.in_transit(channel),
+            inflow_m3: arrived_mm * self.m3_per_mm,
+            valley_precipitation_mm: weather.precipitation_mm * self.valley_precipitation_factor,
+        }
+    }
+}
+
+/// What [`Course::day`] adds to weather and slopes, in the names of [`BasinDay`].
+struct LaneDay<const L: usize> {
+    precipitation_mm: Lanes<L>,
+    ground_mm: Lanes<L>,
+    channel_mm: Lanes<L>,
+    inflow_m3: Lanes<L>,
+    valley_precipitation_mm: Lanes<L>,
+}
+
+impl<const L: usize> LaneDay<L> {
+    /// The day of one lane.
+    #[inline(always)]
+    fn of_lane(&self, lane: usize, weather: &LaneWeather<L>, sums: &LaneSums<L>) -> BasinDay {
+        BasinDay {
+            precipitation_mm: self.precipitation_mm.0[lane],
+            snowfall_mm: sums.snowfall_mm.0[lane],
+            snow_water_mm: sums.snow_water_mm.0[lane],
+            soil_mm: sums.soil_mm.0[lane],
+            ground_mm: self.ground_mm.0[lane],
+            channel_mm: self.channel_mm.0[lane],
+            evaporation_mm: sums.evaporation_mm.0[lane],
+            sublimation_mm: sums.sublimation_mm.0[lane],
+            inflow_m3: self.inflow_m3.0[lane],
+            reference_evaporation_mm: weather.reference_evaporation_mm.0[lane],
+            valley_precipitation_mm: self.valley_precipitation_mm.0[lane],
+        }
     }
 }
 
@@ -187,34 +246,32 @@ impl<'v> Basin<'v> {
             valley,
             sky: sky_of(valley),
             slopes: Slopes::of_one(valley),
-            course: Course::new(valley, dials),
-            melt_factor: core::array::from_fn(|index| melt_factor_on(valley, index)),
+            course: Course::new([valley; 2], [dials; 2]),
         }
     }
 
     /// What is in store on the first morning, as the place says.
     pub fn start(&self) -> BasinStores<2> {
-        let mut stores = BasinStores::empty();
-        for row in &mut stores.rows[..self.slopes.rows().len()] {
-            row.snow.ice_mm = Lanes::splat(self.valley.start.snow_mm);
-            row.soil_mm = Lanes::splat(self.valley.start.soil_share * self.valley.soil.capacity_mm);
+        let mut stores = BasinStores::empty([self.valley; 2]);
+        for (row, store) in self.slopes.rows().iter().zip(&mut stores.rows) {
+            store.snow.ice_mm = Lanes::splat(self.valley.start.snow_mm) * row.area_share;
+            store.soil_mm = Lanes::splat(self.valley.start.soil_share * self.valley.soil.capacity_mm) * row.area_share;
         }
-        stores.ground[0] = GroundStores { quick_mm: self.valley.start.quick_mm, slow_mm: self.valley.start.slow_mm };
         stores
     }
 
     /// What is in store after `stores` evening, as the day before the first would show it.
     pub fn evening(&self, stores: &BasinStores<2>) -> BasinDay {
         let (mut snow, mut soil) = (Lanes::default(), Lanes::default());
-        for (row, store) in self.slopes.rows().iter().zip(&stores.rows) {
-            snow = snow + row.area_share * (store.snow.ice_mm + store.snow.liquid_mm);
-            soil = soil + row.area_share * store.soil_mm;
+        for store in &stores.rows[..self.slopes.rows().len()] {
+            snow = snow + (store.snow.ice_mm + store.snow.liquid_mm);
+            soil = soil + store.soil_mm;
         }
         BasinDay {
             snow_water_mm: total_of_one(snow),
             soil_mm: total_of_one(soil),
-            ground_mm: stores.ground[0].quick_mm + stores.ground[0].slow_mm,
-            channel_mm: self.course.channel.in_transit(&stores.channel[0]),
+            ground_mm: (stores.ground.quick_mm + stores.ground.slow_mm).0[0],
+            channel_mm: self.course.channel.in_transit(&stores.channel).0[0],
             ..BasinDay::default()
         }
     }
@@ -232,16 +289,17 @@ impl<'v> Basin<'v> {
         with_curve!(powers, |curve| self.run_with(curve, stores, calendar, record, out));
     }
 
-    /// Like [`Basin::run`], telling `each` the number of the day and the stores of the bands every evening.
+    /// Like [`Basin::run`], telling `each` the number of the day and the snow water of every band, mm, every evening.
     pub fn run_telling(
         &self,
         stores: &mut BasinStores<2>,
         calendar: &[CalendarDay],
         record: &[StationDay],
-        mut each: impl FnMut(usize, &[RowStore<2>]),
+        mut each: impl FnMut(usize, &[f64]),
         out: &mut [BasinDay],
     ) {
-        let used = self.slopes.rows().len();
+        let bands = self.valley.bands.len();
+        let mut snow_water_mm = [0.0; MOST_BANDS];
         for (index, ((calendar, record), out)) in calendar.iter().zip(record).zip(out).enumerate() {
             self.run(
                 stores,
@@ -249,50 +307,41 @@ impl<'v> Basin<'v> {
                 core::slice::from_ref(record),
                 core::slice::from_mut(out),
             );
-            each(index, &stores.rows[..used]);
+            for (band, snow_water_mm) in snow_water_mm.iter_mut().enumerate().take(bands) {
+                let (row, lane) = (band / 2, band % 2);
+                let snow = &stores.rows[row].snow;
+                let over_basin_mm = snow.ice_mm.0[lane] + snow.liquid_mm.0[lane];
+                *snow_water_mm = over_basin_mm / self.slopes.rows()[row].area_share.0[lane];
+            }
+            each(index, &snow_water_mm[..bands]);
         }
     }
+
     fn run_with(
         &self,
-        curve: impl PowerCurve<2>,
+        curve: impl CurveByPairs<2>,
         stores: &mut BasinStores<2>,
         calendar: &[CalendarDay],
         record: &[StationDay],
         out: &mut [BasinDay],
     ) {
-        let southern = self.valley.is_southern();
         let days = calendar.len().min(record.len()).min(out.len());
         let (calendar, record, out) = (&calendar[..days], &record[..days], &mut out[..days]);
         // Local copies: the compiler keeps what nobody else can see in registers.
-        let (mut rows, mut ground, mut channel) = (stores.rows, stores.ground[0], stores.channel[0]);
+        let mut rows = stores.rows;
         let mut weather = [LaneWeather::default(); BLOCK_DAYS];
-        let mut sums = [[LaneSums::default(); 2]; BLOCK_DAYS];
+        let mut sums = [LaneSums::default(); BLOCK_DAYS];
         let blocks = calendar.chunks(BLOCK_DAYS).zip(record.chunks(BLOCK_DAYS)).zip(out.chunks_mut(BLOCK_DAYS));
         for ((calendar, record), out) in blocks {
-            for (((today, record), weather), out) in calendar.iter().zip(record).zip(&mut weather).zip(out.iter_mut()) {
-                let air = air_of(self.valley, &self.sky, today, record);
-                let dialled = self.course.delta.day(today, record, &air);
-                *weather = LaneWeather {
-                    temperature_c: Lanes::splat(dialled.temperature_c),
-                    precipitation_mm: Lanes::splat(dialled.precipitation_mm),
-                    reference_evaporation_mm: Lanes::splat(dialled.reference_evaporation_mm),
-                    melt_factor: Lanes::splat(self.melt_factor[usize::from(today.day_of_year - 1) % 366]),
-                    most_sublimation_mm: Lanes::splat(sublimation_on(self.valley, today, southern)),
-                    split_humidity_percent: split_humidity(self.valley, record),
-                };
-                *out = self.course.open(&dialled);
-            }
-            self.slopes.days::<false>(curve, calendar, &weather[..out.len()], &mut rows, &mut sums);
-            for ([sum, _], out) in sums.iter().zip(out) {
-                out.snowfall_mm = total_of_one(sum.snowfall_mm);
-                out.snow_water_mm = total_of_one(sum.snow_water_mm);
-                out.soil_mm = total_of_one(sum.soil_mm);
-                out.evaporation_mm = total_of_one(sum.evaporation_mm);
-                out.sublimation_mm = total_of_one(sum.sublimation_mm);
-                self.course.close(out, total_of_one(sum.recharge_mm), &mut ground, &mut channel);
+            self.course.weather(self.valley, &self.sky, calendar, record, &mut weather);
+            self.slopes.days::<false>(curve, calendar, &weather[..calendar.len()], &mut rows, &mut sums);
+            for ((sums, weather), out) in sums.iter().zip(&weather).zip(out) {
+                let sums = sums.of_one();
+                let day = self.course.day(weather, &sums, &mut stores.ground, &mut stores.channel);
+                *out = day.of_lane(0, weather, &sums);
             }
         }
-        (stores.rows, stores.ground[0], stores.channel[0]) = (rows, ground, channel);
+        stores.rows = rows;
     }
 }
 
@@ -300,24 +349,17 @@ impl<'v, const L: usize> Basins<'v, L> {
     /// The basins of `valleys` under `dials`, side by side. The valleys must be one place: the same latitude, bands, kind
     /// of split and way to reference evaporation; parameters may differ.
     pub fn new(valleys: [&'v Valley; L], dials: [&Dials; L]) -> Self {
-        Self {
-            valleys,
-            sky: sky_of(valleys[0]),
-            slopes: Slopes::of_many(valleys),
-            courses: core::array::from_fn(|lane| Course::new(valleys[lane], dials[lane])),
-            melt_factor: core::array::from_fn(|index| Lanes(valleys.map(|valley| melt_factor_on(valley, index)))),
-        }
+        Self { valleys, sky: sky_of(valleys[0]), slopes: Slopes::of_many(valleys), course: Course::new(valleys, dials) }
     }
 
     /// What is in store on the first morning, as the places say.
     pub fn start(&self) -> BasinStores<L> {
-        let mut stores = BasinStores::empty();
-        for (lane, valley) in self.valleys.iter().enumerate() {
-            for row in &mut stores.rows[..self.slopes.rows().len()] {
-                row.snow.ice_mm.0[lane] = valley.start.snow_mm;
-                row.soil_mm.0[lane] = valley.start.soil_share * valley.soil.capacity_mm;
-            }
-            stores.ground[lane] = GroundStores { quick_mm: valley.start.quick_mm, slow_mm: valley.start.slow_mm };
+        let mut stores = BasinStores::empty(self.valleys);
+        let snow_mm = Lanes(self.valleys.map(|valley| valley.start.snow_mm));
+        let soil_mm = Lanes(self.valleys.map(|valley| valley.start.soil_share * valley.soil.capacity_mm));
+        for (row, store) in self.slopes.rows().iter().zip(&mut stores.rows) {
+            store.snow.ice_mm = snow_mm * row.area_share;
+            store.soil_mm = soil_mm * row.area_share;
         }
         stores
     }
@@ -338,66 +380,42 @@ impl<'v, const L: usize> Basins<'v, L> {
 
     fn run_with(
         &self,
-        curve: impl PowerCurve<L>,
+        curve: impl CurveByPairs<L>,
         stores: &mut BasinStores<L>,
         calendar: &[CalendarDay],
         record: &[StationDay],
         out: &mut [&mut [BasinDay]; L],
     ) {
-        let southern = self.valleys[0].is_southern();
         let days = calendar.len().min(record.len());
         let (calendar, record) = (&calendar[..days], &record[..days]);
-        let mut rows = stores.rows;
         let mut weather = [LaneWeather::default(); BLOCK_DAYS];
-        let mut sums = [[LaneSums::default(); 2]; BLOCK_DAYS];
+        let mut sums = [LaneSums::default(); BLOCK_DAYS];
         for (block, (calendar, record)) in calendar.chunks(BLOCK_DAYS).zip(record.chunks(BLOCK_DAYS)).enumerate() {
             let first = block * BLOCK_DAYS;
-            for (index, (today, record)) in calendar.iter().zip(record).enumerate() {
-                let weather = &mut weather[index];
-                weather.melt_factor = self.melt_factor[usize::from(today.day_of_year - 1) % 366];
-                weather.most_sublimation_mm = Lanes(self.valleys.map(|valley| sublimation_on(valley, today, southern)));
-                weather.split_humidity_percent = split_humidity(self.valleys[0], record);
-                let air = air_of(self.valleys[0], &self.sky, today, record);
-                for lane in 0..L {
-                    let dialled = self.courses[lane].delta.day(today, record, &air);
-                    weather.temperature_c.0[lane] = dialled.temperature_c;
-                    weather.precipitation_mm.0[lane] = dialled.precipitation_mm;
-                    weather.reference_evaporation_mm.0[lane] = dialled.reference_evaporation_mm;
-                    if let Some(out) = out[lane].get_mut(first + index) {
-                        *out = self.courses[lane].open(&dialled);
+            self.course.weather(self.valleys[0], &self.sky, calendar, record, &mut weather);
+            self.slopes.days::<true>(curve, calendar, &weather[..calendar.len()], &mut stores.rows, &mut sums);
+            for (index, (sums, weather)) in sums.iter().zip(&weather).enumerate().take(calendar.len()) {
+                let day = self.course.day(weather, sums, &mut stores.ground, &mut stores.channel);
+                for (lane, out) in out.iter_mut().enumerate() {
+                    if let Some(out) = out.get_mut(first + index) {
+                        *out = day.of_lane(lane, weather, sums);
                     }
                 }
             }
-            self.slopes.days::<true>(curve, calendar, &weather[..calendar.len()], &mut rows, &mut sums);
-            for (index, [even, odd]) in sums.iter().enumerate().take(calendar.len()) {
-                let snowfall = even.snowfall_mm + odd.snowfall_mm;
-                let snow_water = even.snow_water_mm + odd.snow_water_mm;
-                let soil = even.soil_mm + odd.soil_mm;
-                let evaporation = even.evaporation_mm + odd.evaporation_mm;
-                let sublimation = even.sublimation_mm + odd.sublimation_mm;
-                let recharge = even.recharge_mm + odd.recharge_mm;
-                for lane in 0..L {
-                    let Some(out) = out[lane].get_mut(first + index) else { continue };
-                    out.snowfall_mm = snowfall.0[lane];
-                    out.snow_water_mm = snow_water.0[lane];
-                    out.soil_mm = soil.0[lane];
-                    out.evaporation_mm = evaporation.0[lane];
-                    out.sublimation_mm = sublimation.0[lane];
-                    let (ground, channel) = (&mut stores.ground[lane], &mut stores.channel[lane]);
-                    self.courses[lane].close(out, recharge.0[lane], ground, channel);
-                }
-            }
         }
-        stores.rows = rows;
     }
 }
 
 impl<const L: usize> BasinStores<L> {
-    fn empty() -> Self {
+    /// The ground as the places say, and nothing on the slopes.
+    fn empty(valleys: [&Valley; L]) -> Self {
         Self {
             rows: [RowStore::default(); MOST_BANDS],
-            ground: [GroundStores::default(); L],
-            channel: [ChannelStore::default(); L],
+            ground: GroundStores {
+                quick_mm: Lanes(valleys.map(|valley| valley.start.quick_mm)),
+                slow_mm: Lanes(valleys.map(|valley| valley.start.slow_mm)),
+            },
+            channel: ChannelStore::default(),
         }
     }
 }
@@ -408,18 +426,8 @@ fn sky_of(valley: &Valley) -> SkyTable {
     SkyTable::at_latitude(valley.latitude_deg).unwrap_or(nowhere)
 }
 
-#[inline(always)]
-fn air_of<'a>(valley: &'a Valley, sky: &SkyTable, today: &CalendarDay, record: &'a StationDay) -> DayBeforeWarming<'a> {
-    DayBeforeWarming::new(&valley.evaporation.method, sky, today.day_of_year, &record.air)
-}
-
-fn melt_factor_on(valley: &Valley, index: usize) -> f64 {
-    melt_factor_mm_c_day(&valley.snow, index as u16 + 1, valley.is_southern())
-}
-
-#[inline(always)]
-fn sublimation_on(valley: &Valley, today: &CalendarDay, southern: bool) -> f64 {
-    if is_cold_half(today.month_index(), southern) { valley.snow.sublimation_mm_day } else { 0.0 }
+fn precipitation_factor(valley: &Valley, elevation_m: f64) -> f64 {
+    precipitation_factor_at(&valley.climb, valley.station_elevation_m, elevation_m)
 }
 
 /// Humidity by which the day's rain and snow are split, %; `None` where air temperature splits them.

@@ -18,6 +18,12 @@ impl MonthDay {
         NaiveDate::from_ymd_opt(2000, month.into(), day.into()).map(|_| Self { month, day })
     }
 
+    /// A number that rises through the year as the dates do.
+    #[inline(always)]
+    pub(super) fn rank(self) -> u16 {
+        u16::from_be_bytes([self.month, self.day])
+    }
+
     /// Day of a leap year, 1 to 366: a fixed place on the circle of the year whatever the year's length.
     pub fn leap_day_of_year(self) -> u16 {
         const BEFORE: [u16; 12] = [0, 31, 60, 91, 121, 152, 182, 213, 244, 274, 305, 335];
@@ -39,8 +45,11 @@ impl Season {
     pub const ALL_YEAR: Season = Season { from: MonthDay { month: 1, day: 1 }, to: MonthDay { month: 12, day: 31 } };
 
     /// Whether `day` lies in the season.
+    #[inline(always)]
     pub fn holds(self, day: MonthDay) -> bool {
-        if self.from <= self.to { self.from <= day && day <= self.to } else { self.from <= day || day <= self.to }
+        let (from, to, day) = (self.from.rank(), self.to.rank(), day.rank());
+        let (begun, not_over) = (from <= day, day <= to);
+        if from <= to { begun & not_over } else { begun | not_over }
     }
 }
 

@@ -8,39 +8,39 @@ use heapless::Vec;
 
 use super::calendar::MonthDay;
 use super::crop::{CropTraits, readily_available_mm, root_zone_day, yield_share};
+use super::lanes::{Lanes, Number};
 use super::units::M3_PER_MM_HECTARE;
 use super::valley::{CropOnField, Field, MOST_FIELDS};
 
 /// Most plots under a canal: every field and what the dial makes of it.
 pub const MOST_PLOTS: usize = 2 * MOST_FIELDS;
 
+/// A pair of plots for every two.
+type PlotLanes = Lanes<MOST_PLOTS>;
+
+/// No rank of any date.
+const NEVER: u16 = u16::MAX;
+
 /// A plot: a field, or the part of one that grows something else.
 #[derive(Clone, Copy, Debug, PartialEq)]
-pub struct Plot {
-    /// Index of the field in the canal's list.
-    pub field: usize,
+struct Plot {
     area_ha: f64,
     traits: CropTraits,
-    season_days: u32,
     planting: MonthDay,
-    off_season_coefficient: f64,
-    watered: bool,
-    efficiency: f64,
-    total_available_mm: f64,
-    refill_to_mm: f64,
-    most_watering_mm: f64,
 }
 
-/// What a plot carries from day to day.
+/// What the plots of a canal carry from day to day.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
-pub struct PlotStore {
-    /// Water missing in the root zone, mm.
-    pub depletion_mm: f64,
-    /// Day of the crop's season, 0 out of season.
-    day_of_season: u32,
+pub struct PlotStores {
+    /// Water missing in each root zone, mm.
+    depletion_mm: PlotLanes,
     /// Crop evaporation since planting, and what it would have been without stress, mm.
-    season_actual_mm: f64,
-    season_full_mm: f64,
+    season_actual_mm: PlotLanes,
+    season_full_mm: PlotLanes,
+    /// Day of each crop's season, 0 out of season.
+    day_of_season: [u32; MOST_PLOTS],
+    /// Whether any of them is above 0.
+    any_in_season: bool,
 }
 
 /// What the plots of a canal did in a day. Volumes in m³, areas in ha.
@@ -63,54 +63,10 @@ pub struct FieldsDay {
 }
 
 impl Plot {
-    fn new(field: &Field, index: usize, crop: &CropOnField, area_ha: f64) -> Self {
-        let total_available_mm = field.soil_holds_mm_per_m * crop.traits.root_depth_m;
-        let readily_mm = readily_available_mm(total_available_mm, crop.traits.depletion_share);
-        Self {
-            field: index,
-            area_ha,
-            traits: crop.traits,
-            season_days: crop.traits.season_days(),
-            planting: crop.planting,
-            off_season_coefficient: crop.off_season_coefficient,
-            watered: crop.watered,
-            efficiency: field.efficiency,
-            total_available_mm,
-            refill_to_mm: crop.refill_to_share * readily_mm,
-            most_watering_mm: field.most_watering_mm_day,
-        }
-    }
-
-    /// Water held for the crop, m³.
-    pub fn held_m3(&self, store: &PlotStore) -> f64 {
-        (self.total_available_mm - store.depletion_mm) * self.area_ha * M3_PER_MM_HECTARE
-    }
-
-    /// What the plot asks for at its edge this morning, m³.
-    #[inline(always)]
-    fn asked_m3(&self, store: &PlotStore, day: MonthDay) -> f64 {
-        let in_season = self.in_season(store, day);
-        let missing_mm = store.depletion_mm - self.refill_to_mm;
-        if !(self.watered && in_season && missing_mm > 0.0) {
-            return 0.0;
-        }
-        let watering_mm = if missing_mm < self.most_watering_mm { missing_mm } else { self.most_watering_mm };
-        watering_mm * self.area_ha * M3_PER_MM_HECTARE / self.efficiency
-    }
-
     /// Area harvested, ha, and its share of full yield; nothing where the crop has no published response.
-    fn harvest(&self, store: &PlotStore) -> (f64, f64) {
-        let share = self
-            .traits
-            .yield_response
-            .and_then(|response| yield_share(response, store.season_actual_mm, store.season_full_mm));
+    fn harvest(&self, actual_mm: f64, full_mm: f64) -> (f64, f64) {
+        let share = self.traits.yield_response.and_then(|response| yield_share(response, actual_mm, full_mm));
         share.map_or((0.0, 0.0), |share| (self.area_ha, share))
-    }
-
-    /// Whether the day about to pass is in the crop's season.
-    #[inline(always)]
-    fn in_season(&self, store: &PlotStore, day: MonthDay) -> bool {
-        self.season_days > 0 && (day == self.planting || (1..self.season_days).contains(&store.day_of_season))
     }
 }
 
@@ -118,57 +74,152 @@ impl Plot {
 #[derive(Clone, Debug, PartialEq)]
 pub struct Plots {
     plots: Vec<Plot, MOST_PLOTS>,
+    /// Together, ha.
+    area_ha: f64,
+    /// Length of each crop's season, days; 0 where there is none.
+    season_days: [u32; MOST_PLOTS],
+    /// Days of each season with a day after them.
+    days_but_last: [u32; MOST_PLOTS],
+    /// [`MonthDay::rank`] of each crop's planting, or [`NEVER`].
+    planting: [u16; MOST_PLOTS],
+    off_season_coefficient: PlotLanes,
+    m3_per_mm: PlotLanes,
+    mm_per_m3: PlotLanes,
+    efficiency: PlotLanes,
+    total_available_mm: PlotLanes,
+    depletion_share: PlotLanes,
+    refill_to_mm: PlotLanes,
+    most_watering_mm: PlotLanes,
+    /// Asked for at the plot's edge to bring a millimetre to its roots, m³; zero where nothing is watered.
+    asked_m3_per_mm: PlotLanes,
 }
-
-/// The stores of one canal's plots.
-pub type PlotStores = [PlotStore; MOST_PLOTS];
 
 impl Plots {
     /// The plots of `fields` with all areas multiplied by `area_factor` and `swapped_share` of every field that has
     /// another crop to change to growing that.
     pub fn new(fields: &Vec<Field, MOST_FIELDS>, area_factor: f64, swapped_share: f64) -> Self {
-        let mut plots = Vec::new();
-        for (index, field) in fields.iter().enumerate() {
+        let none = PlotLanes::default();
+        let mut plots = Self {
+            plots: Vec::new(),
+            area_ha: 0.0,
+            season_days: [0; MOST_PLOTS],
+            days_but_last: [0; MOST_PLOTS],
+            planting: [NEVER; MOST_PLOTS],
+            off_season_coefficient: none,
+            m3_per_mm: none,
+            mm_per_m3: none,
+            efficiency: none,
+            total_available_mm: none,
+            depletion_share: none,
+            refill_to_mm: none,
+            most_watering_mm: none,
+            asked_m3_per_mm: none,
+        };
+        for field in fields {
             let area_ha = field.area_ha * area_factor;
             let swapped_ha = if field.swap_to.is_some() { area_ha * swapped_share } else { 0.0 };
-            // A field has two plots at most, so there is always room.
             if area_ha - swapped_ha > 0.0 {
-                let _ = plots.push(Plot::new(field, index, &field.crop, area_ha - swapped_ha));
+                plots.push(field, &field.crop, area_ha - swapped_ha);
             }
             if let (Some(crop), true) = (&field.swap_to, swapped_ha > 0.0) {
-                let _ = plots.push(Plot::new(field, index, crop, swapped_ha));
+                plots.push(field, crop, swapped_ha);
             }
         }
-        Self { plots }
+        plots
     }
 
-    /// The plots one by one.
-    pub fn iter(&self) -> impl Iterator<Item = &Plot> {
-        self.plots.iter()
+    /// A field has two plots at most, so there is always room.
+    fn push(&mut self, field: &Field, crop: &CropOnField, area_ha: f64) {
+        let lane = self.plots.len();
+        let plot = Plot { area_ha, traits: crop.traits, planting: crop.planting };
+        if self.plots.push(plot).is_err() {
+            return;
+        }
+        let total_available_mm = field.soil_holds_mm_per_m * crop.traits.root_depth_m;
+        let m3_per_mm = area_ha * M3_PER_MM_HECTARE;
+        self.area_ha += area_ha;
+        self.season_days[lane] = crop.traits.season_days();
+        self.days_but_last[lane] = self.season_days[lane].saturating_sub(1);
+        if self.season_days[lane] > 0 {
+            self.planting[lane] = crop.planting.rank();
+        }
+        self.off_season_coefficient.0[lane] = crop.off_season_coefficient;
+        self.m3_per_mm.0[lane] = m3_per_mm;
+        self.mm_per_m3.0[lane] = 1.0 / m3_per_mm;
+        self.efficiency.0[lane] = field.efficiency;
+        self.total_available_mm.0[lane] = total_available_mm;
+        self.depletion_share.0[lane] = crop.traits.depletion_share;
+        self.refill_to_mm.0[lane] =
+            crop.refill_to_share * readily_available_mm(total_available_mm, crop.traits.depletion_share);
+        self.most_watering_mm.0[lane] = field.most_watering_mm_day;
+        self.asked_m3_per_mm.0[lane] = if crop.watered { m3_per_mm / field.efficiency } else { 0.0 };
     }
 
     /// Stores with the root zones at `soil_share` of what they hold, on the morning of `today`, in the middle of
     /// whatever seasons are running.
     pub fn start(&self, soil_share: f64, today: MonthDay) -> PlotStores {
-        let mut stores = [PlotStore::default(); MOST_PLOTS];
-        for (plot, store) in self.plots.iter().zip(&mut stores) {
-            store.depletion_mm = (1.0 - soil_share) * plot.total_available_mm;
+        let mut stores = PlotStores {
+            depletion_mm: Lanes::splat(1.0 - soil_share) * self.total_available_mm,
+            ..PlotStores::default()
+        };
+        let seasons = self.season_days.iter().zip(&mut stores.day_of_season);
+        for (plot, (season_days, day_of_season)) in self.plots.iter().zip(seasons) {
             let since = i32::from(today.leap_day_of_year()) - i32::from(plot.planting.leap_day_of_year());
             let since = since.rem_euclid(366) as u32;
-            store.day_of_season = if since < plot.season_days { since } else { 0 };
+            *day_of_season = if since < *season_days { since } else { 0 };
+            stores.any_in_season |= *day_of_season > 0;
         }
         stores
     }
 
     /// Water in all root zones, m³.
     pub fn held_m3(&self, stores: &PlotStores) -> f64 {
-        self.plots.iter().zip(stores).map(|(plot, store)| plot.held_m3(store)).sum()
+        let held_m3 = (self.total_available_mm - stores.depletion_mm) * self.m3_per_mm;
+        held_m3.0.iter().sum()
+    }
+
+    /// How many pairs of plots there are.
+    #[inline(always)]
+    fn pairs(&self) -> usize {
+        self.plots.len().div_ceil(2).min(PlotLanes::PAIRS)
+    }
+
+    /// Whether any crop may be in season on the day about to pass. Most of the year none is, and much can be left out.
+    #[inline(always)]
+    fn any_in_season(&self, stores: &PlotStores, today: u16) -> bool {
+        stores.any_in_season || self.planting.contains(&today)
+    }
+
+    /// Whether each plot of a pair is in season on the day about to pass: 1, else 0.
+    #[inline(always)]
+    fn in_season(&self, stores: &PlotStores, today: u16, pair: usize) -> Lanes<2> {
+        let of_plot = |index: usize| {
+            // From 1 on, since 0 is no season and wraps far beyond any.
+            let grows = stores.day_of_season[index].wrapping_sub(1) < self.days_but_last[index];
+            f64::from(u8::from(grows | (self.planting[index] == today)))
+        };
+        Lanes([of_plot(2 * pair), of_plot(2 * pair + 1)])
+    }
+
+    /// What the plots of a pair ask for at their edges, m³.
+    #[inline(always)]
+    fn asked_by_pair_m3(&self, stores: &PlotStores, in_season: Lanes<2>, pair: usize) -> Lanes<2> {
+        let missing_mm = (stores.depletion_mm.pair(pair) - self.refill_to_mm.pair(pair)).positive();
+        missing_mm.least(self.most_watering_mm.pair(pair)) * self.asked_m3_per_mm.pair(pair) * in_season
     }
 
     /// What the plots ask for at their edges this morning, together, m³.
     #[inline]
     pub fn asked_m3(&self, stores: &PlotStores, today: MonthDay) -> f64 {
-        self.plots.iter().zip(stores).map(|(plot, store)| plot.asked_m3(store, today)).sum()
+        let today = today.rank();
+        let mut asked_m3 = Lanes::default();
+        if self.any_in_season(stores, today) {
+            for pair in 0..self.pairs() {
+                let in_season = self.in_season(stores, today, pair);
+                asked_m3 = asked_m3 + self.asked_by_pair_m3(stores, in_season, pair);
+            }
+        }
+        sum(asked_m3)
     }
 
     /// One day into `out`: `delivered_m3` is shared among the plots as they asked (`asked_m3` in all), rain falls, the
@@ -184,59 +235,139 @@ impl Plots {
         reference_evaporation_mm: f64,
         out: &mut FieldsDay,
     ) {
-        // Sums of their own, not fields of `out`: they stay in registers until the end.
-        let (mut area_ha, mut evaporation_m3, mut lost_m3) = (0.0, 0.0, 0.0);
-        let (mut crop_evaporation_m3, mut full_crop_evaporation_m3) = (0.0, 0.0);
-        let (mut harvested_ha, mut yield_ha) = (0.0, 0.0);
-        let met = if asked_m3 > 0.0 { delivered_m3 / asked_m3 } else { 0.0 };
-        for (plot, store) in self.plots.iter().zip(stores) {
-            let m3_per_mm = plot.area_ha * M3_PER_MM_HECTARE;
-            let edge_m3 = if met > 0.0 { plot.asked_m3(store, today) * met } else { 0.0 };
-            let watering_m3 = edge_m3 * plot.efficiency;
-            let in_season = plot.in_season(store, today);
-            let coefficient = if in_season {
-                if today == plot.planting {
-                    *store = PlotStore { depletion_mm: store.depletion_mm, ..PlotStore::default() };
-                }
-                store.day_of_season += 1;
-                plot.traits.coefficient_on(store.day_of_season)
-            } else {
-                store.day_of_season = 0;
-                plot.off_season_coefficient
-            };
-            let full_mm = coefficient * reference_evaporation_mm;
-            let zone = root_zone_day(
-                store.depletion_mm,
-                plot.total_available_mm,
-                plot.traits.depletion_share,
-                full_mm,
-                rain_mm + watering_m3 / m3_per_mm,
-            );
-            store.depletion_mm = zone.depletion_mm;
-
-            area_ha += plot.area_ha;
-            evaporation_m3 += zone.crop_evaporation_mm * m3_per_mm;
-            lost_m3 += edge_m3 - watering_m3 + zone.percolation_mm * m3_per_mm;
-            if in_season {
-                store.season_actual_mm += zone.crop_evaporation_mm;
-                store.season_full_mm += full_mm;
-                crop_evaporation_m3 += zone.crop_evaporation_mm * m3_per_mm;
-                full_crop_evaporation_m3 += full_mm * m3_per_mm;
-                if store.day_of_season == plot.season_days {
-                    let (ha, share) = plot.harvest(store);
-                    harvested_ha += ha;
-                    yield_ha += share * ha;
-                }
+        let today = today.rank();
+        let rain_m3 = rain_mm * self.area_ha * M3_PER_MM_HECTARE;
+        let rain_mm = Lanes::splat(rain_mm);
+        let reference_evaporation_mm = Lanes::splat(reference_evaporation_mm);
+        let mut water = Water::default();
+        if !self.any_in_season(stores, today) {
+            for pair in 0..self.pairs() {
+                let full_mm = self.off_season_coefficient.pair(pair) * reference_evaporation_mm;
+                self.balance(stores, pair, full_mm, rain_mm, &mut water);
             }
+            *out = FieldsDay {
+                rain_m3,
+                evaporation_m3: sum(water.evaporation_m3),
+                lost_m3: sum(water.drained_m3),
+                ..FieldsDay::default()
+            };
+            return;
         }
+
+        let mut crop = CropDay::default();
+        let mut lost_m3 = Lanes::default();
+        let met = Lanes::splat(if asked_m3 > 0.0 { delivered_m3 / asked_m3 } else { 0.0 });
+        stores.any_in_season = false;
+        for pair in 0..self.pairs() {
+            let in_season = self.in_season(stores, today, pair);
+            let edge_m3 = self.asked_by_pair_m3(stores, in_season, pair) * met;
+            let watering_m3 = edge_m3 * self.efficiency.pair(pair);
+            lost_m3 = lost_m3 + (edge_m3 - watering_m3);
+            let coefficient = Lanes([
+                self.coefficient(stores, today, in_season.0[0], 2 * pair, &mut crop.ends),
+                self.coefficient(stores, today, in_season.0[1], 2 * pair + 1, &mut crop.ends),
+            ]);
+            let full_mm = coefficient * reference_evaporation_mm;
+            let water_mm = rain_mm + watering_m3 * self.mm_per_m3.pair(pair);
+            let actual_mm = self.balance(stores, pair, full_mm, water_mm, &mut water) * in_season;
+            let full_mm = full_mm * in_season;
+            stores.season_actual_mm.set_pair(pair, stores.season_actual_mm.pair(pair) + actual_mm);
+            stores.season_full_mm.set_pair(pair, stores.season_full_mm.pair(pair) + full_mm);
+            crop.evaporation_m3 = crop.evaporation_m3 + actual_mm * self.m3_per_mm.pair(pair);
+            crop.full_evaporation_m3 = crop.full_evaporation_m3 + full_mm * self.m3_per_mm.pair(pair);
+        }
+        let (harvested_ha, yield_ha) = if crop.ends { self.harvest(stores) } else { (0.0, 0.0) };
         *out = FieldsDay {
-            rain_m3: rain_mm * area_ha * M3_PER_MM_HECTARE,
-            evaporation_m3,
-            crop_evaporation_m3,
-            full_crop_evaporation_m3,
-            lost_m3,
+            rain_m3,
+            evaporation_m3: sum(water.evaporation_m3),
+            crop_evaporation_m3: sum(crop.evaporation_m3),
+            full_crop_evaporation_m3: sum(crop.full_evaporation_m3),
+            lost_m3: sum(lost_m3 + water.drained_m3),
             harvested_ha,
             yield_ha,
         };
     }
+
+    /// A day in the root zones of a pair of plots; gives what their crops and soil evaporate, mm.
+    #[inline(always)]
+    fn balance(
+        &self,
+        stores: &mut PlotStores,
+        pair: usize,
+        full_mm: Lanes<2>,
+        water_mm: Lanes<2>,
+        water: &mut Water,
+    ) -> Lanes<2> {
+        let zone = root_zone_day(
+            stores.depletion_mm.pair(pair),
+            self.total_available_mm.pair(pair),
+            self.depletion_share.pair(pair),
+            full_mm,
+            water_mm,
+        );
+        stores.depletion_mm.set_pair(pair, zone.depletion_mm);
+        let m3_per_mm = self.m3_per_mm.pair(pair);
+        water.evaporation_m3 = water.evaporation_m3 + zone.crop_evaporation_mm * m3_per_mm;
+        water.drained_m3 = water.drained_m3 + zone.percolation_mm * m3_per_mm;
+        zone.crop_evaporation_mm
+    }
+
+    /// Lets the season of a plot move on a day, and gives the day's crop coefficient. `ends` is set where the season ends
+    /// today.
+    #[inline(always)]
+    fn coefficient(&self, stores: &mut PlotStores, today: u16, in_season: f64, index: usize, ends: &mut bool) -> f64 {
+        let day_of_season = &mut stores.day_of_season[index];
+        let plot = match self.plots.get(index) {
+            Some(plot) if in_season > 0.0 => plot,
+            _ => {
+                *day_of_season = 0;
+                return self.off_season_coefficient.0[index];
+            }
+        };
+        if self.planting[index] == today {
+            *day_of_season = 0;
+            stores.season_actual_mm.0[index] = 0.0;
+            stores.season_full_mm.0[index] = 0.0;
+        }
+        *day_of_season += 1;
+        stores.any_in_season = true;
+        *ends |= *day_of_season == self.season_days[index];
+        plot.traits.coefficient_on(*day_of_season)
+    }
+
+    /// Area of the plots whose season ends today, ha, and the same weighted with each share of full yield.
+    #[cold]
+    fn harvest(&self, stores: &PlotStores) -> (f64, f64) {
+        let (mut harvested_ha, mut yield_ha) = (0.0, 0.0);
+        for (index, plot) in self.plots.iter().enumerate() {
+            let season_days = self.season_days[index];
+            if season_days > 0 && stores.day_of_season[index] == season_days {
+                let (ha, share) = plot.harvest(stores.season_actual_mm.0[index], stores.season_full_mm.0[index]);
+                harvested_ha += ha;
+                yield_ha += share * ha;
+            }
+        }
+        (harvested_ha, yield_ha)
+    }
+}
+
+/// Water of the plots of a day, a pair of lanes for all pairs of plots.
+#[derive(Clone, Copy, Default)]
+struct Water {
+    evaporation_m3: Lanes<2>,
+    drained_m3: Lanes<2>,
+}
+
+/// What the crops in season did.
+#[derive(Clone, Copy, Default)]
+struct CropDay {
+    evaporation_m3: Lanes<2>,
+    full_evaporation_m3: Lanes<2>,
+    /// Whether a season ends.
+    ends: bool,
+}
+
+#[inline(always)]
+fn sum(pair: Lanes<2>) -> f64 {
+    pair.0[0] + pair.0[1]
 }

@@ -3,35 +3,35 @@
 //! Linear stores in exact exponential form: over a day without inflow a store of residence time T gives
 //! `store · (1 − exp(−1/T))`. The day's input enters first.
 
-use super::lanes::{least, most};
+use super::lanes::{Lanes, Number};
 use super::valley::GroundTraits;
 
 /// Water in the two stores, mm.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
-pub struct GroundStores {
+pub struct GroundStores<N = f64> {
     /// Quick store, mm.
-    pub quick_mm: f64,
+    pub quick_mm: N,
     /// Slow store, mm.
-    pub slow_mm: f64,
+    pub slow_mm: N,
 }
 
 /// What the ground gives in a day, mm.
 #[derive(Clone, Copy, Debug, PartialEq)]
-pub struct GroundDay {
+pub struct GroundDay<N = f64> {
     /// Water passed from the quick to the slow store.
-    pub percolation_mm: f64,
+    pub percolation_mm: N,
     /// Flow of the quick store.
-    pub quick_flow_mm: f64,
+    pub quick_flow_mm: N,
     /// Flow of the slow store.
-    pub slow_flow_mm: f64,
+    pub slow_flow_mm: N,
 }
 
 /// The stores' constants.
 #[derive(Clone, Copy, Debug)]
-pub struct Ground {
-    quick_share: f64,
-    slow_share: f64,
-    percolation_mm_day: f64,
+pub struct Ground<N = f64> {
+    quick_share: N,
+    slow_share: N,
+    percolation_mm_day: N,
 }
 
 /// Share of a linear store that flows out in a day; 1 for a residence time of 0.
@@ -48,18 +48,32 @@ impl Ground {
             percolation_mm_day: traits.percolation_mm_day,
         }
     }
+}
 
+impl<const L: usize> Ground<Lanes<L>> {
+    /// The stores of traits that differ from lane to lane.
+    pub fn by_lane(traits: [&GroundTraits; L]) -> Self {
+        let lanes = traits.map(Ground::new);
+        Self {
+            quick_share: Lanes(lanes.map(|lane| lane.quick_share)),
+            slow_share: Lanes(lanes.map(|lane| lane.slow_share)),
+            percolation_mm_day: Lanes(lanes.map(|lane| lane.percolation_mm_day)),
+        }
+    }
+}
+
+impl<N: Number> Ground<N> {
     /// One day with `recharge_mm` from the soil.
     #[inline(always)]
-    pub fn day(&self, stores: &mut GroundStores, recharge_mm: f64) -> GroundDay {
-        let mut quick_mm = stores.quick_mm + recharge_mm;
-        let percolation_mm = least(self.percolation_mm_day, quick_mm);
-        quick_mm -= percolation_mm;
+    pub fn day(&self, stores: &mut GroundStores<N>, recharge_mm: N) -> GroundDay<N> {
+        let quick_mm = stores.quick_mm + recharge_mm;
+        let percolation_mm = self.percolation_mm_day.least(quick_mm);
+        let quick_mm = quick_mm - percolation_mm;
         let quick_flow_mm = self.quick_share * quick_mm;
         let slow_mm = stores.slow_mm + percolation_mm;
         let slow_flow_mm = self.slow_share * slow_mm;
-        *stores =
-            GroundStores { quick_mm: most(quick_mm - quick_flow_mm, 0.0), slow_mm: most(slow_mm - slow_flow_mm, 0.0) };
+        // A share of at most 1 leaves nothing below zero, rounded or not.
+        *stores = GroundStores { quick_mm: quick_mm - quick_flow_mm, slow_mm: slow_mm - slow_flow_mm };
         GroundDay { percolation_mm, quick_flow_mm, slow_flow_mm }
     }
 }

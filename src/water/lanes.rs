@@ -3,7 +3,7 @@
 //! Plain arrays, no intrinsics: the compiler turns the loops into vector instructions where the target has them, and
 //! every lane gets the same bits as it would alone.
 
-use core::ops::{Add, Mul, Sub};
+use core::ops::{Add, Div, Mul, Sub};
 
 /// `L` numbers side by side.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -35,7 +35,71 @@ pub fn square_root(x: f64) -> f64 {
     }
 }
 
+/// A number, or a few side by side: what a chain of stores is written for once.
+pub trait Number: Copy + Add<Output = Self> + Sub<Output = Self> + Mul<Output = Self> + Div<Output = Self> {
+    /// The same number in every lane.
+    fn splat(x: f64) -> Self;
+    /// The smaller, lane by lane.
+    fn least(self, other: Self) -> Self;
+    /// The larger, lane by lane; `other` where this is not a number.
+    fn most(self, other: Self) -> Self;
+    /// Zero where negative or not a number.
+    #[inline(always)]
+    fn positive(self) -> Self {
+        self.most(Self::splat(0.0))
+    }
+}
+
+impl Number for f64 {
+    #[inline(always)]
+    fn splat(x: f64) -> Self {
+        x
+    }
+    #[inline(always)]
+    fn least(self, other: Self) -> Self {
+        least(self, other)
+    }
+    #[inline(always)]
+    fn most(self, other: Self) -> Self {
+        most(self, other)
+    }
+}
+
+impl<const L: usize> Number for Lanes<L> {
+    #[inline(always)]
+    fn splat(x: f64) -> Self {
+        Lanes([x; L])
+    }
+    #[inline(always)]
+    fn least(self, other: Self) -> Self {
+        self.zip(other, least)
+    }
+    #[inline(always)]
+    fn most(self, other: Self) -> Self {
+        self.zip(other, most)
+    }
+}
+
 impl<const L: usize> Lanes<L> {
+    /// How many pairs of lanes there are. Long chains of arithmetic go pair by pair: that is what a register holds where
+    /// there is no more than the baseline of the common processors, and more lanes at a time would only spill.
+    pub const PAIRS: usize = {
+        assert!(L.is_multiple_of(2), "lanes come in pairs");
+        L / 2
+    };
+
+    /// A pair of neighbouring lanes; `pair` is below [`Lanes::PAIRS`].
+    #[inline(always)]
+    pub fn pair(&self, pair: usize) -> Lanes<2> {
+        Lanes(self.0.as_chunks::<2>().0[pair])
+    }
+
+    /// Puts a pair of lanes back.
+    #[inline(always)]
+    pub fn set_pair(&mut self, pair: usize, lanes: Lanes<2>) {
+        self.0.as_chunks_mut::<2>().0[pair] = lanes.0;
+    }
+
     /// The same number in every lane.
     #[inline(always)]
     pub const fn splat(x: f64) -> Self {
@@ -60,24 +124,6 @@ impl<const L: usize> Lanes<L> {
             *lane = f(*lane, other);
         }
         out
-    }
-
-    /// The smaller, lane by lane.
-    #[inline(always)]
-    pub fn least(self, other: Self) -> Self {
-        self.zip(other, least)
-    }
-
-    /// The larger, lane by lane.
-    #[inline(always)]
-    pub fn most(self, other: Self) -> Self {
-        self.zip(other, most)
-    }
-
-    /// Zero where negative.
-    #[inline(always)]
-    pub fn positive(self) -> Self {
-        self.map(|x| most(x, 0.0))
     }
 
     /// Square root, lane by lane.
@@ -114,5 +160,13 @@ impl<const L: usize> Mul for Lanes<L> {
     #[inline(always)]
     fn mul(self, other: Self) -> Self {
         self.zip(other, |a, b| a * b)
+    }
+}
+
+impl<const L: usize> Div for Lanes<L> {
+    type Output = Self;
+    #[inline(always)]
+    fn div(self, other: Self) -> Self {
+        self.zip(other, |a, b| a / b)
     }
 }

@@ -17,6 +17,15 @@ pub trait PowerCurve<const L: usize>: Copy {
     }
 }
 
+/// A curve for `L` lanes that can be had for a pair of them.
+pub trait CurveByPairs<const L: usize>: Copy {
+    /// The curve of a pair.
+    type Pair: PowerCurve<2>;
+
+    /// The curve of the lanes `2 pair` and `2 pair + 1`.
+    fn pair(self, pair: usize) -> Self::Pair;
+}
+
 /// The power `HALVES / 2`.
 #[derive(Clone, Copy, Debug)]
 pub struct Halves<const HALVES: u32>;
@@ -35,6 +44,15 @@ impl<const HALVES: u32, const L: usize> PowerCurve<L> for Halves<HALVES> {
             left /= 2;
         }
         result
+    }
+}
+
+impl<const HALVES: u32, const L: usize> CurveByPairs<L> for Halves<HALVES> {
+    type Pair = Self;
+
+    #[inline(always)]
+    fn pair(self, _: usize) -> Self {
+        self
     }
 }
 
@@ -85,6 +103,15 @@ impl<const L: usize> PowerCurve<L> for HalvesByLane<L> {
     }
 }
 
+impl<const L: usize> CurveByPairs<L> for HalvesByLane<L> {
+    type Pair = HalvesByLane<2>;
+
+    #[inline(always)]
+    fn pair(self, pair: usize) -> HalvesByLane<2> {
+        HalvesByLane { masks: self.masks.map(|mask| mask.as_chunks::<2>().0[pair]) }
+    }
+}
+
 /// Any power above 0, one a lane.
 #[derive(Clone, Copy, Debug)]
 pub struct AnyPower<const L: usize>(pub Lanes<L>);
@@ -99,6 +126,15 @@ impl<const L: usize> PowerCurve<L> for AnyPower<L> {
     #[inline(always)]
     fn times(self, amount: Lanes<L>, x: Lanes<L>) -> Lanes<L> {
         if amount.0.iter().all(|amount| *amount == 0.0) { Lanes::splat(0.0) } else { amount * self.of(x) }
+    }
+}
+
+impl<const L: usize> CurveByPairs<L> for AnyPower<L> {
+    type Pair = AnyPower<2>;
+
+    #[inline(always)]
+    fn pair(self, pair: usize) -> AnyPower<2> {
+        AnyPower(self.0.pair(pair))
     }
 }
 

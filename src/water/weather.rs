@@ -4,6 +4,7 @@ use super::calendar::CalendarDay;
 use super::dials::Dials;
 use super::evaporation::air::saturation_vapour_pressure_kpa;
 use super::evaporation::{DayBeforeWarming, EvaporationDay};
+use super::lanes::{Lanes, Number};
 use super::valley::{Climb, Valley};
 
 /// One day of the station's record, whole: gaps were filled or refused before.
@@ -59,20 +60,20 @@ impl StationDay {
 
 /// The weather of a day at the station, with the dials applied.
 #[derive(Clone, Copy, Debug, PartialEq)]
-pub struct DialledDay {
+pub struct DialledDay<N = f64> {
     /// Mean temperature at the station, °C.
-    pub temperature_c: f64,
+    pub temperature_c: N,
     /// Precipitation at the station after the place's factor, mm.
-    pub precipitation_mm: f64,
+    pub precipitation_mm: N,
     /// Reference evaporation at the reference elevation, mm.
-    pub reference_evaporation_mm: f64,
+    pub reference_evaporation_mm: N,
 }
 
 /// The dials as each month feels them.
 #[derive(Clone, Copy, Debug)]
-pub struct Delta {
-    warming_c: [f64; 12],
-    precipitation_factor: [f64; 12],
+pub struct Delta<N = f64> {
+    warming_c: [N; 12],
+    precipitation_factor: [N; 12],
 }
 
 impl Delta {
@@ -99,12 +100,37 @@ impl Delta {
     /// The day under the dials; `air` is its reference evaporation before warming.
     #[inline(always)]
     pub fn day(&self, calendar: &CalendarDay, day: &StationDay, air: &DayBeforeWarming<'_>) -> DialledDay {
+        self.turned(calendar, day, |warming_c| air.warmed_mm(warming_c))
+    }
+}
+
+impl<const L: usize> Delta<Lanes<L>> {
+    /// Different dials, one set a lane.
+    pub fn by_lane(lanes: [Delta; L]) -> Self {
+        Self {
+            warming_c: core::array::from_fn(|month| Lanes(lanes.map(|lane| lane.warming_c[month]))),
+            precipitation_factor: core::array::from_fn(|month| {
+                Lanes(lanes.map(|lane| lane.precipitation_factor[month]))
+            }),
+        }
+    }
+
+    /// The day under the dials; `air` is its reference evaporation before warming.
+    #[inline(always)]
+    pub fn day(&self, calendar: &CalendarDay, day: &StationDay, air: &DayBeforeWarming<'_>) -> DialledDay<Lanes<L>> {
+        self.turned(calendar, day, |warming_c| air.warmed_by_lane_mm(warming_c))
+    }
+}
+
+impl<N: Number> Delta<N> {
+    #[inline(always)]
+    fn turned(&self, calendar: &CalendarDay, day: &StationDay, evaporation_mm: impl Fn(N) -> N) -> DialledDay<N> {
         let month_index = calendar.month_index();
         let warming_c = self.warming_c[month_index];
         DialledDay {
-            temperature_c: day.mean_temperature_c + warming_c,
-            precipitation_mm: day.precipitation_mm * self.precipitation_factor[month_index],
-            reference_evaporation_mm: air.warmed_mm(warming_c),
+            temperature_c: N::splat(day.mean_temperature_c) + warming_c,
+            precipitation_mm: N::splat(day.precipitation_mm) * self.precipitation_factor[month_index],
+            reference_evaporation_mm: evaporation_mm(warming_c),
         }
     }
 }

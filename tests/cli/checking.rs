@@ -63,7 +63,7 @@ fn what_is_not_there_or_not_ours_is_told() {
     std::fs::create_dir(bench.path("empty")).unwrap();
     for (path, part) in [
         ("nowhere", "no place at nowhere"),
-        ("notes.txt", "not a place, a setting or a lesson"),
+        ("notes.txt", "not a place, a setting, a lesson or a board file"),
         ("odd.toml", "not text in UTF-8"),
         ("empty", "no place at empty"),
     ] {
@@ -73,6 +73,27 @@ fn what_is_not_there_or_not_ours_is_told() {
         let entries: Value = serde_json::from_str(&bench.run(&["check", path, "--form", "json"]).out).unwrap();
         assert_eq!(entries[0]["code"], "unreadable");
     }
+}
+
+#[test]
+fn board_files_are_checked_too_and_say_the_language() {
+    let bench = Bench::new();
+    let good = include_str!("../../cross/boards/ili9341-320x240.toml");
+    std::fs::write(bench.path("board.toml"), good).unwrap();
+    std::fs::write(bench.path("bad.toml"), good.replace("reset_pin = 24", "reset_pin = 11")).unwrap();
+    assert_eq!(bench.run(&["check", "board.toml"]).code, 0);
+    let told = bench.run(&["check", "bad.toml"]);
+    assert_eq!((told.code, told.err.as_str()), (1, ""));
+    for part in ["bad.toml:27:13", "Pin 11 cannot be “reset_pin”: it is spi0 SCLK, and line 23 uses that bus."] {
+        assert!(told.out.contains(part), "{part}\n{}", told.out);
+    }
+    assert!(bench.run(&["check", "bad.toml", "--lang", "es"]).out.contains("La patilla 11 no puede ser «reset_pin»"));
+    // Nothing is opened with a board file that is wrong, and what is said of it is said in the language at hand.
+    let told = bench.run(&["show", "--board", "bad.toml"]);
+    assert!(told.code == 1 && told.err.contains("Pin 11"), "{}", told.err);
+    // This board speaks Spanish; here is no panel, whether this build knows panels or not.
+    let told = bench.run(&["show", "--board", "board.toml"]);
+    assert!(told.code == 1 && told.err.contains("pantalla pequeña"), "{}", told.err);
 }
 
 #[test]

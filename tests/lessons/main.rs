@@ -1,9 +1,19 @@
 //! Lessons: what the shipped ones teach comes out, mistakes stand at their lines, and no result is seen too early.
 
 mod command;
+#[path = "../support/goldens.rs"]
+mod goldens;
+mod leading;
 mod mistakes;
+mod pictures;
+mod rehearse;
+mod room;
+#[path = "../support/scenes.rs"]
+mod scenes;
 mod shipped;
 mod stepping;
+#[path = "../support/valleys.rs"]
+mod valleys;
 mod voice;
 
 use std::path::Path;

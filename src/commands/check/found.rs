@@ -4,6 +4,7 @@ use std::ffi::OsStr;
 use std::path::Path;
 
 use super::lessons;
+use crate::board::file::{is_board_file, read_board};
 use crate::commands::built_in;
 use crate::commands::failure::Failure;
 use crate::commands::places::Named;
@@ -12,7 +13,7 @@ use crate::commands::snippets::{Texts, report};
 use crate::commands::speech::Speech;
 use crate::place::problem::{Problem, Severity};
 use crate::place::{DialPlan, read, read_setting};
-use crate::words::Words;
+use crate::words::{KNOWN_TAGS, Words};
 
 /// A path with everything that was found in it.
 pub(super) struct Checked {
@@ -26,7 +27,7 @@ pub(super) struct Checked {
     texts: Vec<(String, String)>,
 }
 
-/// Checks a place, a setting or a lesson, on the disk or built in. A lesson is tried on the place `on`, else on the demo.
+/// Checks a place, a setting, a lesson or a board file, on the disk or built in. A lesson is tried on the place `on`, else on the demo.
 pub(super) fn check_one(path: &Path, on: Option<&Path>, speech: &Speech) -> Checked {
     let shown = path.display().to_string();
     let name = path.to_str().unwrap_or_default();
@@ -36,6 +37,7 @@ pub(super) fn check_one(path: &Path, on: Option<&Path>, speech: &Speech) -> Chec
     if is_setting {
         return match settings::find(path, &speech.words) {
             Ok(lesson) if lessons::is_lesson(&lesson.text) => of_lesson(shown, lesson, on, speech),
+            Ok(board) if is_board_file(&board.text) => of_board(shown, board),
             Ok(setting) => of_setting(shown, setting),
             Err(failure) => unreadable(shown, failure),
         };
@@ -65,6 +67,12 @@ fn of_setting(path: String, setting: SettingText) -> Checked {
     let outcome = read_setting(&setting.file, &setting.text, &DialPlan::WIDEST);
     let texts = vec![(setting.file.to_string_lossy().into_owned(), setting.text)];
     Checked { path, problems: outcome.problems, unreadable: Vec::new(), texts }
+}
+
+fn of_board(path: String, board: SettingText) -> Checked {
+    let problems = read_board(&board.file, &board.text, &KNOWN_TAGS).problems;
+    let texts = vec![(board.file.to_string_lossy().into_owned(), board.text)];
+    Checked { path, problems, unreadable: Vec::new(), texts }
 }
 
 fn of_lesson(path: String, lesson: SettingText, on: Option<&Path>, speech: &Speech) -> Checked {

@@ -1,6 +1,8 @@
 //! The frame of a view in one size, kept until something that can be seen changes.
 
+use embedded_graphics::geometry::{Point, Size};
 use embedded_graphics::pixelcolor::{Rgb565, RgbColor};
+use embedded_graphics::primitives::Rectangle;
 
 use crate::board::{Frame, FrameSize, PlacedText, PlacedTexts};
 use crate::picture::views::{
@@ -34,13 +36,15 @@ pub(super) struct Drawing {
     pub sheets: u8,
     /// Which state it shows.
     pub stamp: Option<u64>,
+    /// Rows at the foot that the view leaves to a lesson.
+    pub foot: u16,
 }
 
 impl Drawing {
     /// Room for a frame of that size.
     pub fn new(size: FrameSize, with_texts: bool) -> Self {
         let pixels = vec![Rgb565::BLACK; size.pixels()];
-        Self { size, with_texts, pixels, texts: Vec::new(), sheets: 1, stamp: None }
+        Self { size, with_texts, pixels, texts: Vec::new(), sheets: 1, stamp: None, foot: 0 }
     }
 
     /// Nothing, which no screen asks for.
@@ -57,7 +61,9 @@ impl Drawing {
     pub fn draw(&mut self, view: View, card: Option<Card>, scene: &Scene<'_>, shade: Shade, speech: Speech<'_>) {
         let (words, _) = speech;
         let (mut texts, mut over) = (PlacedTexts::default(), PlacedTexts::default());
-        let Ok(mut canvas) = Canvas::new(&mut self.pixels, self.size.width, self.size.height) else { return };
+        let rows = self.size.height - self.foot;
+        let pixels = &mut self.pixels[..usize::from(rows) * usize::from(self.size.width)];
+        let Ok(mut canvas) = Canvas::new(pixels, self.size.width, rows) else { return };
         // Letters of the page must not be set over a card.
         let covered = card.is_some() || scene.hand.list.is_some();
         if self.with_texts && !covered {
@@ -89,6 +95,34 @@ impl Drawing {
         self.sheets = u8::try_from(sheets).unwrap_or(u8::MAX);
     }
 
+    /// Draws over the whole frame, in place of what was there.
+    pub fn draw_over(&mut self, draw: impl FnOnce(&mut Canvas<'_>, Size)) {
+        let mut texts = PlacedTexts::default();
+        let screen = Size::new(self.size.width.into(), self.size.height.into());
+        let Ok(canvas) = Canvas::new(&mut self.pixels, self.size.width, self.size.height) else { return };
+        draw(&mut canvas.with_witness(&mut texts), screen);
+        self.texts = if self.with_texts { texts.0 } else { Vec::new() };
+    }
+
+    /// Draws into the rows that the view left free, on a canvas of their own.
+    pub fn draw_foot(&mut self, draw: impl FnOnce(&mut Canvas<'_>, Size)) {
+        let mut texts = PlacedTexts::default();
+        let screen = Size::new(self.size.width.into(), self.size.height.into());
+        let above = self.size.height - self.foot;
+        let from = usize::from(above) * usize::from(self.size.width);
+        let Ok(canvas) = Canvas::new(&mut self.pixels[from..], self.size.width, self.foot) else { return };
+        draw(&mut canvas.with_witness(&mut texts), screen);
+        if self.with_texts {
+            let down = Point::new(0, above.into());
+            let moved = |text: PlacedText| PlacedText {
+                ink: Rectangle::new(text.ink.top_left + down, text.ink.size),
+                given: text.given.map(|given| Rectangle::new(given.top_left + down, given.size)),
+                ..text
+            };
+            self.texts.extend(texts.0.into_iter().map(moved));
+        }
+    }
+
     /// What a screen gets.
     pub fn frame(&self) -> Frame<'_> {
         Frame { size: self.size, pixels: &self.pixels, texts: &self.texts }
@@ -111,7 +145,8 @@ fn draw_card(canvas: &mut Canvas<'_>, view: View, card: Card, scene: &Scene<'_>,
     term::draw(canvas, explained, (index, terms.len() + scene.dials.len()), scene.units, theme, speech);
 }
 
-fn theme(shade: Shade) -> &'static Theme {
+/// The colours of a set.
+pub(super) fn theme(shade: Shade) -> &'static Theme {
     match shade {
         Shade::Light => &Theme::LIGHT,
         Shade::Dark => &Theme::DARK,

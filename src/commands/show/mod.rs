@@ -1,8 +1,11 @@
 //! `show`: the running instrument on whatever screens are at hand, or as pictures in a folder.
 
+mod board;
 mod drawing;
 mod droughts;
 mod hands;
+mod kiosk;
+mod leading;
 mod pictures;
 mod player;
 mod request;
@@ -15,17 +18,23 @@ use super::speech::Speech;
 use super::spinner::Spinner;
 use super::tell;
 use crate::board::choose::{Why, can_show, choose};
+use crate::board::file::BoardFile;
 use crate::board::surroundings::{Surroundings, WindowChance};
 use crate::board::terminal::{Ability, Terminal};
-use crate::board::{Choice, FrameSize, Post, ScreenError, ScreenKind, Stage, run as play};
+use crate::board::{Choice, FrameSize, Instrument, Post, ScreenError, ScreenKind, Stage, run as play};
+use crate::session::View;
 use crate::words::Words;
-use player::Player;
+use kiosk::KioskPlayer;
+pub(super) use kiosk::note_words;
+pub(super) use leading::LessonText;
+pub(super) use player::Player;
 use request::Request;
+pub(super) use request::groups;
 
 /// Opens the place and shows it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
     let request = Request::read(matches, &speech.words)?;
-    show(speech, &request)
+    if request.set_pin { kiosk::set_pin(&request, &speech.words) } else { show(speech, &request) }
 }
 
 /// What the program does when it is not told what to do: the usual place on the best screen at hand.
@@ -35,9 +44,16 @@ pub(super) fn usual(speech: &Speech) -> Result<(), Failure> {
 
 fn show(speech: &Speech, request: &Request) -> Result<(), Failure> {
     let words = &speech.words;
-    let mut around = Surroundings::look(Vec::new());
+    let of_board = request.board.as_ref().map(BoardFile::screen_kinds).unwrap_or_default();
+    let mut around = Surroundings::look(of_board);
     for &kind in &request.screens {
         can_show(kind, &around).map_err(|why| refuse(kind, why, words))?;
+    }
+    if request.screens.is_empty() {
+        around.board_file.iter().try_for_each(|&kind| can_show(kind, &around)).map_err(|why| {
+            let kind = around.board_file[0];
+            refuse(kind, why, words)
+        })?;
     }
     let player = open(speech, request)?;
     if !request.screens.is_empty() {
@@ -62,7 +78,9 @@ fn show(speech: &Speech, request: &Request) -> Result<(), Failure> {
 
 fn show_chosen(choice: Choice, player: Player, speech: &Speech, request: &Request) -> Result<(), Failure> {
     tell_choice(choice, &speech.words);
-    show_on(&[choice.kind], player, speech, request).map_err(|trouble| trouble.told(&speech.words))?;
+    let of_board = request.board.as_ref().map(BoardFile::screen_kinds).unwrap_or_default();
+    let screens = if of_board.is_empty() { vec![choice.kind] } else { of_board };
+    show_on(&screens, player, speech, request).map_err(|trouble| trouble.told(&speech.words))?;
     // Whoever did not ask for pictures gets the answer in words as well.
     if choice.kind == ScreenKind::Pictures { tell::summary(speech, &request.place) } else { Ok(()) }
 }
@@ -73,7 +91,14 @@ fn open(speech: &Speech, request: &Request) -> Result<Player, Failure> {
     let place = places::open(&request.place, speech)?;
     drop(spinner);
     let _spinner = Spinner::start(speech.words.say("progress-running", &[]));
-    Player::new(place, speech, request.shade, request.units)
+    let mut player = Player::new(place, speech, request.shade, request.units)?;
+    if let Some(groups) = request.groups {
+        player.ask_groups(groups);
+    }
+    if let Some(name) = &request.lesson {
+        player.lead(&LessonText::find(name, &speech.words)?, speech)?;
+    }
+    Ok(player)
 }
 
 /// Why nothing is shown, or no longer.
@@ -104,7 +129,22 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
     }
     let asked = |kind| screens.iter().filter(move |&&screen| screen == kind).count();
     let (windows, terminals) = (asked(ScreenKind::Window), asked(ScreenKind::Terminal));
-    let mut stage = Stage::new(player);
+    let on_board = screens.iter().any(|kind| matches!(kind, ScreenKind::Panel | ScreenKind::Framebuffer));
+    if request.kiosk && (on_board || windows + terminals > 0) {
+        let kiosk = KioskPlayer::new(player, request, speech.in_language(speech.words.tag()));
+        return play_on(Stage::new(kiosk), screens, (windows, terminals), speech, request);
+    }
+    play_on(Stage::new(player), screens, (windows, terminals), speech, request)
+}
+
+fn play_on<I: Instrument + 'static>(
+    mut stage: Stage<I>,
+    screens: &[ScreenKind],
+    (windows, terminals): (usize, usize),
+    speech: &Speech,
+    request: &Request,
+) -> Result<(), Trouble> {
+    let on_board = add_board_screens(&mut stage, screens, speech, request)?;
     if windows > 0 {
         return show_in_windows(stage, windows, terminals > 0, request.size);
     }
@@ -112,13 +152,37 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
         let (post, hands) = Post::channel();
         stage.add(Box::new(terminal(None, request.size, &post)?));
         play(&mut stage, &hands)?;
+    } else if on_board {
+        let (_post, hands) = Post::channel();
+        play(&mut stage, &hands)?;
     }
     Ok(())
 }
 
+/// Adds the panels and monitors among `screens`; `true` where there are any.
+fn add_board_screens<I: Instrument>(
+    stage: &mut Stage<I>,
+    screens: &[ScreenKind],
+    speech: &Speech,
+    request: &Request,
+) -> Result<bool, ScreenError> {
+    let any = [board::any_monitor()];
+    let (parts, gpio_chip) = match &request.board {
+        Some(file) => (file.screens.as_slice(), file.gpio_chip.as_str()),
+        None => (any.as_slice(), ""),
+    };
+    let asked = parts.iter().filter(|part| screens.contains(&part.kind()));
+    let opened = board::open(asked, gpio_chip, &speech.words)?;
+    let on_board = !opened.is_empty();
+    opened.into_iter().for_each(|screen| {
+        stage.add(screen);
+    });
+    Ok(on_board)
+}
+
 #[cfg(feature = "window")]
-fn show_in_windows(
-    mut stage: Stage<Player>,
+fn show_in_windows<I: Instrument + 'static>(
+    mut stage: Stage<I>,
     windows: usize,
     with_terminal: bool,
     size: Option<FrameSize>,
@@ -133,7 +197,7 @@ fn show_in_windows(
 }
 
 #[cfg(not(feature = "window"))]
-fn show_in_windows(_: Stage<Player>, _: usize, _: bool, _: Option<FrameSize>) -> Result<(), Trouble> {
+fn show_in_windows<I>(_: Stage<I>, _: usize, _: bool, _: Option<FrameSize>) -> Result<(), Trouble> {
     Err(ScreenError::new(ScreenKind::Window, "not built").into())
 }
 
@@ -141,6 +205,11 @@ fn terminal(ability: Option<Ability>, size: Option<FrameSize>, post: &Post) -> R
     let ability = ability.or_else(|| Ability::of_environment(|name| std::env::var(name).ok()));
     let ability = ability.ok_or_else(|| ScreenError::new(ScreenKind::Terminal, "TERM"))?;
     Terminal::open(ability, size, post)
+}
+
+/// The stable key of a view.
+pub(super) fn view_key(view: View) -> &'static str {
+    drawing::page(view).key()
 }
 
 fn tell_choice(choice: Choice, words: &Words) {

@@ -7,15 +7,18 @@ use embedded_graphics::geometry::{Point, Size};
 use super::drawing::{Drawing, VIEWS, page};
 use super::droughts::with_droughts;
 use super::hands::Clock;
+use super::leading::{LessonText, shelf};
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument, PointerPhase};
 use crate::commands::failure::Failure;
 use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
+use crate::picture::views::hand::Hand;
 use crate::picture::views::{Scene, help, term};
 use crate::place::{Place, Setting};
 use crate::session::answer::{Asked, Source, YearDetail};
 use crate::session::hand::{HandTold, Told};
 use crate::session::help::key_lines;
+use crate::session::lesson::Led;
 use crate::session::point::{Finger, Phase};
 use crate::session::scene::{Moment, PlaceTold, Stage, facts_of, settings};
 use crate::session::{Answers, Event, Needs, Offer, OfferInput, Shade, State, View, Voice, YearList};
@@ -25,22 +28,22 @@ use crate::words::{System, Words};
 const LANGUAGES: [&str; 2] = ["en", "es"];
 
 /// A session under way.
-pub(super) struct Player {
-    place: Place,
+pub(in crate::commands) struct Player {
+    pub(super) place: Place,
     percent_per_degree: Option<f64>,
-    offer: Offer,
+    pub(super) offer: Offer,
     /// What the settings of the offer are called.
     settings: Vec<Setting>,
     voice_names: Vec<String>,
-    state: State,
+    pub(super) state: State,
     answers: Answers,
     /// One entry for each voice of the offer: the first language and the second, if there are two.
-    voices: Vec<(Words, Option<Words>)>,
+    pub(super) voices: Vec<(Words, Option<Words>)>,
     clock: Clock,
-    drawings: Vec<Drawing>,
+    pub(super) drawings: Vec<Drawing>,
     /// Goes up with everything that can be seen.
-    stamp: u64,
-    asked_water: bool,
+    pub(super) stamp: u64,
+    pub(super) asked_water: bool,
     finger: Finger,
     /// How long the water took for its last answer.
     work_takes: Duration,
@@ -51,8 +54,11 @@ pub(super) struct Player {
     /// Time went by since, so that the answer may be worked out.
     may_work: bool,
     /// The water could not answer what is asked.
-    gave_up: bool,
+    pub(super) gave_up: bool,
     captions: Vec<[String; 3]>,
+    pub(super) led: Led,
+    /// The lessons of the list, in its order.
+    pub(super) shelf: Vec<LessonText>,
 }
 
 impl Player {
@@ -70,7 +76,7 @@ impl Player {
         let offer = Offer::new(OfferInput {
             dials: place.dials.open().collect(),
             years,
-            views: VIEWS.to_vec(),
+            views: VIEWS.into_iter().chain([View::Lesson]).collect(),
             terms: View::ALL.map(|view| term::terms(page(view)).len() as u16),
             voices: tags.collect(),
             system: units.unwrap_or_else(|| usual_system(&place)),
@@ -88,6 +94,7 @@ impl Player {
         let percent_per_degree = place.evaporation_percent_per_degree();
         let voice_names = voices.iter().map(voice_name).collect();
         let state = State::new(&offer);
+        let (shelf, entries) = shelf(&place, &LessonText::built_in()).into_iter().unzip();
         Ok(Self {
             place,
             percent_per_degree,
@@ -108,11 +115,20 @@ impl Player {
             may_work: false,
             gave_up: false,
             captions,
+            led: Led::new(entries),
+            shelf,
         })
     }
 
-    /// Takes an event of the session.
+    /// Takes an event: the lesson first, then the session.
     pub fn step(&mut self, event: Event) {
+        if let Some(event) = self.led_first(event) {
+            self.step_session(event);
+        }
+    }
+
+    /// Takes an event of the session.
+    pub(super) fn step_session(&mut self, event: Event) {
         let Needs { redraw, .. } = {
             let needs = self.state.step(event, &self.offer);
             if needs.answer() {
@@ -212,7 +228,10 @@ impl Player {
             },
         );
         let facts = facts_of(&self.place, self.percent_per_degree, tag);
-        let scene = Scene { facts, sheet: shown.sheet.into(), hand: in_hand.hand(), ..scene };
+        let note = self.led_note();
+        let hand = in_hand.hand();
+        let hand = Hand { note: note.as_deref().unwrap_or(hand.note), ..hand };
+        let scene = Scene { facts, sheet: shown.sheet.into(), hand, ..scene };
         look(&scene, (words, second.as_ref()))
     }
 
@@ -224,6 +243,17 @@ impl Player {
             PointerPhase::Up => Phase::Up,
         };
         let size = Size::new(on.width.into(), on.height.into());
+        if self.point_at_lesson(phase == Phase::Down, phase == Phase::Up, at, size) {
+            return;
+        }
+        // The view ends where the lesson's strip begins; a tap on the strip goes on.
+        let size = Size::new(size.width, size.height - u32::from(self.strip_px(on)));
+        if at.y >= size.height as i32 && size.height < u32::from(on.height) {
+            if phase == Phase::Up {
+                self.step(Event::Press);
+            }
+            return;
+        }
         let mut finger = self.finger;
         let event = self.with_scene(|scene, (words, _)| finger.event((phase, at), size, &self.state, scene, words));
         self.finger = finger;
@@ -261,7 +291,9 @@ impl Instrument for Player {
             let shown = *self.state.shown();
             // Taken out while the scene borrows everything else.
             let mut drawing = std::mem::replace(&mut self.drawings[at], Drawing::none());
+            drawing.foot = self.strip_px(size);
             self.with_scene(|scene, speech| drawing.draw(shown.view, shown.card, scene, shown.shade, speech));
+            self.draw_lesson(&mut drawing);
             drawing.stamp = Some(self.stamp);
             let sheets = drawing.sheets;
             self.drawings[at] = drawing;

@@ -4,10 +4,13 @@ use std::path::PathBuf;
 
 use clap::ArgMatches;
 
+use super::board;
+use crate::board::file::BoardFile;
 use crate::board::{FrameSize, LAYOUTS, ScreenKind};
 use crate::commands::failure::Failure;
 use crate::commands::places;
 use crate::commands::usage::{mistake, unknown_choice};
+use crate::lesson::MOST_GROUPS;
 use crate::session::Shade;
 use crate::words::{System, Words};
 
@@ -16,6 +19,8 @@ use crate::words::{System, Words};
 pub(super) struct Request {
     /// The place.
     pub place: PathBuf,
+    /// The board whose screens are used.
+    pub board: Option<BoardFile>,
     /// Screens that were named; none leaves the choice to the program.
     pub screens: Vec<ScreenKind>,
     /// The layout, where one was asked for.
@@ -28,18 +33,34 @@ pub(super) struct Request {
     pub units: Option<System>,
     /// Colours to begin with.
     pub shade: Shade,
+    /// Whether nobody watches over it.
+    pub kiosk: bool,
+    /// Where what is kept is kept, where a folder was named.
+    pub keep: Option<PathBuf>,
+    /// Only the PIN of the staff menu is set.
+    pub set_pin: bool,
+    /// The lesson to lead.
+    pub lesson: Option<PathBuf>,
+    /// How many groups guess, where it was said.
+    pub groups: Option<u8>,
 }
 
 impl Default for Request {
     fn default() -> Self {
         Self {
             place: places::USUAL.into(),
+            board: None,
             screens: Vec::new(),
             size: None,
             into: None,
             one_language: false,
             units: None,
             shade: Shade::Light,
+            kiosk: false,
+            keep: None,
+            set_pin: false,
+            lesson: None,
+            groups: None,
         }
     }
 }
@@ -76,14 +97,36 @@ impl Request {
                 return Err(refuse(unknown_choice("--theme", other, &["light", "dark", "sunlight"], words)));
             }
         };
+        let board_file = path("board");
+        let board = board_file.as_deref().map(|file| board::read(file, words)).transpose()?;
+        let board_place = || board::place(board.as_ref()?, board_file.as_deref()?);
         Ok(Self {
-            place: path("place").unwrap_or_else(|| places::USUAL.into()),
+            place: path("place").or_else(board_place).unwrap_or_else(|| places::USUAL.into()),
+            board,
             screens,
             size,
             into: path("into"),
             one_language: text("lang").is_some(),
             units,
             shade,
+            kiosk: matches.get_flag("kiosk"),
+            keep: path("keep"),
+            set_pin: matches.get_flag("set-pin"),
+            lesson: path("lesson"),
+            groups: groups(matches, "show", words)?,
         })
+    }
+}
+
+/// How many groups guess; `None` where it was not said.
+pub(in crate::commands) fn groups(matches: &ArgMatches, command: &str, words: &Words) -> Result<Option<u8>, Failure> {
+    let Some(text) = matches.get_one::<String>("groups") else { return Ok(None) };
+    match text.parse() {
+        Ok(groups) if (1..=MOST_GROUPS).contains(&usize::from(groups)) => Ok(Some(groups)),
+        _ => {
+            let arguments =
+                [("option", "--groups".into()), ("low", 1_u32.into()), ("high", (MOST_GROUPS as u32).into())];
+            Err(mistake(&words.say("error-option-number", &arguments), Some(command), words))
+        }
     }
 }

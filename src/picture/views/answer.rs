@@ -205,6 +205,8 @@ impl Answer {
             words.say(&format!("answer-{}-{form}", what.key()), &args)
         };
         match self {
+            // Where no dial can be turned, nobody is asked to.
+            Self::NothingYet if scene.dials.is_empty() => words.say("lesson-unchanged", &[]),
             Self::NothingYet => words.say("answer-nothing-yet", &[]),
             Self::Lacking { canal, now, before } => {
                 let id = if now > before { "answer-lacking-more" } else { "answer-lacking-fewer" };

@@ -57,6 +57,15 @@ pub(super) fn split_cells<'t>(line: &'t str, delimiter: char, cells: &mut Vec<Ce
     }
 }
 
+/// The texts of a line's cells; none where its quotation marks are wrong.
+pub(super) fn texts_of(line: &str, delimiter: char) -> Vec<String> {
+    let mut cells = Vec::new();
+    match split_cells(line, delimiter, &mut cells) {
+        Ok(()) => cells.into_iter().map(|cell| cell.text.into_owned()).collect(),
+        Err(_) => Vec::new(),
+    }
+}
+
 /// The byte of the quotation mark that closes a cell whose text starts at `from`.
 fn closing_mark(line: &str, from: usize) -> Option<usize> {
     let bytes = line.as_bytes();
@@ -74,7 +83,7 @@ fn closing_mark(line: &str, from: usize) -> Option<usize> {
 }
 
 /// A name as it is compared: capitals, outer spaces and runs of spaces do not count.
-pub(super) fn plain_name(name: &str) -> String {
+pub(in crate::place) fn plain_name(name: &str) -> String {
     name.split_whitespace().collect::<Vec<_>>().join(" ").to_lowercase()
 }
 

@@ -18,6 +18,7 @@
 //! assert_eq!((record.days, record.columns[0].values[1]), (2, 10.0));
 //! ```
 
+mod append;
 mod cells;
 mod checksum;
 mod dates;
@@ -29,6 +30,7 @@ mod look;
 mod measure;
 mod notes;
 mod number;
+mod peek;
 mod plan;
 mod rows;
 mod table;
@@ -37,13 +39,16 @@ mod unit;
 
 use chrono::NaiveDate;
 
+pub use append::{Appended, append, with_open_gaps};
 pub use checksum::checksum_of;
 pub use look::{ColumnLook, RecordLook, Spread};
 pub use measure::Measure;
+pub use peek::{ColumnRole, DateReason, Peek, PeekColumn, UnitReason, peek};
 pub use plan::{ColumnPlan, DateOrder, DatePlan, Encoding, GapFill, GapRule, RecordPlan};
 pub use unit::MeasureUnit;
 
 use super::problem::Problem;
+pub(super) use cells::plain_name;
 use cells::{recognise_delimiter, split_cells};
 use notes::Notes;
 use table::Sheet;

@@ -12,7 +12,7 @@ use super::table::{CellState, Readings, Sheet, Table};
 use crate::place::problem::Problem;
 
 /// Numbers that loggers and archives write for "missing"; outside a measure's bounds they are never a measurement.
-const USUAL_MISSING: [f64; 14] =
+pub(super) const USUAL_MISSING: [f64; 14] =
     [-99.0, -99.9, -999.0, -999.9, -9999.0, -9999.9, -6999.0, -99999.0, 999.0, 999.9, 6999.0, 9999.0, 9999.9, 99999.0];
 
 /// The declared marks for a missing value, as text and, where they are numbers, as numbers.

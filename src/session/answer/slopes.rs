@@ -58,13 +58,7 @@ impl SlopesRun {
             &mut stores,
             &calendar[from..to],
             &record[from..to],
-            // Two bands lie side by side in a row.
-            |_, rows| {
-                let of_band = |band: usize| {
-                    rows.get(band / 2).map(|row| row.snow.ice_mm.0[band % 2] + row.snow.liquid_mm.0[band % 2])
-                };
-                out.extend((0..bands).map(|band| of_band(band).unwrap_or(0.0)));
-            },
+            |_, bands_mm| out.extend_from_slice(bands_mm),
             &mut again,
         );
         out

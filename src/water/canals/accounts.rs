@@ -71,18 +71,17 @@ impl Stored<'_> {
             }
             *self.pool_m3 += level * shares.pool_share;
         } else {
-            self.fill_in_passes(amount_m3);
+            self.fill_in_passes::<WIDTH>(amount_m3);
         }
     }
 
     /// The general credit: in each pass the accounts that would overflow are filled and drop out.
-    fn fill_in_passes(&mut self, amount_m3: f64) {
+    fn fill_in_passes<const WIDTH: usize>(&mut self, amount_m3: f64) {
         let shares = self.shares;
         let mut open: u32 = 0;
-        for i in 0..MOST_GATES {
-            if shares.share[i] > 0.0 && self.account_m3[i] < shares.capacity_m3[i] {
-                open |= 1 << i;
-            }
+        for i in 0..WIDTH {
+            let is_open = (shares.share[i] > 0.0) & (self.account_m3[i] < shares.capacity_m3[i]);
+            open |= u32::from(is_open) << i;
         }
         let mut pool_open = shares.pool_share > 0.0 && *self.pool_m3 < shares.pool_capacity_m3;
         let mut left = amount_m3;

@@ -3,6 +3,8 @@
 //! FAO-56 (Allen et al. 1998), chapter 8. Depths in mm. No water rises from below and none runs off: what the roots cannot
 //! hold drains.
 
+use crate::water::lanes::Number;
+
 /// Water between field capacity and wilting point in the root zone, mm (FAO-56 eq. 82), both as volume shares.
 pub fn total_available_mm(field_capacity_share: f64, wilting_point_share: f64, root_depth_m: f64) -> f64 {
     1000.0 * (field_capacity_share - wilting_point_share) * root_depth_m
@@ -14,33 +16,32 @@ pub fn readily_available_mm(total_available_mm: f64, depletion_share: f64) -> f6
 }
 
 /// Depletion share on a day of other thirst than the table's 5 mm, kept within 0.1 and 0.8 (FAO-56 table 22, footnote).
-pub fn adjusted_depletion_share(depletion_share: f64, crop_evaporation_mm: f64) -> f64 {
-    (depletion_share + 0.04 * (5.0 - crop_evaporation_mm)).clamp(0.1, 0.8)
+#[inline(always)]
+pub fn adjusted_depletion_share<N: Number>(depletion_share: N, crop_evaporation_mm: N) -> N {
+    let adjusted = depletion_share + N::splat(0.04) * (N::splat(5.0) - crop_evaporation_mm);
+    adjusted.most(N::splat(0.1)).least(N::splat(0.8))
 }
 
 /// Share of its full evaporation that a crop still reaches at a depletion in mm (FAO-56 eq. 84): 1 while the readily
 /// available water lasts, 0 when everything available is gone.
-pub fn stress_factor(depletion_mm: f64, total_available_mm: f64, depletion_share: f64) -> f64 {
-    if depletion_mm >= total_available_mm {
-        0.0
-    } else if depletion_mm <= readily_available_mm(total_available_mm, depletion_share) {
-        1.0
-    } else {
-        (total_available_mm - depletion_mm) / ((1.0 - depletion_share) * total_available_mm)
-    }
+#[inline(always)]
+pub fn stress_factor<N: Number>(depletion_mm: N, total_available_mm: N, depletion_share: N) -> N {
+    let one = N::splat(1.0);
+    // Where nothing can be held this is nothing over nothing, and then no share is reached.
+    ((total_available_mm - depletion_mm) / ((one - depletion_share) * total_available_mm)).positive().least(one)
 }
 
 /// A day in the root zone.
 #[derive(Clone, Copy, Debug, PartialEq)]
-pub struct RootZoneDay {
+pub struct RootZoneDay<N = f64> {
     /// Water missing from full at the end of the day, mm.
-    pub depletion_mm: f64,
+    pub depletion_mm: N,
     /// Water that the crop and its soil gave to the air, mm.
-    pub crop_evaporation_mm: f64,
+    pub crop_evaporation_mm: N,
     /// Water that drained below the roots, mm.
-    pub percolation_mm: f64,
+    pub percolation_mm: N,
     /// Share of the full evaporation that the stress left, 0 to 1.
-    pub stress_factor: f64,
+    pub stress_factor: N,
 }
 
 /// One day of the balance (FAO-56 eq. 85 to 88), from the depletion at its start.
@@ -48,28 +49,23 @@ pub struct RootZoneDay {
 /// `water_mm` is rain and delivery together and enters at the start of the day, before the stress is judged (as in FAO-56
 /// example 38); `full_evaporation_mm` is the day's crop evaporation without stress, coefficient times reference.
 /// The evaporation stops where the available water ends, so that the depletion grows by exactly evaporation + percolation − water.
-pub fn root_zone_day(
-    depletion_mm: f64,
-    total_available_mm: f64,
-    depletion_share: f64,
-    full_evaporation_mm: f64,
-    water_mm: f64,
-) -> RootZoneDay {
+/// Without branches, so that plots can go side by side.
+#[inline(always)]
+pub fn root_zone_day<N: Number>(
+    depletion_mm: N,
+    total_available_mm: N,
+    depletion_share: N,
+    full_evaporation_mm: N,
+    water_mm: N,
+) -> RootZoneDay<N> {
     let watered_mm = depletion_mm - water_mm;
     let share = adjusted_depletion_share(depletion_share, full_evaporation_mm);
-    let stress_factor = stress_factor(if watered_mm < 0.0 { 0.0 } else { watered_mm }, total_available_mm, share);
-    let wanted_mm = stress_factor * full_evaporation_mm;
-    let within_reach_mm = total_available_mm - watered_mm;
-    let crop_evaporation_mm = if wanted_mm <= within_reach_mm {
-        wanted_mm
-    } else if within_reach_mm > 0.0 {
-        within_reach_mm
-    } else {
-        0.0
-    };
+    let stress_factor = stress_factor(watered_mm.positive(), total_available_mm, share);
+    let within_reach_mm = (total_available_mm - watered_mm).positive();
+    let crop_evaporation_mm = (stress_factor * full_evaporation_mm).least(within_reach_mm);
     let balance_mm = watered_mm + crop_evaporation_mm;
-    let (depletion_mm, percolation_mm) = if balance_mm < 0.0 { (0.0, -balance_mm) } else { (balance_mm, 0.0) };
-    RootZoneDay { depletion_mm, crop_evaporation_mm, percolation_mm, stress_factor }
+    let depletion_mm = balance_mm.positive();
+    RootZoneDay { depletion_mm, crop_evaporation_mm, percolation_mm: depletion_mm - balance_mm, stress_factor }
 }
 
 #[cfg(test)]

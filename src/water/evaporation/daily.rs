@@ -4,7 +4,7 @@ use super::hargreaves_samani::of_range_root_mm;
 use super::oudin::oudin_mm;
 use super::penman_monteith::PenmanMonteithTraits;
 use super::sun::SkyTable;
-use crate::water::lanes::square_root;
+use crate::water::lanes::{Lanes, square_root};
 
 /// How a place gets its reference evaporation.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -97,6 +97,16 @@ impl<'a> DayBeforeWarming<'a> {
     #[inline(always)]
     fn hargreaves_samani_mm(&self, warming_c: f64) -> f64 {
         not_negative(of_range_root_mm(self.middle_c + warming_c, self.range_root, self.extraterrestrial_mj_m2))
+    }
+
+    /// The same for several warmings side by side, with the bits of each alone.
+    #[inline(always)]
+    pub fn warmed_by_lane_mm<const L: usize>(&self, warming_c: Lanes<L>) -> Lanes<L> {
+        match self.method {
+            // The choice of method stays outside the lanes, so that they go through the arithmetic together.
+            Method::HargreavesSamani => warming_c.map(|warming_c| self.hargreaves_samani_mm(warming_c)),
+            _ => warming_c.map(|warming_c| self.warmed_mm(warming_c)),
+        }
     }
 
     /// Reference evaporation with `warming_c` added to every temperature; see [`reference_evaporation_mm`].

@@ -16,10 +16,14 @@ pub mod commands;
 pub mod fit;
 #[cfg(feature = "std")]
 pub mod generator;
+#[cfg(feature = "pdf")]
+pub mod handout;
 #[cfg(feature = "std")]
 pub mod keep;
 #[cfg(feature = "std")]
 pub mod lesson;
+#[cfg(feature = "std")]
+pub mod open_data;
 #[cfg(feature = "std")]
 pub mod place;
 #[cfg(feature = "std")]

@@ -14,7 +14,7 @@ use std::path::{Path, PathBuf};
 /// * `picture` draws values: plain data of the water and the signs, never what runs them.
 /// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not
 ///   water: of a place it has the reader of files, of the water the names of the dials.
-const MAY_NAME: [(&str, &[&str]); 12] = [
+const MAY_NAME: [(&str, &[&str]); 14] = [
     ("water", &[]),
     ("signs", &["water"]),
     ("place", &["water", "signs", "words::nearest"]),
@@ -42,6 +42,8 @@ const MAY_NAME: [(&str, &[&str]); 12] = [
             "water::dials",
         ],
     ),
+    ("open_data", &[]),
+    ("handout", &["picture", "words", "signs", "water"]),
     ("keep", &["water::dials", "session"]),
 ];
 const ROOTS: [&str; 3] = ["commands", "lib", "main"];

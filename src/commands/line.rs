@@ -19,7 +19,10 @@ pub(super) fn command(words: &Words) -> Command {
         say("help-options"),
         say("help-more"),
     );
-    plain(Command::new("deshielo"), words)
+    let command = plain(Command::new("deshielo"), words);
+    #[cfg(feature = "pdf")]
+    let command = command.subcommand(handout(words));
+    command
         .version(env!("CARGO_PKG_VERSION"))
         .about(say("help-about"))
         .help_template(template)
@@ -29,6 +32,7 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(check(words))
         .subcommand(map(words))
         .subcommand(rehearse(words))
+        .subcommand(data(words))
         .subcommand(weather(words))
         .subcommand(tally(words))
         .subcommand(super::place::line::command(words))
@@ -113,6 +117,36 @@ fn rehearse(words: &Words) -> Command {
         .arg(text("groups", "value-number", "help-groups", words).help(with_usual("help-groups", "4", words)))
         .args(common(words))
         .after_help(words.say("help-rehearse-more", &[]))
+}
+
+fn data(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("data", "help-usage-data", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("set", "value-set", "help-set", words).action(ArgAction::Append).allow_hyphen_values(true))
+        .arg(path_option("setting", "value-setting", "help-setting", words))
+        .arg(text("years", "value-years", "help-years", words))
+        .arg(text("form", "value-form", "help-data-form", words).help(with_usual("help-data-form", "csv", words)))
+        .arg(path_option("out", "value-file", "help-data-out", words))
+        .arg(path_option("into", "value-folder", "help-data-into", words))
+        .args(common(words))
+}
+
+#[cfg(feature = "pdf")]
+fn handout(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("handout", "help-usage-handout", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("set", "value-set", "help-set", words).action(ArgAction::Append).allow_hyphen_values(true))
+        .arg(path_option("setting", "value-setting", "help-setting", words))
+        .arg(text("years", "value-years", "help-years", words))
+        .arg(path_option("lesson", "value-lesson", "help-handout-lesson", words))
+        .arg(text("sheet", "value-sheet", "help-handout-sheet", words).help(with_usual("help-handout-sheet", "work", words)))
+        .arg(text("paper", "value-paper", "help-handout-paper", words))
+        .arg(text("units", "value-units", "help-units", words))
+        .arg(path_option("out", "value-file", "help-handout-out", words))
+        .args(common(words))
+        .after_help(words.say("help-handout-more", &[]))
 }
 
 fn weather(words: &Words) -> Command {

@@ -5,8 +5,11 @@
 
 mod built_in;
 mod check;
+mod data;
 mod failure;
 mod keep_folder;
+#[cfg(feature = "pdf")]
+mod handout;
 mod line;
 mod map;
 mod output;
@@ -57,6 +60,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
     };
     match matches.subcommand() {
         Some(("tell", matches)) => tell::run(speech, matches),
+        Some(("data", matches)) => data::run(speech, matches),
         Some(("check", matches)) => check::run(speech, matches),
         Some(("show", matches)) => show::run(speech, matches),
         Some(("map", matches)) => map::run(speech, matches),
@@ -64,6 +68,8 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("weather", matches)) => weather::run(speech, matches),
         Some(("tally", matches)) => tally::run(speech, matches),
         Some(("place", matches)) => place::run(speech, matches),
+        #[cfg(feature = "pdf")]
+        Some(("handout", matches)) => handout::run(speech, matches),
         _ => show::usual(speech),
     }
 }

@@ -22,6 +22,8 @@ pub(super) struct Speech {
     pub words: Words,
     fallback: Option<Fallback>,
     locale_faults: Vec<String>,
+    /// Whether a page to print is asked for in both languages.
+    pub both: bool,
 }
 
 impl Speech {
@@ -30,7 +32,10 @@ impl Speech {
         let mut locales = Locales::embedded();
         let folder = value_of("--locales", arguments).map(PathBuf::from);
         let faults = folder.map(|folder| locales.add_directory(&folder)).unwrap_or_default();
-        let asked = match value_of("--lang", arguments) {
+        let is_handout = arguments.iter().skip(1).any(|argument| argument == "handout");
+        let tag = value_of("--lang", arguments);
+        let both = is_handout && tag.as_ref().is_some_and(|tag| tag == "both");
+        let asked = match tag.filter(|_| !both) {
             Some(tag) => tag.to_string_lossy().into_owned(),
             None => of_the_board(arguments).or_else(|| of_the_system(&locales)).unwrap_or_else(|| "en".to_owned()),
         };
@@ -41,7 +46,7 @@ impl Speech {
             let more = faults.len() - MOST_LOCALE_FAULTS;
             locale_faults.push(words.say("check-more", &[("n", more.into())]));
         }
-        Self { locales, asked, words, fallback, locale_faults }
+        Self { locales, asked, words, fallback, locale_faults, both }
     }
 
     /// Tells what could not be met. Never fails: the next best words are used.

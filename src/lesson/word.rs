@@ -46,7 +46,7 @@ const _: () = assert!(STIR * SETTLE % WORDS as u64 == 1);
 pub fn word_letters(place: usize) -> &'static [u8] {
     match place {
         0..WORD_LETTERS if place + 1 == WORD_LETTERS => CHECKS,
-        0..WORD_LETTERS if place % 2 == 0 => CONSONANTS,
+        0..WORD_LETTERS if place.is_multiple_of(2) => CONSONANTS,
         0..WORD_LETTERS => VOWELS,
         _ => &[],
     }

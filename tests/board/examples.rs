@@ -73,3 +73,28 @@ fn what_they_say_is_what_is_read() {
     let at = SpiAddress { bus: 0, chip_select: 1 };
     assert_eq!(converter.chip, ConverterChip::Mcp3008 { at, speed_hz: 1_000_000 });
 }
+
+#[test]
+fn the_page_for_people_explains_every_key() {
+    let page = include_str!("../../cross/boards/README.md");
+    let words: Vec<&str> = page.split(|c: char| !c.is_ascii_alphanumeric() && c != '_').collect();
+    let mut asked = Vec::new();
+    for file in fs::read_dir("src/board/file").unwrap() {
+        let code = fs::read_to_string(file.unwrap().path()).unwrap();
+        let code = code.split("#[cfg(test)]").next().unwrap();
+        for question in ["number", "number_or", "need_number", "text", "need_text", "flag_or", "choice", "need_choice"]
+        {
+            let call = format!("section.{question}(\"");
+            asked.extend(code.split(call.as_str()).skip(1).map(|rest| rest.split('"').next().unwrap().to_owned()));
+        }
+        // Pins and what is told of a number carry the key second; so do buses, whose kind is no key.
+        let code = code.replace("bus_number(section, ", "");
+        asked.extend(code.split("(section, \"").skip(1).map(|rest| rest.split('"').next().unwrap().to_owned()));
+    }
+    assert!(asked.len() > 35, "{asked:?}");
+    let silent: Vec<&String> = asked
+        .iter()
+        .filter(|key| !words.iter().any(|word| word == key || word.starts_with(&format!("{key}_"))))
+        .collect();
+    assert!(silent.is_empty(), "README.md says nothing of {silent:?}");
+}

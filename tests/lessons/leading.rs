@@ -78,7 +78,7 @@ fn the_dials_stand_as_before_until_the_result_is_shown() {
     while room.led.course().unwrap().lesson.steps[room.led.progress().unwrap().step()].key != "total" {
         room.press();
     }
-    room.to_guess();
+    room.until_guess();
     assert_eq!(of(&room), Some(0.0));
     // Looking at the season meanwhile shows nothing of the answer, and a press leads back.
     room.step(Event::Command(Command::Show(View::Season)));
@@ -94,7 +94,7 @@ fn the_dials_stand_as_before_until_the_result_is_shown() {
 fn no_result_before_a_guess_is_in_or_skipped_on_purpose() {
     let words = Words::new("en-US").0;
     let mut room = begun("who_is_cut_first", 3);
-    room.to_guess();
+    room.until_guess();
     let hides = |room: &Room| !matches!(room.scene(&words, None).body, Body::Reveal(_));
     // Right is "on" elsewhere; while groups guess it is the next group.
     room.step(Event::Key(Key::Right));
@@ -127,7 +127,7 @@ fn no_result_before_a_guess_is_in_or_skipped_on_purpose() {
 fn skipping_is_a_choice_of_its_own() {
     let words = Words::new("es-CL").0;
     let mut room = begun("who_is_cut_first", 2);
-    room.to_guess();
+    room.until_guess();
     room.hold();
     while room.led.choice() != Some(Choice::Skip) {
         room.turn(1);
@@ -142,7 +142,7 @@ fn skipping_is_a_choice_of_its_own() {
 #[test]
 fn a_change_of_language_units_and_colours_loses_nothing() {
     let mut room = begun("earlier_water", 3);
-    room.to_guess();
+    room.until_guess();
     room.turn(-4);
     room.press();
     room.turn(2);
@@ -163,7 +163,7 @@ fn a_change_of_language_units_and_colours_loses_nothing() {
 #[test]
 fn a_word_of_another_board_comes_in_with_keys_and_with_the_knob() {
     let mut there = begun("line_the_canal", 4);
-    there.to_guess();
+    there.until_guess();
     there.step(Event::Key(Key::Right));
     there.step(Event::Key(Key::Right));
     there.turn(5);
@@ -172,7 +172,7 @@ fn a_word_of_another_board_comes_in_with_keys_and_with_the_knob() {
     let word = there.led.progress().unwrap().word(lesson, 2).unwrap();
 
     let mut here = begun("line_the_canal", 4);
-    here.to_guess();
+    here.until_guess();
     let open_word = |room: &mut Room| {
         room.hold();
         while room.led.choice() != Some(Choice::Word) {
@@ -189,7 +189,7 @@ fn a_word_of_another_board_comes_in_with_keys_and_with_the_knob() {
     assert_eq!(kept(&here), kept(&there));
 
     let mut knob = begun("line_the_canal", 4);
-    knob.to_guess();
+    knob.until_guess();
     open_word(&mut knob);
     for letter in word.chars() {
         for _ in 0..12 {
@@ -204,7 +204,7 @@ fn a_word_of_another_board_comes_in_with_keys_and_with_the_knob() {
 
     // A wrong word is refused and changes nothing; letters that cannot stand there are told at once.
     let mut wrong = begun("line_the_canal", 4);
-    wrong.to_guess();
+    wrong.until_guess();
     open_word(&mut wrong);
     wrong.step(Event::Key(Key::Char('a')));
     assert_eq!(wrong.led.note(), Some(Note::WrongLetter));
@@ -220,7 +220,7 @@ fn a_word_of_another_board_comes_in_with_keys_and_with_the_knob() {
 #[test]
 fn one_long_press_makes_ready_for_the_next_group_and_undo_brings_the_guesses_back() {
     let mut room = begun("grow_the_town", 2);
-    room.to_guess();
+    room.until_guess();
     room.press();
     room.press();
     room.press();
@@ -286,7 +286,7 @@ fn a_power_cut_loses_no_guess() {
     assert!(cuts > 30, "{cuts}");
     // A file that was changed meanwhile begins anew.
     let mut room = begun("change_the_crops", 3);
-    room.to_guess();
+    room.until_guess();
     let kept = Kept { stamp: room.led.kept().unwrap().stamp.wrapping_add(1), ..room.led.kept().unwrap() };
     assert!(!room.led.take_up(course("change_the_crops"), kept));
     assert_eq!(room.led.part(), Part::Start);

@@ -100,7 +100,7 @@ fn crowded_and_odd_pages_hold_too() {
             room.led.ask_groups(12);
             found.extend(faults(&room.scene(&words, None), &format!("{tag} twelve"), &SIZES));
             room.press();
-            room.to_guess();
+            room.until_guess();
             for group in 0..12 {
                 room.turn((group - 6) * spread);
                 room.press();
@@ -113,7 +113,7 @@ fn crowded_and_odd_pages_hold_too() {
         let mut room = Room::new(course("who_is_cut_first"));
         room.led.ask_groups(2);
         room.press();
-        room.to_guess();
+        room.until_guess();
         room.hold();
         for _ in 0..room.led.choices().len() {
             found.extend(faults(&room.scene(&words, None), &format!("{tag} {:?}", room.led.choice()), &SIZES));

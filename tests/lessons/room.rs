@@ -110,7 +110,7 @@ impl Room {
     }
 
     /// Presses until a guess is asked for.
-    pub fn to_guess(&mut self) {
+    pub fn until_guess(&mut self) {
         for _ in 0..40 {
             if self.led.progress().is_some_and(|progress| progress.phase() == deshielo::lesson::Phase::Guess) {
                 return;

@@ -1,6 +1,6 @@
 //! A board file in, checked values out: which screens and hands a board has, when it rests, and how it starts.
 //!
-//! `cross/boards/` has examples that say what each key is for. Every mistake is told at its line, all of them at once, as
+//! `cross/boards/` has examples, and a page that says what each key is for. Every mistake is told at its line, all of them at once, as
 //! with a place. Nothing here touches hardware, so that `deshielo check` reads a board file on any computer.
 
 mod chips;

@@ -11,12 +11,12 @@ use crate::place::problem::Problem;
 use crate::place::read;
 
 /// Whether a text is a lesson and no setting: only lessons have steps.
-pub(super) fn is_lesson(text: &str) -> bool {
+pub(in crate::commands) fn is_lesson(text: &str) -> bool {
     text.lines().any(|line| line.trim_start().starts_with("[[step"))
 }
 
 /// The lesson of this name that is part of the program.
-pub(super) fn built_in(name: &str) -> Option<SettingText> {
+pub(in crate::commands) fn built_in(name: &str) -> Option<SettingText> {
     let (_, text) = lessons().iter().find(|(known, _)| *known == name)?;
     Some(SettingText { file: format!("{name}.toml").into(), text: (*text).to_owned() })
 }

@@ -4,6 +4,8 @@ mod found;
 mod lessons;
 mod report_json;
 
+pub(super) use lessons::{built_in as built_in_lesson, is_lesson};
+
 use std::path::PathBuf;
 
 use clap::ArgMatches;

@@ -52,7 +52,7 @@ impl Contact {
     /// The sheet; `None` without any picture, or with more than a sheet can hold.
     pub fn draw(&self) -> Option<(FrameSize, Vec<Rgb565>)> {
         let columns = COLUMNS.min(self.small.len());
-        let rows = self.small.len().checked_div(columns)? + usize::from(self.small.len() % columns > 0);
+        let rows = if columns == 0 { return None } else { self.small.len().div_ceil(columns) };
         let (cell_wide, cell_high) = (self.wide + GAP, self.high + NAME + GAP);
         let wide = u16::try_from(columns * cell_wide + GAP).ok()?;
         let high = u16::try_from(rows * cell_high + GAP).ok()?;

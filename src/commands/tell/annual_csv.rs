@@ -10,7 +10,7 @@ use crate::water::calendar::CalendarDay;
 use crate::water::ledger::{FLOWS, Flow, Ledger, STORES, Store};
 
 /// Both runs, a row each for the valley and for every canal of every year shown.
-pub(super) fn write(told: &Told) -> String {
+pub(in crate::commands) fn write(told: &Told) -> String {
     let mut rows: Vec<Vec<String>> = vec![yearly().into_iter().map(|(name, _)| name).collect()];
     for (name, run) in [("as_it_was", &told.as_it_was), ("with_changes", &told.with_changes)] {
         rows_of(name, run, &told.place, &mut rows);

@@ -28,7 +28,7 @@ pub(super) fn canal_columns() -> impl Iterator<Item = (&'static str, super::cana
 }
 
 /// Every column of the yearly CSV, in order, with the message that explains it.
-pub(super) fn yearly() -> Vec<(String, String)> {
+pub(in crate::commands) fn yearly() -> Vec<(String, String)> {
     let mut columns: Vec<(String, String)> = Vec::new();
     let named = |key: &str| (key.to_owned(), Words::key_id("column", key));
     columns.extend(ROW_NAMES.map(named));

@@ -21,7 +21,7 @@ pub(super) struct DayColumn {
 }
 
 /// A column of every gate and day; the gate's key and `_` stand before it.
-pub(super) struct GateColumn {
+pub(in crate::commands) struct GateColumn {
     /// The end of its name, with the unit.
     pub key: &'static str,
     read: fn(&Evening, &WorksStores, usize) -> f64,
@@ -65,7 +65,7 @@ pub(super) const EACH_DAY: [DayColumn; 23] = [
 ];
 
 /// What every gate tells.
-pub(super) const EACH_GATE: [GateColumn; 5] = [
+pub(in crate::commands) const EACH_GATE: [GateColumn; 5] = [
     GateColumn { key: "demand_m3s", read: |evening, _, gate| flow_m3s(evening.demand_m3[gate]) },
     GateColumn { key: "delivered_m3s", read: |evening, _, gate| flow_m3s(evening.river.canal_m3[gate]) },
     GateColumn { key: "stored_m3s", read: |evening, _, gate| flow_m3s(evening.river.stored_take_m3[gate]) },
@@ -78,7 +78,7 @@ fn flow_m3s(volume_m3: f64) -> f64 {
 }
 
 /// The columns that a place has.
-pub(super) struct DailyColumns {
+pub(in crate::commands) struct DailyColumns {
     lake: bool,
     gates: usize,
 }
@@ -97,7 +97,7 @@ impl DailyColumns {
 
 /// The days of a run, column by column.
 #[derive(Clone)]
-pub(super) struct Days {
+pub(in crate::commands) struct Days {
     start_month: u8,
     lake: bool,
     gates: usize,
@@ -152,6 +152,31 @@ impl Days {
         kept
     }
 
+    /// The days.
+    pub fn dates(&self) -> &[NaiveDate] {
+        &self.dates
+    }
+
+    /// The water year of each day.
+    pub fn water_years(&self) -> &[i32] {
+        &self.water_years
+    }
+
+    /// The names of the valley's columns, which come first.
+    pub fn day_keys(&self) -> Vec<&'static str> {
+        self.columns().of_day().map(|column| column.key).collect()
+    }
+
+    /// The place of a gate's column, counted from 0.
+    pub fn gate_column(&self, gate: usize, index: usize) -> usize {
+        self.columns().of_day().count() + gate * EACH_GATE.len() + index
+    }
+
+    /// A column, day by day.
+    pub fn column(&self, index: usize) -> Vec<f64> {
+        self.values.iter().skip(index).step_by(self.width().max(1)).copied().collect()
+    }
+
     fn names(&self, place: &Place) -> Vec<Cow<'static, str>> {
         let mut names: Vec<Cow<'static, str>> = self.columns().of_day().map(|column| column.key.into()).collect();
         for gate in &place.gates {
@@ -161,7 +186,7 @@ impl Days {
     }
 
     /// Every column as a list, beginning with the dates.
-    pub fn node(&self, place: &Place) -> Node {
+    pub(super) fn node(&self, place: &Place) -> Node {
         let width = self.width();
         let dates = self.dates.iter().map(|date| Node::from(date.to_string())).collect();
         let mut columns: Vec<(Cow<'static, str>, Node)> = vec![("date".into(), Node::List(dates))];
@@ -203,7 +228,7 @@ fn rows(name: &str, run: &Run, text: &mut String) {
 }
 
 /// A number in the fewest digits that give it back; empty where there is none.
-pub(super) fn number(value: f64) -> String {
+pub(in crate::commands) fn number(value: f64) -> String {
     if !value.is_finite() {
         String::new()
     } else if value != 0.0 && (value.abs() < 1e-5 || value.abs() >= 1e16) {

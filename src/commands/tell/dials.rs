@@ -107,7 +107,7 @@ fn lacking(dial: Dial) -> &'static str {
 }
 
 /// Where a dial stands, for people: "+2 °C", "−20%", "40%".
-pub(super) fn say_value(dial: Dial, value: f64, system: System, words: &Words) -> String {
+pub(in crate::commands) fn say_value(dial: Dial, value: f64, system: System, words: &Words) -> String {
     match dial.unit() {
         DialUnit::Celsius => {
             let amount = words.quantity(value, Quantity::TemperatureChange, system, 2);

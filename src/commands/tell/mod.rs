@@ -29,8 +29,11 @@ use super::spinner::Spinner;
 use super::usage::mistake;
 use crate::water::dials::Dials;
 use request::{Form, Request};
-use runs::Told;
-pub(super) use runs::{usual_system, years_at_rest};
+pub(super) use annual_csv::write as yearly_csv;
+pub(super) use columns::yearly as yearly_columns;
+pub(super) use daily::{EACH_GATE, number};
+pub(super) use runs::{Told, usual_system, years_at_rest};
+pub(super) use table::{mean_date, sign_rows};
 
 /// Runs the place and tells what came of it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {

@@ -13,7 +13,7 @@ use crate::words::{System, Words};
 
 /// One run, cut down to the years that are shown.
 #[derive(Clone)]
-pub(super) struct Run {
+pub(in crate::commands) struct Run {
     /// The years shown, in order.
     pub years: Vec<YearReport>,
     /// The days of those years, where they were asked for.
@@ -21,7 +21,7 @@ pub(super) struct Run {
 }
 
 /// Everything that an answer is written from.
-pub(super) struct Told {
+pub(in crate::commands) struct Told {
     /// The place.
     pub place: Place,
     /// The setting that was used.

@@ -47,17 +47,27 @@ pub(super) fn write(told: &Told, system: System, words: &Words) -> String {
 }
 
 fn signs(told: &Told, system: System, words: &Words) -> String {
+    let (heads, rows) = sign_rows(told, system, words);
+    let column = |(index, heading): (usize, String)| {
+        let (side, most) = if index == 0 { (Side::Left, MOST_NAME) } else { (Side::Right, MOST_VALUE) };
+        Column { heading, side, most, heading_most: MOST_HEADING }
+    };
+    let columns: Vec<Column> = heads.into_iter().enumerate().map(column).collect();
+    lay_out(&columns, &rows).replace('\u{202f}', " ")
+}
+
+/// Heads of the columns, and a row for each of the signs that tell most.
+pub(in crate::commands) fn sign_rows(told: &Told, system: System, words: &Words) -> (Vec<String>, Vec<Vec<String>>) {
     let say = |id: &str| words.say(id, &[]);
     let years = &told.as_it_was.years;
     let over = match years.as_slice() {
         [only] => words.say("tell-over-one-year", &[("year", words.year(only.year.water_year).into())]),
         years => words.say("tell-mean-of-years", &[("n", years.len().into())]),
     };
-    let column = |heading: String, side, most| Column { heading, side, most, heading_most: MOST_HEADING };
-    let mut columns = vec![column(over, Side::Left, MOST_NAME), column(say("tell-as-it-was"), Side::Right, MOST_VALUE)];
+    let mut heads = vec![over, say("tell-as-it-was")];
     if told.is_turned() {
-        columns.push(column(say("tell-with-your-changes"), Side::Right, MOST_VALUE));
-        columns.push(column(say("tell-change"), Side::Right, MOST_VALUE));
+        heads.push(say("tell-with-your-changes"));
+        heads.push(say("tell-change"));
     }
     let mut rows = Vec::new();
     for sign in MOST_TELLING {
@@ -67,9 +77,9 @@ fn signs(told: &Told, system: System, words: &Words) -> String {
         }
     }
     for row in &mut rows {
-        row.truncate(columns.len());
+        row.truncate(heads.len());
     }
-    lay_out(&columns, &rows).replace('\u{202f}', " ")
+    (heads, rows)
 }
 
 /// Name, as it was, with the changes, change; `None` where the place has no such thing.
@@ -145,7 +155,7 @@ fn date(told: &Told, run: &Run, sign: Sign, words: &Words) -> String {
 }
 
 /// The date of a mean day of the water year, in a year without a leap day.
-pub(super) fn mean_date(day_of_water_year: f64, start_month: u8) -> NaiveDate {
+pub(in crate::commands) fn mean_date(day_of_water_year: f64, start_month: u8) -> NaiveDate {
     // Water years that start in March or later hold the February of the next year: 2001 has no leap day, nor has 2002.
     let year = if start_month > 2 { 2000 } else { 2001 };
     let first = NaiveDate::from_ymd_opt(year, u32::from(start_month), 1).unwrap_or_default();

@@ -1,7 +1,7 @@
 //! Where every drop of the chosen year went: what comes in runs together to one stream and parts again into what goes
 //! out, each as wide as its water.
 
-mod entries;
+pub(crate) mod entries;
 mod slots;
 
 use embedded_graphics::geometry::Point;

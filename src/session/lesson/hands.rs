@@ -13,13 +13,12 @@ use crate::session::view::View;
 impl Led {
     /// Moves the guess at hand to a share of its axis, 0 to 1, as a finger on it does; nothing where no group guesses.
     pub fn guess_at(&mut self, share: f64) -> Taken {
-        if self.is_guessing() && share.is_finite() {
-            if let (Some(course), Some(progress)) = (&self.course, &mut self.progress) {
-                let guess = course.lesson.steps.get(progress.step()).and_then(|step| step.guess);
-                let last = guess.map_or(0.0, |guess| f64::from(guess.stops) - 1.0);
-                let stop = libm::round(share.clamp(0.0, 1.0) * last) as i32;
-                progress.turn(&course.lesson, stop - i32::from(progress.hand()));
-            }
+        let open = self.is_guessing() && share.is_finite();
+        if let (Some(course), Some(progress), true) = (&self.course, &mut self.progress, open) {
+            let guess = course.lesson.steps.get(progress.step()).and_then(|step| step.guess);
+            let last = guess.map_or(0.0, |guess| f64::from(guess.stops) - 1.0);
+            let stop = libm::round(share.clamp(0.0, 1.0) * last) as i32;
+            progress.turn(&course.lesson, stop - i32::from(progress.hand()));
         }
         Taken::here()
     }

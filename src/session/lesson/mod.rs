@@ -73,6 +73,13 @@ pub enum Note {
     NotHere,
 }
 
+/// What a place offers without a lesson.
+#[derive(Clone, Debug, PartialEq)]
+struct Free {
+    dials: Vec<(Dial, DialRange)>,
+    settings: Vec<NamedSetting>,
+}
+
 /// A led lesson, or the list of them.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Led {
@@ -90,7 +97,7 @@ pub struct Led {
     note: Option<Note>,
     cleared: Option<Progress>,
     /// What the place offers without a lesson.
-    free: Option<(Vec<(Dial, DialRange)>, Vec<NamedSetting>)>,
+    free: Option<Free>,
 }
 
 /// What outlives a power cut.

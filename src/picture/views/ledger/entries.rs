@@ -4,7 +4,7 @@ use crate::water::ledger::{Flow, Ledger, Store};
 
 /// What a line's branch looks like.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
-pub(super) enum Look {
+pub(crate) enum Look {
     Rain,
     River,
     Store,
@@ -16,7 +16,7 @@ pub(super) enum Look {
 
 /// One line.
 #[derive(Clone, Copy, Debug, PartialEq)]
-pub(super) struct Entry {
+pub(crate) struct Entry {
     /// The message that names it.
     pub id: &'static str,
     pub look: Look,
@@ -64,12 +64,12 @@ fn other_gain_m3(ledger: &Ledger) -> f64 {
 }
 
 /// What came in, and what the stores gave.
-pub(super) fn entries_in(now: &Ledger, was: &Ledger) -> Vec<Entry> {
+pub(crate) fn entries_in(now: &Ledger, was: &Ledger) -> Vec<Entry> {
     read(&IN, now, was)
 }
 
 /// What went out, and what the stores kept.
-pub(super) fn entries_out(now: &Ledger, was: &Ledger) -> Vec<Entry> {
+pub(crate) fn entries_out(now: &Ledger, was: &Ledger) -> Vec<Entry> {
     read(&OUT, now, was)
 }
 
@@ -84,7 +84,7 @@ fn read(lines: &[(&'static str, Look, Read)], now: &Ledger, was: &Ledger) -> Vec
 }
 
 /// Joins the smallest lines into one, which gets this look, until there are no more than `most`.
-pub(super) fn merge_smallest(entries: &mut Vec<Entry>, most: usize, look: Look) {
+pub(crate) fn merge_smallest(entries: &mut Vec<Entry>, most: usize, look: Look) {
     while entries.len() > most.max(2) {
         // The joined line, once it is there, takes the next smallest in, whatever its size.
         let joined = entries.iter().position(|entry| entry.id == "page-all-else");
@@ -115,7 +115,7 @@ pub(super) fn merge_smallest(entries: &mut Vec<Entry>, most: usize, look: Look) 
 }
 
 /// What went through the works within the valley.
-pub(super) fn within(ledger: &Ledger) -> [(&'static str, f64); 4] {
+pub(crate) fn within(ledger: &Ledger) -> [(&'static str, f64); 4] {
     [
         ("ledger-inflow.short", ledger.of(Flow::NaturalInflow)),
         ("ledger-canal-take.short", ledger.of(Flow::Canals)),

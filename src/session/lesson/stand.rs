@@ -1,6 +1,6 @@
 //! Where a lesson makes the instrument stand: dials and their limits, year, day and view, all at once.
 
-use super::{Course, Free, Led, Part};
+use super::{Course, Led, Part};
 use crate::lesson::Shows;
 use crate::session::command::Command;
 use crate::session::event::Event;
@@ -15,9 +15,9 @@ impl Led {
     /// Brings the state to where the page at hand wants it and gives what is offered there: the dials that the step sets
     /// or lets the room turn. Language, units and colours stay as they are. Without a lesson everything is offered again.
     pub fn arrange(&mut self, offer: &Offer, state: &mut State) -> Offer {
-        let Free { dials, settings } = self.free.get_or_insert_with(|| {
+        let (dials, settings) = self.free.get_or_insert_with(|| {
             let dials = offer.dials().filter_map(|dial| offer.scale(dial).map(|scale| (dial, scale.range())));
-            Free { dials: dials.collect(), settings: offer.settings().to_vec() }
+            (dials.collect(), offer.settings().to_vec())
         });
         let staged = match (self.part, &self.course, &self.progress) {
             (Part::Steps, Some(course), Some(progress)) => progress.stage(&course.lesson).map(|stage| (course, stage)),
@@ -48,7 +48,7 @@ impl Led {
     }
 
     /// Closes the lesson, as when everybody has left; [`Led::arrange`] then offers everything again.
-    pub fn abandon(&mut self) {
+    pub fn close_for_all(&mut self) {
         let (shelf, free) = (std::mem::take(&mut self.shelf), self.free.take());
         *self = Self { free, ..Self::new(shelf) };
     }

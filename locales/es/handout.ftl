@@ -1,7 +1,8 @@
 # La hoja para llevar a casa, la hoja de trabajo y las respuestas de una lección, y los datos abiertos.
 
-handout-title = { $place }: qué cambió
+handout-title = { $place }: lo que muestra el modelo
 handout-changed = Qué cambió
+handout-numbers = El año en números
 handout-season = Cómo va el año
 handout-canals = A quién le llega agua y hasta cuándo
 handout-years = Todos los años

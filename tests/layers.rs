@@ -12,7 +12,7 @@ use std::path::{Path, PathBuf};
 /// * `words` know units and the keys of what they name, no numbers of a run.
 /// * `picture` draws values: plain data of the water and the signs, never what runs them.
 /// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not water.
-const MAY_NAME: [(&str, &[&str]); 12] = [
+const MAY_NAME: [(&str, &[&str]); 14] = [
     ("water", &[]),
     ("signs", &["water"]),
     ("place", &["water", "signs"]),

@@ -1,5 +1,6 @@
 //! The page of a result: place, dials, what changed, the year, the canals, all years, the accounts, trust, cautions.
 
+use super::cautions::cautions;
 use super::chart::{canal_legend, each, season, strips, years};
 use super::face::Face;
 use super::flow::{Block, Flow, GUTTER};
@@ -10,7 +11,6 @@ use super::pen::{BODY, End, NOTE, STRONG, Style, centred, corners, edged, letter
 use super::qr::{QrFault, code};
 use super::table::{Cell, Column, Table, says_the_same};
 use crate::picture::views::Answer;
-use crate::picture::views::about::CAUTIONS;
 use crate::picture::views::page_answer::PageAnswer;
 use crate::picture::views::scene::{Scene, YearKind};
 use crate::words::Words;
@@ -214,7 +214,8 @@ impl<'s, 'a> Sheet<'s, 'a> {
         flow.gap(fit.gap);
         flow.put(self.trust(width, fit));
         flow.gap(fit.gap);
-        flow.put(self.cautions(width, flow.room(), fit.cautions));
+        let head = self.heading("help-cautions", width);
+        flow.put(cautions(head, &self.words, width, flow.room(), fit.cautions));
         Ok(flow)
     }
 
@@ -374,66 +375,6 @@ impl<'s, 'a> Sheet<'s, 'a> {
         }
         block
     }
-
-    /// All cautions, in the largest letters for which there is room.
-    fn cautions(&self, width: f64, room: f64, (form, sizes): (&str, &[f64])) -> Block {
-        let column = column_pt(width, 2);
-        let head = self.heading("help-cautions", width);
-        let mut whole = head.clone();
-        for size in sizes {
-            let style = Style::new(Face::Regular, *size, Ink::Black);
-            let body = if self.words.len() > 1 {
-                self.each_caution(column, form, style)
-            } else {
-                self.in_columns(column, form, style)
-            };
-            whole = head.clone().below(2.0, body);
-            if whole.high <= room {
-                break;
-            }
-        }
-        whole
-    }
-
-    /// One language in two columns of about the same height.
-    fn in_columns(&self, column: f64, form: &str, style: Style) -> Block {
-        let Some(words) = self.words.first() else { return Block::default() };
-        let parts: Vec<Block> = CAUTIONS.iter().map(|id| caution(words, id, form, column, style, None)).collect();
-        let whole: f64 = parts.iter().map(|part| part.high).sum();
-        let (mut left, mut right) = (Block::default(), Block::default());
-        for part in parts {
-            if left.high < whole / 2.0 { left = left.below(2.0, part) } else { right = right.below(2.0, part) }
-        }
-        left.beside(column + GUTTER, right)
-    }
-
-    /// Each caution in both languages, level with each other.
-    fn each_caution(&self, column: f64, form: &str, style: Style) -> Block {
-        let mut body = Block::default();
-        for id in CAUTIONS {
-            let mut row = Block::default();
-            for (index, words) in self.words.iter().enumerate() {
-                let part = caution(words, id, form, column, style, Some(words.tag()));
-                row = row.beside((column + GUTTER) * index as f64, part);
-            }
-            body = body.below(2.0, row);
-        }
-        body
-    }
-}
-
-/// A caution: its title in bold where it is written out, then its text.
-fn caution(words: &Words, id: &str, form: &str, width: f64, style: Style, tag: Option<&str>) -> Block {
-    let text = words.say(&format!("{id}{form}"), &[]);
-    let mut block = if form.is_empty() {
-        paragraph(&text, width, style, Role::Paragraph)
-    } else {
-        let title = Style::new(Face::Bold, style.size, style.ink);
-        let head = paragraph(&words.say(&format!("{id}.title"), &[]), width, title, Role::Heading(3));
-        head.below(0.0, paragraph(&text, width, style, Role::Paragraph))
-    };
-    block.nodes.iter_mut().for_each(|node| node.language = tag.map(str::to_owned));
-    block
 }
 
 fn dial_boxes(dials: &[(String, String)], width: f64, tag: &str) -> Block {

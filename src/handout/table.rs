@@ -65,7 +65,10 @@ impl Table<'_> {
             let cells = self.rows.iter().filter_map(|row| row.get(index)).flatten();
             let widest = cells.map(|line| style.width(line)).fold(LEAST, f64::max);
             // A head breaks in two rather than make its column wide.
-            let heads = self.heads.get(index).into_iter().flatten().map(|line| HEAD.width(line) * 0.66);
+            let heads = self.heads.get(index).into_iter().flatten().map(|line| {
+                // Heads of two languages are long, and their values are not.
+                HEAD.width(line) * if line.contains(" · ") { 0.38 } else { 0.66 }
+            });
             let widest = heads.fold(widest, f64::max);
             let words = self.heads.get(index).into_iter().flatten().flat_map(|line| line.split(' '));
             words.map(|word| HEAD.width(word)).fold(widest, f64::max)

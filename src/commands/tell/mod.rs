@@ -33,6 +33,7 @@ pub(super) use columns::yearly as yearly_columns;
 pub(super) use daily::{EACH_GATE, number};
 use request::{Form, Request};
 pub(super) use runs::{Told, usual_system, years_at_rest};
+#[cfg(feature = "pdf")]
 pub(super) use table::{mean_date, sign_rows};
 
 /// Runs the place and tells what came of it.

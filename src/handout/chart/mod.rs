@@ -121,19 +121,23 @@ pub(super) fn months(plot: &Plot, year: &YearShown<'_>, voices: &[&Words]) -> Ve
     let mut pieces = Vec::new();
     let mut ticks = Vec::new();
     let y = plot.foot();
-    for (index, (begin, month)) in begins.iter().enumerate() {
-        let end = begins.get(index + 1).map_or(to, |(next, _)| *next);
-        let x = plot.x(*begin as f64);
+    let ends = begins.iter().skip(1).map(|(begin, _)| *begin).chain([to]);
+    let spans: Vec<(f64, f64, Month)> = begins
+        .iter()
+        .zip(ends)
+        .map(|((begin, month), end)| {
+            (plot.x(*begin as f64), plot.x(end as f64), Month::try_from(*month).unwrap_or(Month::January))
+        })
+        .collect();
+    let name = |month: Month| each(voices, |words| words.month_short(month)).join(" · ");
+    // All months by their names, or all by their letters.
+    let whole = spans.iter().filter(|(x, end, _)| end - x > plot.wide / 14.0);
+    let fits = whole.into_iter().all(|(x, end, month)| TICK.width(&name(*month)) <= end - x - 2.0);
+    for (x, end, month) in spans {
         ticks.push(vec![At::new(x, y), At::new(x, y + 3.0)]);
-        let room = plot.x(end as f64) - x - 2.0;
-        let month = Month::try_from(*month).unwrap_or(Month::January);
-        let mut name = each(voices, |words| words.month_short(month)).join(" · ");
-        if TICK.width(&name) > room {
-            name = voices.first().map_or(String::new(), |words| words.month_letter(month));
-        }
-        if TICK.width(&name) <= room {
-            let at = At::new((x + plot.x(end as f64)) / 2.0, y + 9.0);
-            pieces.push(letters(&name, at, End::Middle, TICK));
+        let name = if fits { name(month) } else { each(voices, |words| words.month_letter(month)).join("·") };
+        if TICK.width(&name) <= end - x - 2.0 {
+            pieces.push(letters(&name, At::new((x + end) / 2.0, y + 9.0), End::Middle, TICK));
         }
     }
     ticks.push(vec![At::new(plot.x(to as f64), y), At::new(plot.x(to as f64), y + 3.0)]);

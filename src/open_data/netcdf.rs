@@ -190,7 +190,7 @@ fn word(out: &mut Vec<u8>, value: u32) {
 }
 
 fn pad(out: &mut Vec<u8>) {
-    while out.len() % 4 != 0 {
+    while !out.len().is_multiple_of(4) {
         out.push(0);
     }
 }

@@ -118,7 +118,7 @@ impl<'t> Teller<'t> {
         let share = |value: f64| (value - least) / (most - least);
         let mark = |value: f64| ScaleMark { share: share(value), text: self.value(&guess.reading, value) };
         // Named values stand on stops of the knob, evenly where that works out.
-        let even = (1..steps).find(|every| steps % every == 0 && steps / every < NAMED);
+        let even = (1..steps).find(|every| steps.is_multiple_of(*every) && steps / every < NAMED);
         let every = even.unwrap_or_else(|| steps.div_ceil(NAMED - 2).max(1));
         // A last piece that is short would crowd the name before it.
         let stops =

@@ -1,7 +1,8 @@
 # The page to take home, the worksheet and answer key of a lesson, and open data.
 
-handout-title = { $place }: what changed
+handout-title = { $place }: what the model shows
 handout-changed = What changed
+handout-numbers = The year in numbers
 handout-season = How the year goes
 handout-canals = Who gets water, and until when
 handout-years = All the years

@@ -141,7 +141,11 @@ fn handout(words: &Words) -> Command {
         .arg(path_option("setting", "value-setting", "help-setting", words))
         .arg(text("years", "value-years", "help-years", words))
         .arg(path_option("lesson", "value-lesson", "help-handout-lesson", words))
-        .arg(text("sheet", "value-sheet", "help-handout-sheet", words).help(with_usual("help-handout-sheet", "work", words)))
+        .arg(text("sheet", "value-sheet", "help-handout-sheet", words).help(with_usual(
+            "help-handout-sheet",
+            "work",
+            words,
+        )))
         .arg(text("paper", "value-paper", "help-handout-paper", words))
         .arg(text("units", "value-units", "help-units", words))
         .arg(path_option("out", "value-file", "help-handout-out", words))

@@ -50,10 +50,8 @@ pub(super) fn lay_out(place: Place, request: &Request, voices: &[Words]) -> Resu
     let source = Source { valley: &place.valley, calendar: &place.calendar, record: &place.days };
     let settings: Vec<DialSetting> =
         place.dials.open().map(|(dial, range)| DialSetting { dial, value: dials.get(dial), range }).collect();
-    let names: Vec<Vec<&str>> = voices
-        .iter()
-        .map(|words| place.gates.iter().map(|gate| gate.name.get(words.tag())).collect())
-        .collect();
+    let names: Vec<Vec<&str>> =
+        voices.iter().map(|words| place.gates.iter().map(|gate| gate.name.get(words.tag())).collect()).collect();
     let stages: Vec<Stage<'_>> = voices
         .iter()
         .zip(&names)
@@ -90,9 +88,7 @@ pub(super) fn lay_out(place: Place, request: &Request, voices: &[Words]) -> Resu
     match page.lay_out() {
         Ok(Some(document)) => Ok(document),
         Ok(None) => Err(no_run()),
-        Err(QrFault::TooLong(bytes)) => {
-            Err(Failure::input(words.say("handout-code-too-long", &[("n", bytes.into())])))
-        }
+        Err(QrFault::TooLong(bytes)) => Err(Failure::input(words.say("handout-code-too-long", &[("n", bytes.into())]))),
     }
 }
 

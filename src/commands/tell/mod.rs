@@ -28,11 +28,12 @@ use super::speech::Speech;
 use super::spinner::Spinner;
 use super::usage::mistake;
 use crate::water::dials::Dials;
-use request::{Form, Request};
 pub(super) use annual_csv::write as yearly_csv;
 pub(super) use columns::yearly as yearly_columns;
 pub(super) use daily::{EACH_GATE, number};
+use request::{Form, Request};
 pub(super) use runs::{Told, usual_system, years_at_rest};
+#[cfg(feature = "pdf")]
 pub(super) use table::{mean_date, sign_rows};
 
 /// Runs the place and tells what came of it.

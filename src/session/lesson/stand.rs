@@ -1,6 +1,6 @@
 //! Where a lesson makes the instrument stand: dials and their limits, year, day and view, all at once.
 
-use super::{Course, Led, Part};
+use super::{Course, Free, Led, Part};
 use crate::lesson::Shows;
 use crate::session::command::Command;
 use crate::session::event::Event;
@@ -15,9 +15,9 @@ impl Led {
     /// Brings the state to where the page at hand wants it and gives what is offered there: the dials that the step sets
     /// or lets the room turn. Language, units and colours stay as they are. Without a lesson everything is offered again.
     pub fn arrange(&mut self, offer: &Offer, state: &mut State) -> Offer {
-        let (dials, settings) = self.free.get_or_insert_with(|| {
+        let Free { dials, settings } = self.free.get_or_insert_with(|| {
             let dials = offer.dials().filter_map(|dial| offer.scale(dial).map(|scale| (dial, scale.range())));
-            (dials.collect(), offer.settings().to_vec())
+            Free { dials: dials.collect(), settings: offer.settings().to_vec() }
         });
         let staged = match (self.part, &self.course, &self.progress) {
             (Part::Steps, Some(course), Some(progress)) => progress.stage(&course.lesson).map(|stage| (course, stage)),

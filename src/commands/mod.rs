@@ -6,8 +6,12 @@
 mod built_in;
 mod check;
 mod failure;
+mod fit;
+mod fitted;
+mod judged;
 mod line;
 mod map;
+mod measured;
 mod output;
 mod places;
 mod problem_words;
@@ -17,6 +21,7 @@ mod snippets;
 mod speech;
 mod spinner;
 mod tell;
+mod trust;
 mod usage;
 mod weather;
 
@@ -57,6 +62,8 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("show", matches)) => show::run(speech, matches),
         Some(("map", matches)) => map::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        Some(("fit", matches)) => fit::run(speech, matches),
+        Some(("trust", matches)) => trust::run(speech, matches),
         _ => show::usual(speech),
     }
 }

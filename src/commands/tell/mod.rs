@@ -10,12 +10,18 @@ pub(super) mod dials;
 mod grid;
 mod json;
 mod means;
-mod node;
+pub(super) mod node;
 mod request;
 mod runs;
 mod summary_lines;
 mod table;
 pub(super) mod years;
+
+/// How text and tables of any command are set.
+pub(super) mod layout {
+    pub(in crate::commands) use super::grid::{Column, Side, lay_out};
+    pub(in crate::commands) use super::summary_lines::wrapped;
+}
 
 use std::path::Path;
 

@@ -128,7 +128,7 @@ fn closure(told: &Told, system: System, words: &Words) -> String {
 
 /// A sentence in lines, each with `indent` before it. A gap that must not break keeps its words together and is an
 /// ordinary blank in the end: consoles of small boards show a box for the thin one.
-pub(super) fn wrapped(sentence: &str, indent: &str) -> String {
+pub(in crate::commands) fn wrapped(sentence: &str, indent: &str) -> String {
     let mut text = String::new();
     for line in broken(sentence.trim_start(), WIDTH - indent.len()) {
         text.push_str(indent);

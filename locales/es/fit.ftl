@@ -43,21 +43,21 @@ error-fit-infinite = Un valor medido del { $date } no tiene fin.
 error-fit-nothing = Ninguna corrida dio una nota.
 error-fit-built-in = Este lugar es parte del programa: su ajuste no tiene carpeta. Diga dónde escribirlo con --into o --out.
 error-fit-elsewhere = Diga en qué otra parte escribirlo con --into o --out.
-error-fit-years = “{ $text }” no se puede escoger aquí. Escriba all, un año o un tramo como 1990..1999.
+error-fit-years = «{ $text }» no se puede escoger aquí. Escriba all, un año o un tramo como 1990..1999.
 problem-fit-unreadable = Esto no se puede leer como un ajuste.
-    .remedy = Ajuste otra vez con “deshielo fit”, o quite el archivo.
+    .remedy = Ajuste otra vez con «deshielo fit», o quite el archivo.
 problem-file-unreadable-here = Este archivo no se puede leer.
     .remedy = Revise quién tiene permiso de leerlo.
-problem-fit-parameter = El ajuste tiene un número “{ $key }” que no va ahí, o lo tiene dos veces.
-    .remedy = Ajuste otra vez con “deshielo fit”, o quite el archivo.
-problem-fit-bounds = “{ $key }” vale { $value }. Eso queda fuera de sus límites.
-    .remedy = Ajuste otra vez con “deshielo fit”, o quite el archivo.
+problem-fit-parameter = El ajuste tiene un número «{ $key }» que no va ahí, o lo tiene dos veces.
+    .remedy = Ajuste otra vez con «deshielo fit», o quite el archivo.
+problem-fit-bounds = «{ $key }» vale { $value }. Eso queda fuera de sus límites.
+    .remedy = Ajuste otra vez con «deshielo fit», o quite el archivo.
 problem-fit-count = Un juego del ajuste tiene { $found } números. Necesita { $needed }.
-    .remedy = Ajuste otra vez con “deshielo fit”, o quite el archivo.
+    .remedy = Ajuste otra vez con «deshielo fit», o quite el archivo.
 problem-fit-old-records = Los registros cambiaron desde que se hizo este ajuste. Todavía se usa.
-    .remedy = Ajuste otra vez con “deshielo fit”.
+    .remedy = Ajuste otra vez con «deshielo fit».
 problem-fit-old-land = El terreno o la estación de place.toml cambiaron desde que se hizo este ajuste. Todavía se usa.
-    .remedy = Ajuste otra vez con “deshielo fit”.
+    .remedy = Ajuste otra vez con «deshielo fit».
 
 ## Mientras busca
 
@@ -67,7 +67,7 @@ progress-fit = { $percent } hecho · mejor nota hasta ahora { $best } · faltan 
 ## Lo que dice fit
 
 fit-file-head =
-    Lo que “deshielo fit” encontró para { $place }. Todas las órdenes lo usan mientras esté aquí.
+    Lo que «deshielo fit» encontró para { $place }. Todas las órdenes lo usan mientras esté aquí.
     No escriba nada en este archivo: ajuste otra vez.
 fit-title = { $place }: ajustado a { $n ->
     [one] { $n } año de agua
@@ -76,7 +76,7 @@ fit-title = { $place }: ajustado a { $n ->
 fit-stopped = Se detuvo antes del final. Esto es lo mejor que había.
 fit-score = Nota ({ $objective }) en esos años: { $score }. 1 es perfecto.
 fit-tests = La prueba: cada mitad de los años, con el ajuste hecho ahí y con el de la otra mitad, que no los vio. Las notas son kge del caudal diario.
-fit-tests-how = “cerca”: se pierde hasta { $good }. “falla”: se pierde más de { $bad }, o “lo de siempre” acierta más.
+fit-tests-how = «cerca»: se pierde hasta { $good }. «falla»: se pierde más de { $bad }, o «lo de siempre» acierta más.
 fit-test-years = Años
 fit-test-own = Ajustado ahí
 fit-test-other = Sin verlos
@@ -98,7 +98,7 @@ fit-written = Escrito en { $path }.
 ## Lo que dice tell de un ajuste
 
 tell-fitted = Ajustado a las medidas del río, años de agua { $first } a { $last }.
-tell-fit-stale = El ajuste es de registros anteriores o de otra descripción del terreno. Ajuste otra vez con “deshielo fit”.
+tell-fit-stale = El ajuste es de registros anteriores o de otra descripción del terreno. Ajuste otra vez con «deshielo fit».
 tell-not-fitted = Todavía sin ajustar a las medidas del río. Para hacerlo: deshielo fit { $path }
 tell-no-gauge = Este lugar no tiene estación de aforo. Nadie ha comparado estos números con un río medido.
 tell-ranges = Lo que dicen { $n } juegos de números que se ajustan más o menos igual de bien:
@@ -152,14 +152,14 @@ trust-kge = kge
 trust-correlation = mismo ritmo
 trust-variability = mismo vaivén
 trust-ratio = misma media
-trust-bias = De más, %
+trust-bias = Desvío, %
 trust-guess-nse = Lo de siempre, nse
 trust-daily-unseen = Días, años no vistos
 trust-daily = Días, juego en uso
 trust-annual = Años enteros
-trust-guess = Días, “lo de siempre”
-trust-scores-how = 1 es perfecto en todo menos en la última columna, donde es 0. nse: eficiencia de Nash y Sutcliffe. kge: eficiencia de Kling y Gupta de 2009; después vienen sus tres partes. “Lo de siempre” dice para cada día el promedio de ese día en todos los demás años: un modelo tiene que acertar más.
-trust-monthly = Meses: nse { $nse } ({ $nse_rating }), error entre variación { $rsr } ({ $rsr_rating }), { $bias }% de más ({ $bias_rating }).
+trust-guess = Días, «lo de siempre»
+trust-scores-how = 1 es perfecto en todo menos en la última columna, donde es 0. nse: eficiencia de Nash y Sutcliffe. kge: eficiencia de Kling y Gupta de 2009; después vienen sus tres partes. «Lo de siempre» dice para cada día el promedio de ese día en todos los demás años: un modelo tiene que acertar más.
+trust-monthly = Meses: nse { $nse } ({ $nse_rating }), error entre variación { $rsr } ({ $rsr_rating }), desvío { $bias }% ({ $bias_rating }).
 trust-monthly-worst = Según las bandas de Moriasi et al. (2007): { $rating }.
 trust-rating-very-good = muy bueno
 trust-rating-good = bueno
@@ -184,7 +184,7 @@ trust-errors-shape = { $from } |{ $shape }| { $to }
 trust-one-hump = Una sola joroba, en { $at }: los errores son de un solo tipo.
 trust-several-humps = { $n } jorobas, en { $at }: hay errores de varios tipos, y su promedio no dice nada. Muchas veces los caudales bajos salen muy bajos y las crecidas muy altas.
 trust-year = Año
-trust-half-day = Mitad del agua
+trust-half-day = Mitad del agua, días de error
 trust-years = Año por año, { $unit }:
 trust-link-snow = Cuando un año tiene nieve de más en el modelo, tiene río de más (r { $r }, { $n } años): el error entra con el tiempo.
 trust-link-model = El error del río de un año no va con el de su nieve (r { $r }, { $n } años): mire el suelo, no el tiempo.
@@ -193,3 +193,19 @@ trust-records = Otros registros
 trust-days = Días
 trust-snow = Nieve
 trust-lake = Lago
+
+## La página de confianza
+
+trust-chart-model = modelo
+trust-chart-model-unseen = modelo, en años que no vio
+trust-chart-measured = medido
+trust-chart-season = La temporada, por meses, hasta { $most }
+trust-chart-duration = Qué tan seguido, de { $least } a { $most }
+trust-chart-rare = pocos días al año
+trust-chart-always = casi siempre
+trust-chart-no-errors = Errores de cada día: hay muy pocos días
+trust-chart-one-hump = Errores de cada día: una joroba
+trust-chart-humps = Errores de cada día: { $n } jorobas; su promedio no dice nada
+trust-chart-too-little = de menos
+trust-chart-too-much = de más
+trust-chart-years = Año por año, hasta { $most }

@@ -3,8 +3,11 @@
 use super::fitted::PlaceFit;
 use super::measured::Measured;
 use crate::fit::trust::verdict::{Evidence, rule};
-use crate::fit::trust::{FlowTrust, Ruling, SnowLink, StoreTrust, crossed, crossing, late_summer_months};
+use crate::fit::trust::{
+    FlowTrust, Known, Ruling, Score, SnowLink, StoreTrust, crossed, crossing, late_summer_months,
+};
 use crate::fit::{Measures, SnowAt, SplitTest};
+use crate::picture::views::facts::{ScoreUnit, UseShown, Verdict};
 use crate::place::Place;
 use crate::signs::read_run;
 use crate::water::basin::{Basin, BasinDay};
@@ -145,4 +148,26 @@ fn works(place: &Place, (basin, before): &(Vec<BasinDay>, BasinDay)) -> Result<W
     );
     let lake = valley.reservoir.as_ref().map(|_| (storage, works.active_m3() / M3_PER_HM3));
     Ok((lake, canals))
+}
+
+/// A verdict as the pages show it.
+pub(super) fn use_shown(ruling: &Ruling) -> UseShown {
+    UseShown {
+        key: ruling.of.key(),
+        verdict: match ruling.known() {
+            Known::Yes => Some(Verdict::Holds),
+            Known::Partly => Some(Verdict::Weakens),
+            Known::No => Some(Verdict::Fails),
+            Known::Unknown => None,
+        },
+        score: ruling.score.key(),
+        unit: match ruling.score {
+            Score::LossWarmCold => ScoreUnit::Score,
+            Score::HalfDayError => ScoreUnit::Days,
+            _ => ScoreUnit::Percent,
+        },
+        value: ruling.value.map_err(|need| need.key()),
+        thresholds: ruling.score.thresholds(),
+        beaten: ruling.beaten,
+    }
 }

@@ -3,9 +3,10 @@
 use chrono::Month;
 
 use crate::commands::fit::score;
-use crate::commands::judged::Judged;
+use crate::commands::judged::{Judged, use_shown};
 use crate::commands::tell::layout::{Column, Side, lay_out};
-use crate::fit::trust::{FlowTrust, Known, Ruling, Score, StoreTrust};
+use crate::fit::trust::{FlowTrust, Ruling, StoreTrust};
+use crate::picture::views::trust::uses;
 use crate::place::Place;
 use crate::words::{Quantity, System, Value, Words};
 
@@ -36,35 +37,13 @@ pub(super) fn rulings(rulings: &[Ruling], words: &Words) -> String {
     let row = |ruling: &Ruling| {
         vec![
             words.say(&Words::key_id("trust-use", ruling.of.key()), &[]),
-            words.say(&Words::key_id("trust-known", ruling.known().key()), &[]),
-            reason(ruling, words),
+            uses::verdict(&use_shown(ruling), words),
+            uses::reason(&use_shown(ruling), words),
         ]
     };
     let rows: Vec<Vec<String>> = rulings.iter().map(row).collect();
     // Headings would say nothing that the words do not.
     plain(&columns, &rows).trim_start_matches('\n').to_owned()
-}
-
-/// The score behind a verdict and its thresholds.
-pub(in crate::commands) fn reason(ruling: &Ruling, words: &Words) -> String {
-    let value = match ruling.value {
-        Err(need) => return words.say(&Words::key_id("trust-need", need.key()), &[]),
-        Ok(value) => value,
-    };
-    let shown = |value: f64| match ruling.score {
-        Score::LossWarmCold if value.is_finite() => words.number(value.max(0.0), 2),
-        Score::LossWarmCold => words.style().missing.clone(),
-        Score::HalfDayError => words.number(value, 0),
-        _ => words.percent(value, 0),
-    };
-    let (good, fair) = ruling.score.thresholds();
-    let arguments = [("value", shown(value).into()), ("good", shown(good).into()), ("fair", shown(fair).into())];
-    let mut text = words.say(&Words::key_id("trust-score", ruling.score.key()), &arguments);
-    if ruling.beaten && ruling.known() == Known::No {
-        text.push(' ');
-        text.push_str(&words.say("trust-beaten", &[]));
-    }
-    text
 }
 
 /// Daily, yearly and monthly scores.
@@ -165,12 +144,12 @@ pub(super) fn years(flow: &FlowTrust, system: System, words: &Words) -> String {
     ];
     let number = |value: f64| words.significant(unit.convert(value), 3);
     let row = |year: &crate::fit::trust::YearSkill| {
-        let days = i32::from(year.modelled_half_day) - i32::from(year.observed_half_day);
+        let days = f64::from(year.modelled_half_day) - f64::from(year.observed_half_day);
         vec![
             words.year(year.water_year),
             number(year.observed_hm3),
             number(year.modelled_hm3),
-            words.days_change(days),
+            words.number_signed(days, 0),
             score(year.nash_sutcliffe, words),
             score(year.kling_gupta, words),
         ]

@@ -125,7 +125,13 @@ fn footer(canvas: &mut Canvas<'_>, layout: &Layout, scene: &Scene<'_>, view: Vie
         end -= wide + layout.gap * 2;
     }
     let mut remarks = String::new();
-    for (holds, id) in [(scene.invented, "picture-invented"), (!scene.fitted, "picture-not-fitted")] {
+    let fitting = match (scene.fitted, scene.facts.old_fit, scene.facts.gauged) {
+        (true, true, _) => "picture-fit-old",
+        (true, false, _) => "picture-fitted",
+        (false, _, Some(false)) => "picture-no-gauge",
+        (false, ..) => "picture-not-fitted",
+    };
+    for (holds, id) in [(scene.invented, "picture-invented"), (true, fitting)] {
         if holds {
             remarks.push_str(DOT);
             remarks.push_str(&words.say(id, &[]));

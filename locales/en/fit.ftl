@@ -105,7 +105,6 @@ tell-ranges = What { $n } sets of numbers say that fit the gauge about as well:
 tell-range-line = { $name }: { $range }
 tell-range-days-fewer = { $a } to { $b } days fewer
 tell-range-days-more = { $a } to { $b } days more
-tell-range-days-across = between { $a } days fewer and { $b } more
 tell-range-ends = from { $low } to { $high }
 
 ## The foot of a page

@@ -105,7 +105,6 @@ tell-ranges = Lo que dicen { $n } juegos de números que se ajustan más o menos
 tell-range-line = { $name }: { $range }
 tell-range-days-fewer = de { $a } a { $b } días menos
 tell-range-days-more = de { $a } a { $b } días más
-tell-range-days-across = entre { $a } días menos y { $b } más
 tell-range-ends = de { $low } a { $high }
 
 ## El pie de la página

@@ -113,6 +113,12 @@ pub fn band(series: &[Vec<f64>]) -> Vec<(f64, f64)> {
         .collect()
 }
 
+/// The range of one value over the sets, from the lower to the upper of [`BAND_SHARES`]; `None` for no values.
+pub fn range(mut values: Vec<f64>) -> Option<(f64, f64)> {
+    values.sort_by(f64::total_cmp);
+    (!values.is_empty()).then(|| (quantile(&values, BAND_SHARES.0), quantile(&values, BAND_SHARES.1)))
+}
+
 fn quantile(sorted: &[f64], share: f64) -> f64 {
     let rank = share * (sorted.len() - 1) as f64;
     let below = rank as usize;

@@ -1,10 +1,12 @@
 //! `show`: the running instrument on whatever screens are at hand, or as pictures in a folder.
 
+mod doubt;
 mod drawing;
 mod hands;
 mod pictures;
 mod player;
 mod request;
+mod skill;
 
 use clap::ArgMatches;
 
@@ -69,10 +71,10 @@ fn show_chosen(choice: Choice, player: Player, speech: &Speech, request: &Reques
 fn open(speech: &Speech, request: &Request) -> Result<Player, Failure> {
     let reading = speech.words.say("progress-reading", &[("path", request.place.display().to_string().into())]);
     let spinner = Spinner::start(reading);
-    let place = places::open(&request.place, speech)?;
+    let opened = places::open_fitted(&request.place, speech)?;
     drop(spinner);
     let _spinner = Spinner::start(speech.words.say("progress-running", &[]));
-    Player::new(place, speech, request.shade, request.units)
+    Player::new(opened, speech, request.shade, request.units)
 }
 
 /// Why nothing is shown, or no longer.

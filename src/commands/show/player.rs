@@ -4,12 +4,16 @@ use std::time::Duration;
 
 use embedded_graphics::geometry::Size;
 
+use super::doubt::Doubts;
 use super::drawing::{Drawing, VIEWS, page};
 use super::hands::Clock;
+use super::skill::OwnSkill;
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument};
 use crate::commands::failure::Failure;
+use crate::commands::places::Opened;
 use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
+use crate::picture::views::facts::PlaceFacts;
 use crate::picture::views::{Scene, help, term};
 use crate::place::Place;
 use crate::session::answer::{Asked, Source};
@@ -24,6 +28,11 @@ const LANGUAGES: [&str; 2] = ["en", "es"];
 /// A session under way.
 pub(super) struct Player {
     place: Place,
+    /// Whether the fit in use is stale; `None` without one.
+    fit: Option<bool>,
+    skill: Option<OwnSkill>,
+    /// How far the answer may be off; `None` without an ensemble.
+    doubts: Option<Doubts>,
     gate_names: Vec<String>,
     offer: Offer,
     state: State,
@@ -40,7 +49,10 @@ pub(super) struct Player {
 
 impl Player {
     /// A session at rest on that place.
-    pub fn new(place: Place, speech: &Speech, shade: Shade, units: Option<System>) -> Result<Self, Failure> {
+    pub fn new(opened: Opened, speech: &Speech, shade: Shade, units: Option<System>) -> Result<Self, Failure> {
+        let Opened { place, fit } = opened;
+        let skill = OwnSkill::of(&place, fit.as_ref());
+        let doubts = fit.as_ref().and_then(|fit| Doubts::new(&fit.sets, &place.calendar, &place.days));
         let source = Source { valley: &place.valley, calendar: &place.calendar, record: &place.days };
         let no_run = || Failure::input(speech.words.say("show-no-answer", &[]));
         let answers = Answers::new(&source).map_err(|_| no_run())?;
@@ -66,6 +78,9 @@ impl Player {
         let gate_names = place.gates.iter().map(|gate| gate.name.get(voices[0].0.tag()).to_owned()).collect();
         let state = State::new(&offer);
         Ok(Self {
+            fit: fit.map(|fit| fit.stale),
+            skill,
+            doubts,
             gate_names,
             place,
             offer,
@@ -120,6 +135,27 @@ impl Player {
             let _ = self.answers.finish(&source);
         }
     }
+
+    /// Shows the range once it has come.
+    fn look_for_doubts(&mut self) {
+        let asked = self.answers.asked();
+        let (dials, year) = (asked.dials, asked.year);
+        if let Some(doubts) = &mut self.doubts
+            && doubts.look(dials, year)
+        {
+            self.stamp += 1;
+        }
+    }
+
+    /// Waits until the answer on show has its range.
+    pub fn wait_for_doubts(&mut self) {
+        self.ask_water();
+        self.look_for_doubts();
+        if let Some(doubts) = &mut self.doubts {
+            doubts.wait();
+            self.stamp += 1;
+        }
+    }
 }
 
 impl Instrument for Player {
@@ -131,6 +167,7 @@ impl Instrument for Player {
 
     fn frame(&mut self, size: FrameSize, texts: bool) -> Frame<'_> {
         self.ask_water();
+        self.look_for_doubts();
         let at = match self.drawings.iter().position(|drawing| drawing.is(size, texts)) {
             Some(at) => at,
             None => {
@@ -150,8 +187,7 @@ impl Instrument for Player {
             let told = PlaceTold {
                 name: self.place.name.get(words.tag()),
                 invented: self.place.invented,
-                // No place holds a fit to its gauge yet.
-                fitted: false,
+                fitted: self.fit.is_some(),
                 gate_names: &names,
             };
             let source =
@@ -159,12 +195,20 @@ impl Instrument for Player {
             let stage = Stage::new(told, &source, &self.answers);
             let props = stage.props();
             let dials = settings(&self.offer, &shown.dials);
-            let scene = stage.scene(&props, Moment::of(shown, &dials, &self.answers, second.as_ref()));
+            let moment = Moment::of(shown, &dials, &self.answers, second.as_ref());
+            let doubt = self.doubts.as_ref().and_then(Doubts::shown);
+            let scene = stage.scene(&props, Moment { doubt, ..moment });
             let facts = facts_of(&self.place, None, words.tag());
-            let scene = Scene { facts, sheet: shown.sheet.into(), ..scene };
+            let facts = PlaceFacts { old_fit: self.fit == Some(true), ..facts };
+            let skill = self.skill.as_ref().map(OwnSkill::shown);
+            let scene = Scene { facts, skill, sheet: shown.sheet.into(), ..scene };
             let sheets = self.drawings[at].draw(shown.view, shown.card, &scene, shown.shade, words);
             if sheets > self.offer.sheets(shown.view) {
-                self.offer = self.offer.clone().with_about_sheets(sheets);
+                let offer = self.offer.clone();
+                self.offer = match shown.view {
+                    View::Trust => offer.with_trust_sheets(sheets),
+                    _ => offer.with_about_sheets(sheets),
+                };
             }
             self.drawings[at].stamp = Some(self.stamp);
         }
@@ -173,6 +217,9 @@ impl Instrument for Player {
 
     fn wants_tick(&self) -> Option<Duration> {
         let shown = self.state.shown();
+        if !shown.playing && self.doubts.as_ref().is_some_and(Doubts::is_waiting) {
+            return Some(LOOK_AGAIN);
+        }
         shown.playing.then(|| Duration::from_millis(1000 / u64::from(shown.speed.days_per_second())))
     }
 
@@ -185,6 +232,9 @@ impl Instrument for Player {
         Caption { title, hint, too_small }
     }
 }
+
+/// How soon to look again for a range that is on its way.
+const LOOK_AGAIN: Duration = Duration::from_millis(150);
 
 /// Frames that are kept: those of a few screens at once.
 const MOST_DRAWINGS: usize = 4;

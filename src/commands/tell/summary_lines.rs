@@ -81,6 +81,10 @@ pub(super) fn footer(told: &Told, system: System, words: &Words) -> String {
         };
         text.push_str(&wrapped(&words.say("tell-rule", &[("rule", say(rule).into())]), ""));
     }
+    text.push_str(&wrapped(&fitting(told, words), ""));
+    if told.fit.as_ref().is_some_and(|fit| fit.stale) {
+        text.push_str(&wrapped(&say("tell-fit-stale"), ""));
+    }
     let choice = told.place.notes.evaporation.choice.key();
     let method = say(&Words::key_id("tell-method", choice));
     text.push_str(&wrapped(&words.say("tell-method", &[("method", method.into())]), ""));
@@ -107,6 +111,22 @@ pub(super) fn footer(told: &Told, system: System, words: &Words) -> String {
     text.push('\n');
     text.push_str(&wrapped(&say("caution-not-a-forecast"), ""));
     text
+}
+
+/// Whether the place runs with a fit, and to what.
+fn fitting(told: &Told, words: &Words) -> String {
+    match &told.fit {
+        Some(fit) => {
+            let years = &fit.file.water_years;
+            let [first, last] = [years.first(), years.last()].map(|year| year.map_or(0, |year| *year));
+            words.say("tell-fitted", &[("first", words.year(first).into()), ("last", words.year(last).into())])
+        }
+        None if told.place.gauge.is_none() => words.say("tell-no-gauge", &[]),
+        None => {
+            let path = told.place.folder.as_ref().map_or_else(String::new, |folder| folder.display().to_string());
+            words.say("tell-not-fitted", &[("path", path.into())])
+        }
+    }
 }
 
 /// In which of the years shown the reservoir fills.

@@ -99,7 +99,7 @@ fit-written = Written to { $path }.
 
 tell-fitted = Fitted to the river gauge, water years { $first } to { $last }.
 tell-fit-stale = The fit is from older records or another description of the land. Fit again with “deshielo fit”.
-tell-not-fitted = Not fitted to the river gauge yet. To do it: deshielo fit { $path }
+tell-not-fitted = Not fitted to the river gauge yet: “deshielo fit” does that.
 tell-no-gauge = This place has no river gauge. Nobody has checked these numbers against a measured river.
 tell-ranges = What { $n } sets of numbers say that fit the gauge about as well:
 tell-range-line = { $name }: { $range }

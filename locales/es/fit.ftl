@@ -99,7 +99,7 @@ fit-written = Escrito en { $path }.
 
 tell-fitted = Ajustado a las medidas del río, años de agua { $first } a { $last }.
 tell-fit-stale = El ajuste es de registros anteriores o de otra descripción del terreno. Ajuste otra vez con «deshielo fit».
-tell-not-fitted = Todavía sin ajustar a las medidas del río. Para hacerlo: deshielo fit { $path }
+tell-not-fitted = Todavía sin ajustar a las medidas del río: «deshielo fit» lo hace.
 tell-no-gauge = Este lugar no tiene estación de aforo. Nadie ha comparado estos números con un río medido.
 tell-ranges = Lo que dicen { $n } juegos de números que se ajustan más o menos igual de bien:
 tell-range-line = { $name }: { $range }

@@ -72,9 +72,6 @@ keyed! {
         /// Cooling with height, mean of the twelve months, °C per km: −9.5 to −3; the months keep what parts them.
         /// Between the moist and the dry adiabatic rate, and less where cold air pools (common practice).
         MeanLapse => "mean_lapse_c_per_km",
-        /// Factor on the evaporation of the bands, their mean by area: 0.5 to 1.6; the bands keep their ratios. A formula
-        /// for a grass lawn stands for forest and rock (common practice).
-        EvaporationFactor => "mean_evaporation_factor",
     }
 }
 
@@ -171,7 +168,6 @@ impl Parameter {
             Parameter::PrecipitationGradient => (-0.03, 0.15, Straight),
             Parameter::PrecipitationFactor => (0.6, 1.8, Straight),
             Parameter::MeanLapse => (-9.5, -3.0, Straight),
-            Parameter::EvaporationFactor => (0.5, 1.6, Straight),
         };
         Bounds { least, most, scale }
     }
@@ -193,8 +189,7 @@ impl Parameter {
             | Parameter::DryShare
             | Parameter::ReachWeight
             | Parameter::SnowCatch
-            | Parameter::PrecipitationFactor
-            | Parameter::EvaporationFactor => One,
+            | Parameter::PrecipitationFactor => One,
         }
     }
 
@@ -265,7 +260,7 @@ pub fn apply(valley: &Valley, parameters: &[Parameter], values: &[f64]) -> Valle
 }
 
 /// Writes the values of `parameters` into `valley`. Its earlier values of them are lost, whatever they were; of months
-/// and bands that keep what parts them, the differences stay, so that [`reset`] comes first where bits matter.
+/// that keep what parts them, the differences stay, so that [`reset`] comes first where bits matter.
 pub fn set(valley: &mut Valley, parameters: &[Parameter], values: &[f64]) {
     let value_of = |wanted: Parameter| {
         parameters.iter().zip(values).find(|(parameter, _)| **parameter == wanted).map(|(_, value)| *value)
@@ -300,12 +295,6 @@ pub fn set(valley: &mut Valley, parameters: &[Parameter], values: &[f64]) {
                 let shift = value - mean_lapse_c_per_km(valley);
                 valley.climb.lapse_c_per_km.iter_mut().for_each(|lapse| *lapse += shift);
             }
-            Parameter::EvaporationFactor => {
-                let mean = mean_evaporation_factor(valley);
-                for band in &mut valley.bands {
-                    band.evaporation_factor = if mean > 0.0 { band.evaporation_factor * value / mean } else { value };
-                }
-            }
         }
     }
     // Written last: it counts from the lower temperature, fitted or not.
@@ -339,7 +328,6 @@ pub fn values_of(valley: &Valley, parameters: &[Parameter]) -> Vec<f64> {
         Parameter::PrecipitationGradient => valley.climb.precipitation_per_100m,
         Parameter::PrecipitationFactor => valley.climb.precipitation_factor,
         Parameter::MeanLapse => mean_lapse_c_per_km(valley),
-        Parameter::EvaporationFactor => mean_evaporation_factor(valley),
     };
     parameters.iter().map(value).collect()
 }
@@ -348,15 +336,7 @@ fn mean_lapse_c_per_km(valley: &Valley) -> f64 {
     valley.climb.lapse_c_per_km.iter().sum::<f64>() / 12.0
 }
 
-fn mean_evaporation_factor(valley: &Valley) -> f64 {
-    let sum: f64 = valley.bands.iter().map(|band| band.area_km2 * band.evaporation_factor).sum();
-    sum / valley.band_area_km2()
-}
-
-/// Gives `valley` what [`set`] changes of it by steps from where it stood: months and bands that keep what parts them.
+/// Gives `valley` what [`set`] changes of it by steps from where it stood: months that keep what parts them.
 pub fn reset(valley: &mut Valley, base: &Valley) {
     valley.climb.lapse_c_per_km = base.climb.lapse_c_per_km;
-    for (band, of_base) in valley.bands.iter_mut().zip(&base.bands) {
-        band.evaporation_factor = of_base.evaporation_factor;
-    }
 }

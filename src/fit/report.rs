@@ -229,7 +229,10 @@ impl FitFile {
 /// height and the bands. FNV-1a with 64 bits over the numbers' bits.
 pub fn place_checksum(valley: &Valley) -> String {
     let own = [valley.latitude_deg, f64::from(valley.water_year_start_month), valley.station_elevation_m];
-    let bands = valley.bands.iter().flat_map(|band| [band.area_km2, band.elevation_m, band.melt_exposure]);
+    let bands = valley
+        .bands
+        .iter()
+        .flat_map(|band| [band.area_km2, band.elevation_m, band.melt_exposure, band.evaporation_factor]);
     let bytes = own.into_iter().chain(bands).flat_map(|number| number.to_bits().to_le_bytes());
     let sum = bytes.fold(0xcbf2_9ce4_8422_2325_u64, |sum, byte| {
         (sum ^ u64::from(byte)).wrapping_mul(0x0000_0100_0000_01b3)

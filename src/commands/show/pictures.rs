@@ -10,7 +10,7 @@ use crate::board::{FrameSize, Instrument};
 use crate::commands::failure::Failure;
 use crate::commands::output::reason;
 use crate::commands::tell_standard_error;
-use crate::session::{Command, Event};
+use crate::session::{Command, Event, View};
 use crate::words::Words;
 
 /// Where pictures go when nobody says.
@@ -31,14 +31,24 @@ pub(super) fn write(player: &mut Player, request: &Request, words: &Words) -> Re
     for language in &languages {
         for view in VIEWS {
             player.step(Event::Command(Command::Show(view)));
-            let name = file_name(page(view).key(), language, size);
-            let frame = player.frame(size, false);
-            write_picture(folder, &name, size, frame.pixels).map_err(|error| {
-                let arguments =
-                    [("path", folder.display().to_string().into()), ("reason", reason(&error, words).into())];
-                Failure::Input(vec![words.say("show-folder-unwritable", &arguments)])
-            })?;
-            count += 1;
+            let mut sheet = 1;
+            loop {
+                let key = page(view).key();
+                let key = if sheet == 1 { key.to_owned() } else { format!("{key}-{sheet}") };
+                let frame = player.frame(size, false);
+                write_picture(folder, &file_name(&key, language, size), size, frame.pixels).map_err(|error| {
+                    let arguments =
+                        [("path", folder.display().to_string().into()), ("reason", reason(&error, words).into())];
+                    Failure::Input(vec![words.say("show-folder-unwritable", &arguments)])
+                })?;
+                count += 1;
+                // What a place was found good for is told whole; the sheets of the other pages are the screen's.
+                if view != View::Trust || sheet >= player.trust_sheets() {
+                    break;
+                }
+                sheet += 1;
+                player.step(Event::Command(Command::StepView(1)));
+            }
         }
         player.step(Event::Command(Command::NextVoice));
     }

@@ -147,6 +147,11 @@ impl Player {
         }
     }
 
+    /// How many sheets the trust page has on the last screen that it was drawn for.
+    pub fn trust_sheets(&self) -> u8 {
+        self.offer.sheets(View::Trust)
+    }
+
     /// Waits until the answer on show has its range.
     pub fn wait_for_doubts(&mut self) {
         self.ask_water();

@@ -122,10 +122,7 @@ fn fitting(told: &Told, words: &Words) -> String {
             words.say("tell-fitted", &[("first", words.year(first).into()), ("last", words.year(last).into())])
         }
         None if told.place.gauge.is_none() => words.say("tell-no-gauge", &[]),
-        None => {
-            let path = told.place.folder.as_ref().map_or_else(String::new, |folder| folder.display().to_string());
-            words.say("tell-not-fitted", &[("path", path.into())])
-        }
+        None => words.say("tell-not-fitted", &[]),
     }
 }
 

@@ -3,9 +3,7 @@
 use super::fitted::PlaceFit;
 use super::measured::Measured;
 use crate::fit::trust::verdict::{Evidence, rule};
-use crate::fit::trust::{
-    FlowTrust, Known, Ruling, Score, SnowLink, StoreTrust, crossed, crossing, late_summer_months,
-};
+use crate::fit::trust::{FlowTrust, Known, Ruling, Score, SnowLink, StoreTrust, crossed, crossing, late_summer_months};
 use crate::fit::{Measures, SnowAt, SplitTest};
 use crate::picture::views::facts::{ScoreUnit, UseShown, Verdict};
 use crate::place::Place;

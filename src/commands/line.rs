@@ -109,14 +109,20 @@ fn weather(words: &Words) -> Command {
 
 fn fit(words: &Words) -> Command {
     let place = path("place", "value-place", "help-place", words).required(false);
-    let number = |name, help: &str, usual: &str| text(name, "value-number", help, words).help(with_usual(help, usual, words));
+    let number =
+        |name, help: &str, usual: &str| text(name, "value-number", help, words).help(with_usual(help, usual, words));
     subcommand("fit", "help-usage-fit", words)
         .arg(place.help(with_usual("help-place", "demo", words)))
-        .arg(text("objective", "value-objective", "help-objective", words).help(with_usual("help-objective", "kge", words)))
-        .arg(
-            text("correction", "value-correction", "help-correction", words)
-                .help(with_usual("help-correction", "rain-and-snow", words)),
-        )
+        .arg(text("objective", "value-objective", "help-objective", words).help(with_usual(
+            "help-objective",
+            "kge",
+            words,
+        )))
+        .arg(text("correction", "value-correction", "help-correction", words).help(with_usual(
+            "help-correction",
+            "rain-and-snow",
+            words,
+        )))
         .arg(number("seed", "help-fit-seed", "1"))
         .arg(number("starts", "help-starts", &crate::fit::Settings::default().starts.to_string()))
         .arg(number("runs", "help-runs", &crate::fit::Settings::default().runs_per_start.to_string()))

@@ -23,10 +23,9 @@ impl Measured {
             GaugeMeasures::ComputedInflow => Measures::ComputedInflow,
             GaugeMeasures::BelowDiversions => Measures::BelowDiversions,
         };
-        let at = place.snow_elevation_m.map_or(SnowAt::Basin, |elevation_m| SnowAt::Spot {
-            elevation_m,
-            melt_exposure: 1.0,
-        });
+        let at = place
+            .snow_elevation_m
+            .map_or(SnowAt::Basin, |elevation_m| SnowAt::Spot { elevation_m, melt_exposure: 1.0 });
         Self {
             gauge: place.gauge.as_ref().map(|gauge| (measures(gauge.measures), beside_weather(place, &gauge.series))),
             snow: place.snow_record.as_ref().map(|series| (at, beside_weather(place, series))),

@@ -14,8 +14,8 @@ pub mod report;
 pub mod search;
 pub mod split;
 pub mod starts;
-pub mod trust;
 pub mod trial;
+pub mod trust;
 
 pub use objective::Objective;
 pub use parameters::{Parameter, PrecipitationCorrection, apply};

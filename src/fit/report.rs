@@ -234,9 +234,8 @@ pub fn place_checksum(valley: &Valley) -> String {
         .iter()
         .flat_map(|band| [band.area_km2, band.elevation_m, band.melt_exposure, band.evaporation_factor]);
     let bytes = own.into_iter().chain(bands).flat_map(|number| number.to_bits().to_le_bytes());
-    let sum = bytes.fold(0xcbf2_9ce4_8422_2325_u64, |sum, byte| {
-        (sum ^ u64::from(byte)).wrapping_mul(0x0000_0100_0000_01b3)
-    });
+    let sum =
+        bytes.fold(0xcbf2_9ce4_8422_2325_u64, |sum, byte| (sum ^ u64::from(byte)).wrapping_mul(0x0000_0100_0000_01b3));
     format!("{sum:016x}")
 }
 

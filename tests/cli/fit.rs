@@ -42,7 +42,11 @@ fn a_fit_is_written_beside_the_place_and_used_by_every_command() {
     assert_eq!(check.code, 0);
     assert!(check.out.contains("The records have changed since this fit was made"), "{}", check.out);
     let tell = bench.run(&["tell", "place", "--lang", "es"]);
-    assert!(tell.err.contains("Los registros cambiaron") && tell.out.replace('\n', " ").contains("Ajuste otra vez"), "{}", tell.err);
+    assert!(
+        tell.err.contains("Los registros cambiaron") && tell.out.replace('\n', " ").contains("Ajuste otra vez"),
+        "{}",
+        tell.err
+    );
     let trust = bench.run(&["trust", "place", "--lang", "en"]);
     assert!(trust.out.contains("The fit is from older records"), "{}", trust.out);
 }

@@ -6,8 +6,8 @@ use std::sync::atomic::{AtomicBool, AtomicUsize, Ordering};
 use super::valleys;
 use deshielo::fit::ensemble::{FEWEST_SETS, band};
 use deshielo::fit::{
-    Fit, FitError, Measures, Objective, Parameter, Parting, PrecipitationCorrection, Progress, Record, Settings, SnowAt, SnowRecord, Transfer,
-    Watch, apply, fit,
+    Fit, FitError, Measures, Objective, Parameter, Parting, PrecipitationCorrection, Progress, Record, Settings,
+    SnowAt, SnowRecord, Transfer, Watch, apply, fit,
 };
 use deshielo::water::basin::{Basin, BasinDay};
 use deshielo::water::calendar::CalendarDay;
@@ -116,7 +116,8 @@ fn a_place_is_fitted_nearly_perfectly() {
 fn the_sensitive_parameters_are_found_again() {
     // By squared errors: near a perfect fit the efficiency of 2009 is a narrow ridge on which parameters trade places.
     let place = Place::new(6, 3);
-    let settings = Settings { objective: Objective::NashSutcliffe, correction: PrecipitationCorrection::Factor, ..quick(4, 1000) };
+    let settings =
+        Settings { objective: Objective::NashSutcliffe, correction: PrecipitationCorrection::Factor, ..quick(4, 1000) };
     let found = fit(&unfitted(), &place.record(), &settings, &QUIETLY).unwrap();
     let score = found.scores.objective.unwrap();
     assert!(score >= 0.99, "score {score}");

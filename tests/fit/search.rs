@@ -1,7 +1,7 @@
 //! The search against the paper's formulas, and on standard functions against an independent implementation.
 
-use deshielo::fit::search::{STEP_SHARE, Search, first_guesses, inclusion_probability, reflect};
 use crate::support::{assert_check, checks, number};
+use deshielo::fit::search::{STEP_SHARE, Search, first_guesses, inclusion_probability, reflect};
 
 #[test]
 fn inclusion_probability_and_reflection() {

@@ -1,9 +1,9 @@
 //! Scores against an independent library, and the shape of errors, on series that are made up.
 
 use super::valleys;
+use crate::support::Columns;
 use deshielo::signs::skill;
 use deshielo::water::calendar::CalendarDay;
-use crate::support::Columns;
 
 #[test]
 fn scores_equal_an_independent_librarys() {

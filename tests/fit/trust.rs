@@ -79,14 +79,8 @@ fn each_verdict_follows_its_own_score() {
     let (calendar, observed) = river();
     let with = |flow: &FlowTrust, of| {
         let tests = tests(0.88);
-        let evidence = Evidence {
-            flow: Some(flow),
-            tests: &tests,
-            storage: None,
-            has_lake: true,
-            canals: &[],
-            has_canals: false,
-        };
+        let evidence =
+            Evidence { flow: Some(flow), tests: &tests, storage: None, has_lake: true, canals: &[], has_canals: false };
         known(&evidence, of)
     };
     // A fifth too much all year: the season is right, the volume is not.

@@ -46,7 +46,9 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
     let head = words.say("fit-file-head", &[("place", place.name.get(words.tag()).into())]);
     let head: String = head.lines().map(|line| format!("# {line}\n")).collect();
     let text = file.write().map_err(|reason| {
-        Failure::input(words.say("error-output", &[("reason", words.say("reason-other", &[("reason", reason.into())]).into())]))
+        Failure::input(
+            words.say("error-output", &[("reason", words.say("reason-other", &[("reason", reason.into())]).into())]),
+        )
     })?;
     deliver(format!("{head}\n{text}").as_bytes(), Some(&target), &words)?;
     deliver(told::table(&found, &file, &place, &target, &words).as_bytes(), None, &words)

@@ -61,6 +61,9 @@ fn clock(seconds: f64) -> String {
 mod tests {
     #[test]
     fn time_left_is_minutes_and_seconds() {
-        assert_eq!((super::clock(5.9), super::clock(61.0), super::clock(7260.0)), ("0:05".into(), "1:01".into(), "121:00".into()));
+        assert_eq!(
+            (super::clock(5.9), super::clock(61.0), super::clock(7260.0)),
+            ("0:05".into(), "1:01".into(), "121:00".into())
+        );
     }
 }

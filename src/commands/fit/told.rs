@@ -47,7 +47,9 @@ pub(super) fn table(found: &Fit, file: &FitFile, place: &Place, target: &Path, w
 
 /// Two decimals, or the mark of what is not there.
 pub(in crate::commands) fn score(score: Option<f64>, words: &Words) -> String {
-    score.filter(|score| score.is_finite()).map_or_else(|| words.style().missing.clone(), |score| words.number(score, 2))
+    score
+        .filter(|score| score.is_finite())
+        .map_or_else(|| words.style().missing.clone(), |score| words.number(score, 2))
 }
 
 /// Halves judged by the set of the other half.

@@ -163,10 +163,8 @@ fn ranges(ground: &Ground, (dials, year): (Dials, usize), stop: &AtomicBool) -> 
     let pairs: Option<Vec<Pair>> = ground.sets.par_iter().map(one).collect();
     let pairs = pairs?;
     let series = |value: &dyn Fn(&Answer, usize) -> f64| -> [Vec<f64>; 2] {
-        let all: Vec<Vec<f64>> = pairs
-            .iter()
-            .map(|(_, now)| (0..now.year.days.len()).map(|day| value(now, day)).collect())
-            .collect();
+        let all: Vec<Vec<f64>> =
+            pairs.iter().map(|(_, now)| (0..now.year.days.len()).map(|day| value(now, day)).collect()).collect();
         let (low, high) = band(&all).into_iter().unzip();
         [low, high]
     };
@@ -179,16 +177,16 @@ fn ranges(ground: &Ground, (dials, year): (Dials, usize), stop: &AtomicBool) -> 
     Some(Ranges {
         flow: series(&|answer, day| answer.year.days[day].inflow_m3s),
         storage: has_lake.then(|| series(&|answer, day| answer.year.dead_hm3 + answer.year.days[day].content_hm3)),
-        half_volume_days: whole(years.iter().map(|(was, now)| {
-            Some(day(now.half_volume_date)? - day(was.half_volume_date)?)
-        })),
+        half_volume_days: whole(
+            years.iter().map(|(was, now)| Some(day(now.half_volume_date)? - day(was.half_volume_date)?)),
+        ),
         lacking_days: ground
             .order
             .iter()
             .map(|&gate| {
-                let changes = years.iter().map(|(was, now)| {
-                    Some(lacking(now.canals.get(gate)?) - lacking(was.canals.get(gate)?))
-                });
+                let changes = years
+                    .iter()
+                    .map(|(was, now)| Some(lacking(now.canals.get(gate)?) - lacking(was.canals.get(gate)?)));
                 whole(changes).unwrap_or((0, 0))
             })
             .collect(),

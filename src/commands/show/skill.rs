@@ -39,11 +39,7 @@ impl OwnSkill {
         let river = judged.best_evidence().map(|flow| OwnRiver {
             unseen: judged.unseen.is_some(),
             season: flow.season.iter().map(|month| (month.month, month.observed_m3s, month.modelled_m3s)).collect(),
-            duration: flow
-                .duration
-                .iter()
-                .map(|point| (point.share, point.observed_m3s, point.modelled_m3s))
-                .collect(),
+            duration: flow.duration.iter().map(|point| (point.share, point.observed_m3s, point.modelled_m3s)).collect(),
             errors: flow.errors.as_ref().map(|shape| shape.density.to_vec()).unwrap_or_default(),
             error_ends: flow.errors.as_ref().map_or((-1.0, 1.0), |shape| (shape.from, shape.to)),
             humps: flow.errors.as_ref().map_or(0, |shape| shape.humps.len()),

@@ -99,7 +99,12 @@ pub(super) fn season(flow: &FlowTrust, system: System, words: &Words) -> String 
     let number = |value: f64| words.significant(unit.convert(value), 3);
     let row = |month: &crate::fit::trust::MonthOfYear| {
         let name = Month::try_from(month.month).map_or_else(|_| String::new(), |month| words.month_name(month));
-        vec![name, number(month.observed_m3s), number(month.modelled_m3s), bars(month.observed_m3s, month.modelled_m3s, most)]
+        vec![
+            name,
+            number(month.observed_m3s),
+            number(month.modelled_m3s),
+            bars(month.observed_m3s, month.modelled_m3s, most),
+        ]
     };
     let rows: Vec<Vec<String>> = flow.season.iter().map(row).collect();
     let arguments = [("unit", words.say(unit.id(), &[]).into())];

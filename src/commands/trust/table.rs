@@ -87,7 +87,7 @@ fn monthly(flow: &FlowTrust, words: &Words) -> String {
         ("nse_rating", rated(monthly.nash_sutcliffe.1)),
         ("rsr", words.number(monthly.rsr.0, 2).into()),
         ("rsr_rating", rated(monthly.rsr.1)),
-        ("bias", words.number(-monthly.percent_bias.0, 0).into()),
+        ("bias", words.percent(-monthly.percent_bias.0, 0).into()),
         ("bias_rating", rated(monthly.percent_bias.1)),
     ];
     wrapped(&words.say("trust-monthly", &arguments), "")

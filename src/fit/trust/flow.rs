@@ -111,9 +111,8 @@ impl FlowTrust {
             .collect();
         let sorted = sorted(modelled, observed);
         let years = years(calendar, start_month, modelled, observed, late);
-        let bias_in = |months: &[u8]| {
-            percent_bias_on(modelled, observed, calendar, |day| months.contains(&day.month_day.month))
-        };
+        let bias_in =
+            |months: &[u8]| percent_bias_on(modelled, observed, calendar, |day| months.contains(&day.month_day.month));
         Some(Self {
             days,
             daily: Daily::of(modelled, observed),

@@ -92,7 +92,9 @@ fn sign_px(sign: &Sign, setting: Setting) -> i32 {
         Sign::Keys(keys) => {
             keys.iter().map(|key| cap_px(key, setting) + setting.gap / 2 + 1).sum::<i32>() + setting.gap
         }
-        Sign::Holds(_, word) | Sign::Unknown(word) => line * 3 / 2 + setting.gap * 3 + measure(word, setting.bold()).width as i32,
+        Sign::Holds(_, word) | Sign::Unknown(word) => {
+            line * 3 / 2 + setting.gap * 3 + measure(word, setting.bold()).width as i32
+        }
     }
 }
 

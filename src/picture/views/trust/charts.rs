@@ -133,8 +133,7 @@ fn duration(
     let flows = river.duration.iter().flat_map(|point| [point.1, point.2]);
     let least = flows.filter(|flow| *flow > 0.0).fold(most, f64::min).max(most * LOWEST_SHARE);
     let flow = |value: f64| words.quantity(value, Quantity::Flow, units, 2);
-    let title =
-        words.say("trust-chart-duration", &[("least", flow(least).into()), ("most", flow(most).into())]);
+    let title = words.say("trust-chart-duration", &[("least", flow(least).into()), ("most", flow(most).into())]);
     let place = titled(canvas, layout, room, &title, theme);
     let plot = Plot { area: place, across: (0.0, 1.0), up: (libm::log(least) - 0.1, libm::log(most) + 0.1) };
     let at = |share: f64, flow: f64| plot.spot(share, libm::log(flow.max(least)));
@@ -188,7 +187,13 @@ fn errors(
     let (from, to) = river.error_ends;
     if from < 0.0 && 0.0 < to {
         let (top, foot) = (f64::from(place.top_left.y), f64::from(bottom(place)));
-        segment(canvas, Spot::new(plot.x(0.0), top), Spot::new(plot.x(0.0), foot), Stroke::dashed(1.5, 4.0, 3.0), theme.ink);
+        segment(
+            canvas,
+            Spot::new(plot.x(0.0), top),
+            Spot::new(plot.x(0.0), foot),
+            Stroke::dashed(1.5, 4.0, 3.0),
+            theme.ink,
+        );
     }
     let words_of = ["trust-chart-too-little", "trust-chart-too-much"].map(|id| words.say(id, &[]));
     ends(canvas, layout, place, [&words_of[0], &words_of[1]], theme);

@@ -17,8 +17,8 @@ help-warm-up = Años del comienzo del registro que se corren pero no se califica
 help-fit-years = Ajusta solo a estos años de agua, por ejemplo 1990..1999.
 help-sets = Cuántos juegos de números guardar, 20 o más. Entre todos muestran la duda.
 help-no-test = No hace la prueba en años que el ajuste no vio.
-help-fit-out = Escribe el ajuste en este archivo, y no junto a place.toml.
-help-fit-into = Escribe fit.toml en esta carpeta, y no junto a place.toml.
+help-fit-out = Para escribir el ajuste en este archivo, y no junto a place.toml.
+help-fit-into = Para escribir fit.toml en esta carpeta, y no junto a place.toml.
 help-trust-form = Cómo escribir la respuesta: table o json.
 help-fit-more =
     kge: eficiencia de Kling y Gupta de 2009; nse: eficiencia de Nash y

@@ -134,9 +134,12 @@ impl Doubts {
         let (send, answer) = channel();
         let stop = Arc::new(AtomicBool::new(false));
         let (ground, stopped) = (Arc::clone(&self.ground), Arc::clone(&stop));
-        // Nobody listens any more where something else was asked meanwhile.
-        thread::spawn(move || send.send(ranges(&ground, asked, &stopped)));
-        self.pending = Some(Pending { asked, stop, answer });
+        let run = move || {
+            // Nobody listens any more where something else was asked meanwhile.
+            let _ = send.send(ranges(&ground, asked, &stopped));
+        };
+        // Where the system gives no thread, the answer stands alone, as for a place without an ensemble.
+        self.pending = thread::Builder::new().spawn(run).ok().map(|_| Pending { asked, stop, answer });
     }
 }
 

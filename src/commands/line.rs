@@ -36,6 +36,8 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(weather(words))
         .subcommand(tally(words))
         .subcommand(super::place::line::command(words))
+        .subcommand(fit(words))
+        .subcommand(trust(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
 }
@@ -171,6 +173,43 @@ fn tally(words: &Words) -> Command {
         .arg(text("to", "value-date", "help-tally-to", words))
         .arg(text("form", "value-form", "help-tally-form", words).help(with_usual("help-tally-form", "table", words)))
         .arg(path_option("keep", "value-folder", "help-keep", words))
+}
+
+fn fit(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    let number =
+        |name, help: &str, usual: &str| text(name, "value-number", help, words).help(with_usual(help, usual, words));
+    subcommand("fit", "help-usage-fit", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("objective", "value-objective", "help-objective", words).help(with_usual(
+            "help-objective",
+            "kge",
+            words,
+        )))
+        .arg(text("correction", "value-correction", "help-correction", words).help(with_usual(
+            "help-correction",
+            "rain-and-snow",
+            words,
+        )))
+        .arg(number("seed", "help-fit-seed", "1"))
+        .arg(number("starts", "help-starts", &crate::fit::Settings::default().starts.to_string()))
+        .arg(number("runs", "help-runs", &crate::fit::Settings::default().runs_per_start.to_string()))
+        .arg(number("warm-up", "help-warm-up", "1"))
+        .arg(text("years", "value-years", "help-fit-years", words))
+        .arg(number("sets", "help-sets", &crate::fit::Settings::default().sets.to_string()))
+        .arg(flag("no-test", "help-no-test", words))
+        .arg(path_option("out", "value-file", "help-fit-out", words))
+        .arg(path_option("into", "value-folder", "help-fit-into", words))
+        .args(common(words))
+        .after_help(words.say("help-fit-more", &[]))
+}
+
+fn trust(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("trust", "help-usage-trust", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("form", "value-form", "help-trust-form", words).help(with_usual("help-trust-form", "table", words)))
+        .arg(text("units", "value-units", "help-units", words))
         .arg(path_option("out", "value-file", "help-out", words))
         .args(common(words))
 }

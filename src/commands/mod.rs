@@ -7,11 +7,15 @@ mod built_in;
 mod check;
 mod data;
 mod failure;
-mod keep_folder;
+mod fit;
+mod fitted;
 #[cfg(feature = "pdf")]
 mod handout;
+mod judged;
+mod keep_folder;
 mod line;
 mod map;
+mod measured;
 mod output;
 mod place;
 mod places;
@@ -24,6 +28,7 @@ mod speech;
 mod spinner;
 mod tally;
 mod tell;
+mod trust;
 mod usage;
 mod weather;
 
@@ -70,6 +75,8 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("place", matches)) => place::run(speech, matches),
         #[cfg(feature = "pdf")]
         Some(("handout", matches)) => handout::run(speech, matches),
+        Some(("fit", matches)) => fit::run(speech, matches),
+        Some(("trust", matches)) => trust::run(speech, matches),
         _ => show::usual(speech),
     }
 }

@@ -301,9 +301,7 @@ impl<'s, 'a> Sheet<'s, 'a> {
             if scene.invented {
                 parts.push(voice.words.say("picture-invented", &[]));
             }
-            if !scene.fitted {
-                parts.push(voice.words.say("picture-not-fitted", &[]));
-            }
+            parts.push(voice.words.say(scene.fitting(), &[]));
             parts.join(" · ")
         });
         let style = Style::new(Face::Regular, 9.0, Ink::Quiet);

@@ -76,6 +76,7 @@ pub struct Offer {
     about_sheets: u8,
     opening_day: u16,
     leap_day: Option<u16>,
+    trust_sheets: u8,
 }
 
 impl Offer {
@@ -118,6 +119,7 @@ impl Offer {
             about_sheets: 1,
             opening_day: 0,
             leap_day: None,
+            trust_sheets: 1,
         };
         for (index, named) in offer.settings.iter().enumerate() {
             named.setting.fits(&offer).map_err(|misfit| OfferFault::Setting(index, misfit))?;
@@ -152,6 +154,12 @@ impl Offer {
     #[must_use]
     pub fn with_about_sheets(self, sheets: u8) -> Self {
         Self { about_sheets: sheets.max(1), ..self }
+    }
+
+    /// The same with so many sheets of the trust view, likewise.
+    #[must_use]
+    pub fn with_trust_sheets(self, sheets: u8) -> Self {
+        Self { trust_sheets: sheets.max(1), ..self }
     }
 
     /// The same with so many pages of the help card, as the picture counts them for a screen; 0 counts as 1.
@@ -190,9 +198,13 @@ impl Offer {
         &self.views
     }
 
-    /// How many sheets a view has; all but about have one.
+    /// How many sheets a view has; all but trust and about have one.
     pub fn sheets(&self, view: View) -> u8 {
-        if view == View::About { self.about_sheets } else { 1 }
+        match view {
+            View::About => self.about_sheets,
+            View::Trust => self.trust_sheets,
+            _ => 1,
+        }
     }
 
     /// How many terms can be explained on a view.

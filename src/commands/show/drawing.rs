@@ -79,7 +79,11 @@ impl Drawing {
             View::About => about::draw(&mut canvas, scene, theme, words),
             _ => valley::draw(&mut canvas, scene, theme, words),
         }
-        let sheets = if view == View::About { about::sheet_count(&canvas, scene, words) } else { 1 };
+        let sheets = match view {
+            View::About => about::sheet_count(&canvas, scene, words),
+            View::Trust => trust::sheet_count(&canvas, scene, words),
+            _ => 1,
+        };
         if let Some(card) = card {
             if self.with_texts {
                 canvas = canvas.with_witness(&mut over);

@@ -1,6 +1,7 @@
 //! `show`: the running instrument on whatever screens are at hand, or as pictures in a folder.
 
 mod board;
+mod doubt;
 mod drawing;
 mod droughts;
 mod hands;
@@ -9,6 +10,7 @@ mod leading;
 mod pictures;
 mod player;
 mod request;
+pub(super) mod skill;
 
 use clap::ArgMatches;
 
@@ -88,10 +90,10 @@ fn show_chosen(choice: Choice, player: Player, speech: &Speech, request: &Reques
 fn open(speech: &Speech, request: &Request) -> Result<Player, Failure> {
     let reading = speech.words.say("progress-reading", &[("path", request.place.display().to_string().into())]);
     let spinner = Spinner::start(reading);
-    let place = places::open(&request.place, speech)?;
+    let opened = places::open_fitted(&request.place, speech)?;
     drop(spinner);
     let _spinner = Spinner::start(speech.words.say("progress-running", &[]));
-    let mut player = Player::new(place, speech, request.shade, request.units)?;
+    let mut player = Player::new(opened, speech, request.shade, request.units)?;
     if let Some(groups) = request.groups {
         player.ask_groups(groups);
     }

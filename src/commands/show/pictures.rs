@@ -27,6 +27,7 @@ pub(super) fn write(player: &mut Player, request: &Request, words: &Words) -> Re
         languages.truncate(1);
     }
     let mut count = 0_u32;
+    player.wait_for_doubts();
     for language in &languages {
         for view in VIEWS {
             player.step(Event::Command(Command::Show(view)));

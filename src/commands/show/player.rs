@@ -4,14 +4,18 @@ use std::time::{Duration, Instant};
 
 use embedded_graphics::geometry::{Point, Size};
 
+use super::doubt::Doubts;
 use super::drawing::{Drawing, VIEWS, page};
 use super::droughts::with_droughts;
 use super::hands::Clock;
 use super::leading::{LessonText, shelf};
+use super::skill::OwnSkill;
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument, PointerPhase};
 use crate::commands::failure::Failure;
+use crate::commands::places::Opened;
 use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
+use crate::picture::views::facts::PlaceFacts;
 use crate::picture::views::hand::Hand;
 use crate::picture::views::{Scene, help, term};
 use crate::place::{Place, Setting};
@@ -30,6 +34,11 @@ const LANGUAGES: [&str; 2] = ["en", "es"];
 /// A session under way.
 pub(in crate::commands) struct Player {
     pub(super) place: Place,
+    /// Whether the fit in use is stale; `None` without one.
+    fit: Option<bool>,
+    skill: Option<OwnSkill>,
+    /// How far the answer may be off; `None` without an ensemble.
+    doubts: Option<Doubts>,
     percent_per_degree: Option<f64>,
     pub(super) offer: Offer,
     /// What the settings of the offer are called.
@@ -63,7 +72,10 @@ pub(in crate::commands) struct Player {
 
 impl Player {
     /// A session at rest on that place.
-    pub fn new(place: Place, speech: &Speech, shade: Shade, units: Option<System>) -> Result<Self, Failure> {
+    pub fn new(opened: Opened, speech: &Speech, shade: Shade, units: Option<System>) -> Result<Self, Failure> {
+        let Opened { place, fit } = opened;
+        let skill = OwnSkill::of(&place, fit.as_ref());
+        let doubts = fit.as_ref().and_then(|fit| Doubts::new(&fit.sets, &place.calendar, &place.days));
         let source = Source { valley: &place.valley, calendar: &place.calendar, record: &place.days };
         let no_run = || Failure::input(speech.words.say("show-no-answer", &[]));
         let answers = Answers::new(&source).map_err(|_| no_run())?;
@@ -96,6 +108,9 @@ impl Player {
         let state = State::new(&offer);
         let (shelf, entries) = shelf(&place, &LessonText::built_in()).into_iter().unzip();
         Ok(Self {
+            fit: fit.map(|fit| fit.stale),
+            skill,
+            doubts,
             place,
             percent_per_degree,
             settings,
@@ -206,8 +221,7 @@ impl Player {
         let told = PlaceTold {
             name: self.place.name.get(tag),
             invented: self.place.invented,
-            // No place holds a fit to its gauge yet.
-            fitted: false,
+            fitted: self.fit.is_some(),
             gate_names: &names,
         };
         let source = Source { valley: &self.place.valley, calendar: &self.place.calendar, record: &self.place.days };
@@ -215,7 +229,8 @@ impl Player {
         let props = stage.props();
         let dials = settings(&self.offer, &shown.dials);
         let moment = Moment::of(shown, &dials, &self.answers, second.as_ref());
-        let scene = stage.scene(&props, moment);
+        let doubt = self.doubts.as_ref().and_then(Doubts::shown);
+        let scene = stage.scene(&props, Moment { doubt, ..moment });
         let in_hand = HandTold::of(
             &self.state,
             &Told {
@@ -228,10 +243,12 @@ impl Player {
             },
         );
         let facts = facts_of(&self.place, self.percent_per_degree, tag);
+        let facts = PlaceFacts { old_fit: self.fit == Some(true), ..facts };
+        let skill = self.skill.as_ref().map(OwnSkill::shown);
         let note = self.led_note();
         let hand = in_hand.hand();
         let hand = Hand { note: note.as_deref().unwrap_or(hand.note), ..hand };
-        let scene = Scene { facts, sheet: shown.sheet.into(), hand, ..scene };
+        let scene = Scene { facts, skill, sheet: shown.sheet.into(), hand, ..scene };
         look(&scene, (words, second.as_ref()))
     }
 
@@ -259,6 +276,27 @@ impl Player {
         self.finger = finger;
         self.step(event);
     }
+
+    /// Shows the range once it has come.
+    fn look_for_doubts(&mut self) {
+        let asked = self.answers.asked();
+        let (dials, year) = (asked.dials, asked.year);
+        if let Some(doubts) = &mut self.doubts
+            && doubts.look(dials, year)
+        {
+            self.stamp += 1;
+        }
+    }
+
+    /// Waits until the answer on show has its range.
+    pub fn wait_for_doubts(&mut self) {
+        self.ask_water();
+        self.look_for_doubts();
+        if let Some(doubts) = &mut self.doubts {
+            doubts.wait();
+            self.stamp += 1;
+        }
+    }
 }
 
 impl Instrument for Player {
@@ -275,6 +313,7 @@ impl Instrument for Player {
 
     fn frame(&mut self, size: FrameSize, texts: bool) -> Frame<'_> {
         self.ask_water();
+        self.look_for_doubts();
         let at = match self.drawings.iter().position(|drawing| drawing.is(size, texts)) {
             Some(at) => at,
             None => {
@@ -298,7 +337,11 @@ impl Instrument for Player {
             let sheets = drawing.sheets;
             self.drawings[at] = drawing;
             if sheets > self.offer.sheets(shown.view) {
-                self.offer = self.offer.clone().with_about_sheets(sheets);
+                let offer = self.offer.clone();
+                self.offer = match shown.view {
+                    View::Trust => offer.with_trust_sheets(sheets),
+                    _ => offer.with_about_sheets(sheets),
+                };
             }
         }
         self.drawings[at].frame()
@@ -309,6 +352,9 @@ impl Instrument for Player {
         if self.told_stale {
             // As soon as the old answer is on the screen.
             return Some(Duration::ZERO);
+        }
+        if !shown.playing && self.doubts.as_ref().is_some_and(Doubts::is_waiting) {
+            return Some(LOOK_AGAIN);
         }
         shown.playing.then(|| Duration::from_millis(1000 / u64::from(shown.speed.days_per_second())))
     }
@@ -325,6 +371,8 @@ impl Instrument for Player {
 
 /// Longer than this and a hand would think that nothing happens.
 const PATIENCE: Duration = Duration::from_millis(40);
+/// How soon to look again for a range that is on its way.
+const LOOK_AGAIN: Duration = Duration::from_millis(150);
 
 /// Frames that are kept: those of a few screens at once.
 const MOST_DRAWINGS: usize = 4;
@@ -373,7 +421,7 @@ mod tests {
     fn player() -> Player {
         let place = read(PlaceSource::Embedded(demo_files())).place.unwrap();
         let speech = Speech::choose(&["--lang".into(), "en-US".into()]);
-        Player::new(place, &speech, Shade::Light, None).ok().unwrap()
+        Player::new(Opened { place, fit: None }, &speech, Shade::Light, None).ok().unwrap()
     }
 
     fn pixels(player: &mut Player) -> Vec<embedded_graphics::pixelcolor::Rgb565> {

@@ -188,7 +188,7 @@ fn fit(words: &Words) -> Command {
         )))
         .arg(text("correction", "value-correction", "help-correction", words).help(with_usual(
             "help-correction",
-            "rain-and-snow",
+            "factor",
             words,
         )))
         .arg(number("seed", "help-fit-seed", "1"))

@@ -136,9 +136,9 @@ pub enum PrecipitationCorrection {
     /// The change with height.
     Gradient,
     /// A factor on everything, which can lower as well as raise.
+    #[default]
     Factor,
     /// A factor on everything and another on snow: what the gauge stands for, and what it misses of snow.
-    #[default]
     RainAndSnow,
 }
 

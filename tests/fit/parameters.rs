@@ -175,7 +175,7 @@ fn a_broken_file_is_refused_with_its_reason() {
     assert_eq!(broken(&|file| file.parameters[1].key = key.clone()), FitFileError::WrongParameter { key: key.clone() });
     assert_eq!(
         broken(&|file| file.sets[1].values.truncate(3)),
-        FitFileError::WrongCount { set: 1, found: 3, needed: 20 }
+        FitFileError::WrongCount { set: 1, found: 3, needed: 19 }
     );
     assert!(matches!(FitFile::read("seed = ["), Err(FitFileError::Unreadable { span: Some(_), .. })));
     assert!(matches!(FitFile::read(""), Err(FitFileError::Unreadable { .. })));

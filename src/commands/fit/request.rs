@@ -21,8 +21,8 @@ pub(super) const OBJECTIVES: [(&str, Objective); 4] = [
     ("kge-with-snow", Objective::KlingGuptaWithSnow),
 ];
 const CORRECTIONS: [(&str, PrecipitationCorrection); 4] = [
-    ("rain-and-snow", PrecipitationCorrection::RainAndSnow),
     ("factor", PrecipitationCorrection::Factor),
+    ("rain-and-snow", PrecipitationCorrection::RainAndSnow),
     ("snow", PrecipitationCorrection::SnowCatch),
     ("gradient", PrecipitationCorrection::Gradient),
 ];

@@ -173,6 +173,8 @@ fn tally(words: &Words) -> Command {
         .arg(text("to", "value-date", "help-tally-to", words))
         .arg(text("form", "value-form", "help-tally-form", words).help(with_usual("help-tally-form", "table", words)))
         .arg(path_option("keep", "value-folder", "help-keep", words))
+        .arg(path_option("out", "value-file", "help-out", words))
+        .args(common(words))
 }
 
 fn fit(words: &Words) -> Command {

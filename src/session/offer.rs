@@ -3,10 +3,12 @@
 //! The host makes it once from the place, the words and the run as it was. A lesson that allows fewer dials or narrower
 //! ranges makes a narrower offer; the session itself needs to know nothing of lessons for that.
 
+use super::map::MapOffer;
 use super::scale::DialScale;
 use super::setting::{Misfit, NamedSetting};
 use super::view::{Shade, VIEWS, View};
 use super::year::YearList;
+use crate::signs::Reading;
 use crate::water::dials::{DIALS, Dial, DialRange};
 use crate::words::System;
 
@@ -76,6 +78,7 @@ pub struct Offer {
     about_sheets: u8,
     opening_day: u16,
     leap_day: Option<u16>,
+    map: MapOffer,
 }
 
 impl Offer {
@@ -105,6 +108,7 @@ impl Offer {
         if input.help_pages == 0 {
             return Err(OfferFault::NoHelp);
         }
+        let map = MapOffer::new(scales.iter().flatten().map(DialScale::dial).collect());
         let offer = Self {
             scales,
             years: input.years,
@@ -118,6 +122,7 @@ impl Offer {
             about_sheets: 1,
             opening_day: 0,
             leap_day: None,
+            map,
         };
         for (index, named) in offer.settings.iter().enumerate() {
             named.setting.fits(&offer).map_err(|misfit| OfferFault::Setting(index, misfit))?;
@@ -137,6 +142,12 @@ impl Offer {
     #[must_use]
     pub fn with_leap_day(self, leap_day: u16) -> Self {
         Self { leap_day: Some(leap_day), ..self }
+    }
+
+    /// The same with these numbers for the map of two dials, the first shown first; none leaves them as they are.
+    #[must_use]
+    pub fn with_map_readings(self, readings: Vec<Reading>) -> Self {
+        Self { map: self.map.with_readings(readings), ..self }
     }
 
     /// The same with those of `settings` that go with it, beside those that it has.
@@ -178,6 +189,11 @@ impl Offer {
     /// The dials that are offered, in their usual order.
     pub fn dials(&self) -> impl DoubleEndedIterator<Item = Dial> + '_ {
         self.scales.iter().flatten().map(DialScale::dial)
+    }
+
+    /// What the map of two dials can be made of.
+    pub fn map(&self) -> &MapOffer {
+        &self.map
     }
 
     /// The years.

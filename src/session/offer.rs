@@ -3,10 +3,12 @@
 //! The host makes it once from the place, the words and the run as it was. A lesson that allows fewer dials or narrower
 //! ranges makes a narrower offer; the session itself needs to know nothing of lessons for that.
 
+use super::map::MapOffer;
 use super::scale::DialScale;
 use super::setting::{Misfit, NamedSetting};
 use super::view::{Shade, VIEWS, View};
 use super::year::YearList;
+use crate::signs::Reading;
 use crate::water::dials::{DIALS, Dial, DialRange};
 use crate::words::System;
 
@@ -77,6 +79,7 @@ pub struct Offer {
     opening_day: u16,
     leap_day: Option<u16>,
     trust_sheets: u8,
+    map: MapOffer,
 }
 
 impl Offer {
@@ -106,6 +109,7 @@ impl Offer {
         if input.help_pages == 0 {
             return Err(OfferFault::NoHelp);
         }
+        let map = MapOffer::new(scales.iter().flatten().map(DialScale::dial).collect());
         let offer = Self {
             scales,
             years: input.years,
@@ -120,6 +124,7 @@ impl Offer {
             opening_day: 0,
             leap_day: None,
             trust_sheets: 1,
+            map,
         };
         for (index, named) in offer.settings.iter().enumerate() {
             named.setting.fits(&offer).map_err(|misfit| OfferFault::Setting(index, misfit))?;
@@ -139,6 +144,12 @@ impl Offer {
     #[must_use]
     pub fn with_leap_day(self, leap_day: u16) -> Self {
         Self { leap_day: Some(leap_day), ..self }
+    }
+
+    /// The same with these numbers for the map of two dials, the first shown first; none leaves them as they are.
+    #[must_use]
+    pub fn with_map_readings(self, readings: Vec<Reading>) -> Self {
+        Self { map: self.map.with_readings(readings), ..self }
     }
 
     /// The same with those of `settings` that go with it, beside those that it has.
@@ -186,6 +197,11 @@ impl Offer {
     /// The dials that are offered, in their usual order.
     pub fn dials(&self) -> impl DoubleEndedIterator<Item = Dial> + '_ {
         self.scales.iter().flatten().map(DialScale::dial)
+    }
+
+    /// What the map of two dials can be made of.
+    pub fn map(&self) -> &MapOffer {
+        &self.map
     }
 
     /// The years.

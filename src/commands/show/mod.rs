@@ -7,6 +7,7 @@ mod droughts;
 mod hands;
 mod kiosk;
 mod leading;
+mod mapping;
 mod pictures;
 mod player;
 mod request;

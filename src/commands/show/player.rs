@@ -1,14 +1,16 @@
 //! The instrument that is played: a place, the session on it, the answers of the water, and the frames of the views.
 
+use std::sync::Arc;
 use std::time::{Duration, Instant};
 
 use embedded_graphics::geometry::{Point, Size};
 
 use super::doubt::Doubts;
-use super::drawing::{Drawing, VIEWS, page};
+use super::drawing::{Drawing, Shows, VIEWS, page};
 use super::droughts::with_droughts;
 use super::hands::Clock;
 use super::leading::{LessonText, shelf};
+use super::mapping::{self, Mapper};
 use super::skill::OwnSkill;
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument, PointerPhase};
 use crate::commands::failure::Failure;
@@ -33,7 +35,7 @@ const LANGUAGES: [&str; 2] = ["en", "es"];
 
 /// A session under way.
 pub(in crate::commands) struct Player {
-    pub(super) place: Place,
+    pub(super) place: Arc<Place>,
     /// Whether the fit in use is stale; `None` without one.
     fit: Option<bool>,
     skill: Option<OwnSkill>,
@@ -45,7 +47,8 @@ pub(in crate::commands) struct Player {
     settings: Vec<Setting>,
     voice_names: Vec<String>,
     pub(super) state: State,
-    answers: Answers,
+    pub(super) answers: Answers,
+    pub(super) mapper: Mapper,
     /// One entry for each voice of the offer: the first language and the second, if there are two.
     pub(super) voices: Vec<(Words, Option<Words>)>,
     clock: Clock,
@@ -88,7 +91,7 @@ impl Player {
         let offer = Offer::new(OfferInput {
             dials: place.dials.open().collect(),
             years,
-            views: VIEWS.into_iter().chain([View::Lesson]).collect(),
+            views: views(&place),
             terms: View::ALL.map(|view| term::terms(page(view)).len() as u16),
             voices: tags.collect(),
             system: units.unwrap_or_else(|| usual_system(&place)),
@@ -98,7 +101,8 @@ impl Player {
         })
         .map_err(|_| no_run())?;
         let (offer, settings) = with_droughts(offer, &place.dials, &answers.rest().run.years);
-        let mut offer = offer.with_opening_day(survey_day(&place, &answers.rest().year));
+        let readings = mapping::readings(&place, &answers.rest().run.years);
+        let mut offer = offer.with_map_readings(readings).with_opening_day(survey_day(&place, &answers.rest().year));
         if let Some(leap) = place.calendar.iter().find(|day| (day.month_day.month, day.month_day.day) == (2, 29)) {
             offer = offer.with_leap_day(leap.day_of_water_year - 1);
         }
@@ -111,13 +115,14 @@ impl Player {
             fit: fit.map(|fit| fit.stale),
             skill,
             doubts,
-            place,
+            place: Arc::new(place),
             percent_per_degree,
             settings,
             voice_names,
             offer,
             state,
             answers,
+            mapper: Mapper::default(),
             voices,
             clock: Clock::default(),
             drawings: Vec::new(),
@@ -160,6 +165,11 @@ impl Player {
     pub fn languages(&self) -> Vec<String> {
         let single = self.voices.iter().filter(|(_, second)| second.is_none());
         single.map(|(words, _)| words.tag().to_owned()).collect()
+    }
+
+    /// Whether it can show that view.
+    pub fn offers(&self, view: View) -> bool {
+        self.offer.views().contains(&view)
     }
 
     /// How many sheets the view on show has, as it was last drawn in this size.
@@ -210,6 +220,23 @@ impl Player {
     pub fn settle(&mut self) {
         self.may_work = true;
         self.ask_water();
+        self.ask_map();
+        if self.mapper.wait() {
+            self.stamp += 1;
+        }
+    }
+
+    /// Asks for the map where it is on show, and takes what has come of it.
+    fn ask_map(&mut self) {
+        let shown = self.state.shown();
+        if shown.view != View::Grid {
+            self.mapper.stop();
+            return;
+        }
+        let is_new = self.mapper.ask(shown, self.offer.map(), &self.place, &self.answers.rest().run.years);
+        if self.mapper.take() || is_new {
+            self.stamp += 1;
+        }
     }
 
     /// Puts the scene of the moment together.
@@ -237,6 +264,7 @@ impl Player {
                 offer: &self.offer,
                 settings: &self.settings,
                 voices: &self.voice_names,
+                gates: &names,
                 words,
                 second: second.as_ref(),
                 stale: moment.stale,
@@ -314,6 +342,7 @@ impl Instrument for Player {
     fn frame(&mut self, size: FrameSize, texts: bool) -> Frame<'_> {
         self.ask_water();
         self.look_for_doubts();
+        self.ask_map();
         let at = match self.drawings.iter().position(|drawing| drawing.is(size, texts)) {
             Some(at) => at,
             None => {
@@ -331,7 +360,11 @@ impl Instrument for Player {
             // Taken out while the scene borrows everything else.
             let mut drawing = std::mem::replace(&mut self.drawings[at], Drawing::none());
             drawing.foot = self.strip_px(size);
-            self.with_scene(|scene, speech| drawing.draw(shown.view, shown.card, scene, shown.shade, speech));
+            let tag = self.words().tag();
+            let names: Vec<&str> = self.place.gates.iter().map(|gate| gate.name.get(tag)).collect();
+            let map = self.mapper.shown(shown.dials, &names, &self.place);
+            let page = Shows { view: shown.view, card: shown.card, map: map.as_ref() };
+            self.with_scene(|scene, speech| drawing.draw(page, scene, shown.shade, speech));
             self.draw_lesson(&mut drawing);
             drawing.stamp = Some(self.stamp);
             let sheets = drawing.sheets;
@@ -353,10 +386,10 @@ impl Instrument for Player {
             // As soon as the old answer is on the screen.
             return Some(Duration::ZERO);
         }
-        if !shown.playing && self.doubts.as_ref().is_some_and(Doubts::is_waiting) {
-            return Some(LOOK_AGAIN);
-        }
-        shown.playing.then(|| Duration::from_millis(1000 / u64::from(shown.speed.days_per_second())))
+        let plays = shown.playing.then(|| Duration::from_millis(1000 / u64::from(shown.speed.days_per_second())));
+        let ranges = self.doubts.as_ref().is_some_and(Doubts::is_waiting).then_some(LOOK_AGAIN);
+        let map = self.mapper.is_working().then_some(mapping::LOOKS);
+        [plays, ranges, map].into_iter().flatten().min()
     }
 
     fn done(&self) -> bool {
@@ -376,6 +409,12 @@ const LOOK_AGAIN: Duration = Duration::from_millis(150);
 
 /// Frames that are kept: those of a few screens at once.
 const MOST_DRAWINGS: usize = 4;
+
+/// The views on offer: the map needs two dials.
+fn views(place: &Place) -> Vec<View> {
+    let has_map = place.dials.open().nth(1).is_some();
+    VIEWS.into_iter().chain([View::Lesson]).filter(|view| has_map || *view != View::Grid).collect()
+}
 
 /// The language asked for, the other ones, and both at once.
 fn voices(speech: &Speech, region: &str) -> Vec<(Words, Option<Words>)> {

@@ -35,6 +35,7 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(data(words))
         .subcommand(weather(words))
         .subcommand(tally(words))
+        .subcommand(wiring(words))
         .subcommand(super::place::line::command(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
@@ -141,7 +142,11 @@ fn handout(words: &Words) -> Command {
         .arg(path_option("setting", "value-setting", "help-setting", words))
         .arg(text("years", "value-years", "help-years", words))
         .arg(path_option("lesson", "value-lesson", "help-handout-lesson", words))
-        .arg(text("sheet", "value-sheet", "help-handout-sheet", words).help(with_usual("help-handout-sheet", "work", words)))
+        .arg(text("sheet", "value-sheet", "help-handout-sheet", words).help(with_usual(
+            "help-handout-sheet",
+            "work",
+            words,
+        )))
         .arg(text("paper", "value-paper", "help-handout-paper", words))
         .arg(text("units", "value-units", "help-units", words))
         .arg(path_option("out", "value-file", "help-handout-out", words))
@@ -169,6 +174,16 @@ fn tally(words: &Words) -> Command {
         .arg(path_option("keep", "value-folder", "help-keep", words))
         .arg(path_option("out", "value-file", "help-out", words))
         .args(common(words))
+}
+
+fn wiring(words: &Words) -> Command {
+    subcommand("wiring", "help-usage-wiring", words)
+        .arg(path("board", "value-file", "help-wiring-board", words).required(false))
+        .arg(text("screen", "value-screen", "help-screen", words).action(ArgAction::Append))
+        .arg(text("size", "value-size", "help-size", words))
+        .arg(path_option("into", "value-folder", "help-show-into", words))
+        .args(common(words))
+        .after_help(words.say("help-wiring-more", &[]))
 }
 
 /// A subcommand with our headings in place of the parser's English ones.

@@ -7,9 +7,9 @@ mod built_in;
 mod check;
 mod data;
 mod failure;
-mod keep_folder;
 #[cfg(feature = "pdf")]
 mod handout;
+mod keep_folder;
 mod line;
 mod map;
 mod output;
@@ -26,6 +26,7 @@ mod tally;
 mod tell;
 mod usage;
 mod weather;
+mod wiring;
 
 use std::ffi::OsString;
 use std::io::Write;
@@ -66,6 +67,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("map", matches)) => map::run(speech, matches),
         Some(("rehearse", matches)) => rehearse::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        Some(("wiring", matches)) => wiring::run(speech, matches),
         Some(("tally", matches)) => tally::run(speech, matches),
         Some(("place", matches)) => place::run(speech, matches),
         #[cfg(feature = "pdf")]

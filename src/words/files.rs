@@ -54,7 +54,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "tell.ftl",
         "terms.ftl",
         "units.ftl",
-        "weather.ftl";
+        "weather.ftl",
+        "wiring.ftl";
     "en-GB":
         "dates.ftl",
         "ledger.ftl",
@@ -93,7 +94,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "tell.ftl",
         "terms.ftl",
         "units.ftl",
-        "weather.ftl";
+        "weather.ftl",
+        "wiring.ftl";
     "es-AR":
         "numbers.ftl",
         "terms.ftl";

@@ -35,6 +35,7 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(data(words))
         .subcommand(weather(words))
         .subcommand(tally(words))
+        .subcommand(wiring(words))
         .subcommand(super::place::line::command(words))
         .subcommand(fit(words))
         .subcommand(trust(words))
@@ -214,6 +215,16 @@ fn trust(words: &Words) -> Command {
         .arg(text("units", "value-units", "help-units", words))
         .arg(path_option("out", "value-file", "help-out", words))
         .args(common(words))
+}
+
+fn wiring(words: &Words) -> Command {
+    subcommand("wiring", "help-usage-wiring", words)
+        .arg(path("board", "value-file", "help-wiring-board", words).required(false))
+        .arg(text("screen", "value-screen", "help-screen", words).action(ArgAction::Append))
+        .arg(text("size", "value-size", "help-size", words))
+        .arg(path_option("into", "value-folder", "help-show-into", words))
+        .args(common(words))
+        .after_help(words.say("help-wiring-more", &[]))
 }
 
 /// A subcommand with our headings in place of the parser's English ones.

@@ -31,6 +31,7 @@ mod tell;
 mod trust;
 mod usage;
 mod weather;
+mod wiring;
 
 use std::ffi::OsString;
 use std::io::Write;
@@ -71,6 +72,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("map", matches)) => map::run(speech, matches),
         Some(("rehearse", matches)) => rehearse::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        Some(("wiring", matches)) => wiring::run(speech, matches),
         Some(("tally", matches)) => tally::run(speech, matches),
         Some(("place", matches)) => place::run(speech, matches),
         #[cfg(feature = "pdf")]

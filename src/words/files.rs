@@ -56,7 +56,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "tell.ftl",
         "terms.ftl",
         "units.ftl",
-        "weather.ftl";
+        "weather.ftl",
+        "wiring.ftl";
     "en-GB":
         "dates.ftl",
         "ledger.ftl",
@@ -97,7 +98,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "tell.ftl",
         "terms.ftl",
         "units.ftl",
-        "weather.ftl";
+        "weather.ftl",
+        "wiring.ftl";
     "es-AR":
         "numbers.ftl",
         "terms.ftl";

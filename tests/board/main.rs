@@ -11,6 +11,8 @@ mod examples;
 #[cfg(all(feature = "board", target_os = "linux"))]
 mod fake_panel;
 mod frames;
+mod inputs;
+mod knobs;
 mod losing;
 mod memory;
 mod mistakes;

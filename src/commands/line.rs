@@ -35,6 +35,7 @@ pub(super) fn command(words: &Words) -> Command {
         .subcommand(data(words))
         .subcommand(weather(words))
         .subcommand(tally(words))
+        .subcommand(bundle(words))
         .subcommand(super::place::line::command(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
@@ -169,6 +170,19 @@ fn tally(words: &Words) -> Command {
         .arg(path_option("keep", "value-folder", "help-keep", words))
         .arg(path_option("out", "value-file", "help-out", words))
         .args(common(words))
+}
+
+fn bundle(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("bundle", "help-usage-bundle", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(path_option("lesson", "value-lesson", "help-bundle-lesson", words).action(ArgAction::Append))
+        .arg(path_option("board", "value-file", "help-bundle-board", words))
+        .arg(path_option("out", "value-file", "help-bundle-out", words))
+        .arg(path_option("open", "value-file", "help-bundle-open", words))
+        .arg(path_option("into", "value-folder", "help-bundle-into", words))
+        .args(common(words))
+        .after_help(words.say("help-bundle-more", &[]))
 }
 
 /// A subcommand with our headings in place of the parser's English ones.

@@ -26,6 +26,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en":
         "board-problems.ftl",
         "board.ftl",
+        "bundle.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",
@@ -65,6 +66,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
     "es":
         "board-problems.ftl",
         "board.ftl",
+        "bundle.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",

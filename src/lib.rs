@@ -11,6 +11,8 @@ pub mod water;
 #[cfg(feature = "std")]
 pub mod board;
 #[cfg(feature = "std")]
+pub mod bundle;
+#[cfg(feature = "std")]
 pub mod commands;
 #[cfg(feature = "std")]
 pub mod fit;

@@ -14,7 +14,7 @@ use std::path::{Path, PathBuf};
 /// * `picture` draws values: plain data of the water and the signs, never what runs them.
 /// * `session` is the instrument as a state; `board` is the world outside and knows pixels and events, not
 ///   water: of a place it has the reader of files, of the water the names of the dials.
-const MAY_NAME: [(&str, &[&str]); 14] = [
+const MAY_NAME: [(&str, &[&str]); 15] = [
     ("water", &[]),
     ("signs", &["water"]),
     ("place", &["water", "signs", "words::nearest"]),
@@ -45,6 +45,7 @@ const MAY_NAME: [(&str, &[&str]); 14] = [
     ("open_data", &[]),
     ("handout", &["picture", "words", "signs", "water"]),
     ("keep", &["water::dials", "session"]),
+    ("bundle", &["keep"]),
 ];
 const ROOTS: [&str; 3] = ["commands", "lib", "main"];
 

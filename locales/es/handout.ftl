@@ -52,7 +52,7 @@ handout-out-unknown = El nombre «{ $path }» no dice qué escribir. Debe termin
 
 ## Línea de órdenes
 
-help-handout = Para hacer una hoja que llevar a casa, o la hoja de trabajo de una lección.
+help-handout = Hace una hoja para llevar a casa, o la hoja de trabajo de una lección.
 help-usage-handout = [LUGAR] [OPCIONES]
 help-handout-lesson = Escribir la hoja de esta lección: un archivo o una de las incluidas
 help-handout-sheet = Cuál hoja de la lección: work (trabajo), key (respuestas)
@@ -63,7 +63,7 @@ value-lesson = LECCIÓN
 value-sheet = HOJA
 value-paper = PAPEL
 
-help-data = Para guardar los días y los años de una corrida como datos abiertos.
+help-data = Guarda los días y los años de una corrida como datos abiertos.
 help-usage-data = [LUGAR] [OPCIONES]
 help-data-form = Qué escribir: csv (cuatro tablas; una dice qué es cada columna), netcdf (un archivo con los días, CF-1.11)
 help-data-out = Con netcdf: el archivo [lo usual: deshielo-data.nc]

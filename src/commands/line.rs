@@ -19,26 +19,27 @@ pub(super) fn command(words: &Words) -> Command {
         say("help-options"),
         say("help-more"),
     );
-    let command = plain(Command::new("deshielo"), words);
-    #[cfg(feature = "pdf")]
-    let command = command.subcommand(handout(words));
-    command
+    let command = plain(Command::new("deshielo"), words)
         .version(env!("CARGO_PKG_VERSION"))
         .about(say("help-about"))
         .help_template(template)
         .disable_help_subcommand(true)
         .subcommand(show(words))
         .subcommand(tell(words))
-        .subcommand(check(words))
         .subcommand(map(words))
-        .subcommand(rehearse(words))
+        .subcommand(super::place::line::command(words))
+        .subcommand(check(words))
+        .subcommand(fit(words))
+        .subcommand(trust(words))
+        .subcommand(rehearse(words));
+    #[cfg(feature = "pdf")]
+    let command = command.subcommand(handout(words));
+    command
         .subcommand(data(words))
         .subcommand(weather(words))
         .subcommand(tally(words))
         .subcommand(wiring(words))
-        .subcommand(super::place::line::command(words))
-        .subcommand(fit(words))
-        .subcommand(trust(words))
+        .subcommand(bundle(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
 }
@@ -225,6 +226,19 @@ fn wiring(words: &Words) -> Command {
         .arg(path_option("into", "value-folder", "help-show-into", words))
         .args(common(words))
         .after_help(words.say("help-wiring-more", &[]))
+}
+
+fn bundle(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("bundle", "help-usage-bundle", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(path_option("lesson", "value-lesson", "help-bundle-lesson", words).action(ArgAction::Append))
+        .arg(path_option("board", "value-file", "help-bundle-board", words))
+        .arg(path_option("out", "value-file", "help-bundle-out", words))
+        .arg(path_option("open", "value-file", "help-bundle-open", words))
+        .arg(path_option("into", "value-folder", "help-bundle-into", words))
+        .args(common(words))
+        .after_help(words.say("help-bundle-more", &[]))
 }
 
 /// A subcommand with our headings in place of the parser's English ones.

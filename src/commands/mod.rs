@@ -4,6 +4,7 @@
 //! at all. Exit codes: 0 well, 1 the input is wrong, 2 usage.
 
 mod built_in;
+mod bundle;
 mod check;
 mod data;
 mod failure;
@@ -58,6 +59,11 @@ pub fn run(arguments: impl Iterator<Item = OsString>) -> ExitCode {
     }
 }
 
+/// The whole command line in a language, for pages about it: manuals and what a shell completes.
+pub fn command_line(language: &str) -> clap::Command {
+    line::command(&crate::words::Words::new(language).0)
+}
+
 fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
     let command = line::command(&speech.words);
     let matches = match command.clone().try_get_matches_from(&arguments) {
@@ -74,6 +80,7 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("weather", matches)) => weather::run(speech, matches),
         Some(("wiring", matches)) => wiring::run(speech, matches),
         Some(("tally", matches)) => tally::run(speech, matches),
+        Some(("bundle", matches)) => bundle::run(speech, matches),
         Some(("place", matches)) => place::run(speech, matches),
         #[cfg(feature = "pdf")]
         Some(("handout", matches)) => handout::run(speech, matches),

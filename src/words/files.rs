@@ -26,6 +26,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
     "en":
         "board-problems.ftl",
         "board.ftl",
+        "bundle.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",
@@ -68,6 +69,7 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
     "es":
         "board-problems.ftl",
         "board.ftl",
+        "bundle.ftl",
         "cautions.ftl",
         "columns.ftl",
         "command.ftl",

@@ -17,7 +17,7 @@ use crate::place::{DialPlan, Outcome, read, read_setting};
 use crate::words::{KNOWN_TAGS, Words};
 
 /// A path with everything that was found in it.
-pub(super) struct Checked {
+pub(in crate::commands) struct Checked {
     /// The path as it was asked for.
     pub path: String,
     /// Problems in the order of files and lines.
@@ -29,7 +29,7 @@ pub(super) struct Checked {
 }
 
 /// Checks a place, a setting, a lesson or a board file, on the disk or built in. A lesson is tried on the place `on`, else on the demo.
-pub(super) fn check_one(path: &Path, on: Option<&Path>, speech: &Speech) -> Checked {
+pub(in crate::commands) fn check_one(path: &Path, on: Option<&Path>, speech: &Speech) -> Checked {
     let shown = path.display().to_string();
     let name = path.to_str().unwrap_or_default();
     let is_toml = path.extension() == Some(OsStr::new("toml"));

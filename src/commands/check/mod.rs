@@ -15,7 +15,8 @@ use super::failure::Failure;
 use super::output::deliver;
 use super::speech::Speech;
 use super::usage::mistake;
-use found::{Checked, check_one, is_place};
+use found::is_place;
+pub(super) use found::{Checked, check_one};
 
 /// How `check` answers.
 #[derive(Clone, Copy, PartialEq, Eq)]

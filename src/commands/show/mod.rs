@@ -1,8 +1,8 @@
 //! `show`: the running instrument on whatever screens are at hand, or as pictures in a folder.
 
 mod board;
-mod doubt;
 mod board_hands;
+mod doubt;
 mod drawing;
 mod droughts;
 mod hands;

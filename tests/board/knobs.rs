@@ -187,7 +187,7 @@ fn told(knob: &mut Potentiometer, from_ms: u64, shares: &[f64]) -> Vec<f64> {
 #[test]
 fn a_knob_says_nothing_until_it_is_moved_and_reaches_both_ends() {
     let mut knob = Potentiometer::new(knob_of(false));
-    assert_eq!(told(&mut knob, 0, &[0.7; 20]), []);
+    assert_eq!(told(&mut knob, 0, &[0.7; 20]), Vec::<f64>::new());
     let up: Vec<f64> = (0..60).map(|step| 0.7 + f64::from(step) * 0.005).collect();
     let moved = told(&mut knob, 1_000, &up);
     assert!(moved.windows(2).all(|pair| pair[0] < pair[1]) && moved.len() > 10, "{moved:?}");
@@ -200,13 +200,13 @@ fn a_knob_says_nothing_until_it_is_moved_and_reaches_both_ends() {
     let middle = knob.turn_share(0.5);
     assert!((middle - 0.5).abs() < 1e-12);
     assert_eq!(Potentiometer::new(knob_of(true)).turn_share(0.01), 1.0);
-    assert_eq!(told(&mut knob, 9_000, &[f64::NAN, f64::INFINITY]), []);
+    assert_eq!(told(&mut knob, 9_000, &[f64::NAN, f64::INFINITY]), Vec::<f64>::new());
 }
 
 #[test]
 fn a_speck_of_dust_is_no_turn_and_a_loose_wire_turns_nothing() {
     let mut knob = Potentiometer::new(knob_of(false));
-    assert_eq!(told(&mut knob, 0, &[0.4, 0.4, 0.4, 1.0, 0.4, 0.4, 0.0, 0.4, 0.4]), []);
+    assert_eq!(told(&mut knob, 0, &[0.4, 0.4, 0.4, 1.0, 0.4, 0.4, 0.0, 0.4, 0.4]), Vec::<f64>::new());
     // A wiper in the air.
     let mut knob = Potentiometer::new(knob_of(false));
     let (mut loose, mut moved_after) = (Vec::new(), 0);

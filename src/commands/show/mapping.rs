@@ -215,7 +215,7 @@ mod tests {
     fn player() -> Player {
         let place = read(PlaceSource::Embedded(demo_files())).place.unwrap();
         let speech = Speech::choose(&["--lang".into(), "en-US".into()]);
-        Player::new(place, &speech, Shade::Light, None).ok().unwrap()
+        Player::new(crate::commands::places::Opened { place, fit: None }, &speech, Shade::Light, None).ok().unwrap()
     }
 
     fn cells(player: &Player) -> Vec<Cell> {

@@ -173,6 +173,11 @@ fn knobs_while_there(part: &InputDevicePart, device: &mut RawDevice, teller: &Te
             is_mouse: has_axis(RelativeAxisCode::REL_X) && has_axis(RelativeAxisCode::REL_Y),
             places: place.map(|(_, least, most)| (least, most)),
         };
+        if !abilities.is_keyboard {
+            // A button is often the power key to the kernel: a press must not put the board to sleep. Where the device cannot
+            // be had alone, it is shared. Keyboards stay shared, so that whoever sits at one can end the program.
+            let _ = device.grab();
+        }
         let mut decoder = InputDecoder::new(part, abilities, place.map(|(at, ..)| at), &keys_down(device));
         let (began, mut out, mut is_stuck) = (Instant::now(), Vec::new(), false);
         loop {

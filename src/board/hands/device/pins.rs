@@ -185,7 +185,7 @@ fn encoder_while_there(part: &EncoderPart, gpio_chip: &str, teller: &Teller) -> 
             let closed = lines.is_closed(pin);
             let told = if edge.is_some() { button.edge(at, closed) } else { button.time(at) };
             if let Some(told) = told {
-                teller.try_tell(1, What::Reads(Reading::Contact(told == ButtonTold::Down)))?;
+                teller.try_tell(1, What::Reads(Reading::Contact(closed)))?;
                 tell_health(1, told, teller)?;
                 if let ButtonTold::Up(held) = told {
                     teller.try_tell(1, What::Did(press(held)))?;

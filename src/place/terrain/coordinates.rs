@@ -106,7 +106,7 @@ impl Geometry {
 }
 
 /// Area between the equator and a latitude, for one radian of longitude, on the ellipsoid (the authalic integral: Snyder
-/// 1987, *Map Projections: A Working Manual*, USGS Professional Paper 1395, equation 3-12; from memory).
+/// 1987, *Map Projections: A Working Manual*, Professional Paper 1395, equation 3-12; from memory).
 fn below_km2(latitude_deg: f64) -> f64 {
     let eccentricity_2 = FLATTENING * (2.0 - FLATTENING);
     let eccentricity = sqrt(eccentricity_2);

@@ -8,10 +8,10 @@ use std::process::{Command, Output};
 const README: &str = include_str!("../../README.md");
 
 /// Flags that only spare time: a search as long as the usual one would take minutes in a test.
-const SHORTER: [(&str, &[&str]); 2] = [
-    ("fit", &["--starts", "1", "--runs", "40", "--sets", "20"]),
+const SHORTER: [(&str, &[(&str, &str)]); 2] = [
+    ("fit", &[("--starts", "1"), ("--runs", "40"), ("--sets", "20")]),
     // A window cannot be closed by a test; the same frames go to pictures.
-    ("show", &["--screen", "pictures", "--into", "shown", "--size", "320x240"]),
+    ("show", &[("--screen", "pictures"), ("--into", "shown"), ("--size", "320x240")]),
 ];
 
 /// The lines of README.md that can be run as they stand, by chapter.
@@ -39,7 +39,8 @@ fn run(folder: &Path, words: &[String]) -> Output {
     let mut command = Command::new(env!("CARGO_BIN_EXE_deshielo"));
     command.current_dir(folder).env("LANG", "en_US.UTF-8").args(words);
     if let Some((_, more)) = SHORTER.iter().find(|(name, _)| words.first().is_some_and(|word| word == name)) {
-        command.args(more.iter().filter(|more| !words.iter().any(|word| word == *more)));
+        let more = more.iter().filter(|(flag, _)| !words.iter().any(|word| word == flag));
+        command.args(more.flat_map(|(flag, value)| [flag, value]));
     }
     command.output().unwrap()
 }

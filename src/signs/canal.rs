@@ -78,6 +78,11 @@ impl CanalReader {
         }
     }
 
+    /// Forgets what was read.
+    pub(super) fn start_over(&mut self) {
+        *self = Self::new(self.gate, !self.asks_again);
+    }
+
     pub(super) fn day(&mut self, evening: &Evening, account_m3: f64) {
         let (demand_m3, delivered_m3) = (evening.demand_m3[self.gate], evening.river.canal_m3[self.gate]);
         self.stored_m3 += evening.river.stored_take_m3[self.gate];
@@ -136,8 +141,13 @@ impl CanalReader {
         }
     }
 
-    pub(super) fn close(mut self) -> CanalSigns {
-        self.judge_round();
+    pub(super) fn close(&self) -> CanalSigns {
+        let mut whole = *self;
+        whole.judge_round();
+        whole.signs()
+    }
+
+    fn signs(&self) -> CanalSigns {
         let ratio = (self.demand_m3 > 0.0).then(|| self.delivered_m3 / self.demand_m3);
         CanalSigns {
             demand_hm3: self.demand_m3 / M3_PER_HM3,

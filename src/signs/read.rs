@@ -41,14 +41,13 @@ pub fn read_run(
         |evening, stores| {
             let mut reader = reader.borrow_mut();
             if evening.today.day_of_water_year == 1 {
-                *reader = YearReader::new(valley);
+                reader.start_over();
             }
             reader.day(evening, stores);
             each_day(evening, stores);
         },
         |year, ledger| {
-            let finished = reader.replace(YearReader::new(valley));
-            each_year(YearReport { year, signs: finished.close(), ledger: *ledger });
+            each_year(YearReport { year, signs: reader.borrow().close(), ledger: *ledger });
         },
     );
 }

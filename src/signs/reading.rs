@@ -155,6 +155,11 @@ impl Reading {
         matches!(self, Reading::Year(Sign::SupplyRatio) | Reading::Canal { sign: CanalSign::SupplyRatio, .. })
     }
 
+    /// Whether it is read off canals alone, so that snow, river and fields need not be.
+    pub const fn is_of_supply(self) -> bool {
+        matches!(self, Reading::Year(Sign::SupplyRatio) | Reading::Canal { .. } | Reading::Supply { .. })
+    }
+
     /// Which way people want it to go; `None` where that is not for the water to say.
     pub const fn better(self) -> Option<Better> {
         match self {

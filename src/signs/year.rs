@@ -65,7 +65,24 @@ pub struct YearReader {
     spring_months: (u8, u8),
     has_reservoir: bool,
     has_fields: bool,
-    signs: YearSigns,
+    flow_m3: Vec<f64, 366>,
+    half_passed: Vec<CalendarDay, 366>,
+    canals: Vec<CanalReader, MOST_GATES>,
+    so_far: SoFar,
+}
+
+/// What is carried from evening to evening, beside flows and canals.
+#[derive(Clone, Debug, Default)]
+struct SoFar {
+    water_year: i32,
+    days: u16,
+    precipitation_mm: f64,
+    survey_swe_mm: Option<f64>,
+    peak_swe_mm: f64,
+    peak_swe_date: Option<CalendarDay>,
+    melt_out_date: Option<CalendarDay>,
+    peak_flow_date: Option<CalendarDay>,
+    fill_date: Option<CalendarDay>,
     snowfall_mm: f64,
     /// Snow water on the day that the peak is dated to, mm.
     dated_peak_mm: f64,
@@ -73,8 +90,6 @@ pub struct YearReader {
     white_until: Option<CalendarDay>,
     bare_run: u16,
     melted_out: bool,
-    flow_m3: Vec<f64, 366>,
-    half_passed: Vec<CalendarDay, 366>,
     moment: f64,
     peak_flow_m3: f64,
     lowest_week_m3: Option<f64>,
@@ -87,7 +102,6 @@ pub struct YearReader {
     yield_ha: f64,
     minimum_asked: bool,
     minimum_days: u16,
-    canals: Vec<CanalReader, MOST_GATES>,
 }
 
 impl YearReader {
@@ -98,132 +112,145 @@ impl YearReader {
             spring_months: valley.spring_months,
             has_reservoir: valley.reservoir.is_some(),
             has_fields: valley.gates.iter().any(|gate| !gate.is_town()),
-            signs: YearSigns::default(),
-            snowfall_mm: 0.0,
-            dated_peak_mm: 0.0,
-            peak_seen: false,
-            white_until: None,
-            bare_run: 0,
-            melted_out: false,
             flow_m3: Vec::new(),
             half_passed: Vec::new(),
-            moment: 0.0,
-            peak_flow_m3: 0.0,
-            lowest_week_m3: None,
-            spring_m3: 0.0,
-            content_m3: 0.0,
-            spill_m3: 0.0,
-            flood_release_m3: 0.0,
-            crop_evaporation_m3: 0.0,
-            harvested_ha: 0.0,
-            yield_ha: 0.0,
-            minimum_asked: false,
-            minimum_days: 0,
             canals: valley.gates.iter().enumerate().map(|(at, gate)| CanalReader::new(at, gate.is_town())).collect(),
+            so_far: SoFar::default(),
         }
+    }
+
+    /// Forgets what was read, for another year of the same valley.
+    pub fn start_over(&mut self) {
+        self.flow_m3.clear();
+        self.half_passed.clear();
+        self.canals.iter_mut().for_each(CanalReader::start_over);
+        self.so_far = SoFar::default();
     }
 
     /// Reads an evening.
     pub fn day(&mut self, evening: &Evening, stores: &WorksStores) {
-        let today = evening.today;
-        self.signs.water_year = today.water_year;
-        self.signs.days += 1;
         self.read_snow(evening);
         self.read_flow(evening);
+        self.read_works(evening);
+        self.supply_day(evening, stores);
+    }
 
-        self.spill_m3 += evening.spill_m3;
-        self.flood_release_m3 += evening.river.flood_release_m3;
+    /// Reads of an evening only what the canals asked for and got; the signs of snow, river and fields then say nothing.
+    pub fn supply_day(&mut self, evening: &Evening, stores: &WorksStores) {
+        self.so_far.water_year = evening.today.water_year;
+        self.so_far.days += 1;
+        for (canal, account_m3) in self.canals.iter_mut().zip(&stores.river.account_m3) {
+            canal.day(evening, *account_m3);
+        }
+    }
+
+    fn read_works(&mut self, evening: &Evening) {
+        let so_far = &mut self.so_far;
+        so_far.spill_m3 += evening.spill_m3;
+        so_far.flood_release_m3 += evening.river.flood_release_m3;
         if self.has_reservoir {
             let full_m3 = FULL_SHARE * evening.active_m3;
-            if self.signs.fill_date.is_none() && evening.content_m3 >= full_m3 {
-                self.signs.fill_date = Some(today);
+            if so_far.fill_date.is_none() && evening.content_m3 >= full_m3 {
+                so_far.fill_date = Some(evening.today);
             }
-            self.content_m3 = evening.content_m3;
+            so_far.content_m3 = evening.content_m3;
         }
         for fields in &evening.fields[..evening.gates] {
-            self.crop_evaporation_m3 += fields.crop_evaporation_m3;
-            self.harvested_ha += fields.harvested_ha;
-            self.yield_ha += fields.yield_ha;
+            so_far.crop_evaporation_m3 += fields.crop_evaporation_m3;
+            so_far.harvested_ha += fields.harvested_ha;
+            so_far.yield_ha += fields.yield_ha;
         }
         if evening.minimum_m3 > 0.0 {
-            self.minimum_asked = true;
-            self.minimum_days += u16::from(evening.river.minimum_met);
-        }
-        for (gate, canal) in self.canals.iter_mut().enumerate() {
-            canal.day(evening, stores.river.account_m3[gate]);
+            so_far.minimum_asked = true;
+            so_far.minimum_days += u16::from(evening.river.minimum_met);
         }
     }
 
     fn read_snow(&mut self, evening: &Evening) {
+        let so_far = &mut self.so_far;
         let (today, swe_mm) = (evening.today, evening.basin.snow_water_mm);
-        self.signs.precipitation_mm += evening.basin.precipitation_mm;
-        self.snowfall_mm += evening.basin.snowfall_mm;
+        so_far.precipitation_mm += evening.basin.precipitation_mm;
+        so_far.snowfall_mm += evening.basin.snowfall_mm;
         if today.month_day == self.survey {
-            self.signs.survey_swe_mm = Some(swe_mm);
+            so_far.survey_swe_mm = Some(swe_mm);
         }
-        if swe_mm > self.signs.peak_swe_mm {
-            self.signs.peak_swe_mm = swe_mm;
+        if swe_mm > so_far.peak_swe_mm {
+            so_far.peak_swe_mm = swe_mm;
         }
-        if swe_mm > self.dated_peak_mm * (1.0 + ROUNDING_SHARE) {
+        if swe_mm > so_far.dated_peak_mm * (1.0 + ROUNDING_SHARE) {
             // A new peak: whatever melted out before it was not the year's melt.
-            self.dated_peak_mm = swe_mm;
-            self.signs.peak_swe_date = Some(today);
-            self.peak_seen = swe_mm > WHITE_MM;
-            self.melted_out = false;
-            self.signs.melt_out_date = None;
+            so_far.dated_peak_mm = swe_mm;
+            so_far.peak_swe_date = Some(today);
+            so_far.peak_seen = swe_mm > WHITE_MM;
+            so_far.melted_out = false;
+            so_far.melt_out_date = None;
         }
-        if !self.peak_seen || self.melted_out {
+        if !so_far.peak_seen || so_far.melted_out {
             return;
         }
         if swe_mm > WHITE_MM {
-            self.white_until = Some(today);
-            self.bare_run = 0;
+            so_far.white_until = Some(today);
+            so_far.bare_run = 0;
         } else {
-            self.bare_run += 1;
-            if self.bare_run == BARE_DAYS {
-                self.signs.melt_out_date = self.white_until;
-                self.melted_out = true;
+            so_far.bare_run += 1;
+            if so_far.bare_run == BARE_DAYS {
+                so_far.melt_out_date = so_far.white_until;
+                so_far.melted_out = true;
             }
         }
     }
 
     fn read_flow(&mut self, evening: &Evening) {
+        let so_far = &mut self.so_far;
         let (today, flow_m3) = (evening.today, evening.basin.inflow_m3);
-        if flow_m3 > self.peak_flow_m3 {
-            self.peak_flow_m3 = flow_m3;
-            self.signs.peak_flow_date = Some(today);
+        if flow_m3 > so_far.peak_flow_m3 {
+            so_far.peak_flow_m3 = flow_m3;
+            so_far.peak_flow_date = Some(today);
         }
         let (from, to) = self.spring_months;
         let month = today.month_day.month;
         let in_spring = if from <= to { (from..=to).contains(&month) } else { month >= from || month <= to };
         if in_spring {
-            self.spring_m3 += flow_m3;
+            so_far.spring_m3 += flow_m3;
         }
-        self.moment += f64::from(today.day_of_water_year) * flow_m3;
+        so_far.moment += f64::from(today.day_of_water_year) * flow_m3;
         // A water year has at most 366 days, so there is always room.
         let _ = self.flow_m3.push(flow_m3);
         let _ = self.half_passed.push(today);
         if self.flow_m3.len() >= LOW_FLOW_DAYS {
             let week_m3: f64 = self.flow_m3[self.flow_m3.len() - LOW_FLOW_DAYS..].iter().sum();
-            if self.lowest_week_m3.is_none_or(|lowest_m3| week_m3 < lowest_m3) {
-                self.lowest_week_m3 = Some(week_m3);
+            if so_far.lowest_week_m3.is_none_or(|lowest_m3| week_m3 < lowest_m3) {
+                so_far.lowest_week_m3 = Some(week_m3);
             }
         }
     }
 
     /// The year's signs.
-    pub fn close(self) -> YearSigns {
-        let mut signs = self.signs;
+    pub fn close(&self) -> YearSigns {
+        let so_far = &self.so_far;
+        let mut signs = YearSigns {
+            water_year: so_far.water_year,
+            days: so_far.days,
+            precipitation_mm: so_far.precipitation_mm,
+            survey_swe_mm: so_far.survey_swe_mm,
+            peak_swe_mm: so_far.peak_swe_mm,
+            peak_swe_date: so_far.peak_swe_date,
+            melt_out_date: so_far.melt_out_date,
+            peak_flow_date: so_far.peak_flow_date,
+            fill_date: so_far.fill_date,
+            ..YearSigns::default()
+        };
         if signs.precipitation_mm > 0.0 {
-            signs.snow_share = Some(self.snowfall_mm / signs.precipitation_mm);
+            signs.snow_share = Some(so_far.snowfall_mm / signs.precipitation_mm);
         }
         let total_m3: f64 = self.flow_m3.iter().sum();
         signs.natural_flow_hm3 = total_m3 / M3_PER_HM3;
-        signs.spring_volume_hm3 = self.spring_m3 / M3_PER_HM3;
-        signs.peak_flow_m3s = self.peak_flow_m3 / SECONDS_PER_DAY;
-        signs.low_flow_7day_m3s = self.lowest_week_m3.map(|week_m3| week_m3 / (LOW_FLOW_DAYS as f64 * SECONDS_PER_DAY));
+        signs.spring_volume_hm3 = so_far.spring_m3 / M3_PER_HM3;
+        signs.peak_flow_m3s = so_far.peak_flow_m3 / SECONDS_PER_DAY;
+        signs.low_flow_7day_m3s =
+            so_far.lowest_week_m3.map(|week_m3| week_m3 / (LOW_FLOW_DAYS as f64 * SECONDS_PER_DAY));
         if total_m3 > 0.0 {
-            signs.centre_of_volume_day = Some(self.moment / total_m3);
+            signs.centre_of_volume_day = Some(so_far.moment / total_m3);
             let mut passed_m3 = 0.0;
             let half = self.flow_m3.iter().position(|flow_m3| {
                 passed_m3 += flow_m3;
@@ -232,20 +259,20 @@ impl YearReader {
             signs.half_volume_date = half.and_then(|day| self.half_passed.get(day).copied());
         }
         if self.has_reservoir {
-            signs.carryover_hm3 = Some(self.content_m3 / M3_PER_HM3);
-            signs.spill_hm3 = Some(self.spill_m3 / M3_PER_HM3);
-            signs.flood_release_hm3 = Some(self.flood_release_m3 / M3_PER_HM3);
+            signs.carryover_hm3 = Some(so_far.content_m3 / M3_PER_HM3);
+            signs.spill_hm3 = Some(so_far.spill_m3 / M3_PER_HM3);
+            signs.flood_release_hm3 = Some(so_far.flood_release_m3 / M3_PER_HM3);
         }
         if self.has_fields {
-            signs.crop_evaporation_hm3 = Some(self.crop_evaporation_m3 / M3_PER_HM3);
+            signs.crop_evaporation_hm3 = Some(so_far.crop_evaporation_m3 / M3_PER_HM3);
         }
-        if self.harvested_ha > 0.0 {
-            signs.yield_share = Some(self.yield_ha / self.harvested_ha);
+        if so_far.harvested_ha > 0.0 {
+            signs.yield_share = Some(so_far.yield_ha / so_far.harvested_ha);
         }
-        if self.minimum_asked {
-            signs.river_minimum_days_met = Some(self.minimum_days);
+        if so_far.minimum_asked {
+            signs.river_minimum_days_met = Some(so_far.minimum_days);
         }
-        signs.canals = self.canals.into_iter().map(CanalReader::close).collect();
+        signs.canals = self.canals.iter().map(CanalReader::close).collect();
         let demand_hm3: f64 = signs.canals.iter().map(|canal| canal.demand_hm3).sum();
         let delivered_hm3: f64 = signs.canals.iter().map(|canal| canal.delivered_hm3).sum();
         signs.supply_ratio = (demand_hm3 > 0.0).then(|| delivered_hm3 / demand_hm3);

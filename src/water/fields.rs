@@ -7,7 +7,7 @@
 use heapless::Vec;
 
 use super::calendar::MonthDay;
-use super::crop::{CropTraits, readily_available_mm, root_zone_day, yield_share};
+use super::crop::{CoefficientCurve, CropTraits, Stage, readily_available_mm, root_zone_day, yield_share};
 use super::lanes::{Lanes, Number};
 use super::units::M3_PER_MM_HECTARE;
 use super::valley::{CropOnField, Field, MOST_FIELDS};
@@ -21,11 +21,16 @@ type PlotLanes = Lanes<MOST_PLOTS>;
 /// No rank of any date.
 const NEVER: u16 = u16::MAX;
 
+/// Days until stages are looked up again where no crop grows; any number would do.
+const MOST_QUIET_DAYS: u32 = 10_000;
+
 /// A plot: a field, or the part of one that grows something else.
 #[derive(Clone, Copy, Debug, PartialEq)]
 struct Plot {
     area_ha: f64,
     traits: CropTraits,
+    /// The traits' coefficients by day of the season.
+    coefficients: CoefficientCurve,
     planting: MonthDay,
 }
 
@@ -37,10 +42,17 @@ pub struct PlotStores {
     /// Crop evaporation since planting, and what it would have been without stress, mm.
     season_actual_mm: PlotLanes,
     season_full_mm: PlotLanes,
-    /// Day of each crop's season, 0 out of season.
+    /// Day of each crop's season when the stages were last looked up, 0 out of season.
     day_of_season: [u32; MOST_PLOTS],
-    /// Whether any of them is above 0.
+    /// Where each crop stood on its coefficient curve then, and whether it was in season: 1, else 0.
+    stage: Stage<PlotLanes>,
+    in_season: PlotLanes,
+    /// Days since then, and days from today on which no crop enters another stage.
+    elapsed_days: u32,
+    quiet_days: u32,
+    /// Whether any crop is in season, and whether a season ends today.
     any_in_season: bool,
+    ends: bool,
 }
 
 /// What the plots of a canal did in a day. Volumes in m³, areas in ha.
@@ -78,10 +90,10 @@ pub struct Plots {
     area_ha: f64,
     /// Length of each crop's season, days; 0 where there is none.
     season_days: [u32; MOST_PLOTS],
-    /// Days of each season with a day after them.
-    days_but_last: [u32; MOST_PLOTS],
     /// [`MonthDay::rank`] of each crop's planting, or [`NEVER`].
     planting: [u16; MOST_PLOTS],
+    /// A bit for every month in which something is planted: in most there is nothing to look for.
+    planting_months: u16,
     off_season_coefficient: PlotLanes,
     m3_per_mm: PlotLanes,
     mm_per_m3: PlotLanes,
@@ -103,8 +115,8 @@ impl Plots {
             plots: Vec::new(),
             area_ha: 0.0,
             season_days: [0; MOST_PLOTS],
-            days_but_last: [0; MOST_PLOTS],
             planting: [NEVER; MOST_PLOTS],
+            planting_months: 0,
             off_season_coefficient: none,
             m3_per_mm: none,
             mm_per_m3: none,
@@ -131,7 +143,8 @@ impl Plots {
     /// A field has two plots at most, so there is always room.
     fn push(&mut self, field: &Field, crop: &CropOnField, area_ha: f64) {
         let lane = self.plots.len();
-        let plot = Plot { area_ha, traits: crop.traits, planting: crop.planting };
+        let coefficients = CoefficientCurve::new(&crop.traits);
+        let plot = Plot { area_ha, traits: crop.traits, coefficients, planting: crop.planting };
         if self.plots.push(plot).is_err() {
             return;
         }
@@ -139,9 +152,9 @@ impl Plots {
         let m3_per_mm = area_ha * M3_PER_MM_HECTARE;
         self.area_ha += area_ha;
         self.season_days[lane] = crop.traits.season_days();
-        self.days_but_last[lane] = self.season_days[lane].saturating_sub(1);
         if self.season_days[lane] > 0 {
             self.planting[lane] = crop.planting.rank();
+            self.planting_months |= 1 << (crop.planting.month % 16);
         }
         self.off_season_coefficient.0[lane] = crop.off_season_coefficient;
         self.m3_per_mm.0[lane] = m3_per_mm;
@@ -160,6 +173,7 @@ impl Plots {
     pub fn start(&self, soil_share: f64, today: MonthDay) -> PlotStores {
         let mut stores = PlotStores {
             depletion_mm: Lanes::splat(1.0 - soil_share) * self.total_available_mm,
+            stage: Stage::flat(PlotLanes::default()),
             ..PlotStores::default()
         };
         let seasons = self.season_days.iter().zip(&mut stores.day_of_season);
@@ -167,7 +181,6 @@ impl Plots {
             let since = i32::from(today.leap_day_of_year()) - i32::from(plot.planting.leap_day_of_year());
             let since = since.rem_euclid(366) as u32;
             *day_of_season = if since < *season_days { since } else { 0 };
-            stores.any_in_season |= *day_of_season > 0;
         }
         stores
     }
@@ -184,39 +197,70 @@ impl Plots {
         self.plots.len().div_ceil(2).min(PlotLanes::PAIRS)
     }
 
-    /// Whether any crop may be in season on the day about to pass. Most of the year none is, and much can be left out.
+    /// Lets the seasons move on to `today`: to be called every morning. Most mornings no crop enters another stage, and
+    /// there is nothing to look up.
     #[inline(always)]
-    fn any_in_season(&self, stores: &PlotStores, today: u16) -> bool {
-        stores.any_in_season || self.planting.contains(&today)
+    pub fn morning(&self, stores: &mut PlotStores, today: MonthDay) {
+        let planting = (self.planting_months >> (today.month % 16)) & 1 != 0 && self.planting.contains(&today.rank());
+        if stores.quiet_days > 0 && !planting {
+            stores.quiet_days -= 1;
+            stores.elapsed_days += 1;
+        } else {
+            self.look_up_stages(stores, today.rank());
+        }
     }
 
-    /// Whether each plot of a pair is in season on the day about to pass: 1, else 0.
-    #[inline(always)]
-    fn in_season(&self, stores: &PlotStores, today: u16, pair: usize) -> Lanes<2> {
-        let of_plot = |index: usize| {
-            // From 1 on, since 0 is no season and wraps far beyond any.
-            let grows = stores.day_of_season[index].wrapping_sub(1) < self.days_but_last[index];
-            f64::from(u8::from(grows | (self.planting[index] == today)))
-        };
-        Lanes([of_plot(2 * pair), of_plot(2 * pair + 1)])
+    #[inline(never)]
+    fn look_up_stages(&self, stores: &mut PlotStores, today: u16) {
+        let (mut any_in_season, mut ends, mut quiet_days) = (false, false, MOST_QUIET_DAYS);
+        for (index, plot) in self.plots.iter().enumerate() {
+            let grown = if stores.in_season.0[index] > 0.0 { stores.elapsed_days } else { 0 };
+            let mut day = stores.day_of_season[index] + grown;
+            if self.planting[index] == today {
+                day = 1;
+                stores.season_actual_mm.0[index] = 0.0;
+                stores.season_full_mm.0[index] = 0.0;
+            } else if day > 0 && day < self.season_days[index] {
+                day += 1;
+            } else {
+                day = 0;
+            }
+            let (stage, days_left) = if day > 0 {
+                any_in_season = true;
+                ends |= day == self.season_days[index];
+                // The last day of a season is a stage of its own, since it brings the harvest.
+                let (stage, last_day) = plot.coefficients.stage_on(day);
+                (stage, last_day.min(self.season_days[index] - 1).saturating_sub(day))
+            } else {
+                (Stage::flat(self.off_season_coefficient.0[index]), MOST_QUIET_DAYS)
+            };
+            quiet_days = quiet_days.min(days_left);
+            stores.day_of_season[index] = day;
+            stores.in_season.0[index] = f64::from(u8::from(day > 0));
+            stores.stage.set_lane(index, stage);
+        }
+        stores.elapsed_days = 0;
+        stores.quiet_days = quiet_days;
+        stores.any_in_season = any_in_season;
+        stores.ends = ends;
     }
 
     /// What the plots of a pair ask for at their edges, m³.
     #[inline(always)]
-    fn asked_by_pair_m3(&self, stores: &PlotStores, in_season: Lanes<2>, pair: usize) -> Lanes<2> {
+    fn asked_by_pair_m3(&self, stores: &PlotStores, pair: usize) -> Lanes<2> {
         let missing_mm = (stores.depletion_mm.pair(pair) - self.refill_to_mm.pair(pair)).positive();
-        missing_mm.least(self.most_watering_mm.pair(pair)) * self.asked_m3_per_mm.pair(pair) * in_season
+        missing_mm.least(self.most_watering_mm.pair(pair))
+            * self.asked_m3_per_mm.pair(pair)
+            * stores.in_season.pair(pair)
     }
 
     /// What the plots ask for at their edges this morning, together, m³.
-    #[inline]
-    pub fn asked_m3(&self, stores: &PlotStores, today: MonthDay) -> f64 {
-        let today = today.rank();
+    #[inline(always)]
+    pub fn asked_m3(&self, stores: &PlotStores) -> f64 {
         let mut asked_m3 = Lanes::default();
-        if self.any_in_season(stores, today) {
+        if stores.any_in_season {
             for pair in 0..self.pairs() {
-                let in_season = self.in_season(stores, today, pair);
-                asked_m3 = asked_m3 + self.asked_by_pair_m3(stores, in_season, pair);
+                asked_m3 = asked_m3 + self.asked_by_pair_m3(stores, pair);
             }
         }
         sum(asked_m3)
@@ -224,23 +268,21 @@ impl Plots {
 
     /// One day into `out`: `delivered_m3` is shared among the plots as they asked (`asked_m3` in all), rain falls, the
     /// crops use water.
-    #[allow(clippy::too_many_arguments, reason = "the weather of a field is two numbers, its water two more")]
+    #[inline(always)]
     pub fn day(
         &self,
         stores: &mut PlotStores,
-        today: MonthDay,
         delivered_m3: f64,
         asked_m3: f64,
         rain_mm: f64,
         reference_evaporation_mm: f64,
         out: &mut FieldsDay,
     ) {
-        let today = today.rank();
         let rain_m3 = rain_mm * self.area_ha * M3_PER_MM_HECTARE;
         let rain_mm = Lanes::splat(rain_mm);
         let reference_evaporation_mm = Lanes::splat(reference_evaporation_mm);
         let mut water = Water::default();
-        if !self.any_in_season(stores, today) {
+        if !stores.any_in_season {
             for pair in 0..self.pairs() {
                 let full_mm = self.off_season_coefficient.pair(pair) * reference_evaporation_mm;
                 self.balance(stores, pair, full_mm, rain_mm, &mut water);
@@ -257,16 +299,13 @@ impl Plots {
         let mut crop = CropDay::default();
         let mut lost_m3 = Lanes::default();
         let met = Lanes::splat(if asked_m3 > 0.0 { delivered_m3 / asked_m3 } else { 0.0 });
-        stores.any_in_season = false;
+        let elapsed_days = Lanes::splat(f64::from(stores.elapsed_days));
         for pair in 0..self.pairs() {
-            let in_season = self.in_season(stores, today, pair);
-            let edge_m3 = self.asked_by_pair_m3(stores, in_season, pair) * met;
+            let in_season = stores.in_season.pair(pair);
+            let edge_m3 = self.asked_by_pair_m3(stores, pair) * met;
             let watering_m3 = edge_m3 * self.efficiency.pair(pair);
             lost_m3 = lost_m3 + (edge_m3 - watering_m3);
-            let coefficient = Lanes([
-                self.coefficient(stores, today, in_season.0[0], 2 * pair, &mut crop.ends),
-                self.coefficient(stores, today, in_season.0[1], 2 * pair + 1, &mut crop.ends),
-            ]);
+            let coefficient = stores.stage.pair(pair).coefficient(elapsed_days);
             let full_mm = coefficient * reference_evaporation_mm;
             let water_mm = rain_mm + watering_m3 * self.mm_per_m3.pair(pair);
             let actual_mm = self.balance(stores, pair, full_mm, water_mm, &mut water) * in_season;
@@ -276,7 +315,7 @@ impl Plots {
             crop.evaporation_m3 = crop.evaporation_m3 + actual_mm * self.m3_per_mm.pair(pair);
             crop.full_evaporation_m3 = crop.full_evaporation_m3 + full_mm * self.m3_per_mm.pair(pair);
         }
-        let (harvested_ha, yield_ha) = if crop.ends { self.harvest(stores) } else { (0.0, 0.0) };
+        let (harvested_ha, yield_ha) = if stores.ends { self.harvest(stores) } else { (0.0, 0.0) };
         *out = FieldsDay {
             rain_m3,
             evaporation_m3: sum(water.evaporation_m3),
@@ -312,29 +351,6 @@ impl Plots {
         zone.crop_evaporation_mm
     }
 
-    /// Lets the season of a plot move on a day, and gives the day's crop coefficient. `ends` is set where the season ends
-    /// today.
-    #[inline(always)]
-    fn coefficient(&self, stores: &mut PlotStores, today: u16, in_season: f64, index: usize, ends: &mut bool) -> f64 {
-        let day_of_season = &mut stores.day_of_season[index];
-        let plot = match self.plots.get(index) {
-            Some(plot) if in_season > 0.0 => plot,
-            _ => {
-                *day_of_season = 0;
-                return self.off_season_coefficient.0[index];
-            }
-        };
-        if self.planting[index] == today {
-            *day_of_season = 0;
-            stores.season_actual_mm.0[index] = 0.0;
-            stores.season_full_mm.0[index] = 0.0;
-        }
-        *day_of_season += 1;
-        stores.any_in_season = true;
-        *ends |= *day_of_season == self.season_days[index];
-        plot.traits.coefficient_on(*day_of_season)
-    }
-
     /// Area of the plots whose season ends today, ha, and the same weighted with each share of full yield.
     #[cold]
     fn harvest(&self, stores: &PlotStores) -> (f64, f64) {
@@ -363,8 +379,25 @@ struct Water {
 struct CropDay {
     evaporation_m3: Lanes<2>,
     full_evaporation_m3: Lanes<2>,
-    /// Whether a season ends.
-    ends: bool,
+}
+
+impl Stage<PlotLanes> {
+    #[inline(always)]
+    fn pair(&self, pair: usize) -> Stage<Lanes<2>> {
+        Stage {
+            base: self.base.pair(pair),
+            change: self.change.pair(pair),
+            of_days: self.of_days.pair(pair),
+            days_in: self.days_in.pair(pair),
+        }
+    }
+
+    fn set_lane(&mut self, lane: usize, stage: Stage) {
+        self.base.0[lane] = stage.base;
+        self.change.0[lane] = stage.change;
+        self.of_days.0[lane] = stage.of_days;
+        self.days_in.0[lane] = stage.days_in;
+    }
 }
 
 #[inline(always)]

@@ -65,6 +65,10 @@ pub struct WorksStores {
     pub river: RiverState,
     /// Root zones.
     pub plots: [PlotStores; MOST_GATES],
+    /// What each gate's users ask for this morning: at the end of the canal, and of the river. Here so that they need
+    /// not be made anew.
+    at_edges_m3: [f64; MOST_GATES],
+    for_river_m3: [f64; MOST_GATES],
     /// Days since the canals opened, for turns.
     rotation_day: u32,
     any_open: bool,
@@ -169,7 +173,14 @@ impl Works {
                 *plots = fields.start(self.start_soil_share, today.month_day);
             }
         }
-        WorksStores { river, plots, rotation_day: 0, any_open: false }
+        WorksStores {
+            river,
+            plots,
+            at_edges_m3: [0.0; MOST_GATES],
+            for_river_m3: [0.0; MOST_GATES],
+            rotation_day: 0,
+            any_open: false,
+        }
     }
 
     /// Active content of the reservoir, m³.
@@ -247,22 +258,23 @@ impl Works {
         }
         evening.minimum_m3 = self.minimum_m3.on(today.month_day);
 
-        let mut at_edges_m3 = [0.0; MOST_GATES];
-        let mut for_river_m3 = [0.0; MOST_GATES];
         let (mut wished_m3, mut any_open) = (0.0, false);
         for (index, head) in self.heads.iter().enumerate() {
             let open = head.season.holds(today.month_day);
+            if let User::Fields(fields) = &head.user {
+                fields.morning(&mut stores.plots[index], today.month_day);
+            }
             any_open |= open;
             let at_end_m3 = match &head.user {
                 _ if !open => 0.0,
-                User::Fields(fields) => fields.asked_m3(&stores.plots[index], today.month_day),
+                User::Fields(fields) => fields.asked_m3(&stores.plots[index]),
                 User::Town { town, growth } => {
                     let more_m3 = if town.summer.holds(today.month_day) { town.summer_more_m3 } else { 0.0 };
                     (town.daily_m3 + more_m3) * growth
                 }
             };
-            at_edges_m3[index] = at_end_m3;
-            for_river_m3[index] = at_end_m3 * head.head_per_end * head.turn_per_cycle;
+            stores.at_edges_m3[index] = at_end_m3;
+            stores.for_river_m3[index] = at_end_m3 * head.head_per_end * head.turn_per_cycle;
             let asked_m3 = at_end_m3 * head.head_per_end;
             evening.demand_m3[index] = if asked_m3 < head.canal_m3 { asked_m3 } else { head.canal_m3 };
             wished_m3 += evening.demand_m3[index];
@@ -286,7 +298,7 @@ impl Works {
             minimum_m3: evening.minimum_m3,
             stored_limit_m3,
             rotation_day: stores.rotation_day,
-            demand_m3: &for_river_m3,
+            demand_m3: &stores.for_river_m3,
         };
         self.river.day(&mut stores.river, &input, &mut evening.river);
         if self.rule == SharingRule::Rotation {
@@ -308,9 +320,8 @@ impl Works {
                 User::Fields(fields) => {
                     fields.day(
                         &mut stores.plots[index],
-                        today.month_day,
                         arrived_m3,
-                        at_edges_m3[index],
+                        stores.at_edges_m3[index],
                         basin.valley_precipitation_mm,
                         basin.reference_evaporation_mm,
                         &mut evening.fields[index],

@@ -13,7 +13,7 @@ use crate::signs::{YearReader, YearSigns};
 use crate::water::basin::{Basin, BasinDay, Basins};
 use crate::water::dials::Dials;
 use crate::water::run::{settle_works, settling_days};
-use crate::water::works::{Evening, Works};
+use crate::water::works::{Evening, Works, WorksStores};
 
 /// Settings whose slopes run side by side.
 pub const LANES: usize = 4;
@@ -110,6 +110,8 @@ impl<'q> Job<'q> {
         self.look()?;
         let Some(mut stores) = settle_works(valley, &works, calendar, slopes, &mut evening) else { return Ok(None) };
         let mut signs: Vec<YearSigns> = Vec::with_capacity(years.len());
+        let mut reader = YearReader::new(valley);
+        let of_supply = reading.is_of_supply();
         let mut done = 0;
         for year in years {
             let end = year.first + year.days;
@@ -119,11 +121,16 @@ impl<'q> Job<'q> {
                 works.run(&mut stores, &calendar[from..to], &slopes[from..to], &mut evening, |_, _| {});
             }
             self.look()?;
-            let mut reader = YearReader::new(valley);
+            reader.start_over();
             let days = year.first..end;
-            works.run(&mut stores, &calendar[days.clone()], &slopes[days], &mut evening, |evening, stores| {
-                reader.day(evening, stores);
-            });
+            let (calendar, slopes) = (&calendar[days.clone()], &slopes[days]);
+            if of_supply {
+                let read = |evening: &Evening, stores: &WorksStores| reader.supply_day(evening, stores);
+                works.run(&mut stores, calendar, slopes, &mut evening, read);
+            } else {
+                let read = |evening: &Evening, stores: &WorksStores| reader.day(evening, stores);
+                works.run(&mut stores, calendar, slopes, &mut evening, read);
+            }
             signs.push(reader.close());
             done = end;
         }

@@ -70,9 +70,43 @@ impl Stored<'_> {
                 held[i] += level * share[i];
             }
             *self.pool_m3 += level * shares.pool_share;
-        } else {
+        } else if !self.fill_open::<WIDTH>(amount_m3) {
             self.fill_in_passes::<WIDTH>(amount_m3);
         }
+    }
+
+    /// The first pass of the general credit, where nothing overflows in it; else changes nothing and says so. While one
+    /// account stays full for weeks this is the way of every day, so that it goes without a branch for a gate.
+    #[inline(always)]
+    fn fill_open<const WIDTH: usize>(&mut self, amount_m3: f64) -> bool {
+        let shares = self.shares;
+        // Shares of the accounts that are not full, zero for the others.
+        let mut open_share = [0.0; WIDTH];
+        let pool_open = shares.pool_share > 0.0 && *self.pool_m3 < shares.pool_capacity_m3;
+        let pool_share = if pool_open { shares.pool_share } else { 0.0 };
+        let mut weight = pool_share;
+        for i in 0..WIDTH {
+            let is_open = self.account_m3[i] < shares.capacity_m3[i];
+            open_share[i] = if is_open { shares.share[i] } else { 0.0 };
+            weight += open_share[i];
+        }
+        if weight <= 0.0 {
+            return false;
+        }
+        let level = amount_m3 / weight;
+        let mut overflows = pool_open & (level * pool_share >= shares.pool_capacity_m3 - *self.pool_m3);
+        for i in 0..WIDTH {
+            let room = shares.capacity_m3[i] - self.account_m3[i];
+            overflows |= (open_share[i] > 0.0) & (level * open_share[i] >= room);
+        }
+        if overflows {
+            return false;
+        }
+        for i in 0..WIDTH {
+            self.account_m3[i] += level * open_share[i];
+        }
+        *self.pool_m3 += level * pool_share;
+        true
     }
 
     /// The general credit: in each pass the accounts that would overflow are filled and drop out.

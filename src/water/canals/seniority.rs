@@ -42,16 +42,21 @@ impl River {
         let minimum_want = if self.minimum_at_dam { 0.0 } else { input.minimum_m3 };
         let (mut reservoir_take, mut reserved) = (0.0, 0.0);
         if morning.any_wish {
-            let natural_take = &mut out.natural_take_m3[..n];
+            // Most of the year only a town wishes for water: who wishes for none gets none, without a claim.
+            for i in 0..WIDTH {
+                out.natural_take_m3[i] = 0.0;
+                out.stored_take_m3[i] = 0.0;
+                out.canal_m3[i] = 0.0;
+            }
             for &position in &self.date_order {
                 let position = usize::from(position);
                 if position == 0 {
                     reservoir_take = reaches.claim(0, reservoir_want);
                 } else if position == end {
                     reserved = reaches.claim(end, minimum_want);
-                } else {
+                } else if out.wish_m3[position - 1] > 0.0 {
                     let want = least(out.wish_m3[position - 1], self.gates[position - 1].decreed_m3);
-                    natural_take[position - 1] = reaches.claim(position, want);
+                    out.natural_take_m3[position - 1] = reaches.claim(position, want);
                 }
             }
         } else if self.minimum_before_reservoir {
@@ -67,7 +72,8 @@ impl River {
         if morning.any_wish {
             let mut available = least(outlet_left, input.stored_limit_m3);
             for &position in &self.date_order {
-                let Some(i) = usize::from(position).checked_sub(1).filter(|&i| i < n) else { continue };
+                let wishes = |&i: &usize| i < n && out.wish_m3[i] > 0.0;
+                let Some(i) = usize::from(position).checked_sub(1).filter(wishes) else { continue };
                 let short = positive(out.wish_m3[i] - out.natural_take_m3[i]);
                 let (debited, arrived) = draw(&self.gates[i], short, state.account_m3[i], available);
                 state.account_m3[i] -= debited;

@@ -13,6 +13,8 @@ pub use root_zone::{
 };
 pub use soil::{SOIL_TEXTURES, SoilTexture, soil_texture};
 
+use super::lanes::Number;
+
 /// What a crop is to the water: coefficients, seasons and roots. Plain values, checked by whoever builds them.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct CropTraits {
@@ -40,22 +42,7 @@ impl CropTraits {
 
     /// Crop coefficient on a day of the season, the first being 1; zero outside the season (FAO-56 eq. 66, figure 34).
     pub fn coefficient_on(&self, day_of_season: u32) -> f64 {
-        let [initial, development, mid, late] = self.stage_days.map(u32::from);
-        let (initial_end, development_end) = (initial, initial + development);
-        let (mid_end, season_end) = (development_end + mid, development_end + mid + late);
-        let between = |from: f64, to: f64, days_in: u32, of_days: u32| {
-            from + f64::from(days_in) / f64::from(of_days) * (to - from)
-        };
-        match day_of_season {
-            0 => 0.0,
-            day if day <= initial_end => self.coefficient_initial,
-            day if day <= development_end => {
-                between(self.coefficient_initial, self.coefficient_mid, day - initial_end, development)
-            }
-            day if day <= mid_end => self.coefficient_mid,
-            day if day <= season_end => between(self.coefficient_mid, self.coefficient_end, day - mid_end, late),
-            _ => 0.0,
-        }
+        CoefficientCurve::new(self).stage_on(day_of_season).0.coefficient(0.0)
     }
 
     /// The same crop in another climate: mid and end coefficients moved from the table's 2 m/s of wind and 45 % of lowest
@@ -68,6 +55,79 @@ impl CropTraits {
         let coefficient_end =
             if self.coefficient_end >= 0.45 { self.coefficient_end + moved_by } else { self.coefficient_end };
         Self { coefficient_mid: self.coefficient_mid + moved_by, coefficient_end, ..*self }
+    }
+}
+
+/// Crop coefficients by day of the season, ready for a run (FAO-56 eq. 66, figure 34).
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct CoefficientCurve {
+    /// Days before the first day of each stage, and of the whole season.
+    before: [u32; 5],
+    stages: [Stage; 4],
+}
+
+/// A straight piece of a crop's coefficient curve, for one crop or a few side by side.
+#[derive(Clone, Copy, Debug, Default, PartialEq)]
+pub struct Stage<N = f64> {
+    /// Coefficient at its start.
+    pub base: N,
+    /// What it changes by until the end.
+    pub change: N,
+    /// Days that this takes; never 0.
+    pub of_days: N,
+    /// Days gone when the stage was looked up.
+    pub days_in: N,
+}
+
+impl<N: Number> Stage<N> {
+    /// The same coefficient on every day.
+    pub fn flat(base: N) -> Self {
+        Self { base, change: N::splat(0.0), of_days: N::splat(1.0), days_in: N::splat(0.0) }
+    }
+
+    /// The coefficient so many days after the stage was looked up.
+    #[inline(always)]
+    pub fn coefficient(&self, elapsed_days: N) -> N {
+        self.base + (self.days_in + elapsed_days) / self.of_days * self.change
+    }
+}
+
+impl CoefficientCurve {
+    /// The curve of a crop.
+    pub fn new(traits: &CropTraits) -> Self {
+        let [initial, development, mid, late] = traits.stage_days.map(u32::from);
+        let between = |from: f64, to: f64, days: u32| Stage {
+            base: from,
+            change: to - from,
+            of_days: f64::from(days.max(1)),
+            days_in: 0.0,
+        };
+        Self {
+            before: [
+                0,
+                initial,
+                initial + development,
+                initial + development + mid,
+                initial + development + mid + late,
+            ],
+            stages: [
+                Stage::flat(traits.coefficient_initial),
+                between(traits.coefficient_initial, traits.coefficient_mid, development),
+                Stage::flat(traits.coefficient_mid),
+                between(traits.coefficient_mid, traits.coefficient_end, late),
+            ],
+        }
+    }
+
+    /// The stage on a day of the season, the first being 1, and the stage's last day; zero and no day outside the season.
+    pub fn stage_on(&self, day_of_season: u32) -> (Stage, u32) {
+        let mut ends = self.before.iter().skip(1).zip(&self.before).zip(&self.stages);
+        match ends.find(|((end, _), _)| day_of_season <= **end) {
+            Some(((end, before), stage)) if day_of_season > 0 => {
+                (Stage { days_in: f64::from(day_of_season - before), ..*stage }, *end)
+            }
+            _ => (Stage::flat(0.0), 0),
+        }
     }
 }
 

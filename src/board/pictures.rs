@@ -47,7 +47,11 @@ pub fn write(folder: &Path, name: &str, size: FrameSize, pixels: &[Rgb565]) -> i
     Ok(path)
 }
 
-fn encode(size: FrameSize, pixels: &[Rgb565]) -> io::Result<Vec<u8>> {
+/// A frame as the bytes of a PNG file.
+///
+/// # Errors
+/// What the encoder says, as where `pixels` does not have as many pixels as `size`.
+pub fn encode(size: FrameSize, pixels: &[Rgb565]) -> io::Result<Vec<u8>> {
     let mut out = Vec::new();
     let mut encoder = png::Encoder::new(&mut out, size.width.into(), size.height.into());
     encoder.set_color(png::ColorType::Rgb);

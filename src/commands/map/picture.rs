@@ -3,6 +3,8 @@
 use embedded_graphics::pixelcolor::{Rgb565, RgbColor};
 
 use super::sheet::Sheet;
+use crate::board::FrameSize;
+use crate::board::pictures::encode;
 use crate::commands::failure::Failure;
 use crate::commands::fitted::PlaceFit;
 use crate::commands::tell::usual_system;
@@ -67,21 +69,5 @@ pub(super) fn png(
     let mut pixels = vec![Rgb565::WHITE; usize::from(wide) * usize::from(high)];
     let mut canvas = Canvas::new(&mut pixels, wide, high).map_err(|_| failed())?;
     draw(&mut canvas, &scene, &grid, &Theme::LIGHT, words);
-    encode(&pixels, wide, high).map_err(|_| failed())
-}
-
-/// Red, green and blue of 8 bits; the highest bits fill the lowest, so that black stays black and white white.
-fn encode(pixels: &[Rgb565], wide: u16, high: u16) -> Result<Vec<u8>, png::EncodingError> {
-    let mut out = Vec::new();
-    let mut encoder = png::Encoder::new(&mut out, wide.into(), high.into());
-    encoder.set_color(png::ColorType::Rgb);
-    encoder.set_depth(png::BitDepth::Eight);
-    let mut writer = encoder.write_header()?;
-    let eight = |colour: &Rgb565| {
-        let (red, green, blue) = (colour.r(), colour.g(), colour.b());
-        [red << 3 | red >> 2, green << 2 | green >> 4, blue << 3 | blue >> 2]
-    };
-    writer.write_image_data(&pixels.iter().flat_map(eight).collect::<Vec<u8>>())?;
-    writer.finish()?;
-    Ok(out)
+    encode(FrameSize::new(wide, high), &pixels).map_err(|_| failed())
 }

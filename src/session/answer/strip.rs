@@ -68,10 +68,10 @@ impl Strip {
         } else {
             self.asked_m3
         };
-        let share = self.delivered_m3 / due_m3;
-        let verdict = if share >= FULL_SHARE {
+        // Compared as the signs compare it, so that no day can be judged otherwise here than there.
+        let verdict = if self.delivered_m3 >= FULL_SHARE * due_m3 {
             Supply::Full
-        } else if share < CUT_SHARE {
+        } else if self.delivered_m3 < CUT_SHARE * due_m3 {
             Supply::Cut
         } else {
             Supply::Short

@@ -34,13 +34,23 @@ fn rows(words: &Words) -> Vec<HandRow> {
     let share = |percent: u32| words.say("hand-share", &[("percent", percent.to_string().into())]);
     let contacts = [("a", say("hand-open").into()), ("b", say("hand-closed").into())];
     vec![
-        row(words.say("hand-encoder", &[("a", 5.into()), ("b", 6.into())]), words.say("hand-contacts", &contacts), Mark::Silent, None),
+        row(
+            words.say("hand-encoder", &[("a", 5.into()), ("b", 6.into())]),
+            words.say("hand-contacts", &contacts),
+            Mark::Silent,
+            None,
+        ),
         row(words.say("hand-shaft-button", &[("pin", 13.into())]), say("hand-held"), Mark::Heard, None),
         row(words.say("hand-button", &[("pin", 23.into())]), say("hand-stuck-button"), Mark::Wrong, None),
         row(knob("dial-warming.short", 0), share(47), Mark::Fresh, Some(0.47)),
         row(knob("dial-winter-precipitation.short", 1), say("hand-stuck-loose"), Mark::Wrong, Some(0.9)),
         row(knob("dial-canal-lining.short", 3), share(0), Mark::Silent, Some(0.0)),
-        row(words.say("hand-touchscreen", &[("name", "ADS7846 Touchscreen".into())]), say("hand-lost"), Mark::Wrong, None),
+        row(
+            words.say("hand-touchscreen", &[("name", "ADS7846 Touchscreen".into())]),
+            say("hand-lost"),
+            Mark::Wrong,
+            None,
+        ),
     ]
 }
 

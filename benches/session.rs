@@ -97,7 +97,15 @@ fn pictures(c: &mut Criterion) {
         let props = stage.props();
         let dials = settings(&offer, &state.shown().dials);
         let scene = stage.scene(&props, Moment::of(state.shown(), &dials, answers, None));
-        let told = Told { offer: &offer, settings: &[], voices: &voices, words: &words, second: None, stale: false };
+        let told = Told {
+            offer: &offer,
+            settings: &[],
+            voices: &voices,
+            gates: &[],
+            words: &words,
+            second: None,
+            stale: false,
+        };
         let in_hand = HandTold::of(state, &told);
         let scene = Scene { hand: in_hand.hand(), ..scene };
         let mut canvas = Canvas::new(&mut pixels, 320, 240).expect("the buffer is as long as the frame");

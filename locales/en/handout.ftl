@@ -1,7 +1,8 @@
 # The page to take home, the worksheet and answer key of a lesson, and open data.
 
-handout-title = { $place }: what changed
+handout-title = { $place }: what the model shows
 handout-changed = What changed
+handout-numbers = The year in numbers
 handout-season = How the year goes
 handout-canals = Who gets water, and until when
 handout-years = All the years
@@ -51,7 +52,7 @@ handout-out-unknown = The name “{ $path }” does not say what to write. It mu
 
 ## Command line
 
-help-handout = Write a page to take home, or the worksheet of a lesson.
+help-handout = Writes a page to take home, or the worksheet of a lesson.
 help-usage-handout = [PLACE] [OPTIONS]
 help-handout-lesson = Write the sheet of this lesson: a file, or one of those built in
 help-handout-sheet = Which sheet of the lesson: work, key
@@ -62,7 +63,7 @@ value-lesson = LESSON
 value-sheet = SHEET
 value-paper = PAPER
 
-help-data = Write the days and years of a run as open data.
+help-data = Writes the days and years of a run as open data.
 help-usage-data = [PLACE] [OPTIONS]
 help-data-form = What to write: csv (four tables, one of them says what each column means), netcdf (one file of the days, CF-1.11)
 help-data-out = With netcdf: the file [usual: deshielo-data.nc]

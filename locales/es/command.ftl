@@ -8,9 +8,9 @@ help-commands = Órdenes
 help-arguments = Qué se le da
 help-options = Opciones
 help-default = si no se indica: { $value }
-help-tell = Para ver en números lo que resulta, sin cambios y con sus cambios.
-help-check = Para revisar lugares, combinaciones, lecciones y archivos de placa, renglón por renglón.
-help-weather = Para hacer un registro largo del tiempo, o alargar uno corto.
+help-tell = Dice en números lo que resulta, sin cambios y con sus cambios.
+help-check = Revisa lugares, combinaciones, lecciones y archivos de placa, renglón por renglón.
+help-weather = Hace un registro largo del tiempo, o alarga uno corto.
 help-help = Esta ayuda.
 help-version = La versión del programa.
 

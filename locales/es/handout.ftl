@@ -1,7 +1,8 @@
 # La hoja para llevar a casa, la hoja de trabajo y las respuestas de una lección, y los datos abiertos.
 
-handout-title = { $place }: qué cambió
+handout-title = { $place }: lo que muestra el modelo
 handout-changed = Qué cambió
+handout-numbers = El año en números
 handout-season = Cómo va el año
 handout-canals = A quién le llega agua y hasta cuándo
 handout-years = Todos los años
@@ -16,7 +17,7 @@ handout-water-out = Sale, { $unit }
 handout-together = En total
 handout-code = Este resultado como texto. Apunte la cámara del teléfono: no hace falta internet.
 handout-code-alt = Un código cuadrado con este resultado como texto sencillo.
-handout-season-alt = Nieve, río, presa y canales a lo largo del año: con sus cambios, línea continua; como era antes, línea cortada.
+handout-season-alt = Nieve, río, agua guardada y canales a lo largo del año: con sus cambios, línea continua; como era antes, línea cortada.
 handout-canals-alt = El año de cada canal como una franja, con su último día completo.
 handout-years-alt = Cada año del registro: qué parte del agua pedida llegó y cuánta agua trajo el río.
 
@@ -51,7 +52,7 @@ handout-out-unknown = El nombre «{ $path }» no dice qué escribir. Debe termin
 
 ## Línea de órdenes
 
-help-handout = Escribe una hoja para llevar a casa, o la hoja de trabajo de una lección.
+help-handout = Hace una hoja para llevar a casa, o la hoja de trabajo de una lección.
 help-usage-handout = [LUGAR] [OPCIONES]
 help-handout-lesson = Escribir la hoja de esta lección: un archivo o una de las incluidas
 help-handout-sheet = Cuál hoja de la lección: work (trabajo), key (respuestas)
@@ -62,7 +63,7 @@ value-lesson = LECCIÓN
 value-sheet = HOJA
 value-paper = PAPEL
 
-help-data = Escribe los días y los años de una corrida como datos abiertos.
+help-data = Guarda los días y los años de una corrida como datos abiertos.
 help-usage-data = [LUGAR] [OPCIONES]
 help-data-form = Qué escribir: csv (cuatro tablas; una dice qué es cada columna), netcdf (un archivo con los días, CF-1.11)
 help-data-out = Con netcdf: el archivo [lo usual: deshielo-data.nc]

@@ -49,7 +49,7 @@ grid-no-value = sin dato
 
 ## La orden
 
-help-map = Para hacer un mapa: un número con cada combinación de dos perillas.
+help-map = Hace un mapa: un número con cada combinación de dos perillas.
 help-usage-map = [LUGAR] [OPCIONES]
 help-over = Una perilla con sus valores, por ejemplo warming=0..6:0.5. Van dos. Sin paso, vale el paso de la perilla.
 help-sign = Lo que muestra el mapa, con su nombre en el JSON de tell; por ejemplo supply_ratio o reliability.

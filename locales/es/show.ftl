@@ -1,6 +1,6 @@
 # La orden show: qué pantalla se usa, por qué, y lo que se dice alrededor de la imagen.
 
-help-show = Para abrir el valle en una pantalla y girar las perillas.
+help-show = Abre el valle en una pantalla, listo para girar las perillas.
 help-usage-show = [LUGAR] [OPCIONES]
 help-screen = Dónde mostrarlo: window (ventana), terminal, pictures (imágenes), panel o framebuffer (monitor sin escritorio). Se puede repetir.
 help-size = El tamaño de la imagen, por ejemplo 320x240.

@@ -69,6 +69,19 @@ impl Placing {
         }
     }
 
+    /// The pixel of the picture under a place on the unturned glass, beyond the picture's edges too.
+    pub(super) fn under(&self, x: i32, y: i32) -> (i32, i32) {
+        let (width, height, scale) = (self.width as i32, self.height as i32, self.scale.max(1) as i32);
+        let (across, down) = match self.turned {
+            Turned::By0 => (x, y),
+            Turned::By90 => (y, width.saturating_sub(1).saturating_sub(x)),
+            Turned::By180 => (width.saturating_sub(1).saturating_sub(x), height.saturating_sub(1).saturating_sub(y)),
+            Turned::By270 => (height.saturating_sub(1).saturating_sub(y), x),
+        };
+        let (left, top) = (self.left as i32, self.top as i32);
+        (across.saturating_sub(left).div_euclid(scale), down.saturating_sub(top).div_euclid(scale))
+    }
+
     /// The pixel of the picture that is at a pixel of the glass; it must be one that the picture covers.
     pub(super) fn of_glass(&self, x: u32, y: u32) -> usize {
         let (across, down) = match self.turned {
@@ -110,11 +123,17 @@ mod tests {
             for turned in Turned::ALL {
                 let placing = Placing::new(width, height, turned).unwrap();
                 let mut seen = vec![0; placing.frame.pixels()];
-                let whole = Rectangle::new(Point::zero(), Size::new(u32::MAX, u32::MAX));
+                let whole = Rectangle::new(Point::zero(), Size::new(100_000, 100_000));
                 let (x0, y0, x1, y1) = placing.on_glass(&placing.clip(&whole).unwrap());
                 assert!(x1 <= width && y1 <= height);
                 for y in y0..y1 {
-                    (x0..x1).for_each(|x| seen[placing.of_glass(x, y)] += 1);
+                    for x in x0..x1 {
+                        let index = placing.of_glass(x, y);
+                        seen[index] += 1;
+                        // A finger finds the same pixel.
+                        let (column, row) = placing.under(x as i32, y as i32);
+                        assert_eq!((row * i32::from(placing.frame.width) + column) as usize, index);
+                    }
                 }
                 assert!(seen.iter().all(|times| *times == placing.scale * placing.scale), "{placing:?}");
             }

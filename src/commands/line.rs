@@ -19,24 +19,27 @@ pub(super) fn command(words: &Words) -> Command {
         say("help-options"),
         say("help-more"),
     );
-    let command = plain(Command::new("deshielo"), words);
-    #[cfg(feature = "pdf")]
-    let command = command.subcommand(handout(words));
-    command
+    let command = plain(Command::new("deshielo"), words)
         .version(env!("CARGO_PKG_VERSION"))
         .about(say("help-about"))
         .help_template(template)
         .disable_help_subcommand(true)
         .subcommand(show(words))
         .subcommand(tell(words))
-        .subcommand(check(words))
         .subcommand(map(words))
-        .subcommand(rehearse(words))
+        .subcommand(super::place::line::command(words))
+        .subcommand(check(words))
+        .subcommand(fit(words))
+        .subcommand(trust(words))
+        .subcommand(rehearse(words));
+    #[cfg(feature = "pdf")]
+    let command = command.subcommand(handout(words));
+    command
         .subcommand(data(words))
         .subcommand(weather(words))
         .subcommand(tally(words))
+        .subcommand(wiring(words))
         .subcommand(bundle(words))
-        .subcommand(super::place::line::command(words))
         .arg(Arg::new("version").long("version").short('V').action(ArgAction::Version).help(say("help-version")))
         .args(common(words))
 }
@@ -142,7 +145,11 @@ fn handout(words: &Words) -> Command {
         .arg(path_option("setting", "value-setting", "help-setting", words))
         .arg(text("years", "value-years", "help-years", words))
         .arg(path_option("lesson", "value-lesson", "help-handout-lesson", words))
-        .arg(text("sheet", "value-sheet", "help-handout-sheet", words).help(with_usual("help-handout-sheet", "work", words)))
+        .arg(text("sheet", "value-sheet", "help-handout-sheet", words).help(with_usual(
+            "help-handout-sheet",
+            "work",
+            words,
+        )))
         .arg(text("paper", "value-paper", "help-handout-paper", words))
         .arg(text("units", "value-units", "help-units", words))
         .arg(path_option("out", "value-file", "help-handout-out", words))
@@ -170,6 +177,55 @@ fn tally(words: &Words) -> Command {
         .arg(path_option("keep", "value-folder", "help-keep", words))
         .arg(path_option("out", "value-file", "help-out", words))
         .args(common(words))
+}
+
+fn fit(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    let number =
+        |name, help: &str, usual: &str| text(name, "value-number", help, words).help(with_usual(help, usual, words));
+    subcommand("fit", "help-usage-fit", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("objective", "value-objective", "help-objective", words).help(with_usual(
+            "help-objective",
+            "kge",
+            words,
+        )))
+        .arg(text("correction", "value-correction", "help-correction", words).help(with_usual(
+            "help-correction",
+            "factor",
+            words,
+        )))
+        .arg(number("seed", "help-fit-seed", "1"))
+        .arg(number("starts", "help-starts", &crate::fit::Settings::default().starts.to_string()))
+        .arg(number("runs", "help-runs", &crate::fit::Settings::default().runs_per_start.to_string()))
+        .arg(number("warm-up", "help-warm-up", "1"))
+        .arg(text("years", "value-years", "help-fit-years", words))
+        .arg(number("sets", "help-sets", &crate::fit::Settings::default().sets.to_string()))
+        .arg(flag("no-test", "help-no-test", words))
+        .arg(path_option("out", "value-file", "help-fit-out", words))
+        .arg(path_option("into", "value-folder", "help-fit-into", words))
+        .args(common(words))
+        .after_help(words.say("help-fit-more", &[]))
+}
+
+fn trust(words: &Words) -> Command {
+    let place = path("place", "value-place", "help-place", words).required(false);
+    subcommand("trust", "help-usage-trust", words)
+        .arg(place.help(with_usual("help-place", "demo", words)))
+        .arg(text("form", "value-form", "help-trust-form", words).help(with_usual("help-trust-form", "table", words)))
+        .arg(text("units", "value-units", "help-units", words))
+        .arg(path_option("out", "value-file", "help-out", words))
+        .args(common(words))
+}
+
+fn wiring(words: &Words) -> Command {
+    subcommand("wiring", "help-usage-wiring", words)
+        .arg(path("board", "value-file", "help-wiring-board", words).required(false))
+        .arg(text("screen", "value-screen", "help-screen", words).action(ArgAction::Append))
+        .arg(text("size", "value-size", "help-size", words))
+        .arg(path_option("into", "value-folder", "help-show-into", words))
+        .args(common(words))
+        .after_help(words.say("help-wiring-more", &[]))
 }
 
 fn bundle(words: &Words) -> Command {

@@ -8,11 +8,15 @@ mod bundle;
 mod check;
 mod data;
 mod failure;
-mod keep_folder;
+mod fit;
+mod fitted;
 #[cfg(feature = "pdf")]
 mod handout;
+mod judged;
+mod keep_folder;
 mod line;
 mod map;
+mod measured;
 mod output;
 mod place;
 mod places;
@@ -25,8 +29,10 @@ mod speech;
 mod spinner;
 mod tally;
 mod tell;
+mod trust;
 mod usage;
 mod weather;
+mod wiring;
 
 use std::ffi::OsString;
 use std::io::Write;
@@ -72,11 +78,14 @@ fn dispatch(speech: &Speech, arguments: Vec<OsString>) -> Result<(), Failure> {
         Some(("map", matches)) => map::run(speech, matches),
         Some(("rehearse", matches)) => rehearse::run(speech, matches),
         Some(("weather", matches)) => weather::run(speech, matches),
+        Some(("wiring", matches)) => wiring::run(speech, matches),
         Some(("tally", matches)) => tally::run(speech, matches),
         Some(("bundle", matches)) => bundle::run(speech, matches),
         Some(("place", matches)) => place::run(speech, matches),
         #[cfg(feature = "pdf")]
         Some(("handout", matches)) => handout::run(speech, matches),
+        Some(("fit", matches)) => fit::run(speech, matches),
+        Some(("trust", matches)) => trust::run(speech, matches),
         _ => show::usual(speech),
     }
 }

@@ -4,6 +4,7 @@ use std::path::{Path, PathBuf};
 
 use super::built_in;
 use super::failure::Failure;
+use super::fitted::{self, PlaceFit};
 use super::snippets::{Texts, report};
 use super::speech::Speech;
 use crate::place::problem::Severity;
@@ -62,8 +63,39 @@ impl Named {
     }
 }
 
-/// Opens the place for a run: with mistakes it is refused and all of them are told; notes are only counted.
+/// A place for a run, and the fit that it runs with.
+pub(super) struct Opened {
+    /// The place; where there is a fit, its valley is the fitted one.
+    pub place: Place,
+    /// The fit beside it.
+    pub fit: Option<PlaceFit>,
+}
+
+/// Opens the place for a run, with the fit that stands beside it; see [`open_fitted`].
 pub(super) fn open(name: &Path, speech: &Speech) -> Result<Place, Failure> {
+    open_fitted(name, speech).map(|opened| opened.place)
+}
+
+/// Opens the place with its fit. A fit that cannot be used is refused, one that is stale is used and told.
+pub(super) fn open_fitted(name: &Path, speech: &Speech) -> Result<Opened, Failure> {
+    let mut place = open_unfitted(name, speech)?;
+    let (fit, problems) = fitted::look(&place);
+    let words = &speech.words;
+    if !problems.is_empty() {
+        let told = report(&problems, &mut Texts::on_disk(), words);
+        if problems.iter().any(|problem| problem.severity == Severity::Error) {
+            return Err(Failure::Input(vec![told]));
+        }
+        super::tell_standard_error(&[told]);
+    }
+    if let Some(fitted) = fit.as_ref().and_then(|fit| fit.sets.first()) {
+        place.valley = fitted.clone();
+    }
+    Ok(Opened { place, fit })
+}
+
+/// Opens the place as it is written: with mistakes it is refused and all of them are told; notes are only counted.
+pub(super) fn open_unfitted(name: &Path, speech: &Speech) -> Result<Place, Failure> {
     let named = Named::find(name, speech)?;
     let Outcome { place, problems } = read(named.source());
     let words = &speech.words;

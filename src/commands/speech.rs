@@ -23,6 +23,7 @@ pub(super) struct Speech {
     fallback: Option<Fallback>,
     locale_faults: Vec<String>,
     /// Whether a page to print is asked for in both languages.
+    #[cfg_attr(not(feature = "pdf"), allow(dead_code, reason = "only pages speak two languages"))]
     pub both: bool,
 }
 

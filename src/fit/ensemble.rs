@@ -113,6 +113,14 @@ pub fn band(series: &[Vec<f64>]) -> Vec<(f64, f64)> {
         .collect()
 }
 
+/// The range of one value over the sets, from the lower to the upper of [`BAND_SHARES`], and as far as the first value,
+/// which is that of the set in use: what is told must not lie outside of its own range. `None` for no values.
+pub fn range(mut values: Vec<f64>) -> Option<(f64, f64)> {
+    let own = *values.first()?;
+    values.sort_by(f64::total_cmp);
+    Some((quantile(&values, BAND_SHARES.0).min(own), quantile(&values, BAND_SHARES.1).max(own)))
+}
+
 fn quantile(sorted: &[f64], share: f64) -> f64 {
     let rank = share * (sorted.len() - 1) as f64;
     let below = rank as usize;
@@ -164,5 +172,7 @@ mod tests {
         let band = band(&series);
         assert!((band[0].0 - 1.0).abs() < 1e-12 && (band[0].1 - 5.0).abs() < 1e-12);
         assert!(super::band(&[]).is_empty());
+        assert_eq!(range(vec![9.0, 1.0, 2.0, 3.0, 4.0, 5.0, 6.0]), Some((2.0, 9.0)), "as far as the set in use");
+        assert_eq!(range(Vec::new()), None);
     }
 }

@@ -15,11 +15,12 @@ pub mod search;
 pub mod split;
 pub mod starts;
 pub mod trial;
+pub mod trust;
 
 pub use objective::Objective;
 pub use parameters::{Parameter, PrecipitationCorrection, apply};
 pub use record::{FitError, Measures, Record, SnowAt, SnowRecord};
-pub use report::{FitFile, FitFileError, FittedSet};
+pub use report::{FitFile, FitFileError, FittedParameter, FittedSet};
 pub use split::{Half, Parting, Scores, SplitTest, Transfer};
 pub use starts::{Progress, Watch};
 
@@ -49,6 +50,8 @@ pub struct Settings {
     pub correction: PrecipitationCorrection,
     /// Whole water years at the start of the record that are run but not scored.
     pub warm_up_years: usize,
+    /// First and last water year to fit to; `None` for all that the gauge has.
+    pub years: Option<(i32, i32)>,
     /// Whether to fit and judge halves too.
     pub split: bool,
     /// Distance from the best score within which a set belongs to the ensemble.
@@ -66,6 +69,7 @@ impl Default for Settings {
             objective: Objective::default(),
             correction: PrecipitationCorrection::default(),
             warm_up_years: 1,
+            years: None,
             split: true,
             distance: ensemble::DISTANCE,
             sets: ensemble::SETS,
@@ -105,7 +109,10 @@ pub fn fit(valley: &Valley, record: &Record<'_>, settings: &Settings, watch: &Wa
         return Err(FitError::WrongSetting { name: "distance" });
     }
     let parameters = Parameter::fitted(valley, settings.correction);
-    let years = record.gauged_years(valley.water_year_start_month, settings.warm_up_years);
+    let mut years = record.gauged_years(valley.water_year_start_month, settings.warm_up_years);
+    if let Some((first, last)) = settings.years {
+        years.retain(|year| (first..=last).contains(&year.water_year));
+    }
     if years.is_empty() {
         return Err(FitError::TooFewYears { found: 0, needed: 1 });
     }
@@ -210,6 +217,7 @@ fn judge(
         Half {
             water_years: parted.halves[own].iter().map(|year| year.water_year).collect(),
             mean_temperature_c: split::mean_temperature_c(record, &parted.halves[own]),
+            values: bests[own].clone(),
             fitted: scores(&runs[own]),
             judged: scores(&runs[other]),
             guess_kling_gupta: split::guess(record, &parted.targets[other], target),

@@ -10,7 +10,7 @@
 use serde::{Deserialize, Serialize};
 
 use crate::water::keyed::keyed;
-use crate::water::valley::{ReachTraits, Valley};
+use crate::water::valley::{Band, ReachTraits, Valley};
 
 keyed! {
     /// A number of the valley that can be fitted.
@@ -60,14 +60,18 @@ keyed! {
         ReachTravel => "reach_travel_days",
         /// Weight of the reach's inflow as a share of the largest stable one for its travel time: 0 to 0.95.
         ReachWeight => "reach_weight_of_stable",
-        /// Factor on snowfall for what the gauge misses: 1 to 1.8. Unshielded gauges catch half to all of the snow,
-        /// depending on wind (Goodison, Louie & Yang 1998, WMO report 67).
+        /// Factor on snowfall for what the gauge misses: 0.7 to 1.8. Unshielded gauges catch half to all of the snow,
+        /// depending on wind (Goodison, Louie & Yang 1998, WMO report 67); below one where the snow that falls on the
+        /// station does not fall on the basin, or blows away (common practice).
         SnowCatch => "snow_catch_factor",
         /// Precipitation added per 100 m of climb, share of the station's: −0.03 to 0.15. Mostly 0.02 to 0.10; below zero
         /// where the station itself lies high or on the windward side (common practice).
         PrecipitationGradient => "precipitation_per_100m",
         /// Factor on all precipitation: 0.6 to 1.8, for a station that stands for too dry or too wet a spot (common practice).
         PrecipitationFactor => "precipitation_factor",
+        /// Cooling with height, mean of the twelve months, °C per km: −9.5 to −3; the months keep what parts them.
+        /// Between the moist and the dry adiabatic rate, and less where cold air pools (common practice).
+        MeanLapse => "mean_lapse_c_per_km",
     }
 }
 
@@ -117,9 +121,13 @@ pub enum ParameterUnit {
     /// Share per 100 m.
     #[serde(rename = "1/100 m")]
     PerHundredMetres,
+    /// °C per km.
+    #[serde(rename = "°C/km")]
+    CelsiusPerKm,
 }
 
-/// The one correction of precipitation that is fitted: two of them would undo each other.
+/// The correction of precipitation that is fitted. A gradient beside a factor would undo it; a factor on snow beside one
+/// on everything does not, since rain and snow reach the river in different months.
 #[derive(Clone, Copy, Debug, Default, PartialEq, Eq, Serialize, Deserialize)]
 #[serde(rename_all = "snake_case")]
 pub enum PrecipitationCorrection {
@@ -130,6 +138,8 @@ pub enum PrecipitationCorrection {
     /// A factor on everything, which can lower as well as raise.
     #[default]
     Factor,
+    /// A factor on everything and another on snow: what the gauge stands for, and what it misses of snow.
+    RainAndSnow,
 }
 
 impl Parameter {
@@ -154,16 +164,17 @@ impl Parameter {
             Parameter::HydrographBase => (0.5, 10.0, Logarithm),
             Parameter::ReachTravel => (0.51, 5.0, Logarithm),
             Parameter::ReachWeight => (0.0, 0.95, Straight),
-            Parameter::SnowCatch => (1.0, 1.8, Straight),
+            Parameter::SnowCatch => (0.7, 1.8, Straight),
             Parameter::PrecipitationGradient => (-0.03, 0.15, Straight),
             Parameter::PrecipitationFactor => (0.6, 1.8, Straight),
+            Parameter::MeanLapse => (-9.5, -3.0, Straight),
         };
         Bounds { least, most, scale }
     }
 
     /// What it is measured in.
     pub const fn unit(self) -> ParameterUnit {
-        use ParameterUnit::{Celsius, Days, Mm, MmPerCelsiusDay, MmPerDay, One, PerHundredMetres};
+        use ParameterUnit::{Celsius, CelsiusPerKm, Days, Mm, MmPerCelsiusDay, MmPerDay, One, PerHundredMetres};
         match self {
             Parameter::AllSnowBelow | Parameter::MixedOver | Parameter::MeltAbove => Celsius,
             Parameter::MeltFactor | Parameter::MeltSwing => MmPerCelsiusDay,
@@ -171,6 +182,7 @@ impl Parameter {
             Parameter::Percolation => MmPerDay,
             Parameter::QuickDays | Parameter::SlowDays | Parameter::HydrographBase | Parameter::ReachTravel => Days,
             Parameter::PrecipitationGradient => PerHundredMetres,
+            Parameter::MeanLapse => CelsiusPerKm,
             Parameter::Refreeze
             | Parameter::LiquidHolding
             | Parameter::RechargePower
@@ -205,26 +217,34 @@ impl Parameter {
         }
     }
 
-    /// The parameters that are fitted for `valley`: all of them but two of the corrections of precipitation, and without
-    /// the reach where the place has none.
+    /// The parameters that are fitted for `valley`: all of them, but of the corrections of precipitation only what
+    /// `correction` names, without the reach where the place has none, and without the cooling with height where all
+    /// bands lie at the station's.
     pub fn fitted(valley: &Valley, correction: PrecipitationCorrection) -> Vec<Parameter> {
-        let kept = match correction {
-            PrecipitationCorrection::SnowCatch => Parameter::SnowCatch,
-            PrecipitationCorrection::Gradient => Parameter::PrecipitationGradient,
-            PrecipitationCorrection::Factor => Parameter::PrecipitationFactor,
+        let kept: &[Parameter] = match correction {
+            PrecipitationCorrection::SnowCatch => &[Parameter::SnowCatch],
+            PrecipitationCorrection::Gradient => &[Parameter::PrecipitationGradient],
+            PrecipitationCorrection::Factor => &[Parameter::PrecipitationFactor],
+            PrecipitationCorrection::RainAndSnow => &[Parameter::SnowCatch, Parameter::PrecipitationFactor],
         };
+        let off_station = |band: &Band| (band.elevation_m - valley.station_elevation_m).abs() >= LEAST_CLIMB_M;
+        let climbs = valley.bands.iter().any(off_station);
         Self::ALL
             .into_iter()
             .filter(|parameter| match parameter {
                 Parameter::ReachTravel | Parameter::ReachWeight => valley.channel.reach.is_some(),
                 Parameter::SnowCatch | Parameter::PrecipitationGradient | Parameter::PrecipitationFactor => {
-                    *parameter == kept
+                    kept.contains(parameter)
                 }
+                Parameter::MeanLapse => climbs,
                 _ => true,
             })
             .collect()
     }
 }
+
+/// Where every band is nearer to the station's height than this, m, its cooling cannot be told from nothing.
+const LEAST_CLIMB_M: f64 = 50.0;
 
 /// Largest inflow weight with which a reach of `travel_days` has no negative coefficient at a step of a day:
 /// `2 K X ≤ 1 ≤ 2 K (1 − X)` and X at most one half.
@@ -239,7 +259,8 @@ pub fn apply(valley: &Valley, parameters: &[Parameter], values: &[f64]) -> Valle
     fitted
 }
 
-/// Writes the values of `parameters` into `valley`. Its earlier values of them are lost, whatever they were.
+/// Writes the values of `parameters` into `valley`. Its earlier values of them are lost, whatever they were; of months
+/// that keep what parts them, the differences stay, so that [`reset`] comes first where bits matter.
 pub fn set(valley: &mut Valley, parameters: &[Parameter], values: &[f64]) {
     let value_of = |wanted: Parameter| {
         parameters.iter().zip(values).find(|(parameter, _)| **parameter == wanted).map(|(_, value)| *value)
@@ -270,6 +291,10 @@ pub fn set(valley: &mut Valley, parameters: &[Parameter], values: &[f64]) {
             Parameter::SnowCatch => valley.climb.snow_catch_factor = value,
             Parameter::PrecipitationGradient => valley.climb.precipitation_per_100m = value,
             Parameter::PrecipitationFactor => valley.climb.precipitation_factor = value,
+            Parameter::MeanLapse => {
+                let shift = value - mean_lapse_c_per_km(valley);
+                valley.climb.lapse_c_per_km.iter_mut().for_each(|lapse| *lapse += shift);
+            }
         }
     }
     // Written last: it counts from the lower temperature, fitted or not.
@@ -302,6 +327,16 @@ pub fn values_of(valley: &Valley, parameters: &[Parameter]) -> Vec<f64> {
         Parameter::SnowCatch => valley.climb.snow_catch_factor,
         Parameter::PrecipitationGradient => valley.climb.precipitation_per_100m,
         Parameter::PrecipitationFactor => valley.climb.precipitation_factor,
+        Parameter::MeanLapse => mean_lapse_c_per_km(valley),
     };
     parameters.iter().map(value).collect()
+}
+
+fn mean_lapse_c_per_km(valley: &Valley) -> f64 {
+    valley.climb.lapse_c_per_km.iter().sum::<f64>() / 12.0
+}
+
+/// Gives `valley` what [`set`] changes of it by steps from where it stood: months that keep what parts them.
+pub fn reset(valley: &mut Valley, base: &Valley) {
+    valley.climb.lapse_c_per_km = base.climb.lapse_c_per_km;
 }

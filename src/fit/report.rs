@@ -7,7 +7,7 @@ use serde::{Deserialize, Serialize};
 use super::ensemble::Spread;
 use super::objective::Objective;
 use super::parameters::{Parameter, ParameterUnit, PrecipitationCorrection, apply};
-use super::split::{Scores, SplitTest};
+use super::split::{Half, Scores, SplitTest};
 use super::{Fit, Settings};
 use crate::water::valley::Valley;
 
@@ -22,6 +22,8 @@ pub struct FitFile {
     pub program_version: String,
     /// Checksum of the records that were fitted to.
     pub record_checksum: String,
+    /// Checksum of what the fit takes from the place and leaves as it is, see [`place_checksum`].
+    pub place_checksum: String,
     /// What was made large.
     pub objective: Objective,
     /// Which correction of precipitation was fitted.
@@ -113,8 +115,8 @@ pub enum FitFileError {
 }
 
 impl FitFile {
-    /// The content for a fit to records with the checksum `record_checksum`.
-    pub fn new(fit: &Fit, settings: &Settings, record_checksum: impl Into<String>) -> Self {
+    /// The content for a fit of `valley` to records with the checksum `record_checksum`.
+    pub fn new(fit: &Fit, settings: &Settings, valley: &Valley, record_checksum: impl Into<String>) -> Self {
         let named = |(parameter, value): (&Parameter, &f64)| FittedParameter {
             key: parameter.key().to_owned(),
             value: *value,
@@ -125,6 +127,7 @@ impl FitFile {
         Self {
             program_version: env!("CARGO_PKG_VERSION").to_owned(),
             record_checksum: record_checksum.into(),
+            place_checksum: place_checksum(valley),
             objective: settings.objective,
             correction: settings.correction,
             seed: settings.seed,
@@ -157,6 +160,12 @@ impl FitFile {
             }
             check_values(&parameters, &one.values, Some(set))?;
         }
+        for (set, half) in file.tests.iter().flat_map(|test| &test.halves).enumerate() {
+            if half.values.len() != parameters.len() {
+                return Err(FitFileError::WrongCount { set, found: half.values.len(), needed: parameters.len() });
+            }
+            check_values(&parameters, &half.values, Some(set))?;
+        }
         Ok(file)
     }
 
@@ -171,6 +180,11 @@ impl FitFile {
     /// Whether the records are no longer those that were fitted to.
     pub fn is_stale(&self, record_checksum: &str) -> bool {
         self.record_checksum != record_checksum
+    }
+
+    /// Whether the land of the place is no longer what it was when it was fitted; `valley` is the place before the fit.
+    pub fn is_of_another_land(&self, valley: &Valley) -> bool {
+        self.place_checksum != place_checksum(valley)
     }
 
     /// `valley` with the fitted set.
@@ -191,6 +205,14 @@ impl FitFile {
         Ok(self.sets.iter().map(|set| apply(valley, &parameters, &set.values)).collect())
     }
 
+    /// `valley` with the set that was fitted on a half of a test.
+    ///
+    /// # Errors
+    /// Likewise.
+    pub fn apply_half(&self, valley: &Valley, half: &Half) -> Result<Valley, FitFileError> {
+        Ok(apply(valley, &self.known_parameters()?, &half.values))
+    }
+
     fn known_parameters(&self) -> Result<Vec<Parameter>, FitFileError> {
         let mut known = Vec::new();
         for FittedParameter { key, .. } in &self.parameters {
@@ -201,6 +223,20 @@ impl FitFile {
         }
         Ok(known)
     }
+}
+
+/// A fingerprint of what a fit takes from a place and leaves as it is: latitude, start of the water year, the station's
+/// height and the bands. FNV-1a with 64 bits over the numbers' bits.
+pub fn place_checksum(valley: &Valley) -> String {
+    let own = [valley.latitude_deg, f64::from(valley.water_year_start_month), valley.station_elevation_m];
+    let bands = valley
+        .bands
+        .iter()
+        .flat_map(|band| [band.area_km2, band.elevation_m, band.melt_exposure, band.evaporation_factor]);
+    let bytes = own.into_iter().chain(bands).flat_map(|number| number.to_bits().to_le_bytes());
+    let sum =
+        bytes.fold(0xcbf2_9ce4_8422_2325_u64, |sum, byte| (sum ^ u64::from(byte)).wrapping_mul(0x0000_0100_0000_01b3));
+    format!("{sum:016x}")
 }
 
 fn check_values(parameters: &[Parameter], values: &[f64], set: Option<usize>) -> Result<(), FitFileError> {

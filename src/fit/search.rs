@@ -49,6 +49,7 @@ pub fn first_guesses(points: usize) -> usize {
 #[derive(Clone, Debug)]
 pub struct Search {
     random: Stream,
+    own_guess: bool,
     step_share: f64,
     first_guesses: usize,
     iterations: usize,
@@ -65,6 +66,7 @@ impl Search {
         let guesses = first_guesses(points);
         Self {
             random: Stream::new(seed, Purpose::Search),
+            own_guess: false,
             step_share: STEP_SHARE,
             first_guesses: guesses,
             iterations: points - guesses,
@@ -83,6 +85,16 @@ impl Search {
         self
     }
 
+    /// The same walk whose first guess is `point` and not a random one, as the paper allows.
+    #[must_use]
+    pub fn with_first_guess(mut self, point: &[f64]) -> Self {
+        self.own_guess = point.len() == self.candidate.len();
+        if self.own_guess {
+            self.candidate.copy_from_slice(point);
+        }
+        self
+    }
+
     /// Whether all points have been tried.
     pub fn is_over(&self) -> bool {
         self.tried >= self.first_guesses + self.iterations
@@ -90,6 +102,10 @@ impl Search {
 
     /// The next point to score. Its score is told by [`Search::learn`] before the next is asked for.
     pub fn propose(&mut self) -> &[f64] {
+        if self.tried == 0 && self.own_guess {
+            self.changed = self.candidate.len();
+            return &self.candidate;
+        }
         if self.tried < self.first_guesses {
             for coordinate in &mut self.candidate {
                 *coordinate = self.random.uniform();

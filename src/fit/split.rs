@@ -77,6 +77,8 @@ pub struct Half {
     pub water_years: Vec<i32>,
     /// Mean temperature of those years at the station, °C.
     pub mean_temperature_c: f64,
+    /// The set fitted on this half, its values in the order of the parameters.
+    pub values: Vec<f64>,
     /// Of the set fitted on this half.
     pub fitted: Scores,
     /// Of the set fitted on the other half.

@@ -81,8 +81,10 @@ pub fn search(
         return Err(FitError::WrongSetting { name: "runs_per_start" });
     }
     let mut seeds = Stream::new(seed, Purpose::Starts);
-    let searches: Vec<Search> =
+    let mut searches: Vec<Search> =
         (0..starts).map(|_| Search::new(trial.dimensions(), runs_per_start, seeds.bits())).collect();
+    // One walk also looks at what the preparer wrote down before any fit.
+    searches[0] = searches[0].clone().with_first_guess(&trial.own_point());
     let groups: Vec<(Vec<Scored>, bool)> =
         searches.par_chunks(LANES).map(|group| search_group(trial, group.to_vec(), stop, each)).collect();
 

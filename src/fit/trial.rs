@@ -5,7 +5,7 @@
 //! in any company (the recharge power is in steps of a half for this).
 
 use super::objective::Objective;
-use super::parameters::{Parameter, set};
+use super::parameters::{Parameter, reset, set, values_of};
 use super::record::{Record, SnowAt, Target};
 use crate::water::basin::{BasinDay, Basins};
 use crate::water::dials::Dials;
@@ -99,6 +99,16 @@ impl<'r> Trial<'r> {
         self.parameters.iter().zip(point).map(|(parameter, at)| parameter.value_at(*at)).collect()
     }
 
+    /// The point of the place as it stands before the fit, brought within the bounds: a first guess like any other.
+    pub fn own_point(&self) -> Vec<f64> {
+        let values = values_of(&self.basin, self.parameters);
+        let coordinate = |(parameter, value): (&Parameter, f64)| {
+            let at = parameter.coordinate_of(value);
+            if at.is_nan() { 0.5 } else { at.clamp(0.0, 1.0) }
+        };
+        self.parameters.iter().zip(values).map(coordinate).collect()
+    }
+
     /// Scores `points` of the unit cube, at most [`LANES`] of them, into `scores`; minus infinity where a score is not
     /// defined. Lanes without a point repeat the first.
     pub fn score<'p>(&self, points: impl Iterator<Item = &'p [f64]>, room: &mut Room, scores: &mut [f64; LANES]) {
@@ -128,8 +138,10 @@ impl<'r> Trial<'r> {
     }
 
     fn take(&self, lane: usize, room: &mut Room) {
+        reset(&mut room.valleys[lane], &self.basin);
         set(&mut room.valleys[lane], self.parameters, &room.values);
-        if let Some(spot) = room.spots.get_mut(lane) {
+        if let (Some(spot), Some(base)) = (room.spots.get_mut(lane), &self.spot) {
+            reset(spot, base);
             set(spot, self.parameters, &room.values);
         }
     }

@@ -18,7 +18,8 @@ const SMALLEST_IN_LARGE_UNIT: f64 = 0.1;
 
 /// Both sides of the accounts side by side; nothing where the record has no whole year.
 pub(super) fn ledger(scene: &Scene<'_>, voices: &[&Words], tags: &[&str], width: f64, most: usize) -> Block {
-    let report = |run: &crate::picture::views::scene::RunShown<'_>| run.years.get(run.chosen_year).map(|year| year.ledger);
+    let report =
+        |run: &crate::picture::views::scene::RunShown<'_>| run.years.get(run.chosen_year).map(|year| year.ledger);
     let (Some(now), Some(was), Some(words)) = (report(&scene.now), report(&scene.was), voices.first()) else {
         return Block::default();
     };
@@ -80,7 +81,8 @@ impl Sheet<'_> {
         y += 2.0;
         bars.push(super::pen::straight(At::new(0.0, y), At::new(self.width, y), 0.5, Ink::Rule));
         // What the stores gave and kept stands in the lines above; together both sides come to the same.
-        let all: (f64, f64) = entries.iter().fold((0.0, 0.0), |sum, entry| (sum.0 + entry.now_m3, sum.1 + entry.was_m3));
+        let all: (f64, f64) =
+            entries.iter().fold((0.0, 0.0), |sum, entry| (sum.0 + entry.now_m3, sum.1 + entry.was_m3));
         let sum = Entry { now_m3: all.0.max(sum.now_m3), was_m3: all.1.max(sum.was_m3), ..sum };
         y = self.row(&mut table, None, y + 1.0, &|words| words.say("handout-together", &[]), &sum, STRONG);
         Block { nodes: vec![Node::of(Role::Artifact, bars), table], high: y }

@@ -161,11 +161,9 @@ impl<'s, 'a> Sheet<'s, 'a> {
         let say = |id: &str| each(&self.words, |words| words.say(id, &[])).join(" · ");
         let mut nodes = Vec::new();
         let mut lines = Vec::new();
-        for (id, from, to) in [
-            ("handout-field-group", 0.0, 0.28),
-            ("handout-field-names", 0.31, 0.76),
-            ("handout-field-date", 0.79, 1.0),
-        ] {
+        for (id, from, to) in
+            [("handout-field-group", 0.0, 0.28), ("handout-field-names", 0.31, 0.76), ("handout-field-date", 0.79, 1.0)]
+        {
             let text = say(id);
             let (left, right) = (width * from, width * to);
             let begin = left + BODY.width(&text) + 5.0;
@@ -184,9 +182,12 @@ impl<'s, 'a> Sheet<'s, 'a> {
         let guesses: Vec<GuessScale> = self.voices.iter().filter_map(|voice| of(voice).guess).collect();
         let has_guess = !guesses.is_empty();
         if has_guess {
-            body = body.below(5.0, self.text(inner, READ, &Role::Paragraph, |voice| {
-                of(voice).guess.map(|guess| guess.question).unwrap_or_default()
-            }));
+            body = body.below(
+                5.0,
+                self.text(inner, READ, &Role::Paragraph, |voice| {
+                    of(voice).guess.map(|guess| guess.question).unwrap_or_default()
+                }),
+            );
             body = body.below(4.0, self.scale(&guesses, kind, inner));
         }
         match kind {
@@ -200,8 +201,12 @@ impl<'s, 'a> Sheet<'s, 'a> {
                 }
             }
             SheetKind::Key => {
-                body = body.below(5.0, self.text(inner, STRONG, &Role::Paragraph, |voice| of(voice).reveal.unwrap_or_default()));
-                body = body.below(3.0, self.text(inner, READ, &Role::Paragraph, |voice| of(voice).talk.unwrap_or_default()));
+                body = body.below(
+                    5.0,
+                    self.text(inner, STRONG, &Role::Paragraph, |voice| of(voice).reveal.unwrap_or_default()),
+                );
+                body = body
+                    .below(3.0, self.text(inner, READ, &Role::Paragraph, |voice| of(voice).talk.unwrap_or_default()));
             }
         }
         body.shift(INDENT, 0.0);
@@ -231,7 +236,8 @@ impl<'s, 'a> Sheet<'s, 'a> {
             vec![At::new(x, y - 2.2), At::new(x, y + 2.2)]
         });
         pieces.push(line(small.collect(), 0.5, Ink::Rule));
-        let tall = first.named.iter().map(|mark| vec![At::new(x(mark.share), y - 4.5), At::new(x(mark.share), y + 4.5)]);
+        let tall =
+            first.named.iter().map(|mark| vec![At::new(x(mark.share), y - 4.5), At::new(x(mark.share), y + 4.5)]);
         pieces.push(line(tall.collect(), 0.9, Ink::Black));
         let room = (right - left) / first.named.len().saturating_sub(1).max(1) as f64 - 4.0;
         let mut rows: f64 = 1.0;
@@ -282,7 +288,8 @@ impl<'s, 'a> Sheet<'s, 'a> {
                 nodes.push(Node::of(Role::Paragraph, vec![letters(&text, At::new(*x, 9.5), End::Left, STRONG)]));
                 *x += STRONG.width(&text) + 16.0;
             };
-            let result = guess.result.as_ref().map_or_else(|| voice.words.say("tell-never", &[]), |mark| mark.text.clone());
+            let result =
+                guess.result.as_ref().map_or_else(|| voice.words.say("tell-never", &[]), |mark| mark.text.clone());
             let wedge = area(vec![vec![At::new(0.0, 2.5), At::new(8.0, 2.5), At::new(4.0, 10.0)]], Ink::Water);
             entry("lesson-result", &result, wedge, &mut x);
             if let Some(usual) = &guess.usual {
@@ -294,7 +301,9 @@ impl<'s, 'a> Sheet<'s, 'a> {
             nodes.iter_mut().for_each(|node| node.language.clone_from(&tag));
             let part = Block { nodes, high: 13.0 };
             // Two languages with long values stand one below the other.
-            block = if x > column && index > 0 { block.below(1.0, part) } else {
+            block = if x > column && index > 0 {
+                block.below(1.0, part)
+            } else {
                 block.beside((column + GUTTER) * index as f64, part)
             };
         }
@@ -310,7 +319,8 @@ impl<'s, 'a> Sheet<'s, 'a> {
         for group in 0..GROUPS {
             let x = (own + gap) * group as f64;
             frames.push(corners(x, 0.0, own, high));
-            let name = each(&self.words, |words| words.say("lesson-group", &[("group", (group + 1).into())])).join(" · ");
+            let name =
+                each(&self.words, |words| words.say("lesson-group", &[("group", (group + 1).into())])).join(" · ");
             let small = Style::new(Face::Regular, 6.8, Ink::Quiet).fitting(&name, own - 7.0, 4.5);
             nodes.push(Node::of(Role::Paragraph, vec![letters(&name, At::new(x + 3.5, 8.0), End::Left, small)]));
         }

@@ -5,6 +5,7 @@
 //! and know nothing of what is told on it. What was is dashed and what is with your changes is solid, lack is hatched and
 //! always said in words too, so that a page survives a black-and-white printer.
 
+mod cautions;
 mod chart;
 mod face;
 mod flow;

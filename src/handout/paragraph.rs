@@ -27,11 +27,7 @@ pub(super) fn column_pt(width: f64, columns: usize) -> f64 {
 }
 
 /// The same part in every language, side by side. Each text comes with the tag of its language.
-pub(super) fn side_by_side(
-    texts: &[(String, &str)],
-    width: f64,
-    part: impl Fn(&str, f64) -> Block,
-) -> Block {
+pub(super) fn side_by_side(texts: &[(String, &str)], width: f64, part: impl Fn(&str, f64) -> Block) -> Block {
     let column = column_pt(width, texts.len());
     let mut whole = Block::default();
     for (index, (text, tag)) in texts.iter().enumerate() {

@@ -5,11 +5,11 @@ use std::num::NonZeroU16;
 
 use krilla::color::rgb;
 use krilla::configure::{Configuration, Validator};
-use krilla::geom::{Path, PathBuilder, Point};
 use krilla::destination::XyzDestination;
+use krilla::geom::{Path, PathBuilder, Point};
 use krilla::metadata::Metadata;
-use krilla::outline::{Outline, OutlineNode};
 use krilla::num::NormalizedF32;
+use krilla::outline::{Outline, OutlineNode};
 use krilla::page::PageSettings;
 use krilla::paint::{Fill, FillRule, LineCap, LineJoin, Stroke, StrokeDash};
 use krilla::surface::Surface;

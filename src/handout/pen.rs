@@ -120,9 +120,10 @@ pub(super) fn hatch(areas: &[Vec<At>], gap: f64, width: f64, ink: Ink) -> Piece 
     for corners in areas {
         // Along x + y = level, so that neighbouring areas share their lines.
         let level = |at: &At| at.x + at.y;
-        let (low, high) = corners.iter().map(level).fold((f64::INFINITY, f64::NEG_INFINITY), |(low, high), level| {
-            (low.min(level), high.max(level))
-        });
+        let (low, high) = corners
+            .iter()
+            .map(level)
+            .fold((f64::INFINITY, f64::NEG_INFINITY), |(low, high), level| (low.min(level), high.max(level)));
         if !(low.is_finite() && high.is_finite() && gap > 0.0) {
             continue;
         }

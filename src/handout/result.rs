@@ -1,5 +1,6 @@
 //! The page of a result: place, dials, what changed, the year, the canals, all years, the accounts, trust, cautions.
 
+use super::cautions::cautions;
 use super::chart::{canal_legend, each, season, strips, years};
 use super::face::Face;
 use super::flow::{Block, Flow, GUTTER};
@@ -8,11 +9,10 @@ use super::model::{At, Document, Ink, Node, Paper, Piece, Role};
 use super::paragraph::{column_pt, heading, paragraph, side_by_side};
 use super::pen::{BODY, End, NOTE, STRONG, Style, centred, corners, edged, letters};
 use super::qr::{QrFault, code};
-use super::table::{Cell, Column, Table};
-use crate::picture::views::about::CAUTIONS;
-use crate::picture::views::scene::{Scene, YearKind};
+use super::table::{Cell, Column, Table, says_the_same};
 use crate::picture::views::Answer;
 use crate::picture::views::page_answer::PageAnswer;
+use crate::picture::views::scene::{Scene, YearKind};
 use crate::words::Words;
 
 /// The signs as they are told to people: heads, then rows as wide.
@@ -60,8 +60,8 @@ const MOST_PAGES: usize = 2;
 struct Fit {
     /// Letters of the table, points.
     table: f64,
-    /// Whether the canals stand on the first page, and the year on the second.
-    canals_first: bool,
+    /// Letters of the sentence that opens a part, points.
+    sentence: f64,
     /// Least and most height of the year's charts; they take what is left of the page.
     season: (f64, f64),
     /// Height of a canal's row.
@@ -81,7 +81,7 @@ struct Fit {
 const FITS: [Fit; 5] = [
     Fit {
         table: 8.6,
-        canals_first: false,
+        sentence: 9.6,
         season: (230.0, 330.0),
         row: 19.0,
         years: 118.0,
@@ -92,43 +92,43 @@ const FITS: [Fit; 5] = [
     },
     Fit {
         table: 8.6,
-        canals_first: false,
+        sentence: 9.6,
         season: (230.0, 330.0),
         row: 17.0,
         years: 108.0,
         ledger: 8,
         statements: true,
-        cautions: ("", &[8.2, 7.6, 7.0]),
+        cautions: ("", &[8.2, 7.6, 7.2]),
         gap: 10.0,
     },
     Fit {
-        table: 7.7,
-        canals_first: true,
-        season: (180.0, 260.0),
-        row: 17.0,
-        years: 98.0,
-        ledger: 7,
+        table: 8.4,
+        sentence: 9.2,
+        season: (200.0, 330.0),
+        row: 15.0,
+        years: 94.0,
+        ledger: 6,
         statements: true,
-        cautions: ("", &[7.4, 7.0, 6.6]),
+        cautions: ("", &[7.6, 7.2, 6.8]),
         gap: 9.0,
     },
     Fit {
-        table: 7.4,
-        canals_first: true,
-        season: (160.0, 200.0),
+        table: 7.6,
+        sentence: 8.6,
+        season: (170.0, 330.0),
         row: 14.0,
         years: 88.0,
         ledger: 6,
         statements: false,
-        cautions: ("", &[7.0, 6.6]),
+        cautions: ("", &[7.2, 6.8, 6.6]),
         gap: 8.0,
     },
     Fit {
-        table: 7.0,
-        canals_first: true,
-        season: (120.0, 140.0),
-        row: 9.0,
-        years: 70.0,
+        table: 7.2,
+        sentence: 8.2,
+        season: (130.0, 330.0),
+        row: 11.5,
+        years: 78.0,
         ledger: 5,
         statements: false,
         cautions: ("", &[6.6, 6.2]),
@@ -190,32 +190,32 @@ impl<'s, 'a> Sheet<'s, 'a> {
         let scene = &self.page.voices[0].scene;
         flow.put(self.masthead(width)?);
         flow.gap(fit.gap);
-        flow.put(self.heading("handout-changed", width).below(3.0, self.table(width, fit.table)));
+        let changed = if scene.changed() { "handout-changed" } else { "handout-numbers" };
+        flow.put(self.heading(changed, width).below(3.0, self.table(width, fit.table)));
         flow.gap(fit.gap);
-        for is_canals in [fit.canals_first, !fit.canals_first] {
-            if is_canals && !scene.canals.is_empty() {
-                flow.put(self.canals(width, fit));
-            } else if !is_canals {
-                flow.put(self.season(width, flow.room(), fit));
-            }
+        flow.put(self.season(width, flow.room(), fit));
+        flow.gap(fit.gap);
+        if !scene.canals.is_empty() {
+            flow.put(self.canals(width, fit));
             flow.gap(fit.gap);
         }
         let alt = self.alt("handout-years-alt", &Answer::Page(PageAnswer::years(scene)));
         let part = self
             .heading("handout-years", width)
-            .below(1.0, self.sentences(width, |scene| Answer::Page(PageAnswer::years(scene))))
+            .below(1.0, self.sentences(width, fit.sentence, |scene| Answer::Page(PageAnswer::years(scene))))
             .below(3.0, years(scene, &self.words, width, fit.years, alt));
         flow.put(part);
         flow.gap(fit.gap);
         let part = self
             .heading("handout-ledger", width)
-            .below(1.0, self.sentences(width, |scene| Answer::Page(PageAnswer::ledger(scene))))
+            .below(1.0, self.sentences(width, fit.sentence, |scene| Answer::Page(PageAnswer::ledger(scene))))
             .below(3.0, ledger(scene, &self.words, &self.tags(), width, fit.ledger));
         flow.put(part);
         flow.gap(fit.gap);
-        flow.put(self.trust(width, fit.statements));
+        flow.put(self.trust(width, fit));
         flow.gap(fit.gap);
-        flow.put(self.cautions(width, flow.room(), fit.cautions));
+        let head = self.heading("help-cautions", width);
+        flow.put(cautions(head, &self.words, width, flow.room(), fit.cautions));
         Ok(flow)
     }
 
@@ -233,10 +233,10 @@ impl<'s, 'a> Sheet<'s, 'a> {
     fn canals(&self, width: f64, fit: Fit) -> Block {
         let scene = &self.page.voices[0].scene;
         let alt = self.alt("handout-canals-alt", &Answer::canals(scene));
-        let legend = Node::of(Role::Artifact, canal_legend(0.0, 5.0, scene.changed(), &self.words));
+        let legend = canal_legend(scene.changed(), &self.words, width);
         self.heading("handout-canals", width)
-            .below(1.0, self.sentences(width, Answer::canals))
-            .below(3.0, Block::one(legend, 9.0))
+            .below(1.0, self.sentences(width, fit.sentence, Answer::canals))
+            .below(3.0, legend)
             .below(1.0, strips(scene, &self.words, width, fit.row, alt))
     }
 
@@ -244,9 +244,10 @@ impl<'s, 'a> Sheet<'s, 'a> {
         heading(&self.told(|voice| voice.words.say(id, &[])), width)
     }
 
-    fn sentences(&self, width: f64, answer: impl Fn(&Scene<'_>) -> Answer) -> Block {
+    fn sentences(&self, width: f64, size: f64, answer: impl Fn(&Scene<'_>) -> Answer) -> Block {
         let texts = self.told(|voice| answer(&voice.scene).say(&voice.scene, voice.words));
-        side_by_side(&texts, width, |text, width| paragraph(text, width, SENTENCE, Role::Paragraph))
+        let style = Style { size, ..SENTENCE };
+        side_by_side(&texts, width, |text, width| paragraph(text, width, style, Role::Paragraph))
     }
 
     /// The words of a figure: what it is, and what it shows.
@@ -267,9 +268,9 @@ impl<'s, 'a> Sheet<'s, 'a> {
         let mut block = paragraph(&names.join(" · "), left, title, Role::Heading(1));
         block = block.below(1.0, self.about(left));
         block = block.below(8.0, self.dials(left));
-        let answers = self.told(|voice| Answer::valley(&voice.scene).say(&voice.scene, voice.words));
-        block = block
-            .below(8.0, side_by_side(&answers, left, |text, width| paragraph(text, width, LEAD, Role::Paragraph)));
+        let answers = self.told(|voice| lead(&voice.scene).say(&voice.scene, voice.words));
+        block =
+            block.below(8.0, side_by_side(&answers, left, |text, width| paragraph(text, width, LEAD, Role::Paragraph)));
         let texts = self.told(|voice| Answer::season(&voice.scene).say(&voice.scene, voice.words));
         // What the lead says already is not said again.
         if texts.iter().zip(&answers).all(|(text, lead)| text != lead) {
@@ -300,9 +301,7 @@ impl<'s, 'a> Sheet<'s, 'a> {
             if scene.invented {
                 parts.push(voice.words.say("picture-invented", &[]));
             }
-            if !scene.fitted {
-                parts.push(voice.words.say("picture-not-fitted", &[]));
-            }
+            parts.push(voice.words.say(scene.fitting(), &[]));
             parts.join(" · ")
         });
         let style = Style::new(Face::Regular, 9.0, Ink::Quiet);
@@ -325,23 +324,32 @@ impl<'s, 'a> Sheet<'s, 'a> {
         head.below(3.0, boxes)
     }
 
+    /// The table; in two languages each names the sign in a column of its own, and both share the values.
     fn table(&self, width: f64, size: f64) -> Block {
         let Some(first) = self.page.voices.first() else { return Block::default() };
-        let stacked = |read: &dyn Fn(&SignTable) -> Option<String>| -> Cell {
-            self.page.voices.iter().map(|voice| read(&voice.table).unwrap_or_default()).collect()
+        let row_of = |read: &dyn Fn(&SignTable) -> Option<Vec<String>>| -> Vec<Cell> {
+            let rows: Vec<Vec<String>> =
+                self.page.voices.iter().map(|voice| read(&voice.table).unwrap_or_default()).collect();
+            let said = |at: usize| rows.iter().map(move |row| row.get(at).cloned().unwrap_or_default());
+            let names = said(0).enumerate().map(|(voice, name)| {
+                let mut cell = vec![String::new(); voice];
+                cell.push(name);
+                cell
+            });
+            let values = (1..first.table.heads.len()).map(|at| vec![joined(said(at))]);
+            names.chain(values).collect()
         };
-        let heads: Vec<Cell> =
-            (0..first.table.heads.len()).map(|at| stacked(&|table| table.heads.get(at).cloned())).collect();
-        let rows: Vec<Vec<Cell>> = (0..first.table.rows.len())
-            .map(|row| {
-                (0..heads.len()).map(|at| stacked(&|table| table.rows.get(row)?.get(at).cloned())).collect()
-            })
-            .collect();
+        let heads = row_of(&|table| Some(table.heads.clone()));
+        let rows: Vec<Vec<Cell>> =
+            (0..first.table.rows.len()).map(|row| row_of(&|table| table.rows.get(row).cloned())).collect();
+        // Two names on a line leave less room for each.
+        let names = self.page.voices.len();
+        let size = if names > 1 { size.min(7.2) } else { size };
         let (plain, quiet) = (Style { size, ..BODY }, Style::new(Face::Regular, size, Ink::Quiet));
         let columns: Vec<Column> = (0..heads.len())
-            .map(|at| match (at, heads.len()) {
-                (0, _) => Column { end: End::Left, style: plain },
-                (1, 3..) => Column { end: End::Right, style: quiet },
+            .map(|at| match at {
+                at if at < names => Column { end: End::Left, style: plain },
+                at if at == names && first.table.heads.len() > 2 => Column { end: End::Right, style: quiet },
                 _ => Column { end: End::Right, style: Style { size, ..STRONG } },
             })
             .collect();
@@ -349,16 +357,13 @@ impl<'s, 'a> Sheet<'s, 'a> {
     }
 
     /// How far the page may be trusted: one sentence, then what holds, what holds in part and what does not.
-    fn trust(&self, width: f64, statements: bool) -> Block {
+    fn trust(&self, width: f64, fit: Fit) -> Block {
         let mut block = self
             .heading("handout-trust", width)
-            .below(1.0, self.sentences(width, |scene| Answer::Page(PageAnswer::trust(scene))));
-        let rows = [
-            ("page-yes", "page-trust-direction"),
-            ("page-partly", "page-trust-size"),
-            ("page-no", "page-trust-exact"),
-        ];
-        for (holds, id) in rows.into_iter().filter(|_| statements) {
+            .below(1.0, self.sentences(width, fit.sentence, |scene| Answer::Page(PageAnswer::trust(scene))));
+        let rows =
+            [("page-yes", "page-trust-direction"), ("page-partly", "page-trust-size"), ("page-no", "page-trust-exact")];
+        for (holds, id) in rows.into_iter().filter(|_| fit.statements) {
             let texts = self.told(|voice| {
                 let say = |id: &str| voice.words.say(id, &[]);
                 format!("{}: {}. {}", say(id), say(holds).to_lowercase(), say(&format!("{id}.plain")))
@@ -368,66 +373,6 @@ impl<'s, 'a> Sheet<'s, 'a> {
         }
         block
     }
-
-    /// All cautions, in the largest letters for which there is room.
-    fn cautions(&self, width: f64, room: f64, (form, sizes): (&str, &[f64])) -> Block {
-        let column = column_pt(width, 2);
-        let head = self.heading("help-cautions", width);
-        let mut whole = head.clone();
-        for size in sizes {
-            let style = Style::new(Face::Regular, *size, Ink::Black);
-            let body = if self.words.len() > 1 {
-                self.each_caution(column, form, style)
-            } else {
-                self.in_columns(column, form, style)
-            };
-            whole = head.clone().below(2.0, body);
-            if whole.high <= room {
-                break;
-            }
-        }
-        whole
-    }
-
-    /// One language in two columns of about the same height.
-    fn in_columns(&self, column: f64, form: &str, style: Style) -> Block {
-        let Some(words) = self.words.first() else { return Block::default() };
-        let parts: Vec<Block> = CAUTIONS.iter().map(|id| caution(words, id, form, column, style, None)).collect();
-        let whole: f64 = parts.iter().map(|part| part.high).sum();
-        let (mut left, mut right) = (Block::default(), Block::default());
-        for part in parts {
-            if left.high < whole / 2.0 { left = left.below(2.0, part) } else { right = right.below(2.0, part) }
-        }
-        left.beside(column + GUTTER, right)
-    }
-
-    /// Each caution in both languages, level with each other.
-    fn each_caution(&self, column: f64, form: &str, style: Style) -> Block {
-        let mut body = Block::default();
-        for id in CAUTIONS {
-            let mut row = Block::default();
-            for (index, words) in self.words.iter().enumerate() {
-                let part = caution(words, id, form, column, style, Some(words.tag()));
-                row = row.beside((column + GUTTER) * index as f64, part);
-            }
-            body = body.below(2.0, row);
-        }
-        body
-    }
-}
-
-/// A caution: its title in bold where it is written out, then its text.
-fn caution(words: &Words, id: &str, form: &str, width: f64, style: Style, tag: Option<&str>) -> Block {
-    let text = words.say(&format!("{id}{form}"), &[]);
-    let mut block = if form.is_empty() {
-        paragraph(&text, width, style, Role::Paragraph)
-    } else {
-        let title = Style::new(Face::Bold, style.size, style.ink);
-        let head = paragraph(&words.say(&format!("{id}.title"), &[]), width, title, Role::Heading(3));
-        head.below(0.0, paragraph(&text, width, style, Role::Paragraph))
-    };
-    block.nodes.iter_mut().for_each(|node| node.language = tag.map(str::to_owned));
-    block
 }
 
 fn dial_boxes(dials: &[(String, String)], width: f64, tag: &str) -> Block {
@@ -449,10 +394,8 @@ fn dial_boxes(dials: &[(String, String)], width: f64, tag: &str) -> Block {
         let named = format!("{name}: ");
         let name_at = At::new(x + pad, centred(middle, name_fit));
         let value_at = At::new(x + own - pad, centred(middle, value_style));
-        let pieces = vec![
-            letters(&named, name_at, End::Left, name_fit),
-            letters(value, value_at, End::Right, value_style),
-        ];
+        let pieces =
+            vec![letters(&named, name_at, End::Left, name_fit), letters(value, value_at, End::Right, value_style)];
         nodes.push(Node::of(Role::Paragraph, pieces).in_language(Some(tag.to_owned())));
         x += own + gap;
     }
@@ -461,6 +404,22 @@ fn dial_boxes(dials: &[(String, String)], width: f64, tag: &str) -> Block {
     }
     nodes.insert(0, Node::of(Role::Artifact, ornament));
     Block { nodes, high: y + high }
+}
+
+/// What is said in every language on one line, without what is the same but for its marks.
+fn joined(said: impl Iterator<Item = String>) -> String {
+    let mut parts: Vec<String> = Vec::new();
+    for text in said {
+        if !parts.iter().any(|other| says_the_same(other, &text)) {
+            parts.push(text);
+        }
+    }
+    parts.join(" · ")
+}
+
+/// What the page says first: what changed, or when half of the water is past where nothing did.
+fn lead(scene: &Scene<'_>) -> Answer {
+    if scene.changed() { Answer::valley(scene) } else { Answer::season(scene) }
 }
 
 fn year_name(scene: &Scene<'_>, words: &Words) -> String {
@@ -482,8 +441,7 @@ pub fn qr_text(voice: &ResultVoice<'_>) -> String {
         [] => lines.push(words.say("tell-dials-at-rest", &[])),
         dials => lines.extend(dials.iter().map(|(name, value)| format!("{name}: {value}"))),
     }
-    let mut answers = vec![Answer::valley(scene), Answer::season(scene)];
-    answers.push(Answer::Page(PageAnswer::years(scene)));
+    let mut answers = vec![lead(scene), Answer::season(scene), Answer::Page(PageAnswer::years(scene))];
     answers.dedup();
     lines.extend(answers.iter().map(|answer| answer.say(scene, words)));
     lines.push(words.say("caution-not-a-forecast", &[]));

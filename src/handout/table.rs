@@ -32,7 +32,7 @@ pub(super) struct Table<'t> {
 /// The heads of columns.
 const HEAD: Style = Style::new(Face::Bold, 7.4, Ink::Quiet);
 /// The narrowest that a number may make its column.
-const LEAST: f64 = 30.0;
+const LEAST: f64 = 40.0;
 
 impl Table<'_> {
     /// Lays the table out.
@@ -49,9 +49,10 @@ impl Table<'_> {
             y += self.row(&mut table, row, &widths, y, false);
         }
         // Rules are no rows: they stand beside the table, before it.
-        let (rules, rows): (Vec<Child>, Vec<Child>) = table.children.into_iter().partition(
-            |child| matches!(child, Child::Node(node) if node.role == Role::Artifact),
-        );
+        let (rules, rows): (Vec<Child>, Vec<Child>) = table
+            .children
+            .into_iter()
+            .partition(|child| matches!(child, Child::Node(node) if node.role == Role::Artifact));
         let ornament = Node { role: Role::Section, language: None, children: rules };
         let table = Node { role: Role::Table, language: None, children: rows };
         Block { nodes: vec![ornament, table], high: y }
@@ -64,7 +65,10 @@ impl Table<'_> {
             let cells = self.rows.iter().filter_map(|row| row.get(index)).flatten();
             let widest = cells.map(|line| style.width(line)).fold(LEAST, f64::max);
             // A head breaks in two rather than make its column wide.
-            let heads = self.heads.get(index).into_iter().flatten().map(|line| HEAD.width(line) * 0.66);
+            let heads = self.heads.get(index).into_iter().flatten().map(|line| {
+                // Heads of two languages are long, and their values are not.
+                HEAD.width(line) * if line.contains(" · ") { 0.38 } else { 0.66 }
+            });
             let widest = heads.fold(widest, f64::max);
             let words = self.heads.get(index).into_iter().flatten().flat_map(|line| line.split(' '));
             words.map(|word| HEAD.width(word)).fold(widest, f64::max)
@@ -140,7 +144,7 @@ impl Table<'_> {
 fn broken(cell: &[String], style: Style, width: f64) -> Vec<(String, usize)> {
     let mut lines = Vec::new();
     for (voice, text) in cell.iter().enumerate() {
-        if cell[..voice].iter().any(|other| says_the_same(other, text)) {
+        if text.is_empty() || cell[..voice].iter().any(|other| says_the_same(other, text)) {
             continue;
         }
         lines.extend(style.face.lines(text, style.size, width).into_iter().map(|line| (line, voice)));
@@ -149,7 +153,7 @@ fn broken(cell: &[String], style: Style, width: f64) -> Vec<(String, usize)> {
 }
 
 /// Whether two languages say the same: "67%" and "67 %", "48,600" and "48 600".
-fn says_the_same(one: &str, other: &str) -> bool {
+pub(super) fn says_the_same(one: &str, other: &str) -> bool {
     fn told(text: &str) -> impl Iterator<Item = char> + '_ {
         text.chars().filter(|letter| letter.is_alphanumeric())
     }

@@ -116,7 +116,8 @@ impl File {
     /// A [`NetCdfFault`].
     pub fn bytes(&self) -> Result<Vec<u8>, NetCdfFault> {
         for variable in &self.variables {
-            let lengths = variable.dimensions.iter().map(|index| self.dimensions.get(*index).map(|(_, length)| *length));
+            let lengths =
+                variable.dimensions.iter().map(|index| self.dimensions.get(*index).map(|(_, length)| *length));
             let wanted = lengths.into_iter().try_fold(1_usize, |product, length| product.checked_mul(length?));
             if wanted != Some(variable.values.count()) {
                 return Err(NetCdfFault::Shape(variable.name.clone()));
@@ -189,7 +190,7 @@ fn word(out: &mut Vec<u8>, value: u32) {
 }
 
 fn pad(out: &mut Vec<u8>) {
-    while out.len() % 4 != 0 {
+    while !out.len().is_multiple_of(4) {
         out.push(0);
     }
 }

@@ -144,6 +144,7 @@ pub fn run_file(days: &RunDays) -> File {
             Attribute::text("long_name", "middle of the day"),
             Attribute::text("units", SINCE),
             Attribute::text("calendar", "standard"),
+            Attribute::text("units_metadata", "leap_seconds: none"),
             Attribute::text("axis", "T"),
             Attribute::text("bounds", "time_bounds"),
         ],

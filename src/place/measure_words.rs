@@ -126,10 +126,9 @@ pub fn measure_of_words(name: &str) -> Option<Measure> {
     if is(&["tmean", "tavg", "tmed", "tm", "tas", "tmp", "tprom"]) {
         return Some(Measure::TemperatureMean);
     }
+    let named = words.iter().filter(|word| !["f", "c", "deg", "degf", "degc"].contains(&word.as_str())).count();
     // A bare "minimum" beside no other word that could be measured is a temperature in every station's table.
-    if starts(&["temp", "air", "aire"])
-        || is(&["t"])
-        || (words.len() == 1 && (starts(&LOWEST[..2]) || starts(&HIGHEST[..2])))
+    if starts(&["temp", "air", "aire"]) || is(&["t"]) || (named == 1 && (starts(&LOWEST[..2]) || starts(&HIGHEST[..2])))
     {
         return match extreme() {
             Some(false) => Some(Measure::TemperatureMin),

@@ -92,6 +92,8 @@ pub struct Place {
     pub gauge: Option<Gauge>,
     /// Snow water at a snow station, mm.
     pub snow_record: Option<Series>,
+    /// Elevation of the snow station, m; `None` where the record stands for the whole basin.
+    pub snow_elevation_m: Option<f64>,
     /// Observed storage, hm³.
     pub storage_record: Option<Series>,
     /// Observed flow into canals, m³/s.

@@ -198,6 +198,7 @@ fn place(root: &Section<'_>, source: Source<'_>) -> Option<Place> {
         notes: notes(evaporation_note, &weather, &comparisons),
         gauge: comparisons.gauge.map(|(gauge, _)| gauge),
         snow_record: comparisons.snow.map(|(series, _)| series),
+        snow_elevation_m: comparisons.snow_elevation_m,
         storage_record: comparisons.storage.map(|(series, _)| series),
         diversions: comparisons.diversions.into_iter().map(|(diversion, _)| diversion).collect(),
     })
@@ -279,6 +280,7 @@ fn calendar(root: &Section<'_>, about: &About, weather: Option<&NamedRecord>) ->
 struct Comparisons {
     gauge: Option<(super::Gauge, NamedRecord)>,
     snow: Option<(super::Series, NamedRecord)>,
+    snow_elevation_m: Option<f64>,
     storage: Option<(super::Series, NamedRecord)>,
     diversions: Vec<(Diversion, NamedRecord)>,
 }
@@ -289,9 +291,12 @@ impl Comparisons {
             let section = root.section(key);
             section.present.then(|| series(&section, source, measure)).flatten()
         };
+        let snow = root.section("snow_record");
+        let elevation = if snow.present { snow.number("elevation", METRES, bands::ELEVATION) } else { None };
         Self {
             gauge: gauge(root, source),
-            snow: one("snow_record", Measure::SnowWater),
+            snow: snow.present.then(|| series(&snow, source, Measure::SnowWater)).flatten(),
+            snow_elevation_m: elevation.map(|number| number.value),
             storage: one("storage_record", Measure::Storage),
             diversions: root
                 .sections("diversion_record")

@@ -8,6 +8,7 @@ use super::state::{Act, Card, Done, Focus, Shown, State};
 use super::view::{Shade, Speed};
 use super::year::{Third, YearChoice};
 use crate::picture::views::View as Page;
+use crate::picture::views::grid::reading_name;
 use crate::picture::views::hand::Hand;
 use crate::picture::views::scene::DialSetting;
 use crate::picture::views::setting_list::{SettingLine, SettingList};
@@ -25,6 +26,8 @@ pub struct Told<'a> {
     pub settings: &'a [PlaceSetting],
     /// The names of the offer's languages, in its order.
     pub voices: &'a [String],
+    /// The names of the place's canals and towns, counted downstream.
+    pub gates: &'a [&'a str],
     /// The language.
     pub words: &'a Words,
     /// The second language, where two are spoken.
@@ -88,6 +91,11 @@ fn stands(item: Item, shown: &Shown, told: &Told<'_>) -> String {
     match item {
         Item::Dial(_) | Item::Year | Item::Day => String::new(),
         Item::View => say(&format!("view-{}", Page::ALL[shown.view as usize].key())),
+        Item::MapSign => shown
+            .map
+            .map_or_else(String::new, |map| reading_name(told.offer.map().reading(map), told.gates, told.words)),
+        Item::MapAcross => shown.map.map_or_else(String::new, |map| dial_name(map.across, told.words)),
+        Item::MapUp => shown.map.map_or_else(String::new, |map| dial_name(map.up, told.words)),
         Item::Play if !shown.playing => say("ring-paused"),
         Item::Play => say(match shown.speed {
             Speed::Slow => "ring-slow",
@@ -127,6 +135,7 @@ fn stands(item: Item, shown: &Shown, told: &Told<'_>) -> String {
 fn place(item: Item, shown: &Shown, offer: &Offer) -> Option<(usize, usize)> {
     Some(match item {
         Item::View => (offer.views().iter().position(|view| *view == shown.view)?, offer.views().len()),
+        Item::MapSign | Item::MapAcross | Item::MapUp => shown.map?.place(item, offer.map())?,
         Item::Year => (offer.years().place(shown.year), offer.years().count() + Third::ALL.len()),
         Item::Day => (shown.day.into(), offer.years().days(shown.year_index)?.into()),
         Item::Play => (if shown.playing { 1 + shown.speed as usize } else { 0 }, 1 + Speed::ALL.len()),

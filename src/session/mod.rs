@@ -8,7 +8,8 @@
 //!   already moves the valley.
 //! - **Press** goes out to the *ring*, a circle of everything there is (each dial, then view, year, day, play, keep
 //!   beside, settings, undo, words, language, units, colours, help). On the ring a turn goes from thing to thing and a
-//!   press takes the one at hand. Four of them act at once (keep beside, undo, words, help) and lead straight back to
+//!   press takes the one at hand. While the map of two dials is on show, its number and its two sides are on the ring
+//!   as well. Four of them act at once (keep beside, undo, words, help) and lead straight back to
 //!   the dial in hand. In the list of settings a press does what the entry says; the first entry goes back. A press
 //!   closes a card.
 //! - **Hold** sets everything back as it was, from anywhere: all dials at rest, nothing beside, no card, the year
@@ -44,6 +45,7 @@ pub mod keys;
 pub mod kiosk;
 pub mod knob;
 pub mod lesson;
+mod map;
 mod needs;
 mod offer;
 pub mod point;
@@ -63,6 +65,7 @@ pub use answer::Answers;
 pub use command::Command;
 pub use event::{Event, Target};
 pub use knob::End;
+pub use map::{MapChoice, MapOffer};
 pub use needs::Needs;
 pub use offer::{Offer, OfferFault, OfferInput, Voice};
 pub use refit::Refit;

@@ -3,10 +3,12 @@
 //! The host makes it once from the place, the words and the run as it was. A lesson that allows fewer dials or narrower
 //! ranges makes a narrower offer; the session itself needs to know nothing of lessons for that.
 
+use super::map::MapOffer;
 use super::scale::DialScale;
 use super::setting::{Misfit, NamedSetting};
 use super::view::{Shade, VIEWS, View};
 use super::year::YearList;
+use crate::signs::Reading;
 use crate::water::dials::{DIALS, Dial, DialRange};
 use crate::words::System;
 
@@ -76,6 +78,8 @@ pub struct Offer {
     about_sheets: u8,
     opening_day: u16,
     leap_day: Option<u16>,
+    trust_sheets: u8,
+    map: MapOffer,
 }
 
 impl Offer {
@@ -105,6 +109,7 @@ impl Offer {
         if input.help_pages == 0 {
             return Err(OfferFault::NoHelp);
         }
+        let map = MapOffer::new(scales.iter().flatten().map(DialScale::dial).collect());
         let offer = Self {
             scales,
             years: input.years,
@@ -118,6 +123,8 @@ impl Offer {
             about_sheets: 1,
             opening_day: 0,
             leap_day: None,
+            trust_sheets: 1,
+            map,
         };
         for (index, named) in offer.settings.iter().enumerate() {
             named.setting.fits(&offer).map_err(|misfit| OfferFault::Setting(index, misfit))?;
@@ -139,6 +146,12 @@ impl Offer {
         Self { leap_day: Some(leap_day), ..self }
     }
 
+    /// The same with these numbers for the map of two dials, the first shown first; none leaves them as they are.
+    #[must_use]
+    pub fn with_map_readings(self, readings: Vec<Reading>) -> Self {
+        Self { map: self.map.with_readings(readings), ..self }
+    }
+
     /// The same with those of `settings` that go with it, beside those that it has.
     #[must_use]
     pub fn with_settings(mut self, settings: Vec<NamedSetting>) -> Self {
@@ -152,6 +165,12 @@ impl Offer {
     #[must_use]
     pub fn with_about_sheets(self, sheets: u8) -> Self {
         Self { about_sheets: sheets.max(1), ..self }
+    }
+
+    /// The same with so many sheets of the trust view, likewise.
+    #[must_use]
+    pub fn with_trust_sheets(self, sheets: u8) -> Self {
+        Self { trust_sheets: sheets.max(1), ..self }
     }
 
     /// The same with so many pages of the help card, as the picture counts them for a screen; 0 counts as 1.
@@ -180,6 +199,11 @@ impl Offer {
         self.scales.iter().flatten().map(DialScale::dial)
     }
 
+    /// What the map of two dials can be made of.
+    pub fn map(&self) -> &MapOffer {
+        &self.map
+    }
+
     /// The years.
     pub fn years(&self) -> &YearList {
         &self.years
@@ -190,9 +214,13 @@ impl Offer {
         &self.views
     }
 
-    /// How many sheets a view has; all but about have one.
+    /// How many sheets a view has; all but trust and about have one.
     pub fn sheets(&self, view: View) -> u8 {
-        if view == View::About { self.about_sheets } else { 1 }
+        match view {
+            View::About => self.about_sheets,
+            View::Trust => self.trust_sheets,
+            _ => 1,
+        }
     }
 
     /// How many terms can be explained on a view.

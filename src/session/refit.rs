@@ -49,6 +49,7 @@ impl State {
             shown.view = old.view;
             shown.sheet = old.sheet.min(offer.sheets(old.view) - 1);
         }
+        shown.map = old.map.filter(|map| offer.map().holds(*map)).or(start.map);
         if old.voice < offer.voices().len() {
             shown.voice = old.voice;
         }

@@ -48,6 +48,8 @@ pub fn facts_of<'p>(place: &'p Place, percent_per_degree: Option<f64>, tag: &str
         percent_per_degree,
         rule_key: (!place.valley.gates.is_empty()).then_some(rule),
         filled_values: Some(place.notes.filled_gaps.iter().map(|gaps| gaps.days).sum()),
+        gauged: Some(place.gauge.is_some()),
+        old_fit: false,
     }
 }
 

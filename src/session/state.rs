@@ -2,6 +2,7 @@
 
 use super::event::Event;
 use super::knob::End;
+use super::map::MapChoice;
 use super::needs::Needs;
 use super::offer::Offer;
 use super::ring::{Item, ring};
@@ -100,6 +101,8 @@ pub struct Shown {
     pub view: View,
     /// Its sheet, counted from 0.
     pub sheet: u8,
+    /// What the map of two dials shows; `None` where there are no two.
+    pub map: Option<MapChoice>,
     /// The year, as it was chosen.
     pub year: YearChoice,
     /// The same year, counted from 0 in the whole water years of the record.
@@ -170,6 +173,8 @@ pub enum Invalid {
     Voice,
     /// One of the person's own settings does not fit.
     Own,
+    /// The map shows what is not offered.
+    Map,
     /// An undo would lead to where one may not be.
     Undo,
 }
@@ -190,6 +195,7 @@ impl State {
             done: None,
             view: offer.views()[0],
             sheet: 0,
+            map: offer.map().usual(),
             year,
             year_index,
             day: offer.opening_day().min(last_day),
@@ -221,7 +227,7 @@ impl State {
 
     /// The things on the ring, in order.
     pub fn ring(&self, offer: &Offer) -> impl Iterator<Item = Item> + use<> {
-        ring(offer).into_iter()
+        ring(offer, self.shown.view).into_iter()
     }
 
     /// Brings back a setting of a person's own from an earlier session.
@@ -293,6 +299,8 @@ impl State {
             Invalid::Card,
         )?;
         ensure(offer.views().contains(&shown.view) && shown.sheet < offer.sheets(shown.view), Invalid::View)?;
+        ensure(shown.map.is_some() == offer.map().usual().is_some(), Invalid::Map)?;
+        ensure(shown.map.is_none_or(|map| offer.map().holds(map)), Invalid::Map)?;
         let days = offer.years().days(shown.year_index);
         ensure(offer.years().index(shown.year) == Some(shown.year_index), Invalid::Year)?;
         ensure(days.is_some_and(|days| shown.day < days), Invalid::Year)?;

@@ -27,7 +27,7 @@ impl State {
         }
         let item = match self.shown.focus {
             Focus::Ring(item) => {
-                let ring = ring(offer);
+                let ring = ring(offer, self.shown.view);
                 let place = ring.iter().position(|other| *other == item).unwrap_or(0);
                 let item = ring.get(around(place, ring.len(), turn.steps(LIST))).copied().unwrap_or(item);
                 self.shown.focus = Focus::Ring(item);
@@ -57,6 +57,7 @@ impl State {
             }
             Item::Units if turn.detents % 2 != 0 => self.other_units(),
             Item::Shade => self.step_shade(turn.steps(LIST)),
+            Item::MapSign | Item::MapAcross | Item::MapUp => self.turn_map(item, turn.steps(LIST), offer),
             Item::Units | Item::Keep | Item::Undo | Item::Words | Item::Help => {}
         }
     }

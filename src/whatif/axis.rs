@@ -1,6 +1,6 @@
 //! The values of one dial along one side of a grid.
 
-use crate::water::dials::Dial;
+use crate::water::dials::{Dial, DialRange, Dials};
 
 /// Most values along one side.
 pub const MOST_STOPS: usize = 1000;
@@ -68,6 +68,32 @@ impl Axis {
         Ok(Self { dial, step, values: values.collect() })
     }
 
+    /// The values of `dial` over the whole of a range, `most_values` at most: stops of the dial with rest among them, or
+    /// evenly apart where its step does not meet both ends.
+    ///
+    /// # Errors
+    /// As [`Axis::new`].
+    pub fn over(dial: Dial, range: DialRange, most_values: usize) -> Result<Self, AxisFault> {
+        let DialRange { least, most, step } = range;
+        let rest = Dials::REST.get(dial).unwrap_or(least);
+        let stops = (most - least) / step;
+        let spaces = most_values.clamp(2, MOST_STOPS) as f64 - 1.0;
+        let meets = |apart: f64, step: f64| {
+            let steps = apart / step;
+            (steps - libm::round(steps)).abs() <= SAME_STOP_SHARE
+        };
+        let fewest = libm::ceil(stops / spaces - SAME_STOP_SHARE).max(1.0);
+        if stops <= MOST_STOPS as f64 {
+            for every in fewest as usize..=stops as usize {
+                let wide = step * every as f64;
+                if meets(rest - least, wide) && meets(most - rest, wide) {
+                    return Self::new(dial, least, most, wide);
+                }
+            }
+        }
+        Self::new(dial, least, most, (most - least) / spaces)
+    }
+
     /// The dial.
     pub fn dial(&self) -> Dial {
         self.dial
@@ -96,6 +122,26 @@ mod tests {
         assert_eq!(axis.values(), [-20.0, -10.0, 0.0, 10.0, 20.0]);
         assert!(axis.values()[2].is_sign_positive());
         assert_eq!(Axis::new(Dial::Warming, 0.25, 1.0, 0.25).unwrap().values(), [0.25, 0.5, 0.75, 1.0]);
+    }
+
+    #[test]
+    fn a_range_is_covered_by_stops_of_the_dial_with_rest_among_them() {
+        let over = |dial, least, most, step, count| {
+            Axis::over(dial, DialRange { least, most, step }, count).unwrap().values().to_vec()
+        };
+        assert_eq!(
+            over(Dial::WinterPrecipitation, -40.0, 40.0, 5.0, 9),
+            [-40., -30., -20., -10., 0., 10., 20., 30., 40.]
+        );
+        assert_eq!(over(Dial::Diversion, -25.0, 100.0, 5.0, 9), [-25.0, 0.0, 25.0, 50.0, 75.0, 100.0]);
+        assert_eq!(over(Dial::CanalLining, 0.0, 7.0, 2.0, 3), [0.0, 3.5, 7.0]);
+        for dial in Dial::ALL {
+            let values = over(dial, dial.widest().least, dial.widest().most, dial.widest().step, 13);
+            assert!((3..=13).contains(&values.len()), "{dial:?} {values:?}");
+            assert!(Dials::REST.get(dial).is_none_or(|rest| values.contains(&rest)), "{dial:?} {values:?}");
+        }
+        let endless = DialRange { least: 0.0, most: 6.0, step: 0.0 };
+        assert_eq!(Axis::over(Dial::Warming, endless, 4).unwrap().values(), [0.0, 2.0, 4.0, 6.0]);
     }
 
     #[test]

@@ -33,6 +33,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "crops.ftl",
         "dates.ftl",
         "dials.ftl",
+        "fit.ftl",
+        "grid.ftl",
         "handout.ftl",
         "kiosk.ftl",
         "languages.ftl",
@@ -55,7 +57,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "tell.ftl",
         "terms.ftl",
         "units.ftl",
-        "weather.ftl";
+        "weather.ftl",
+        "wiring.ftl";
     "en-GB":
         "dates.ftl",
         "ledger.ftl",
@@ -73,6 +76,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "crops.ftl",
         "dates.ftl",
         "dials.ftl",
+        "fit.ftl",
+        "grid.ftl",
         "handout.ftl",
         "kiosk.ftl",
         "languages.ftl",
@@ -95,7 +100,8 @@ pub const EMBEDDED: &[LocaleFile] = embedded! {
         "tell.ftl",
         "terms.ftl",
         "units.ftl",
-        "weather.ftl";
+        "weather.ftl",
+        "wiring.ftl";
     "es-AR":
         "numbers.ftl",
         "terms.ftl";

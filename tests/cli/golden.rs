@@ -52,7 +52,7 @@ fn a_setting_and_turns() {
 fn help_and_columns() {
     for language in ["en", "es"] {
         assert_golden(&format!("help-{language}.txt"), &["--help", "--lang", language]);
-        for command in ["tell", "check", "map", "weather"] {
+        for command in ["tell", "check", "map", "weather", "fit", "trust"] {
             assert_golden(&format!("help-{command}-{language}.txt"), &[command, "--help", "--lang", language]);
         }
         assert_golden(&format!("columns-{language}.txt"), &["tell", "--columns", "--lang", language]);

@@ -1,6 +1,7 @@
 //! Drives the real program, each test in a fresh folder.
 
 mod checking;
+mod fit;
 mod golden;
 mod languages;
 mod map;

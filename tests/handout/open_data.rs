@@ -30,7 +30,9 @@ fn the_tables_are_those_of_tell() {
     }
     let gates = canals.len() / days.len();
     assert!(gates > 3 && canals.len() == gates * days.len());
-    for (told, row) in told.iter().zip(canals.chunks_exact(gates)).flat_map(|(told, rows)| rows.iter().map(move |row| (told, row))) {
+    for (told, row) in
+        told.iter().zip(canals.chunks_exact(gates)).flat_map(|(told, rows)| rows.iter().map(move |row| (told, row)))
+    {
         for (column, value) in row.iter().filter(|(column, _)| column.contains("_m3") || column.contains("_hm3")) {
             assert_eq!(&told[&format!("{}_{column}", row["canal"])], value);
         }
@@ -59,7 +61,9 @@ fn the_file_holds_the_numbers_of_tell() {
     let length = |name: &str| file.dimensions.iter().find(|(known, _)| known == name).unwrap().1;
     assert_eq!((length("time"), length("run")), (days, 2));
     let (mut seen, fill) = (0, 9.969_209_968_386_869e36);
-    for (name, variable) in file.variables.iter().filter(|(_, variable)| variable.attributes.contains_key("cell_methods")) {
+    for (name, variable) in
+        file.variables.iter().filter(|(_, variable)| variable.attributes.contains_key("cell_methods"))
+    {
         for attribute in ["units", "long_name", "long_name_es", "coordinates"] {
             assert!(variable.attributes.contains_key(attribute), "{name}: {attribute}");
         }

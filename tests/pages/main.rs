@@ -31,6 +31,7 @@ pub fn facts() -> PlaceFacts<'static> {
         percent_per_degree: Some(3.1),
         rule_key: Some("seniority"),
         filled_values: Some(4),
+        ..PlaceFacts::default()
     }
 }
 
@@ -50,7 +51,7 @@ pub const TESTS: [TestShown; 4] = [
 
 /// A fit with these tests.
 pub fn skill(tests: &[TestShown]) -> Skill<'_> {
-    Skill { fitted_years: (1981, 1992), fitted: Some(0.85), percent_bias: Some(6.2), tests }
+    Skill { fitted_years: (1981, 1992), fitted: Some(0.85), percent_bias: Some(6.2), tests, uses: &[], river: None }
 }
 
 /// Draws one of the pages.

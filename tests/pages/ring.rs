@@ -104,6 +104,7 @@ impl<'a> Table<'a> {
             offer: &self.offer,
             settings: &self.settings,
             voices: &voices,
+            gates: &[],
             words: self.words,
             second: self.second,
             stale: false,

@@ -79,6 +79,9 @@ pub fn random_event(next: &mut impl FnMut() -> f64) -> Event {
     let items = [
         Item::Dial(dial),
         Item::View,
+        Item::MapSign,
+        Item::MapAcross,
+        Item::MapUp,
         Item::Year,
         Item::Day,
         Item::Play,
@@ -91,7 +94,7 @@ pub fn random_event(next: &mut impl FnMut() -> f64) -> Event {
         Item::Shade,
         Item::Help,
     ];
-    let item = items[(next() * 13.0) as usize];
+    let item = items[(next() * 16.0) as usize];
     let target = match (next() * 10.0) as u32 {
         0 => Target::Day((next() * 400.0) as u16),
         1 => Target::Year((next() * 50.0) as usize),

@@ -2,6 +2,7 @@
 
 mod answers;
 mod host;
+mod map;
 mod pointer;
 mod properties;
 mod reach;

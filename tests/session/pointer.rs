@@ -45,8 +45,15 @@ impl Desk<'_> {
     /// The scene of the state.
     fn look<T>(&self, look: impl FnOnce(&Scene<'_>) -> T) -> T {
         let voices = ["English".to_owned(), "español".to_owned(), "English + español".to_owned()];
-        let told =
-            Told { offer: self.offer, settings: &[], voices: &voices, words: self.words, second: None, stale: false };
+        let told = Told {
+            offer: self.offer,
+            settings: &[],
+            voices: &voices,
+            gates: &[],
+            words: self.words,
+            second: None,
+            stale: false,
+        };
         let in_hand = HandTold::of(&self.state, &told);
         let shown = self.state.shown();
         let dials = deshielo::session::scene::settings(self.offer, &shown.dials);

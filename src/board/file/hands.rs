@@ -87,7 +87,8 @@ impl TouchCalibration {
                 return None;
             }
             let along = (i64::from(raw) - i64::from(first)).checked_mul(i64::from(length))?;
-            i32::try_from(along.div_euclid(span)).ok()
+            // Rounded down along the glass, whichever way the raw numbers run.
+            i32::try_from((along * span.signum()).div_euclid(span.abs())).ok()
         };
         Some((place(across, self.left, self.right, width)?, place(down, self.top, self.bottom, height)?))
     }

@@ -11,6 +11,7 @@ mod read_hands;
 mod read_screens;
 mod screens;
 mod units;
+mod wires;
 
 use std::path::Path;
 
@@ -29,6 +30,7 @@ pub use hands::{
 pub use hours::{Idle, Night, NightLight, TimeOfDay};
 pub use pins::Pin;
 pub use screens::{Backlight, MonitorPart, MonitorWay, PanelPart, ScreenPart, SpiAddress, Turned, WordBits};
+pub use wires::{WireEnd, WireTo, WiredPart, Wiring};
 
 /// The GPIO chip where a file names none.
 const USUAL_GPIO_CHIP: &str = "/dev/gpiochip0";

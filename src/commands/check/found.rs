@@ -7,12 +7,13 @@ use super::lessons;
 use crate::board::file::{is_board_file, read_board};
 use crate::commands::built_in;
 use crate::commands::failure::Failure;
+use crate::commands::fitted;
 use crate::commands::places::Named;
 use crate::commands::settings::{self, SettingText};
 use crate::commands::snippets::{Texts, report};
 use crate::commands::speech::Speech;
 use crate::place::problem::{Problem, Severity};
-use crate::place::{DialPlan, read, read_setting};
+use crate::place::{DialPlan, Outcome, read, read_setting};
 use crate::words::{KNOWN_TAGS, Words};
 
 /// A path with everything that was found in it.
@@ -57,7 +58,9 @@ pub(in crate::commands) fn check_one(path: &Path, on: Option<&Path>, speech: &Sp
                     place.files.iter().map(|(file, text)| ((*file).to_owned(), (*text).to_owned())).collect()
                 }
             };
-            Checked { path: shown, problems: read(named.source()).problems, unreadable: Vec::new(), texts }
+            let Outcome { place, mut problems } = read(named.source());
+            problems.extend(place.iter().flat_map(|place| fitted::look(place).1));
+            Checked { path: shown, problems, unreadable: Vec::new(), texts }
         }
         Err(failure) => unreadable(shown, failure),
     }

@@ -4,6 +4,7 @@ mod found;
 mod lessons;
 mod report_json;
 
+#[cfg(feature = "pdf")]
 pub(super) use lessons::{built_in as built_in_lesson, is_lesson};
 
 use std::path::PathBuf;

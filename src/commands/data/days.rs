@@ -11,9 +11,8 @@ const RUNS: [&str; 2] = ["as_it_was", "with_changes"];
 /// Puts the days together.
 pub(super) fn read(told: &Told, history: &str, speech: &Speech) -> RunDays {
     let languages = ["en", "es"].map(|language| speech.in_language(language));
-    let meaning = |topic: &str, key: &str| {
-        [0, 1].map(|index: usize| languages[index].say(&Words::key_id(topic, key), &[]))
-    };
+    let meaning =
+        |topic: &str, key: &str| [0, 1].map(|index: usize| languages[index].say(&Words::key_id(topic, key), &[]));
     let place = &told.place;
     let both = [&told.as_it_was.days, &told.with_changes.days].map(Option::as_ref);
     let [Some(was), Some(with)] = both else { return RunDays::default() };

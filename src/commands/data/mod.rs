@@ -27,7 +27,8 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
     }
     let reading = speech.words.say("progress-reading", &[("path", request.place.display().to_string().into())]);
     let spinner = Spinner::start(reading);
-    let place = places::open(&request.place, speech)?;
+    let opened = places::open_fitted(&request.place, speech)?;
+    let place = &opened.place;
     drop(spinner);
     let words = speech.for_place(&place.region);
     let setting = match &request.setting {
@@ -38,7 +39,7 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
     let dials = turn(start, &request.set, &place.dials, "data", &words)?;
     let asked = request.years.or(setting.as_ref().map(|setting| setting.years));
     let spinner = Spinner::start(words.say("progress-running", &[]));
-    let told = Told::run(place, setting, dials, asked, true, &words)?;
+    let told = Told::run(opened, setting, dials, asked, true, &words)?;
     let days = days::read(&told, &request.history(), speech);
     let files: Vec<(&str, Vec<u8>)> = match request.form {
         Form::NetCdf => {

@@ -17,7 +17,7 @@ use crate::water::dials::Dial;
 use crate::words::{DateStyle, Quantity as Amount, System, Value, Words, nearest};
 
 /// The named values of a guess's line.
-const NAMED: usize = 5;
+const NAMED: usize = 6;
 
 /// Reads the lesson and lays its sheet out.
 pub(super) fn lay_out(place: &Place, name: &Path, request: &Request, voices: &[Words]) -> Result<Document, Failure> {
@@ -118,8 +118,13 @@ impl<'t> Teller<'t> {
         let share = |value: f64| (value - least) / (most - least);
         let mark = |value: f64| ScaleMark { share: share(value), text: self.value(&guess.reading, value) };
         // Named values stand on stops of the knob, evenly where that works out.
-        let every = (1..=steps).find(|every| steps % every == 0 && steps / every < NAMED).unwrap_or(steps);
-        let named = (0..=steps).step_by(every).filter_map(|stop| guess.value(u8::try_from(stop).ok()?)).map(mark);
+        let even = (1..steps).find(|every| steps.is_multiple_of(*every) && steps / every < NAMED);
+        let every = even.unwrap_or_else(|| steps.div_ceil(NAMED - 2).max(1));
+        // A last piece that is short would crowd the name before it.
+        let stops =
+            (0..=steps).step_by(every).filter(|stop| *stop == 0 || (steps - stop) * 2 >= every || *stop == steps);
+        let ends = stops.filter(|stop| *stop < steps).chain([steps]);
+        let named = ends.filter_map(|stop| guess.value(u8::try_from(stop).ok()?)).map(mark);
         let is_key = kind == SheetKind::Key;
         GuessScale {
             question: self.question(&guess.reading),
@@ -167,7 +172,9 @@ impl<'t> Teller<'t> {
                 let month = self.place.valley.water_year_start_month;
                 words.date(mean_date(value, month), DateStyle::Short)
             }
-            Quantity::Days if matches!(reading.measure.quantity(), Quantity::Date) => words.days_change(libm::round(value) as i32),
+            Quantity::Days if matches!(reading.measure.quantity(), Quantity::Date) => {
+                words.days_change(libm::round(value) as i32)
+            }
             Quantity::Days => signed(words.say("days-count", &[("n", Value::Number(value, 0))])),
             Quantity::Years => signed(words.say("years-count", &[("n", Value::Number(value, 0))])),
             Quantity::Share if reading.shape == Shape::Change => {

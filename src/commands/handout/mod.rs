@@ -26,13 +26,13 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
     check_target(Some(&request.out), words)?;
     let reading = words.say("progress-reading", &[("path", request.place.display().to_string().into())]);
     let spinner = Spinner::start(reading);
-    let place = places::open(&request.place, speech)?;
+    let opened = places::open_fitted(&request.place, speech)?;
     drop(spinner);
-    let voices = voices(speech, &place.region);
+    let voices = voices(speech, &opened.place.region);
     let spinner = Spinner::start(words.say("progress-running", &[]));
     let document = match &request.lesson {
-        Some(name) => lesson::lay_out(&place, name, &request, &voices)?,
-        None => result::lay_out(place, &request, &voices)?,
+        Some(name) => lesson::lay_out(&opened.place, name, &request, &voices)?,
+        None => result::lay_out(opened, &request, &voices)?,
     };
     let bytes = written(&document, request.form, words)?;
     drop(spinner);

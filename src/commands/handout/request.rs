@@ -123,7 +123,10 @@ mod tests {
     #[test]
     fn the_name_says_the_form() {
         let form = |name: &str| form_of(Path::new(name));
-        assert_eq!((form("a.pdf"), form("b/c.PNG"), form("d.svg")), (Some(Form::Pdf), Some(Form::Png), Some(Form::Svg)));
+        assert_eq!(
+            (form("a.pdf"), form("b/c.PNG"), form("d.svg")),
+            (Some(Form::Pdf), Some(Form::Png), Some(Form::Svg))
+        );
         assert_eq!((form("a"), form("a.doc"), form(".pdf")), (None, None, None));
     }
 }

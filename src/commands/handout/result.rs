@@ -3,11 +3,14 @@
 use super::request::Request;
 use super::settings;
 use crate::commands::failure::Failure;
+use crate::commands::places::Opened;
+use crate::commands::show::skill::OwnSkill;
 use crate::commands::tell::dials::{say_value, turn};
 use crate::commands::tell::{Told, sign_rows, usual_system};
 use crate::handout::{Document, Paper, QrFault, ResultPage, ResultVoice, SignTable};
+use crate::picture::views::facts::PlaceFacts;
 use crate::picture::views::scene::{DialSetting, Scene, YearKind};
-use crate::place::{Place, UnitSystem, Years};
+use crate::place::{UnitSystem, Years};
 use crate::session::answer::{AnswerFault, Asked, Source};
 use crate::session::scene::{Moment, PlaceTold, Stage, facts_of};
 use crate::session::{Answers, Third, YearChoice, YearList};
@@ -21,8 +24,10 @@ struct Year {
 }
 
 /// Runs the place and lays the page out.
-pub(super) fn lay_out(place: Place, request: &Request, voices: &[Words]) -> Result<Document, Failure> {
+pub(super) fn lay_out(opened: Opened, request: &Request, voices: &[Words]) -> Result<Document, Failure> {
     let Some(words) = voices.first() else { return Err(Failure::Input(Vec::new())) };
+    let Opened { place, fit } = opened;
+    let skill = OwnSkill::of(&place, fit.as_ref());
     let no_run = || Failure::input(words.say("show-no-answer", &[]));
     let setting = match &request.setting {
         Some(name) => Some(settings::open(name, &place.dials, words)?),
@@ -40,7 +45,7 @@ pub(super) fn lay_out(place: Place, request: &Request, voices: &[Words]) -> Resu
     answers.finish(&source).map_err(|fault| refused(fault, words))?;
     // The table is about the year of the charts unless others were asked for.
     let told_years = asked.unwrap_or(Years::Span(water_year, water_year));
-    let told = Told::run(place, setting, dials, Some(told_years), false, words)?;
+    let told = Told::run(Opened { place, fit }, setting, dials, Some(told_years), false, words)?;
     let system = request.units.unwrap_or_else(|| usual_system(&told.place));
     let paper = request.paper.unwrap_or(match told.place.units {
         UnitSystem::Metric => Paper::A4,
@@ -50,10 +55,8 @@ pub(super) fn lay_out(place: Place, request: &Request, voices: &[Words]) -> Resu
     let source = Source { valley: &place.valley, calendar: &place.calendar, record: &place.days };
     let settings: Vec<DialSetting> =
         place.dials.open().map(|(dial, range)| DialSetting { dial, value: dials.get(dial), range }).collect();
-    let names: Vec<Vec<&str>> = voices
-        .iter()
-        .map(|words| place.gates.iter().map(|gate| gate.name.get(words.tag())).collect())
-        .collect();
+    let names: Vec<Vec<&str>> =
+        voices.iter().map(|words| place.gates.iter().map(|gate| gate.name.get(words.tag())).collect()).collect();
     let stages: Vec<Stage<'_>> = voices
         .iter()
         .zip(&names)
@@ -61,8 +64,7 @@ pub(super) fn lay_out(place: Place, request: &Request, voices: &[Words]) -> Resu
             let told = PlaceTold {
                 name: place.name.get(words.tag()),
                 invented: place.invented,
-                // No place holds a fit to its gauge yet.
-                fitted: false,
+                fitted: told.fit.is_some(),
                 gate_names: names,
             };
             Stage::new(told, &source, &answers)
@@ -82,7 +84,9 @@ pub(super) fn lay_out(place: Place, request: &Request, voices: &[Words]) -> Resu
             doubt: None,
         };
         let facts = facts_of(place, told.percent_per_degree, words.tag());
-        let scene = Scene { facts, ..stage.scene(props, moment) };
+        let facts = PlaceFacts { old_fit: told.fit.as_ref().is_some_and(|fit| fit.stale), ..facts };
+        let skill = skill.as_ref().map(OwnSkill::shown);
+        let scene = Scene { facts, skill, ..stage.scene(props, moment) };
         let (heads, rows) = sign_rows(&told, system, words);
         ResultVoice { words, scene, dials: turned(&dials, system, words), table: SignTable { heads, rows } }
     });
@@ -90,9 +94,7 @@ pub(super) fn lay_out(place: Place, request: &Request, voices: &[Words]) -> Resu
     match page.lay_out() {
         Ok(Some(document)) => Ok(document),
         Ok(None) => Err(no_run()),
-        Err(QrFault::TooLong(bytes)) => {
-            Err(Failure::input(words.say("handout-code-too-long", &[("n", bytes.into())])))
-        }
+        Err(QrFault::TooLong(bytes)) => Err(Failure::input(words.say("handout-code-too-long", &[("n", bytes.into())]))),
     }
 }
 

@@ -10,7 +10,7 @@ use clap::ArgMatches;
 
 use super::failure::Failure;
 use super::output::{check_target, deliver};
-use super::places;
+use super::places::{self, Opened};
 use super::speech::Speech;
 use super::spinner::Spinner;
 use super::tell::{dials, years, years_at_rest};
@@ -27,10 +27,10 @@ use sheet::{Part, Sheet, Side, YearsShown};
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
     let request = Request::read(matches, &speech.words)?;
     check_target(request.out.as_deref(), &speech.words)?;
-    let place = {
+    let Opened { place, fit } = {
         let path = request.place.display().to_string();
         let _spinner = Spinner::start(speech.words.say("progress-reading", &[("path", path.into())]));
-        places::open(&request.place, speech)?
+        places::open_fitted(&request.place, speech)?
     };
     let words = speech.for_place(&place.region);
     let sheet =
@@ -40,7 +40,7 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
         Form::Json => sheet.to_json().into_bytes(),
         Form::Png(wide, high) => {
             let reading = reading(&sheet.sign, sheet.canal.as_deref(), &place, &words)?;
-            picture::png(&sheet, reading, &place, request.units, (wide, high), &words)?
+            picture::png(&sheet, reading, &place, request.units, (wide, high), fit.as_ref(), &words)?
         }
     };
     deliver(&answer, request.out.as_deref(), &words)

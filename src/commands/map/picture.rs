@@ -4,14 +4,17 @@ use embedded_graphics::pixelcolor::{Rgb565, RgbColor};
 
 use super::sheet::Sheet;
 use crate::commands::failure::Failure;
+use crate::commands::fitted::PlaceFit;
 use crate::commands::tell::usual_system;
+use crate::picture::views::Scene;
+use crate::picture::views::facts::PlaceFacts;
 use crate::picture::views::grid::{Cell, GridShown, SideShown, draw};
 use crate::picture::views::scene::{DialSetting, YearKind};
 use crate::picture::{Canvas, Theme};
 use crate::place::Place;
 use crate::session::Answers;
 use crate::session::answer::Source;
-use crate::session::scene::{Moment, PlaceTold, Stage};
+use crate::session::scene::{Moment, PlaceTold, Stage, facts_of};
 use crate::signs::Reading;
 use crate::words::{System, Words};
 
@@ -22,14 +25,15 @@ pub(super) fn png(
     place: &Place,
     units: Option<System>,
     (wide, high): (u16, u16),
+    fit: Option<&PlaceFit>,
     words: &Words,
 ) -> Result<Vec<u8>, Failure> {
     let failed = || Failure::input(words.say("error-png-failed", &[]));
     let source = Source { valley: &place.valley, calendar: &place.calendar, record: &place.days };
     let answers = Answers::new(&source).map_err(|_| failed())?;
     let names: Vec<&str> = place.gates.iter().map(|gate| gate.name.get(words.tag())).collect();
-    let told =
-        PlaceTold { name: place.name.get(words.tag()), invented: place.invented, fitted: false, gate_names: &names };
+    let (name, fitted) = (place.name.get(words.tag()), fit.is_some());
+    let told = PlaceTold { name, invented: place.invented, fitted, gate_names: &names };
     let stage = Stage::new(told, &source, &answers);
     let props = stage.props();
     let dials: Vec<DialSetting> =
@@ -45,7 +49,8 @@ pub(super) fn png(
         second: None,
         doubt: None,
     };
-    let scene = stage.scene(&props, moment);
+    let facts = PlaceFacts { old_fit: fit.is_some_and(|fit| fit.stale), ..facts_of(place, None, words.tag()) };
+    let scene = Scene { facts, ..stage.scene(&props, moment) };
     let (Some(across), Some(up)) = (sheet.dial(0), sheet.dial(1)) else { return Err(failed()) };
     let cells: Vec<Cell> = sheet.values.iter().map(|value| Cell::from(*value)).collect();
     let grid = GridShown {

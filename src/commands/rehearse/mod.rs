@@ -75,8 +75,8 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
 }
 
 fn player(speech: &Speech, request: &Request, voice: usize) -> Result<Player, Failure> {
-    let place = places::open(&request.place, speech)?;
-    let mut player = Player::new(place, speech, Shade::Light, None)?;
+    let opened = places::open_fitted(&request.place, speech)?;
+    let mut player = Player::new(opened, speech, Shade::Light, None)?;
     if let Some(groups) = request.groups {
         player.ask_groups(groups);
     }

@@ -17,7 +17,7 @@ use crate::words::{KNOWN_TAGS, Words};
 const MONITOR: FrameSize = LAYOUTS[5];
 
 /// Reads the board file; mistakes refuse it, and all of them are told.
-pub(super) fn read(path: &Path, words: &Words) -> Result<BoardFile, Failure> {
+pub(in crate::commands) fn read(path: &Path, words: &Words) -> Result<BoardFile, Failure> {
     let SettingText { file, text } = read_text(path, words)?;
     let outcome = read_board(&file, &text, &KNOWN_TAGS);
     let shown = [(file.to_string_lossy().into_owned(), text)];

@@ -5,8 +5,9 @@ use embedded_graphics::pixelcolor::{Rgb565, RgbColor};
 use embedded_graphics::primitives::Rectangle;
 
 use crate::board::{Frame, FrameSize, PlacedText, PlacedTexts};
+use crate::picture::views::grid::GridShown;
 use crate::picture::views::{
-    Scene, View as Page, about, canals, help, ledger, many_years, season, setting_list, term, trust, valley,
+    Scene, View as Page, about, canals, grid, help, ledger, many_years, season, setting_list, term, trust, valley,
 };
 use crate::picture::{Canvas, Theme};
 use crate::session::help::key_lines;
@@ -14,8 +15,8 @@ use crate::session::{Card, Explained, Shade, View};
 use crate::words::Words;
 
 /// The views that can be drawn.
-pub(super) const VIEWS: [View; 7] =
-    [View::Valley, View::Season, View::Canals, View::Ledger, View::Years, View::Trust, View::About];
+pub(super) const VIEWS: [View; 8] =
+    [View::Valley, View::Season, View::Canals, View::Ledger, View::Years, View::Grid, View::Trust, View::About];
 
 /// The page that draws a view.
 pub(super) fn page(view: View) -> Page {
@@ -24,6 +25,17 @@ pub(super) fn page(view: View) -> Page {
 
 /// The language, and the second one where two are spoken.
 type Speech<'w> = (&'w Words, Option<&'w Words>);
+
+/// What is drawn.
+#[derive(Clone, Copy, Debug)]
+pub(super) struct Shows<'a> {
+    /// The view.
+    pub view: View,
+    /// The card over it.
+    pub card: Option<Card>,
+    /// The map of two dials, which its own view needs.
+    pub map: Option<&'a GridShown<'a>>,
+}
 
 /// A frame that was drawn.
 #[derive(Debug)]
@@ -57,9 +69,10 @@ impl Drawing {
         self.size == size && self.with_texts == with_texts
     }
 
-    /// Draws a view of the scene and the card over it.
-    pub fn draw(&mut self, view: View, card: Option<Card>, scene: &Scene<'_>, shade: Shade, speech: Speech<'_>) {
+    /// Draws a view of the scene, or the map of two dials, and the card over it.
+    pub fn draw(&mut self, page: Shows<'_>, scene: &Scene<'_>, shade: Shade, speech: Speech<'_>) {
         let (words, _) = speech;
+        let Shows { view, card, map } = page;
         let (mut texts, mut over) = (PlacedTexts::default(), PlacedTexts::default());
         let rows = self.size.height - self.foot;
         let pixels = &mut self.pixels[..usize::from(rows) * usize::from(self.size.width)];
@@ -70,16 +83,21 @@ impl Drawing {
             canvas = canvas.with_witness(&mut texts);
         }
         let theme = theme(shade);
-        match view {
-            View::Season => season::draw(&mut canvas, scene, theme, words),
-            View::Canals => canals::draw(&mut canvas, scene, theme, words),
-            View::Ledger => ledger::draw(&mut canvas, scene, theme, words),
-            View::Years => many_years::draw(&mut canvas, scene, theme, words),
-            View::Trust => trust::draw(&mut canvas, scene, theme, words),
-            View::About => about::draw(&mut canvas, scene, theme, words),
+        match (view, map) {
+            (View::Grid, Some(map)) => grid::draw(&mut canvas, scene, map, theme, words),
+            (View::Season, _) => season::draw(&mut canvas, scene, theme, words),
+            (View::Canals, _) => canals::draw(&mut canvas, scene, theme, words),
+            (View::Ledger, _) => ledger::draw(&mut canvas, scene, theme, words),
+            (View::Years, _) => many_years::draw(&mut canvas, scene, theme, words),
+            (View::Trust, _) => trust::draw(&mut canvas, scene, theme, words),
+            (View::About, _) => about::draw(&mut canvas, scene, theme, words),
             _ => valley::draw(&mut canvas, scene, theme, words),
         }
-        let sheets = if view == View::About { about::sheet_count(&canvas, scene, words) } else { 1 };
+        let sheets = match view {
+            View::About => about::sheet_count(&canvas, scene, words),
+            View::Trust => trust::sheet_count(&canvas, scene, words),
+            _ => 1,
+        };
         if let Some(card) = card {
             if self.with_texts {
                 canvas = canvas.with_witness(&mut over);

@@ -4,6 +4,7 @@ use std::time::Duration;
 
 use crate::board::{HandEvent, Key};
 use crate::session::{self, Event};
+use crate::water::dials::{DIALS, Dial};
 
 /// Turns the time between events into whole milliseconds without losing the rest.
 #[derive(Debug, Default)]
@@ -13,6 +14,9 @@ pub(super) struct Clock {
     since_turn: Option<Duration>,
     /// What the first turn of those that came at once was told, and how many they are by now.
     at_once: (u32, u32),
+    /// Time since the beginning, and when each dial with an encoder of its own was turned last.
+    now: Duration,
+    dial_turned: [Option<Duration>; DIALS],
 }
 
 /// No hand turns so fast: turns that come closer were waiting while something else was done, and share the time before
@@ -26,6 +30,7 @@ impl Clock {
             HandEvent::Time(gone_by) => {
                 self.since_turn = self.since_turn.map(|since| since.saturating_add(gone_by));
                 self.rest = self.rest.saturating_add(gone_by);
+                self.now = self.now.saturating_add(gone_by);
                 let elapsed_ms = whole_ms(self.rest);
                 self.rest = self.rest.saturating_sub(Duration::from_millis(elapsed_ms.into()));
                 Event::Tick { elapsed_ms }
@@ -40,6 +45,13 @@ impl Clock {
                 let since_ms = if first == u32::MAX { first } else { first / count };
                 Event::Turn { detents, since_ms }
             }
+            HandEvent::TurnDial { dial, detents } => {
+                let before = Dial::ALL.iter().position(|other| *other == dial).map(|at| &mut self.dial_turned[at]);
+                let turned = before.and_then(|before| before.replace(self.now));
+                let since_ms = turned.map_or(u32::MAX, |turned| whole_ms(self.now.saturating_sub(turned)));
+                Event::TurnDial { dial, detents, since_ms }
+            }
+            HandEvent::SetDial { dial, share } => Event::SetDial { dial, share },
             HandEvent::Press => Event::Press,
             HandEvent::LongPress => Event::LongPress,
             HandEvent::Key(key) => Event::Key(session_key(key)?),
@@ -96,6 +108,20 @@ mod tests {
         clock.event(HandEvent::Key(Key::End));
         clock.event(HandEvent::Time(Duration::from_millis(2)));
         assert_eq!(clock.event(HandEvent::Turn(-2)), Some(Event::Turn { detents: -2, since_ms: 42 }));
+    }
+
+    #[test]
+    fn dials_with_knobs_of_their_own_have_a_time_of_their_own() {
+        let mut clock = Clock::default();
+        let turn = |dial, since_ms| Some(Event::TurnDial { dial, detents: 1, since_ms });
+        let turned = |dial| HandEvent::TurnDial { dial, detents: 1 };
+        assert_eq!(clock.event(turned(Dial::Warming)), turn(Dial::Warming, u32::MAX));
+        clock.event(HandEvent::Time(Duration::from_millis(30)));
+        assert_eq!(clock.event(turned(Dial::Diversion)), turn(Dial::Diversion, u32::MAX));
+        clock.event(HandEvent::Time(Duration::from_millis(20)));
+        assert_eq!(clock.event(turned(Dial::Warming)), turn(Dial::Warming, 50));
+        let share = Event::SetDial { dial: Dial::TownGrowth, share: 0.25 };
+        assert_eq!(clock.event(HandEvent::SetDial { dial: Dial::TownGrowth, share: 0.25 }), Some(share));
     }
 
     #[test]

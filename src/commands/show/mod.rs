@@ -1,14 +1,18 @@
 //! `show`: the running instrument on whatever screens are at hand, or as pictures in a folder.
 
 mod board;
+mod board_hands;
+mod doubt;
 mod drawing;
 mod droughts;
 mod hands;
 mod kiosk;
 mod leading;
+mod mapping;
 mod pictures;
 mod player;
 mod request;
+pub(super) mod skill;
 
 use clap::ArgMatches;
 
@@ -24,12 +28,13 @@ use crate::board::terminal::{Ability, Terminal};
 use crate::board::{Choice, FrameSize, Instrument, Post, ScreenError, ScreenKind, Stage, run as play};
 use crate::session::View;
 use crate::words::Words;
+pub(super) use board::read as read_board_file;
+pub(super) use board_hands::{hand_name, parts, state_words};
 use kiosk::KioskPlayer;
 pub(super) use kiosk::note_words;
 pub(super) use leading::LessonText;
 pub(super) use player::Player;
-use request::Request;
-pub(super) use request::groups;
+pub(super) use request::{Request, groups};
 
 /// Opens the place and shows it.
 pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> {
@@ -88,10 +93,10 @@ fn show_chosen(choice: Choice, player: Player, speech: &Speech, request: &Reques
 fn open(speech: &Speech, request: &Request) -> Result<Player, Failure> {
     let reading = speech.words.say("progress-reading", &[("path", request.place.display().to_string().into())]);
     let spinner = Spinner::start(reading);
-    let place = places::open(&request.place, speech)?;
+    let opened = places::open_fitted(&request.place, speech)?;
     drop(spinner);
     let _spinner = Spinner::start(speech.words.say("progress-running", &[]));
-    let mut player = Player::new(place, speech, request.shade, request.units)?;
+    let mut player = Player::new(opened, speech, request.shade, request.units)?;
     if let Some(groups) = request.groups {
         player.ask_groups(groups);
     }
@@ -137,23 +142,58 @@ fn show_on(screens: &[ScreenKind], player: Player, speech: &Speech, request: &Re
     play_on(Stage::new(player), screens, (windows, terminals), speech, request)
 }
 
+/// Plays another instrument than the session on the screens asked for; `start_hands` starts the hands of the board.
+pub(super) fn play_instrument<I: Instrument + 'static>(
+    instrument: I,
+    screens: &[ScreenKind],
+    speech: &Speech,
+    request: &Request,
+    start_hands: StartHands<'_>,
+) -> Result<(), Failure> {
+    let asked = |kind| screens.iter().filter(move |&&screen| screen == kind).count();
+    let counts = (asked(ScreenKind::Window), asked(ScreenKind::Terminal));
+    play_with(Stage::new(instrument), screens, counts, speech, request, start_hands)
+        .map_err(|trouble| trouble.told(&speech.words))
+}
+
+/// Starts the hands of a board, which put their events into a post.
+pub(super) type StartHands<'a> = &'a dyn Fn(&Post);
+
 fn play_on<I: Instrument + 'static>(
+    stage: Stage<I>,
+    screens: &[ScreenKind],
+    counts: (usize, usize),
+    speech: &Speech,
+    request: &Request,
+) -> Result<(), Trouble> {
+    let start_hands = |post: &Post| {
+        if let Some(board) = &request.board {
+            board_hands::start(board, post, &speech.words);
+        }
+    };
+    play_with(stage, screens, counts, speech, request, &start_hands)
+}
+
+fn play_with<I: Instrument + 'static>(
     mut stage: Stage<I>,
     screens: &[ScreenKind],
     (windows, terminals): (usize, usize),
     speech: &Speech,
     request: &Request,
+    start_hands: StartHands<'_>,
 ) -> Result<(), Trouble> {
     let on_board = add_board_screens(&mut stage, screens, speech, request)?;
     if windows > 0 {
-        return show_in_windows(stage, windows, terminals > 0, request.size);
+        return show_in_windows(stage, windows, terminals > 0, request.size, start_hands);
     }
     if terminals > 0 {
         let (post, hands) = Post::channel();
         stage.add(Box::new(terminal(None, request.size, &post)?));
+        start_hands(&post);
         play(&mut stage, &hands)?;
     } else if on_board {
-        let (_post, hands) = Post::channel();
+        let (post, hands) = Post::channel();
+        start_hands(&post);
         play(&mut stage, &hands)?;
     }
     Ok(())
@@ -186,8 +226,10 @@ fn show_in_windows<I: Instrument + 'static>(
     windows: usize,
     with_terminal: bool,
     size: Option<FrameSize>,
+    start_hands: StartHands<'_>,
 ) -> Result<(), Trouble> {
     let desk = crate::board::window::Desk::open()?;
+    start_hands(&desk.post());
     if with_terminal {
         // The terminal is the presenter's, the window the room's, each in its own size.
         stage.add(Box::new(terminal(None, None, &desk.post())?));
@@ -197,7 +239,7 @@ fn show_in_windows<I: Instrument + 'static>(
 }
 
 #[cfg(not(feature = "window"))]
-fn show_in_windows<I>(_: Stage<I>, _: usize, _: bool, _: Option<FrameSize>) -> Result<(), Trouble> {
+fn show_in_windows<I>(_: Stage<I>, _: usize, _: bool, _: Option<FrameSize>, _: StartHands<'_>) -> Result<(), Trouble> {
     Err(ScreenError::new(ScreenKind::Window, "not built").into())
 }
 

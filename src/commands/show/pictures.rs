@@ -10,7 +10,7 @@ use crate::board::{FrameSize, Instrument};
 use crate::commands::failure::Failure;
 use crate::commands::output::reason;
 use crate::commands::tell_standard_error;
-use crate::session::{Command, Event};
+use crate::session::{Command, Event, View};
 use crate::words::Words;
 
 /// Where pictures go when nobody says.
@@ -26,9 +26,11 @@ pub(super) fn write(player: &mut Player, request: &Request, words: &Words) -> Re
     if request.one_language {
         languages.truncate(1);
     }
+    let views: Vec<View> = VIEWS.into_iter().filter(|view| player.offers(*view)).collect();
     let mut count = 0_u32;
+    player.wait_for_doubts();
     for language in &languages {
-        for view in VIEWS {
+        for view in views.iter().copied() {
             player.step(Event::Command(Command::Show(view)));
             player.settle();
             // How many sheets there are shows when the first is drawn.

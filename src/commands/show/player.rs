@@ -1,17 +1,23 @@
 //! The instrument that is played: a place, the session on it, the answers of the water, and the frames of the views.
 
+use std::sync::Arc;
 use std::time::{Duration, Instant};
 
 use embedded_graphics::geometry::{Point, Size};
 
-use super::drawing::{Drawing, VIEWS, page};
+use super::doubt::Doubts;
+use super::drawing::{Drawing, Shows, VIEWS, page};
 use super::droughts::with_droughts;
 use super::hands::Clock;
 use super::leading::{LessonText, shelf};
+use super::mapping::{self, Mapper};
+use super::skill::OwnSkill;
 use crate::board::{Caption, Frame, FrameSize, HandEvent, Instrument, PointerPhase};
 use crate::commands::failure::Failure;
+use crate::commands::places::Opened;
 use crate::commands::speech::Speech;
 use crate::commands::tell::usual_system;
+use crate::picture::views::facts::PlaceFacts;
 use crate::picture::views::hand::Hand;
 use crate::picture::views::{Scene, help, term};
 use crate::place::{Place, Setting};
@@ -29,14 +35,20 @@ const LANGUAGES: [&str; 2] = ["en", "es"];
 
 /// A session under way.
 pub(in crate::commands) struct Player {
-    pub(super) place: Place,
+    pub(super) place: Arc<Place>,
+    /// Whether the fit in use is stale; `None` without one.
+    fit: Option<bool>,
+    skill: Option<OwnSkill>,
+    /// How far the answer may be off; `None` without an ensemble.
+    doubts: Option<Doubts>,
     percent_per_degree: Option<f64>,
     pub(super) offer: Offer,
     /// What the settings of the offer are called.
     settings: Vec<Setting>,
     voice_names: Vec<String>,
     pub(super) state: State,
-    answers: Answers,
+    pub(super) answers: Answers,
+    pub(super) mapper: Mapper,
     /// One entry for each voice of the offer: the first language and the second, if there are two.
     pub(super) voices: Vec<(Words, Option<Words>)>,
     clock: Clock,
@@ -63,7 +75,10 @@ pub(in crate::commands) struct Player {
 
 impl Player {
     /// A session at rest on that place.
-    pub fn new(place: Place, speech: &Speech, shade: Shade, units: Option<System>) -> Result<Self, Failure> {
+    pub fn new(opened: Opened, speech: &Speech, shade: Shade, units: Option<System>) -> Result<Self, Failure> {
+        let Opened { place, fit } = opened;
+        let skill = OwnSkill::of(&place, fit.as_ref());
+        let doubts = fit.as_ref().and_then(|fit| Doubts::new(&fit.sets, &place.calendar, &place.days));
         let source = Source { valley: &place.valley, calendar: &place.calendar, record: &place.days };
         let no_run = || Failure::input(speech.words.say("show-no-answer", &[]));
         let answers = Answers::new(&source).map_err(|_| no_run())?;
@@ -76,7 +91,7 @@ impl Player {
         let offer = Offer::new(OfferInput {
             dials: place.dials.open().collect(),
             years,
-            views: VIEWS.into_iter().chain([View::Lesson]).collect(),
+            views: views(&place),
             terms: View::ALL.map(|view| term::terms(page(view)).len() as u16),
             voices: tags.collect(),
             system: units.unwrap_or_else(|| usual_system(&place)),
@@ -86,7 +101,8 @@ impl Player {
         })
         .map_err(|_| no_run())?;
         let (offer, settings) = with_droughts(offer, &place.dials, &answers.rest().run.years);
-        let mut offer = offer.with_opening_day(survey_day(&place, &answers.rest().year));
+        let readings = mapping::readings(&place, &answers.rest().run.years);
+        let mut offer = offer.with_map_readings(readings).with_opening_day(survey_day(&place, &answers.rest().year));
         if let Some(leap) = place.calendar.iter().find(|day| (day.month_day.month, day.month_day.day) == (2, 29)) {
             offer = offer.with_leap_day(leap.day_of_water_year - 1);
         }
@@ -96,13 +112,17 @@ impl Player {
         let state = State::new(&offer);
         let (shelf, entries) = shelf(&place, &LessonText::built_in()).into_iter().unzip();
         Ok(Self {
-            place,
+            fit: fit.map(|fit| fit.stale),
+            skill,
+            doubts,
+            place: Arc::new(place),
             percent_per_degree,
             settings,
             voice_names,
             offer,
             state,
             answers,
+            mapper: Mapper::default(),
             voices,
             clock: Clock::default(),
             drawings: Vec::new(),
@@ -145,6 +165,11 @@ impl Player {
     pub fn languages(&self) -> Vec<String> {
         let single = self.voices.iter().filter(|(_, second)| second.is_none());
         single.map(|(words, _)| words.tag().to_owned()).collect()
+    }
+
+    /// Whether it can show that view.
+    pub fn offers(&self, view: View) -> bool {
+        self.offer.views().contains(&view)
     }
 
     /// How many sheets the view on show has, as it was last drawn in this size.
@@ -195,6 +220,23 @@ impl Player {
     pub fn settle(&mut self) {
         self.may_work = true;
         self.ask_water();
+        self.ask_map();
+        if self.mapper.wait() {
+            self.stamp += 1;
+        }
+    }
+
+    /// Asks for the map where it is on show, and takes what has come of it.
+    fn ask_map(&mut self) {
+        let shown = self.state.shown();
+        if shown.view != View::Grid {
+            self.mapper.stop();
+            return;
+        }
+        let is_new = self.mapper.ask(shown, self.offer.map(), &self.place, &self.answers.rest().run.years);
+        if self.mapper.take() || is_new {
+            self.stamp += 1;
+        }
     }
 
     /// Puts the scene of the moment together.
@@ -206,8 +248,7 @@ impl Player {
         let told = PlaceTold {
             name: self.place.name.get(tag),
             invented: self.place.invented,
-            // No place holds a fit to its gauge yet.
-            fitted: false,
+            fitted: self.fit.is_some(),
             gate_names: &names,
         };
         let source = Source { valley: &self.place.valley, calendar: &self.place.calendar, record: &self.place.days };
@@ -215,23 +256,27 @@ impl Player {
         let props = stage.props();
         let dials = settings(&self.offer, &shown.dials);
         let moment = Moment::of(shown, &dials, &self.answers, second.as_ref());
-        let scene = stage.scene(&props, moment);
+        let doubt = self.doubts.as_ref().and_then(Doubts::shown);
+        let scene = stage.scene(&props, Moment { doubt, ..moment });
         let in_hand = HandTold::of(
             &self.state,
             &Told {
                 offer: &self.offer,
                 settings: &self.settings,
                 voices: &self.voice_names,
+                gates: &names,
                 words,
                 second: second.as_ref(),
                 stale: moment.stale,
             },
         );
         let facts = facts_of(&self.place, self.percent_per_degree, tag);
+        let facts = PlaceFacts { old_fit: self.fit == Some(true), ..facts };
+        let skill = self.skill.as_ref().map(OwnSkill::shown);
         let note = self.led_note();
         let hand = in_hand.hand();
         let hand = Hand { note: note.as_deref().unwrap_or(hand.note), ..hand };
-        let scene = Scene { facts, sheet: shown.sheet.into(), hand, ..scene };
+        let scene = Scene { facts, skill, sheet: shown.sheet.into(), hand, ..scene };
         look(&scene, (words, second.as_ref()))
     }
 
@@ -259,6 +304,27 @@ impl Player {
         self.finger = finger;
         self.step(event);
     }
+
+    /// Shows the range once it has come.
+    fn look_for_doubts(&mut self) {
+        let asked = self.answers.asked();
+        let (dials, year) = (asked.dials, asked.year);
+        if let Some(doubts) = &mut self.doubts
+            && doubts.look(dials, year)
+        {
+            self.stamp += 1;
+        }
+    }
+
+    /// Waits until the answer on show has its range.
+    pub fn wait_for_doubts(&mut self) {
+        self.ask_water();
+        self.look_for_doubts();
+        if let Some(doubts) = &mut self.doubts {
+            doubts.wait();
+            self.stamp += 1;
+        }
+    }
 }
 
 impl Instrument for Player {
@@ -275,6 +341,8 @@ impl Instrument for Player {
 
     fn frame(&mut self, size: FrameSize, texts: bool) -> Frame<'_> {
         self.ask_water();
+        self.look_for_doubts();
+        self.ask_map();
         let at = match self.drawings.iter().position(|drawing| drawing.is(size, texts)) {
             Some(at) => at,
             None => {
@@ -292,13 +360,21 @@ impl Instrument for Player {
             // Taken out while the scene borrows everything else.
             let mut drawing = std::mem::replace(&mut self.drawings[at], Drawing::none());
             drawing.foot = self.strip_px(size);
-            self.with_scene(|scene, speech| drawing.draw(shown.view, shown.card, scene, shown.shade, speech));
+            let tag = self.words().tag();
+            let names: Vec<&str> = self.place.gates.iter().map(|gate| gate.name.get(tag)).collect();
+            let map = self.mapper.shown(shown.dials, &names, &self.place);
+            let page = Shows { view: shown.view, card: shown.card, map: map.as_ref() };
+            self.with_scene(|scene, speech| drawing.draw(page, scene, shown.shade, speech));
             self.draw_lesson(&mut drawing);
             drawing.stamp = Some(self.stamp);
             let sheets = drawing.sheets;
             self.drawings[at] = drawing;
             if sheets > self.offer.sheets(shown.view) {
-                self.offer = self.offer.clone().with_about_sheets(sheets);
+                let offer = self.offer.clone();
+                self.offer = match shown.view {
+                    View::Trust => offer.with_trust_sheets(sheets),
+                    _ => offer.with_about_sheets(sheets),
+                };
             }
         }
         self.drawings[at].frame()
@@ -310,7 +386,10 @@ impl Instrument for Player {
             // As soon as the old answer is on the screen.
             return Some(Duration::ZERO);
         }
-        shown.playing.then(|| Duration::from_millis(1000 / u64::from(shown.speed.days_per_second())))
+        let plays = shown.playing.then(|| Duration::from_millis(1000 / u64::from(shown.speed.days_per_second())));
+        let ranges = self.doubts.as_ref().is_some_and(Doubts::is_waiting).then_some(LOOK_AGAIN);
+        let map = self.mapper.is_working().then_some(mapping::LOOKS);
+        [plays, ranges, map].into_iter().flatten().min()
     }
 
     fn done(&self) -> bool {
@@ -325,9 +404,17 @@ impl Instrument for Player {
 
 /// Longer than this and a hand would think that nothing happens.
 const PATIENCE: Duration = Duration::from_millis(40);
+/// How soon to look again for a range that is on its way.
+const LOOK_AGAIN: Duration = Duration::from_millis(150);
 
 /// Frames that are kept: those of a few screens at once.
 const MOST_DRAWINGS: usize = 4;
+
+/// The views on offer: the map needs two dials.
+fn views(place: &Place) -> Vec<View> {
+    let has_map = place.dials.open().nth(1).is_some();
+    VIEWS.into_iter().chain([View::Lesson]).filter(|view| has_map || *view != View::Grid).collect()
+}
 
 /// The language asked for, the other ones, and both at once.
 fn voices(speech: &Speech, region: &str) -> Vec<(Words, Option<Words>)> {
@@ -373,7 +460,7 @@ mod tests {
     fn player() -> Player {
         let place = read(PlaceSource::Embedded(demo_files())).place.unwrap();
         let speech = Speech::choose(&["--lang".into(), "en-US".into()]);
-        Player::new(place, &speech, Shade::Light, None).ok().unwrap()
+        Player::new(Opened { place, fit: None }, &speech, Shade::Light, None).ok().unwrap()
     }
 
     fn pixels(player: &mut Player) -> Vec<embedded_graphics::pixelcolor::Rgb565> {

@@ -16,7 +16,7 @@ use crate::words::{System, Words};
 
 /// The options, checked.
 #[derive(Debug)]
-pub(super) struct Request {
+pub(in crate::commands) struct Request {
     /// The place.
     pub place: PathBuf,
     /// The board whose screens are used.

@@ -2,7 +2,7 @@
 
 /// Where the text of a column stands.
 #[derive(Clone, Copy, PartialEq, Eq)]
-pub(super) enum Side {
+pub(in crate::commands) enum Side {
     /// Names.
     Left,
     /// Numbers.
@@ -10,7 +10,7 @@ pub(super) enum Side {
 }
 
 /// A column of a table.
-pub(super) struct Column {
+pub(in crate::commands) struct Column {
     /// Heading; broken over lines where the column is narrow.
     pub heading: String,
     /// Where its text stands.
@@ -25,7 +25,7 @@ pub(super) struct Column {
 const GAP: usize = 2;
 
 /// The table, a line a row (more where text is broken), without spaces at the end of lines.
-pub(super) fn lay_out(columns: &[Column], rows: &[Vec<String>]) -> String {
+pub(in crate::commands) fn lay_out(columns: &[Column], rows: &[Vec<String>]) -> String {
     let widths: Vec<usize> = columns
         .iter()
         .enumerate()

@@ -25,6 +25,9 @@ pub(super) fn write(told: &Told) -> String {
     entries.push(("as_it_was", run(told, &told.as_it_was)));
     entries.push(("with_changes", run(told, &told.with_changes)));
     entries.push(("change", change(told)));
+    if let Some(ranges) = &told.ranges {
+        entries.push(("ranges", ranges.node()));
+    }
     let node = Node::table(entries);
     let daily = told.as_it_was.days.is_some();
     let written = if daily { serde_json::to_string(&node) } else { serde_json::to_string_pretty(&node) };
@@ -65,6 +68,9 @@ fn place(told: &Told) -> Node {
         ("enough_share", valley.enough_share.into()),
         ("evaporation_method", place.notes.evaporation.choice.key().into()),
         ("evaporation_percent_per_degree_c", told.percent_per_degree.into()),
+        ("fitted", told.fit.is_some().into()),
+        ("fit_is_stale", told.fit.as_ref().map(|fit| fit.stale).into()),
+        ("gauge", place.gauge.is_some().into()),
         ("filled_days", place.notes.filled_gaps.iter().map(|gaps| gaps.days).sum::<usize>().into()),
         ("gates", Node::List(place.gates.iter().zip(&valley.gates).map(gate).collect())),
     ])

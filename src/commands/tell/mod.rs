@@ -10,12 +10,19 @@ pub(super) mod dials;
 mod grid;
 mod json;
 mod means;
-mod node;
+pub(super) mod node;
+mod ranges;
 mod request;
 mod runs;
 mod summary_lines;
 mod table;
 pub(super) mod years;
+
+/// How text and tables of any command are set.
+pub(super) mod layout {
+    pub(in crate::commands) use super::grid::{Column, Side, lay_out};
+    pub(in crate::commands) use super::summary_lines::wrapped;
+}
 
 use std::path::Path;
 
@@ -28,11 +35,12 @@ use super::speech::Speech;
 use super::spinner::Spinner;
 use super::usage::mistake;
 use crate::water::dials::Dials;
-use request::{Form, Request};
 pub(super) use annual_csv::write as yearly_csv;
 pub(super) use columns::yearly as yearly_columns;
 pub(super) use daily::{EACH_GATE, number};
+use request::{Form, Request};
 pub(super) use runs::{Told, usual_system, years_at_rest};
+#[cfg(feature = "pdf")]
 pub(super) use table::{mean_date, sign_rows};
 
 /// Runs the place and tells what came of it.
@@ -46,8 +54,9 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
     let (answer, words) = {
         let reading = words.say("progress-reading", &[("path", request.place.display().to_string().into())]);
         let spinner = Spinner::start(reading);
-        let place = places::open(&request.place, speech)?;
+        let opened = places::open_fitted(&request.place, speech)?;
         drop(spinner);
+        let place = &opened.place;
         let words = speech.for_place(&place.region);
         let setting = match &request.setting {
             Some(name) => Some(super::settings::open(name, &place.dials, &words)?),
@@ -57,7 +66,7 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
         let dials = dials::turn(start, &request.set, &place.dials, "tell", &words)?;
         let asked = request.years.or(setting.as_ref().map(|setting| setting.years));
         let _spinner = Spinner::start(words.say("progress-running", &[]));
-        let told = Told::run(place, setting, dials, asked, request.daily, &words)?;
+        let told = Told::run(opened, setting, dials, asked, request.daily, &words)?;
         let system = request.units.unwrap_or(runs::usual_system(&told.place));
         let answer = match request.form {
             Form::Table if request.crops => {
@@ -75,10 +84,10 @@ pub(super) fn run(speech: &Speech, matches: &ArgMatches) -> Result<(), Failure> 
 
 /// What is said of a place where it cannot be shown: its years at rest, and how to get help.
 pub(super) fn summary(speech: &Speech, place: &Path) -> Result<(), Failure> {
-    let place = places::open(place, speech)?;
-    let words = speech.for_place(&place.region);
-    let system = runs::usual_system(&place);
-    let told = Told::run(place, None, Dials::REST, None, false, &words)?;
+    let opened = places::open_fitted(place, speech)?;
+    let words = speech.for_place(&opened.place.region);
+    let system = runs::usual_system(&opened.place);
+    let told = Told::run(opened, None, Dials::REST, None, false, &words)?;
     let mut answer = table::write(&told, system, &words);
     answer.push('\n');
     answer.push_str(&words.say("tell-how-to-go-on", &[]));

@@ -7,7 +7,7 @@ use serde::ser::{SerializeMap, SerializeSeq, Serializer};
 
 /// A value. A number that does not exist is written as null.
 #[derive(Clone, Debug, PartialEq)]
-pub(super) enum Node {
+pub(in crate::commands) enum Node {
     /// Nothing.
     Null,
     /// True or false.

@@ -81,6 +81,10 @@ pub(super) fn footer(told: &Told, system: System, words: &Words) -> String {
         };
         text.push_str(&wrapped(&words.say("tell-rule", &[("rule", say(rule).into())]), ""));
     }
+    text.push_str(&wrapped(&fitting(told, words), ""));
+    if told.fit.as_ref().is_some_and(|fit| fit.stale) {
+        text.push_str(&wrapped(&say("tell-fit-stale"), ""));
+    }
     let choice = told.place.notes.evaporation.choice.key();
     let method = say(&Words::key_id("tell-method", choice));
     text.push_str(&wrapped(&words.say("tell-method", &[("method", method.into())]), ""));
@@ -109,6 +113,19 @@ pub(super) fn footer(told: &Told, system: System, words: &Words) -> String {
     text
 }
 
+/// Whether the place runs with a fit, and to what.
+fn fitting(told: &Told, words: &Words) -> String {
+    match &told.fit {
+        Some(fit) => {
+            let years = &fit.file.water_years;
+            let [first, last] = [years.first(), years.last()].map(|year| year.map_or(0, |year| *year));
+            words.say("tell-fitted", &[("first", words.year(first).into()), ("last", words.year(last).into())])
+        }
+        None if told.place.gauge.is_none() => words.say("tell-no-gauge", &[]),
+        None => words.say("tell-not-fitted", &[]),
+    }
+}
+
 /// In which of the years shown the reservoir fills.
 fn fills(run: &Run) -> Vec<bool> {
     run.years.iter().map(|year| year.signs.fill_date.is_some()).collect()
@@ -128,7 +145,7 @@ fn closure(told: &Told, system: System, words: &Words) -> String {
 
 /// A sentence in lines, each with `indent` before it. A gap that must not break keeps its words together and is an
 /// ordinary blank in the end: consoles of small boards show a box for the thin one.
-pub(super) fn wrapped(sentence: &str, indent: &str) -> String {
+pub(in crate::commands) fn wrapped(sentence: &str, indent: &str) -> String {
     let mut text = String::new();
     for line in broken(sentence.trim_start(), WIDTH - indent.len()) {
         text.push_str(indent);

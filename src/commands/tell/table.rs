@@ -37,6 +37,10 @@ pub(super) fn write(told: &Told, system: System, words: &Words) -> String {
     let mut text = heading(told, system, words);
     text.push('\n');
     text.push_str(&signs(told, system, words));
+    if let Some(ranges) = &told.ranges {
+        text.push('\n');
+        text.push_str(&ranges.say(&MOST_TELLING, words));
+    }
     if !told.place.valley.gates.is_empty() {
         text.push('\n');
         text.push_str(&canal_table::write(told, words));

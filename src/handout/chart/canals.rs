@@ -1,59 +1,61 @@
 //! The year of each canal as a strip: full days solid, short days hatched, days without water an empty frame.
 
 use super::{AS_IT_WAS, Legend, MONTHS_PT, Plot, TICK, each, months};
-use crate::handout::face::Face;
 use crate::handout::flow::Block;
 use crate::handout::model::{At, Ink, Node, Piece, Role};
-use crate::handout::pen::{End, LABEL, Style, area, centred, corners, dashed, edged, hatch, letters, straight};
+use crate::handout::pen::{End, LABEL, area, centred, corners, dashed, edged, hatch, letters, straight};
 use crate::picture::chart::DayMark;
 use crate::picture::views::scene::Scene;
 use crate::words::{DateStyle, Words};
 
 /// Left of the strips, for names.
 const SIDE: f64 = 128.0;
-/// Right of the strips, for the last full day.
-const DATES: f64 = 96.0;
+/// Right of the strips, for the last full day: wider where two languages say it.
+const DATES: [f64; 2] = [96.0, 136.0];
 /// Above the strips, for the heads of the columns.
 const HEAD: f64 = 11.0;
 
 /// Full, short, cut.
-pub(in crate::handout) fn legend(x: f64, y: f64, changed: bool, voices: &[&Words]) -> Vec<Piece> {
-    let mut legend = Legend::new(x, y);
+pub(in crate::handout) fn legend(changed: bool, voices: &[&Words], width: f64) -> Block {
+    let mut legend = Legend::default();
     let say = |id: &str| each(voices, |words| words.say(id, &[])).join(" · ");
     for (mark, id) in [
         (DayMark::Full, "sign-canal-days-full.short"),
         (DayMark::Short, "sign-canal-days-short.short"),
         (DayMark::Cut, "sign-canal-days-cut.short"),
     ] {
-        legend.entry(&say(id), |x, y, wide, high| span(mark, x, y, wide, high));
+        legend.entry(&say(id), move |x, y, wide, high| span(mark, x, y, wide, high));
     }
     if changed {
         legend.entry(&say("handout-full-as-it-was"), |x, y, wide, high| was_spans(&[(x, x + wide)], y + high / 2.0));
     }
-    legend.pieces
+    let (pieces, high) = legend.lay_out(0.0, width);
+    Block::one(Node::of(Role::Artifact, pieces), high)
 }
 
 /// The strips, each in a row of that height, with `alt` as their words.
 pub(in crate::handout) fn strips(scene: &Scene<'_>, voices: &[&Words], width: f64, row: f64, alt: String) -> Block {
     let count = scene.canals.len().max(1) as f64;
     let (from, to) = window(scene);
+    let dates_wide = DATES[usize::from(voices.len() > 1)];
     let plot = Plot {
         left: SIDE,
         top: HEAD,
-        wide: width - SIDE - DATES,
+        wide: width - SIDE - dates_wide,
         high: row * count,
         across: (from as f64, to as f64),
         up: (0.0, 1.0),
     };
     let say = |id: &str| each(voices, |words| words.say(id, &[])).join(" · ");
     let head = say("tell-canal-last-full");
-    let mut pieces = vec![letters(&head, At::new(width, HEAD - 3.5), End::Right, TICK.fitting(&head, DATES, 4.5))];
+    let mut pieces = vec![letters(&head, At::new(width, HEAD - 3.5), End::Right, TICK.fitting(&head, dates_wide, 4.5))];
     for (index, (title, (was, now))) in
         scene.canals.iter().zip(scene.was.canals.iter().zip(scene.now.canals)).enumerate()
     {
         let top = plot.top + row * index as f64;
         let room = row * 0.30;
-        let (strip_top, strip_high) = if scene.changed() { (top + room, row * 0.56) } else { (top + row * 0.18, row * 0.64) };
+        let (strip_top, strip_high) =
+            if scene.changed() { (top + room, row * 0.56) } else { (top + row * 0.18, row * 0.64) };
         let marks = now.marks.get(from..to).unwrap_or_default();
         spans(marks, |mark, begin, end| {
             let (x, next) = (plot.x((from + begin) as f64), plot.x((from + end) as f64));
@@ -83,15 +85,9 @@ pub(in crate::handout) fn strips(scene: &Scene<'_>, voices: &[&Words], width: f6
             let x = name_style.width(title.name) + 5.0;
             pieces.push(letters(&beside, At::new(x, centred(middle, TICK)), End::Left, TICK));
         }
-        let dates = each(voices, |words| last_full(scene, index, words));
-        // Two languages stand one under the other in smaller letters.
-        let style = if dates.len() > 1 { Style::new(Face::Bold, (row * 0.44).min(6.8), Ink::Black) } else { LABEL };
-        let first = middle - style.size * 1.12 * (dates.len() - 1) as f64 / 2.0;
-        for (line, date) in dates.iter().enumerate() {
-            let style = style.fitting(date, DATES - 6.0, 4.0);
-            let y = centred(first + style.size * 1.12 * line as f64, style);
-            pieces.push(letters(date, At::new(width, y), End::Right, style));
-        }
+        let date = each(voices, |words| last_full(scene, index, words)).join(" · ");
+        let style = LABEL.fitting(&date, dates_wide - 6.0, 4.5);
+        pieces.push(letters(&date, At::new(width, centred(middle, style)), End::Right, style));
     }
     pieces.extend(months(&plot, &scene.year, voices));
     pieces.push(straight(At::new(plot.left, plot.foot()), At::new(plot.left + plot.wide, plot.foot()), 0.5, Ink::Rule));
@@ -133,10 +129,7 @@ fn span(mark: DayMark, x: f64, y: f64, wide: f64, high: f64) -> Vec<Piece> {
             vec![straight(At::new(x, middle), At::new(x + wide, middle), 0.4, Ink::Faint)]
         }
         DayMark::Full => vec![area(area_of(), Ink::Water)],
-        DayMark::Short => vec![
-            hatch(&area_of(), 2.4, 0.6, Ink::Lack),
-            edged(area_of(), None, 0.35, Ink::Lack),
-        ],
+        DayMark::Short => vec![hatch(&area_of(), 2.4, 0.6, Ink::Lack), edged(area_of(), None, 0.35, Ink::Lack)],
         DayMark::Cut => vec![edged(area_of(), Some(Ink::Paper), 0.55, Ink::Lack)],
     }
 }

@@ -12,7 +12,7 @@ use chrono::Month;
 
 use super::face::Face;
 use super::model::{At, Ink, Piece};
-use super::pen::{End, Style, dashed, letters, line, straight};
+use super::pen::{End, LABEL, Style, dashed, letters, line, straight};
 use crate::picture::views::scene::YearShown;
 use crate::words::Words;
 
@@ -121,19 +121,23 @@ pub(super) fn months(plot: &Plot, year: &YearShown<'_>, voices: &[&Words]) -> Ve
     let mut pieces = Vec::new();
     let mut ticks = Vec::new();
     let y = plot.foot();
-    for (index, (begin, month)) in begins.iter().enumerate() {
-        let end = begins.get(index + 1).map_or(to, |(next, _)| *next);
-        let x = plot.x(*begin as f64);
+    let ends = begins.iter().skip(1).map(|(begin, _)| *begin).chain([to]);
+    let spans: Vec<(f64, f64, Month)> = begins
+        .iter()
+        .zip(ends)
+        .map(|((begin, month), end)| {
+            (plot.x(*begin as f64), plot.x(end as f64), Month::try_from(*month).unwrap_or(Month::January))
+        })
+        .collect();
+    let name = |month: Month| each(voices, |words| words.month_short(month)).join(" · ");
+    // All months by their names, or all by their letters.
+    let whole = spans.iter().filter(|(x, end, _)| end - x > plot.wide / 14.0);
+    let fits = whole.into_iter().all(|(x, end, month)| TICK.width(&name(*month)) <= end - x - 2.0);
+    for (x, end, month) in spans {
         ticks.push(vec![At::new(x, y), At::new(x, y + 3.0)]);
-        let room = plot.x(end as f64) - x - 2.0;
-        let month = Month::try_from(*month).unwrap_or(Month::January);
-        let mut name = each(voices, |words| words.month_short(month)).join(" · ");
-        if TICK.width(&name) > room {
-            name = voices.first().map_or(String::new(), |words| words.month_letter(month));
-        }
-        if TICK.width(&name) <= room {
-            let at = At::new((x + plot.x(end as f64)) / 2.0, y + 9.0);
-            pieces.push(letters(&name, at, End::Middle, TICK));
+        let name = if fits { name(month) } else { each(voices, |words| words.month_letter(month)).join("·") };
+        if TICK.width(&name) <= end - x - 2.0 {
+            pieces.push(letters(&name, At::new((x + end) / 2.0, y + 9.0), End::Middle, TICK));
         }
     }
     ticks.push(vec![At::new(plot.x(to as f64), y), At::new(plot.x(to as f64), y + 3.0)]);
@@ -156,29 +160,25 @@ pub(super) fn each(voices: &[&Words], say: impl Fn(&Words) -> String) -> Vec<Str
     said
 }
 
-/// Samples with their names, on one line.
+/// Draws a sample in a box: left, top, width, height.
+type Sample = Box<dyn Fn(f64, f64, f64, f64) -> Vec<Piece>>;
+
+/// Samples with their names, on one line or two.
+#[derive(Default)]
 pub(super) struct Legend {
-    x: f64,
-    y: f64,
-    pub pieces: Vec<Piece>,
+    entries: Vec<(String, Sample)>,
 }
 
 impl Legend {
-    pub fn new(x: f64, y: f64) -> Self {
-        Self { x, y, pieces: Vec::new() }
-    }
-
     /// Width of a sample.
     const SAMPLE: f64 = 18.0;
     const HIGH: f64 = 6.5;
+    /// From one line to the next.
+    const LINE: f64 = 11.0;
 
-    /// Adds a sample, drawn in the box that `draw` is given (left, top, width, height), and its name.
-    pub fn entry(&mut self, name: &str, draw: impl FnOnce(f64, f64, f64, f64) -> Vec<Piece>) {
-        self.pieces.extend(draw(self.x, self.y - Self::HIGH / 2.0, Self::SAMPLE, Self::HIGH));
-        self.x += Self::SAMPLE + 4.0;
-        let at = At::new(self.x, super::pen::centred(self.y, TICK));
-        self.pieces.push(letters(name, at, End::Left, TICK));
-        self.x += TICK.width(name) + 12.0;
+    /// Adds a sample and its name.
+    pub fn entry(&mut self, name: &str, draw: impl Fn(f64, f64, f64, f64) -> Vec<Piece> + 'static) {
+        self.entries.push((name.to_owned(), Box::new(draw)));
     }
 
     /// The two lines that most charts share.
@@ -196,6 +196,39 @@ impl Legend {
             });
         }
     }
+
+    /// Everything from `left` on within that width, and how high it is.
+    pub fn lay_out(&self, left: f64, width: f64) -> (Vec<Piece>, f64) {
+        let mut pieces = Vec::new();
+        let (mut x, mut y) = (left, Self::LINE / 2.0);
+        for (name, draw) in &self.entries {
+            let own = Self::SAMPLE + 4.0 + TICK.width(name);
+            if x > left && x + own > left + width {
+                (x, y) = (left, y + Self::LINE);
+            }
+            pieces.extend(draw(x, y - Self::HIGH / 2.0, Self::SAMPLE, Self::HIGH));
+            let at = At::new(x + Self::SAMPLE + 4.0, super::pen::centred(y, TICK));
+            pieces.push(letters(name, at, End::Left, TICK));
+            x += own + 12.0;
+        }
+        (pieces, y + Self::LINE / 2.0 + 2.0)
+    }
+}
+
+/// Names and scale at the left of a plot, on two lines.
+pub(super) fn side_words(names: &[String], scales: &[String], top: f64, room: f64) -> [Piece; 2] {
+    let (name, scale) = (names.join(" · "), scales.join(" · "));
+    let y = top + LABEL.size * 0.85;
+    let below = y + TICK.line_pt();
+    [
+        letters(&name, At::new(0.0, y), End::Left, LABEL.fitting(&name, room, 4.5)),
+        letters(&scale, At::new(0.0, below), End::Left, TICK.fitting(&scale, room, 4.5)),
+    ]
+}
+
+/// Left of the plots, for names and scales: wider where two languages share it.
+pub(super) fn side_pt(voices: &[&Words]) -> f64 {
+    if voices.len() > 1 { 126.0 } else { 92.0 }
 }
 
 #[cfg(test)]
@@ -204,7 +237,8 @@ mod tests {
 
     #[test]
     fn thinning_keeps_the_shape() {
-        let run: Vec<At> = (0..366).map(|day| At::new(f64::from(day), 40.0 * libm::sin(f64::from(day) / 30.0))).collect();
+        let run: Vec<At> =
+            (0..366).map(|day| At::new(f64::from(day), 40.0 * libm::sin(f64::from(day) / 30.0))).collect();
         let thin = thinned(&run, 0.12);
         assert!(thin.len() < run.len() / 3, "{}", thin.len());
         // Every corner left out lies within the tolerance of the piece over it.

@@ -1,9 +1,9 @@
 //! Snow, river, reservoir and canals through the chosen year, one small chart above the other.
 
-use super::{AS_IT_WAS, Legend, MONTHS_PT, Plot, TICK, each, months};
+use super::{AS_IT_WAS, Legend, MONTHS_PT, Plot, each, months, side_pt, side_words};
 use crate::handout::flow::Block;
 use crate::handout::model::{At, Ink, Node, Piece, Role};
-use crate::handout::pen::{End, LABEL, area, dashed, edged, hatch, letters, line, straight};
+use crate::handout::pen::{area, dashed, edged, hatch, line, straight};
 use crate::picture::views::scene::{RunShown, Scene};
 use crate::water::calendar::CalendarDay;
 use crate::words::{Quantity, Words};
@@ -16,14 +16,10 @@ enum Chart {
     Canals,
 }
 
-/// Left of the plots, for names and scales.
-const SIDE: f64 = 92.0;
 /// Between two plots.
 const GAP: f64 = 7.0;
 /// Room for the wedges under the river.
 const WEDGES: f64 = 6.0;
-/// Room for the names of the lines.
-const LEGEND: f64 = 13.0;
 
 impl Chart {
     fn title_id(self) -> &'static str {
@@ -64,28 +60,27 @@ impl Chart {
     fn greatest(self, scene: &Scene<'_>) -> f64 {
         let runs = [scene.was, scene.now];
         let most = match self {
-            Self::Reservoir => runs.iter().filter_map(|run| run.reservoir).map(|full| full.capacity_hm3).fold(0.0, f64::max),
-            _ => runs.iter().flat_map(|run| self.of(run)).copied().filter(|value| value.is_finite()).fold(0.0, f64::max),
+            Self::Reservoir => {
+                runs.iter().filter_map(|run| run.reservoir).map(|full| full.capacity_hm3).fold(0.0, f64::max)
+            }
+            _ => {
+                runs.iter().flat_map(|run| self.of(run)).copied().filter(|value| value.is_finite()).fold(0.0, f64::max)
+            }
         };
         if most > 0.0 { most } else { 1.0 }
     }
 }
 
 /// The charts in a box of that size, with `alt` as their words.
-pub(in crate::handout) fn season(
-    scene: &Scene<'_>,
-    voices: &[&Words],
-    width: f64,
-    high: f64,
-    alt: String,
-) -> Block {
+pub(in crate::handout) fn season(scene: &Scene<'_>, voices: &[&Words], width: f64, high: f64, alt: String) -> Block {
     let mut charts = vec![Chart::Snow, Chart::River];
     charts.extend(scene.now.reservoir.map(|_| Chart::Reservoir));
     if !scene.canals.is_empty() {
         charts.push(Chart::Canals);
     }
     let mut pieces = Vec::new();
-    let mut legend = Legend::new(SIDE, LEGEND / 2.0);
+    let side_wide = side_pt(voices);
+    let mut legend = Legend::default();
     legend.runs(scene.changed(), voices);
     if scene.changed() {
         let lack = each(voices, |words| words.say("handout-less", &[])).join(" · ");
@@ -99,17 +94,18 @@ pub(in crate::handout) fn season(
         let middle = x + wide / 2.0;
         vec![area(vec![wedge(middle, y + 1.0, high - 1.0)], Ink::Water)]
     });
-    pieces.append(&mut legend.pieces);
+    let (drawn, legend_high) = legend.lay_out(side_wide, width - side_wide);
+    pieces.extend(drawn);
     let count = charts.len() as f64;
-    let each_high = (high - LEGEND - MONTHS_PT - WEDGES - GAP * (count - 1.0)) / count;
-    let mut top = LEGEND;
+    let each_high = (high - legend_high - MONTHS_PT - WEDGES - GAP * (count - 1.0)) / count;
+    let mut top = legend_high;
     let mut last = None;
     for chart in charts {
         let days = scene.year.calendar.len().max(1) as f64;
         let plot = Plot {
-            left: SIDE,
+            left: side_wide,
             top,
-            wide: width - SIDE,
+            wide: width - side_wide,
             high: each_high,
             across: (0.0, days),
             up: (0.0, chart.greatest(scene) * 1.04),
@@ -139,7 +135,12 @@ fn draw(pieces: &mut Vec<Piece>, chart: Chart, plot: &Plot, scene: &Scene<'_>) {
     pieces.push(straight(At::new(plot.left, plot.foot()), At::new(plot.left + plot.wide, plot.foot()), 0.5, Ink::Rule));
     if let (Chart::Reservoir, Some(reservoir)) = (chart, scene.now.reservoir) {
         let y = plot.y(reservoir.capacity_hm3);
-        pieces.push(dashed(vec![vec![At::new(plot.left, y), At::new(plot.left + plot.wide, y)]], 0.4, Ink::Rule, (0.8, 1.6)));
+        pieces.push(dashed(
+            vec![vec![At::new(plot.left, y), At::new(plot.left + plot.wide, y)]],
+            0.4,
+            Ink::Rule,
+            (0.8, 1.6),
+        ));
     }
     pieces.push(line(plot.runs(now), 1.3, Ink::Water));
     if scene.changed() {
@@ -175,18 +176,16 @@ fn side(pieces: &mut Vec<Piece>, chart: Chart, plot: &Plot, scene: &Scene<'_>, v
     let top = chart.greatest(scene);
     let names = each(voices, |words| words.say(chart.title_id(), &[]));
     let scales = each(voices, |words| format!("0–{}", words.quantity(top, chart.quantity(), scene.units, 2)));
-    let room = SIDE - 8.0;
-    let mut y = plot.top + LABEL.size * 0.85;
-    for name in names {
-        pieces.push(letters(&name, At::new(0.0, y), End::Left, LABEL.fitting(&name, room, 5.0)));
-        y += LABEL.line_pt();
-    }
-    for scale in scales {
-        pieces.push(letters(&scale, At::new(0.0, y), End::Left, TICK.fitting(&scale, room, 5.0)));
-        y += TICK.line_pt();
-    }
+    pieces.extend(side_words(&names, &scales, plot.top, plot.left - 8.0));
     let x = plot.left;
-    pieces.push(line(vec![vec![At::new(x, plot.y(0.0)), At::new(x, plot.y(top))], vec![At::new(x - 2.5, plot.y(top)), At::new(x, plot.y(top))]], 0.5, Ink::Rule));
+    pieces.push(line(
+        vec![
+            vec![At::new(x, plot.y(0.0)), At::new(x, plot.y(top))],
+            vec![At::new(x - 2.5, plot.y(top)), At::new(x, plot.y(top))],
+        ],
+        0.5,
+        Ink::Rule,
+    ));
 }
 
 /// Under the river: a full wedge on the day with half of the water past, an open one where it was.

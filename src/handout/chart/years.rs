@@ -1,34 +1,40 @@
 //! Every year of the record: the share of the water asked for that arrived, and the river under it.
 
-use super::{Legend, Plot, TICK, each};
+use super::{Legend, Plot, TICK, each, side_pt, side_words};
 use crate::handout::flow::Block;
 use crate::handout::model::{At, Ink, Node, Piece, Role};
-use crate::handout::pen::{End, LABEL, area, corners, dashed, edged, letters, line, round, straight};
+use crate::handout::pen::{End, area, corners, dashed, edged, letters, line, round, straight};
 use crate::picture::views::scene::{RunShown, Scene};
 use crate::words::{Quantity, Words};
 
-/// Left of the plots, for names and scales.
-const SIDE: f64 = 92.0;
-/// Room for the names of the marks.
-const LEGEND: f64 = 13.0;
 /// Room for the names of the years.
 const NAMES: f64 = 12.0;
 
 /// The charts in a box of that size, with `alt` as their words.
 pub(in crate::handout) fn years(scene: &Scene<'_>, voices: &[&Words], width: f64, high: f64, alt: String) -> Block {
     let count = scene.now.years.len().min(scene.was.years.len());
-    let has_supply = [scene.was, scene.now].iter().any(|run| run.years.iter().any(|year| year.signs.supply_ratio.is_some()));
-    let mut pieces = Vec::new();
-    let body = high - LEGEND - NAMES;
+    let has_supply =
+        [scene.was, scene.now].iter().any(|run| run.years.iter().any(|year| year.signs.supply_ratio.is_some()));
+    let side = side_pt(voices);
+    let (mut pieces, legend_high) =
+        if has_supply { legend(scene, voices).lay_out(side, width - side) } else { (Vec::new(), 4.0) };
+    let body = high - legend_high - NAMES;
     let river_high = if has_supply { body * 0.3 } else { body };
     let across = (0.0, count.max(1) as f64);
-    let supply = Plot { left: SIDE, top: LEGEND, wide: width - SIDE, high: body - river_high - 6.0, across, up: (0.0, 1.05) };
+    let supply = Plot {
+        left: side,
+        top: legend_high,
+        wide: width - side,
+        high: body - river_high - 6.0,
+        across,
+        up: (0.0, 1.05),
+    };
     let flows = scene.was.years.iter().chain(scene.now.years).map(|year| year.signs.natural_flow_hm3);
     let most = flows.fold(0.0, f64::max);
     let river = Plot {
-        left: SIDE,
+        left: side,
         top: high - NAMES - river_high,
-        wide: width - SIDE,
+        wide: width - side,
         high: river_high,
         across,
         up: (0.0, if most > 0.0 { most * 1.02 } else { 1.0 }),
@@ -36,18 +42,21 @@ pub(in crate::handout) fn years(scene: &Scene<'_>, voices: &[&Words], width: f64
     chosen(&mut pieces, &river, if has_supply { supply.top } else { river.top }, scene);
     if has_supply {
         shares(&mut pieces, &supply, count, scene, voices);
-        let mut legend = Legend::new(SIDE, LEGEND / 2.0);
-        let say = |id: &str| each(voices, |words| words.say(id, &[])).join(" · ");
-        legend.entry(&say("page-years-was-enough"), |x, y, wide, high| dot(At::new(x + wide / 2.0, y + high / 2.0)));
-        legend.entry(&say("page-years-was-short"), |x, y, wide, high| open(At::new(x + wide / 2.0, y + high / 2.0)));
-        if scene.changed() {
-            legend.entry(&say("picture-as-it-was"), |x, y, wide, high| tick(x + wide / 2.0, y + high / 2.0));
-        }
-        pieces.append(&mut legend.pieces);
     }
     bars(&mut pieces, &river, count, most, scene, voices);
     names(&mut pieces, &river, count, scene);
     Block::one(Node::of(Role::Figure(alt), pieces), high)
+}
+
+fn legend(scene: &Scene<'_>, voices: &[&Words]) -> Legend {
+    let mut legend = Legend::default();
+    let say = |id: &str| each(voices, |words| words.say(id, &[])).join(" · ");
+    legend.entry(&say("page-years-was-enough"), |x, y, wide, high| dot(At::new(x + wide / 2.0, y + high / 2.0)));
+    legend.entry(&say("page-years-was-short"), |x, y, wide, high| open(At::new(x + wide / 2.0, y + high / 2.0)));
+    if scene.changed() {
+        legend.entry(&say("picture-as-it-was"), |x, y, wide, high| tick(x + wide / 2.0, y + high / 2.0));
+    }
+    legend
 }
 
 /// A pale ground under the year that the other charts show.
@@ -85,17 +94,9 @@ fn shares(pieces: &mut Vec<Piece>, plot: &Plot, count: usize, scene: &Scene<'_>,
     }
     pieces.push(line(stems, 0.5, Ink::Rule));
     pieces.append(&mut marks);
-    let mut top = plot.top + LABEL.size * 0.85;
-    for name in each(voices, |words| words.say("sign-supply-ratio.short", &[])) {
-        pieces.push(letters(&name, At::new(0.0, top), End::Left, LABEL.fitting(&name, SIDE - 8.0, 5.0)));
-        top += LABEL.line_pt();
-    }
-    for text in each(voices, |words| {
-        words.say("page-years-line", &[("share", words.percent(enough * 100.0, 0).into())])
-    }) {
-        pieces.push(letters(&text, At::new(0.0, top), End::Left, TICK.fitting(&text, SIDE - 8.0, 5.0)));
-        top += TICK.line_pt();
-    }
+    let names = each(voices, |words| words.say("sign-supply-ratio.short", &[]));
+    let line = |words: &Words| words.say("page-years-line", &[("share", words.percent(enough * 100.0, 0).into())]);
+    pieces.extend(side_words(&names, &each(voices, line), plot.top, plot.left - 8.0));
 }
 
 fn bars(pieces: &mut Vec<Piece>, plot: &Plot, count: usize, most: f64, scene: &Scene<'_>, voices: &[&Words]) {
@@ -115,15 +116,9 @@ fn bars(pieces: &mut Vec<Piece>, plot: &Plot, count: usize, most: f64, scene: &S
         pieces.push(line(tops, 0.8, Ink::Black));
     }
     pieces.push(straight(At::new(plot.left, plot.foot()), At::new(plot.left + plot.wide, plot.foot()), 0.5, Ink::Rule));
-    let mut top = plot.top + LABEL.size * 0.85;
-    for name in each(voices, |words| words.say("term-river.short", &[])) {
-        pieces.push(letters(&name, At::new(0.0, top), End::Left, LABEL.fitting(&name, SIDE - 8.0, 5.0)));
-        top += LABEL.line_pt();
-    }
-    for scale in each(voices, |words| format!("0–{}", words.quantity(most, Quantity::StoredVolume, scene.units, 2))) {
-        pieces.push(letters(&scale, At::new(0.0, top), End::Left, TICK.fitting(&scale, SIDE - 8.0, 5.0)));
-        top += TICK.line_pt();
-    }
+    let names = each(voices, |words| words.say("term-river.short", &[]));
+    let scale = |words: &Words| format!("0–{}", words.quantity(most, Quantity::StoredVolume, scene.units, 2));
+    pieces.extend(side_words(&names, &each(voices, scale), plot.top, plot.left - 8.0));
 }
 
 /// As many years are named as there is room for, at even steps.

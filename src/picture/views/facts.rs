@@ -38,6 +38,10 @@ pub struct PlaceFacts<'a> {
     pub rule_key: Option<&'a str>,
     /// Values of the weather record that were missing and filled by rule; `None` where nobody counted.
     pub filled_values: Option<usize>,
+    /// Whether the river is measured; `None` where nobody says.
+    pub gauged: Option<bool>,
+    /// Whether the fit is from older records or another description of the land.
+    pub old_fit: bool,
 }
 
 /// How far a fitted model was right.
@@ -51,6 +55,59 @@ pub struct Skill<'a> {
     pub percent_bias: Option<f64>,
     /// Years judged by a set that never saw them; empty where there were too few years.
     pub tests: &'a [TestShown],
+    /// What the model may be used for; empty where nobody judged.
+    pub uses: &'a [UseShown],
+    /// The modelled river beside the measured one; `None` where nobody compared.
+    pub river: Option<RiverSkill<'a>>,
+}
+
+/// One use of the model, and what is known of it.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct UseShown {
+    /// Key of the use, the end of its message `trust-use-…`.
+    pub key: &'static str,
+    /// The verdict; `None` where it is unknown.
+    pub verdict: Option<Verdict>,
+    /// Key of the score behind it, the end of its message `trust-score-…`.
+    pub score: &'static str,
+    /// What the score is measured in.
+    pub unit: ScoreUnit,
+    /// Its value, or the key of what is lacking for one, the end of its message `trust-need-…`.
+    pub value: Result<f64, &'static str>,
+    /// Up to the first the answer is yes, up to the second in part.
+    pub thresholds: (f64, f64),
+    /// Whether a failed half of the years makes it a no all the same.
+    pub beaten: bool,
+}
+
+/// What a score is measured in.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum ScoreUnit {
+    /// A part of a score that is 1 at best.
+    Score,
+    /// Days.
+    Days,
+    /// Percent.
+    Percent,
+}
+
+/// The modelled river beside the measured one.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct RiverSkill<'a> {
+    /// Whether these are years that the model never saw.
+    pub unseen: bool,
+    /// Month (1 to 12), measured and modelled mean flow, m³/s, in the order of the water year.
+    pub season: &'a [(u8, f64, f64)],
+    /// Share of time, measured and modelled flow that is exceeded for it, m³/s.
+    pub duration: &'a [(f64, f64, f64)],
+    /// Density of the daily errors at even steps between the ends; natural logarithms of modelled over measured.
+    pub errors: &'a [f64],
+    /// The ends of the errors.
+    pub error_ends: (f64, f64),
+    /// How many humps the errors have.
+    pub humps: usize,
+    /// Water year, measured and modelled volume, hm³.
+    pub years: &'a [(i32, f64, f64)],
 }
 
 /// Which years a test judged.

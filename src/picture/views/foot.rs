@@ -82,7 +82,7 @@ pub(super) fn draw_foot(
         return;
     }
     let mut remarks = String::new();
-    for (holds, id) in [(scene.invented, "picture-invented"), (!scene.fitted, "picture-not-fitted")] {
+    for (holds, id) in [(scene.invented, "picture-invented"), (true, scene.fitting())] {
         if holds {
             remarks.push_str(DOT);
             remarks.push_str(&words.say(id, &[]));

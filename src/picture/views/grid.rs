@@ -9,7 +9,7 @@ mod sides;
 
 use embedded_graphics::primitives::Rectangle;
 
-pub use answer::{GridAnswer, Needed};
+pub use answer::{GridAnswer, Needed, reading_name};
 
 use super::layout::{Form, Layout, area, bottom, right};
 use super::scene::{Scene, YearShown};

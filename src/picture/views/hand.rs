@@ -11,6 +11,12 @@ pub enum Item {
     Dial(Dial),
     /// Which view is shown.
     View,
+    /// Which number the map of two dials is coloured by.
+    MapSign,
+    /// Which dial the map has from left to right.
+    MapAcross,
+    /// Which dial the map has from bottom to top.
+    MapUp,
     /// Which year is shown.
     Year,
     /// Which day of the year is marked.
@@ -41,11 +47,19 @@ impl Item {
         matches!(self, Item::Keep | Item::Undo | Item::Words | Item::Help)
     }
 
+    /// Whether it is there on the map of two dials alone.
+    pub const fn is_of_map(self) -> bool {
+        matches!(self, Item::MapSign | Item::MapAcross | Item::MapUp)
+    }
+
     /// The message that names it; dials have names of their own.
     pub(super) const fn message(self) -> Option<&'static str> {
         Some(match self {
             Item::Dial(_) => return None,
             Item::View => "ring-view",
+            Item::MapSign => "ring-map-sign",
+            Item::MapAcross => "ring-map-across",
+            Item::MapUp => "ring-map-up",
             Item::Year => "ring-year",
             Item::Day => "ring-day",
             Item::Play => "ring-play",

@@ -30,6 +30,7 @@ mod sheets;
 pub mod staff;
 pub mod stroll;
 pub mod term;
+pub mod test_card;
 pub mod touch;
 pub mod trust;
 pub mod valley;

@@ -64,6 +64,16 @@ pub struct Scene<'a> {
 }
 
 impl Scene<'_> {
+    /// The message on whether the model was fitted to the place's gauge, for the foot of every page.
+    pub fn fitting(&self) -> &'static str {
+        match (self.fitted, self.facts.old_fit, self.facts.gauged) {
+            (true, true, _) => "picture-fit-old",
+            (true, false, _) => "picture-fitted",
+            (false, _, Some(false)) => "picture-no-gauge",
+            (false, ..) => "picture-not-fitted",
+        }
+    }
+
     /// Whether any dial is off rest.
     pub fn changed(&self) -> bool {
         self.dials.iter().any(|setting| !setting.rests())

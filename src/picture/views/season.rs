@@ -171,7 +171,11 @@ fn greatest(chart: Chart, scene: &Scene<'_>) -> f64 {
     let capacity = runs.iter().flatten().filter_map(|run| run.reservoir).map(|reservoir| reservoir.capacity_hm3);
     let most = match chart {
         Chart::Reservoir => capacity.fold(0.0, f64::max),
-        _ => runs.iter().flatten().flat_map(|run| chart.of(run)).copied().fold(0.0, f64::max),
+        _ => {
+            let doubt = scene.doubt.and_then(|doubt| doubt.natural_flow_m3s).filter(|_| chart == Chart::River);
+            let high = doubt.map_or(&[] as &[f64], |(_, high)| high);
+            runs.iter().flatten().flat_map(|run| chart.of(run)).chain(high).copied().fold(0.0, f64::max)
+        }
     };
     if most > 0.0 { most } else { 1.0 }
 }

@@ -25,6 +25,8 @@ pub(super) enum Sign {
     Keys(Vec<String>),
     /// How far something holds, and the word for it.
     Holds(Moon, String),
+    /// That nobody knows how far it holds, in a word.
+    Unknown(String),
 }
 
 /// One piece.
@@ -90,7 +92,9 @@ fn sign_px(sign: &Sign, setting: Setting) -> i32 {
         Sign::Keys(keys) => {
             keys.iter().map(|key| cap_px(key, setting) + setting.gap / 2 + 1).sum::<i32>() + setting.gap
         }
-        Sign::Holds(_, word) => line * 3 / 2 + setting.gap * 3 + measure(word, setting.bold()).width as i32,
+        Sign::Holds(_, word) | Sign::Unknown(word) => {
+            line * 3 / 2 + setting.gap * 3 + measure(word, setting.bold()).width as i32
+        }
     }
 }
 
@@ -112,7 +116,7 @@ fn height(piece: &Piece, wide: i32, setting: Setting) -> i32 {
     let sign = match piece.sign {
         Sign::Hand(_) => setting.face.line_px() * 5 / 2,
         Sign::Keys(_) => cap_high(setting),
-        Sign::Holds(..) => setting.face.line_px() * 3 / 2,
+        Sign::Holds(..) | Sign::Unknown(_) => setting.face.line_px() * 3 / 2,
         Sign::None | Sign::Bead | Sign::Warning => 0,
     };
     text.max(sign)
@@ -205,6 +209,10 @@ fn draw_sign(canvas: &mut Canvas<'_>, sign: &Sign, place: Rectangle, first_line:
                 draw_text(canvas, key, at, setting.bold(), theme.ink, Align::CENTRE.cap_middle());
                 x += wide + setting.gap / 2 + 1;
             }
+        }
+        Sign::Unknown(word) => {
+            let left = x + (f64::from(line) * 1.2) as i32 + 2 + setting.gap;
+            draw_text(canvas, word, Point::new(left, middle), setting.bold(), theme.quiet, Align::LEFT.cap_middle());
         }
         Sign::Holds(holds, word) => {
             let radius = f64::from(line) * 0.6;

@@ -1,9 +1,13 @@
 //! How far the model can be believed here: what its scores on years that it never saw say, or, without any, what may be
 //! read off the picture and what not.
 
+mod charts;
+pub mod uses;
+
 use embedded_graphics::geometry::Point;
 use embedded_graphics::primitives::Rectangle;
 
+use super::about::sheet_mark;
 use super::emblem::{Moon, moon};
 use super::facts::{Skill, TestShown, Verdict};
 use super::layout::{Layout, area, bottom, right};
@@ -18,14 +22,67 @@ use crate::picture::shape::{bead, diamond};
 use crate::picture::{Align, Canvas, Face, Spot, Stroke, Theme};
 use crate::words::Words;
 
-/// Draws the page.
+/// A sheet of the page.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+enum Sheet {
+    /// What holds without a test.
+    Statements,
+    /// What it may be used for: which sheet of them.
+    Uses(usize),
+    /// Halves judged by halves.
+    Tests,
+    /// Season and duration curve.
+    Season,
+    /// Errors, and years.
+    Errors,
+}
+
+/// How many sheets the page has on this canvas; at least one.
+pub fn sheet_count(canvas: &Canvas<'_>, scene: &Scene<'_>, words: &Words) -> usize {
+    sheets_of(&layout_of(canvas, scene), scene, words).len()
+}
+
+fn sheets_of(layout: &Layout, scene: &Scene<'_>, words: &Words) -> Vec<Sheet> {
+    let Some(skill) = &scene.skill else { return vec![Sheet::Statements] };
+    let mut sheets = Vec::new();
+    if !skill.uses.is_empty() {
+        sheets.extend((0..uses::sheet_count(layout, skill.uses, words)).map(Sheet::Uses));
+    }
+    if scene.fitted && !skill.tests.is_empty() {
+        sheets.push(Sheet::Tests);
+    } else if sheets.is_empty() {
+        sheets.push(Sheet::Statements);
+    }
+    if skill.river.is_some() {
+        sheets.extend([Sheet::Season, Sheet::Errors]);
+    }
+    sheets
+}
+
+/// Draws the sheet that the scene has open, the last one where it asks for one beyond.
 pub fn draw(canvas: &mut Canvas<'_>, scene: &Scene<'_>, theme: &Theme, words: &Words) {
     let layout = layout_of(canvas, scene);
     let answer = Answer::Page(PageAnswer::trust(scene));
     frame::draw_frame(canvas, &layout, scene, View::Trust, &answer, theme, words);
-    match scene.skill.filter(|_| scene.fitted) {
-        Some(skill) if !skill.tests.is_empty() => scores(canvas, &layout, &skill, theme, words),
-        skill => statements(canvas, &layout, skill.as_ref(), theme, words),
+    let skill = scene.skill.as_ref();
+    let sheets = sheets_of(&layout, scene, words);
+    let open = scene.sheet.min(sheets.len() - 1);
+    let mut room = layout.content;
+    if sheets.len() > 1 {
+        sheet_mark(canvas, &layout, room, (open, sheets.len()), theme, words);
+        room.size.height = room.size.height.saturating_sub(layout.note.line_px() as u32);
+    }
+    let inner = Layout { content: room, ..layout };
+    match (sheets[open], skill) {
+        (Sheet::Uses(sheet), Some(skill)) => uses::draw(canvas, &layout, skill.uses, sheet, theme, words),
+        (Sheet::Tests, Some(skill)) => scores(canvas, &inner, skill, theme, words),
+        (Sheet::Season, Some(Skill { river: Some(river), .. })) => {
+            charts::season_and_duration(canvas, &inner, scene.units, river, theme, words);
+        }
+        (Sheet::Errors, Some(Skill { river: Some(river), .. })) => {
+            charts::errors_and_years(canvas, &inner, scene.units, river, theme, words);
+        }
+        _ => statements(canvas, &layout, skill.filter(|_| scene.fitted), theme, words),
     }
 }
 

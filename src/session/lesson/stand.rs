@@ -48,7 +48,7 @@ impl Led {
     }
 
     /// Closes the lesson, as when everybody has left; [`Led::arrange`] then offers everything again.
-    pub fn abandon(&mut self) {
+    pub fn close_for_all(&mut self) {
         let (shelf, free) = (std::mem::take(&mut self.shelf), self.free.take());
         *self = Self { free, ..Self::new(shelf) };
     }

@@ -21,6 +21,7 @@ impl Fingers {
     pub fn hand(&mut self, event: HandEvent, in_menu: bool) -> Option<Hand> {
         Some(match event {
             HandEvent::Turn(detents) => Hand::Turn(detents),
+            HandEvent::TurnDial { .. } | HandEvent::SetDial { .. } => Hand::Other,
             HandEvent::Press => Hand::Press,
             HandEvent::LongPress => Hand::Hold,
             HandEvent::Key(key) => match key {

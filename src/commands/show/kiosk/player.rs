@@ -58,7 +58,7 @@ impl Player {
     /// A visit is over: any lesson is closed, and everything goes back to rest.
     pub fn leave(&mut self) {
         if self.has_lesson() {
-            self.led.abandon();
+            self.led.close_for_all();
             self.offer = self.led.arrange(&self.offer, &mut self.state);
             self.seen_anew();
         }

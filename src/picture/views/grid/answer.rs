@@ -194,6 +194,16 @@ pub(super) fn sign_name(reading: Reading, words: &Words) -> String {
     words.say(&format!("{}.short", Words::key_id(topic, reading.key())), &[])
 }
 
+/// What is read, with the name of the canal that it is about; `gates` are the names of canals and towns, counted
+/// downstream.
+pub fn reading_name(reading: Reading, gates: &[&str], words: &Words) -> String {
+    let sign = sign_name(reading, words);
+    match reading.gate().and_then(|gate| gates.get(gate)) {
+        Some(name) => format!("{name} · {sign}"),
+        None => sign,
+    }
+}
+
 /// A value of what is read, with its unit.
 pub(super) fn reading_value(reading: Reading, value: f64, scene: &Scene<'_>, words: &Words) -> String {
     use crate::signs::Sign;

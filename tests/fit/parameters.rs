@@ -1,10 +1,8 @@
 //! Every point of the search's cube is a valley that keeps what a valley promises, and a fit survives its file.
 
-#[path = "support/valleys.rs"]
-mod valleys;
-
 use std::sync::atomic::AtomicBool;
 
+use super::valleys;
 use deshielo::fit::parameters::{Scale, values_of};
 use deshielo::fit::{
     FitFile, FitFileError, Measures, Parameter, PrecipitationCorrection, Record, Settings, Watch, apply, fit,
@@ -15,8 +13,12 @@ use deshielo::water::dials::Dials;
 use deshielo::water::valley::{MOST_HYDROGRAPH_DAYS, ReachTraits, Valley};
 use proptest::prelude::*;
 
-const CORRECTIONS: [PrecipitationCorrection; 3] =
-    [PrecipitationCorrection::SnowCatch, PrecipitationCorrection::Gradient, PrecipitationCorrection::Factor];
+const CORRECTIONS: [PrecipitationCorrection; 4] = [
+    PrecipitationCorrection::SnowCatch,
+    PrecipitationCorrection::Gradient,
+    PrecipitationCorrection::Factor,
+    PrecipitationCorrection::RainAndSnow,
+];
 
 fn with_reach() -> Valley {
     let mut valley = valleys::bare_basin(2);
@@ -31,7 +33,7 @@ fn assert_keeps_its_promises(valley: &Valley) {
     assert!(valley.ground.quick_days > 0.0 && valley.ground.slow_days > valley.ground.quick_days);
     let base_days = valley.channel.unit_hydrograph_base_days;
     assert!(base_days > 0.0 && base_days <= MOST_HYDROGRAPH_DAYS as f64);
-    assert!(valley.climb.snow_catch_factor >= 1.0 && valley.climb.precipitation_factor > 0.0);
+    assert!(valley.climb.snow_catch_factor > 0.0 && valley.climb.precipitation_factor > 0.0);
     assert!(valley.soil.recharge_power > 0.0 && (2.0 * valley.soil.recharge_power) % 1.0 == 0.0);
     if let Some(reach) = &valley.channel.reach {
         assert!((0.0..=0.5).contains(&reach.inflow_weight));
@@ -42,7 +44,7 @@ fn assert_keeps_its_promises(valley: &Valley) {
 proptest! {
     #[test]
     fn any_point_is_a_sound_valley(
-        at in prop::collection::vec(prop_oneof![Just(0.0), Just(1.0), 0.0..=1.0_f64], 18),
+        at in prop::collection::vec(prop_oneof![Just(0.0), Just(1.0), 0.0..=1.0_f64], 20),
         correction in prop::sample::select(&CORRECTIONS[..]),
     ) {
         for valley in [with_reach(), valleys::bare_basin(2)] {
@@ -60,15 +62,32 @@ proptest! {
 }
 
 #[test]
-fn exactly_one_correction_of_precipitation_is_fitted() {
+fn only_corrections_of_precipitation_that_do_not_undo_each_other_are_fitted() {
     let corrections = [Parameter::SnowCatch, Parameter::PrecipitationGradient, Parameter::PrecipitationFactor];
     for (correction, kept) in CORRECTIONS.into_iter().zip(corrections) {
         let fitted = Parameter::fitted(&with_reach(), correction);
-        assert_eq!(fitted.len(), 18);
+        assert_eq!(fitted.len(), 19);
         let found: Vec<_> = fitted.into_iter().filter(|parameter| corrections.contains(parameter)).collect();
         assert_eq!(found, [kept]);
     }
-    assert_eq!(Parameter::fitted(&valleys::bare_basin(2), PrecipitationCorrection::Factor).len(), 16);
+    let both = Parameter::fitted(&with_reach(), PrecipitationCorrection::RainAndSnow);
+    assert!(!both.contains(&Parameter::PrecipitationGradient) && both.len() == 20);
+    assert_eq!(Parameter::fitted(&valleys::bare_basin(2), PrecipitationCorrection::Factor).len(), 17);
+    // Where every band lies at the station's height, nothing cools on the way.
+    let mut flat = valleys::bare_basin(2);
+    flat.station_elevation_m = 1000.0;
+    flat.bands.iter_mut().for_each(|band| band.elevation_m = 1020.0);
+    assert!(!Parameter::fitted(&flat, PrecipitationCorrection::Factor).contains(&Parameter::MeanLapse));
+}
+
+#[test]
+fn months_keep_what_parts_them() {
+    let mut valley = valleys::bare_basin(2);
+    valley.climb.lapse_c_per_km = std::array::from_fn(|month| -5.0 - 0.2 * month as f64);
+    let set = apply(&valley, &[Parameter::MeanLapse], &[-7.0]);
+    let [was, now] = [&valley, &set].map(|valley| valley.climb.lapse_c_per_km);
+    assert!((now.iter().sum::<f64>() / 12.0 + 7.0).abs() < 1e-12);
+    assert!(((now[11] - now[0]) - (was[11] - was[0])).abs() < 1e-12);
 }
 
 #[test]
@@ -102,7 +121,7 @@ fn fit_file() -> FitFile {
     let settings = Settings { starts: 2, runs_per_start: 30, ..Settings::default() };
     let stop = AtomicBool::new(false);
     let found = fit(&valley, &record, &settings, &Watch { stop: &stop, progress: &|_| {} }).unwrap();
-    let file = FitFile::new(&found, &settings, "checksum of the records");
+    let file = FitFile::new(&found, &settings, &valley, "checksum of the records");
     let fitted = file.apply(&valley).unwrap();
     assert_eq!(fitted, apply(&valley, &found.parameters, &found.sets[0].values));
     file
@@ -119,6 +138,13 @@ fn a_fit_survives_its_file_to_the_last_bit() {
     assert_eq!(again.program_version, env!("CARGO_PKG_VERSION"));
     assert!(!again.is_stale("checksum of the records") && again.is_stale("another"));
     let valley = with_reach();
+    assert!(!again.is_of_another_land(&valley));
+    let mut larger = valley.clone();
+    larger.bands[1].area_km2 += 1.0;
+    assert!(again.is_of_another_land(&larger));
+    let mut other_snow = valley.clone();
+    other_snow.snow.melt_factor_mm_c_day += 1.0;
+    assert!(!again.is_of_another_land(&other_snow), "what the fit replaces does not count");
     let sets = again.apply_sets(&valley).unwrap();
     assert!(sets.len() >= 20);
     assert_eq!(sets[0], again.apply(&valley).unwrap());
@@ -149,7 +175,7 @@ fn a_broken_file_is_refused_with_its_reason() {
     assert_eq!(broken(&|file| file.parameters[1].key = key.clone()), FitFileError::WrongParameter { key: key.clone() });
     assert_eq!(
         broken(&|file| file.sets[1].values.truncate(3)),
-        FitFileError::WrongCount { set: 1, found: 3, needed: 18 }
+        FitFileError::WrongCount { set: 1, found: 3, needed: 19 }
     );
     assert!(matches!(FitFile::read("seed = ["), Err(FitFileError::Unreadable { span: Some(_), .. })));
     assert!(matches!(FitFile::read(""), Err(FitFileError::Unreadable { .. })));

@@ -1,10 +1,31 @@
-//! What comes in from outside: keys, turns, presses and pointers, as plain data.
+//! What comes in from outside: keys, turns, presses and pointers, as plain data, and the hands of a board.
+//!
+//! A hand of a board is decoded in two layers. The decoders are state machines over readings with times: [`quadrature`],
+//! [`button`] (over a [`contact`] that bounces), [`potentiometer`], [`input`] and [`touch`]. They touch no device and build
+//! anywhere. The layers that open devices are on Linux and behind the feature `board`; each hand has a thread of its own,
+//! which tells a [`Listener`] what the hand did and how it is.
 
 use std::sync::Arc;
 use std::sync::mpsc::{self, Receiver};
 use std::time::Duration;
 
 use super::size::FrameSize;
+use crate::water::dials::Dial;
+
+pub mod button;
+pub mod contact;
+#[cfg(all(feature = "board", target_os = "linux"))]
+mod device;
+pub mod input;
+mod key_codes;
+pub mod potentiometer;
+pub mod quadrature;
+mod told;
+pub mod touch;
+
+#[cfg(all(feature = "board", target_os = "linux"))]
+pub use device::{Ads1115, Mcp3008, ReadsShare, start};
+pub use told::{HandState, HandTold, Listener, Reading, Stuck, What};
 
 /// A button held at least so long was held on purpose.
 pub const LONG_PRESS: Duration = Duration::from_millis(600);
@@ -58,6 +79,20 @@ pub enum HandEvent {
     Time(Duration),
     /// The encoder or wheel was turned by so many detents, to the right or away from the hand above 0.
     Turn(i32),
+    /// An encoder that turns one dial only was turned by so many detents.
+    TurnDial {
+        /// The dial.
+        dial: Dial,
+        /// Detents, to the right above 0.
+        detents: i32,
+    },
+    /// A potentiometer of one dial was moved.
+    SetDial {
+        /// The dial.
+        dial: Dial,
+        /// Share of the way from the dial's first stop to its last, 0 to 1.
+        share: f64,
+    },
     /// The button was pressed and let go.
     Press,
     /// The button was held.

@@ -1,9 +1,7 @@
 //! The search against the paper's formulas, and on standard functions against an independent implementation.
 
-mod support;
-
+use crate::support::{assert_check, checks, number};
 use deshielo::fit::search::{STEP_SHARE, Search, first_guesses, inclusion_probability, reflect};
-use support::{assert_check, checks, number};
 
 #[test]
 fn inclusion_probability_and_reflection() {

@@ -1,12 +1,9 @@
 //! Scores against an independent library, and the shape of errors, on series that are made up.
 
-mod support;
-#[path = "support/valleys.rs"]
-mod valleys;
-
+use super::valleys;
+use crate::support::Columns;
 use deshielo::signs::skill;
 use deshielo::water::calendar::CalendarDay;
-use support::Columns;
 
 #[test]
 fn scores_equal_an_independent_librarys() {
@@ -34,7 +31,7 @@ fn scores_equal_an_independent_librarys() {
     ];
     assert_eq!(got.len(), scores.len());
     for (key, got) in got {
-        let want = support::number(&scores[key]);
+        let want = crate::support::number(&scores[key]);
         assert!((got - want).abs() <= 1e-10 * want.abs().max(1.0), "{key}: got {got:?}, want {want:?}");
     }
 }

@@ -86,7 +86,9 @@ fn open_archive<'a>(path: &Path, file: &'a mut File) -> Result<Archive<'a>, Faul
     let start = length.checked_sub(END_BYTES).ok_or(Fault::NotABundle)?;
     file.seek(SeekFrom::Start(start)).and_then(|_| file.read_exact(&mut end)).map_err(&system)?;
     let count = |at: usize| usize::from(u16::from_le_bytes([end[at], end[at + 1]]));
-    if !end.starts_with(END_MARK) || count(20) != 0 {
+    let long = |at: usize| u64::from(u32::from_le_bytes([end[at], end[at + 1], end[at + 2], end[at + 3]]));
+    // Its directory lies just before its end, so that no other one can be taken for it.
+    if !end.starts_with(END_MARK) || count(20) != 0 || long(12) + long(16) != start {
         return Err(Fault::NotABundle);
     }
     if count(8) > MOST_MEMBERS + 1 || count(10) > MOST_MEMBERS + 1 {

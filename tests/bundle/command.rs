@@ -21,7 +21,7 @@ fn said(output: &Output) -> String {
 fn a_valley_travels_with_its_lesson_and_its_board() {
     let desk = Desk::new();
     let board = concat!(env!("CARGO_MANIFEST_DIR"), "/cross/boards/st7789-240x240.toml");
-    let make = ["piedranieve", "--lesson", "line_the_canal", "--board", board, "--out", "valley.zip"];
+    let make = ["demo", "--lesson", "line_the_canal", "--board", board, "--out", "valley.zip"];
     let made = deshielo(&desk, &make);
     assert!(made.status.success(), "{}", said(&made));
     let bytes = fs::read(desk.path("valley.zip")).unwrap();
@@ -29,7 +29,7 @@ fn a_valley_travels_with_its_lesson_and_its_board() {
     assert_eq!(fs::read(desk.path("valley.zip")).unwrap(), bytes, "the same bytes again");
     let opened = deshielo(&desk, &["--open", "valley.zip", "--into", "valley"]);
     assert!(opened.status.success(), "{}", said(&opened));
-    let source = concat!(env!("CARGO_MANIFEST_DIR"), "/demo-data/piedranieve/place.toml");
+    let source = concat!(env!("CARGO_MANIFEST_DIR"), "/demo-data/tresnubes/place.toml");
     assert_eq!(fs::read(desk.path("valley").join(PLACE)).unwrap(), fs::read(source).unwrap());
     assert!(desk.path("valley/lessons/line_the_canal.toml").is_file());
     assert_eq!(fs::read(desk.path("valley/board.toml")).unwrap(), fs::read(board).unwrap());

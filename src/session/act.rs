@@ -133,7 +133,7 @@ impl State {
         match item {
             Item::Dial(dial) if offer.scale(dial).is_none() => {}
             Item::Dial(dial) => self.hold_dial(dial),
-            _ if item.is_of_map() && !self.ring(offer).any(|other| other == item) => {}
+            _ if !self.ring(offer).any(|other| other == item) => {}
             Item::Keep | Item::Undo | Item::Words | Item::Help => {
                 self.go_home();
                 match item {
@@ -182,7 +182,7 @@ impl State {
             if self.shown.focus == Focus::In(Item::Settings) {
                 self.go_home();
             }
-            self.leave_map();
+            self.stay_on_ring(offer);
         }
     }
 

@@ -4,7 +4,6 @@ use super::knob::around;
 use super::offer::Offer;
 use super::ring::Item;
 use super::state::{Focus, State};
-use super::view::View;
 use crate::signs::{Reading, Sign};
 use crate::water::dials::{Dial, Dials};
 
@@ -112,10 +111,10 @@ impl State {
         }
     }
 
-    /// Leaves the things of the map where they are no longer on the ring.
-    pub(super) fn leave_map(&mut self) {
+    /// Leaves a thing that is no longer on the ring: those of the map elsewhere, year and day on the map.
+    pub(super) fn stay_on_ring(&mut self, offer: &Offer) {
         let (Focus::In(item) | Focus::Ring(item)) = self.shown.focus;
-        if item.is_of_map() && self.shown.view != View::Grid {
+        if !self.ring(offer).any(|other| other == item) {
             self.go_home();
         }
     }

@@ -26,6 +26,8 @@ pub(super) fn ring(offer: &Offer, view: View) -> heapless::Vec<Item, MOST_ITEMS>
         Item::Shade,
         Item::Help,
     ];
+    // A map is of all years: it has neither a year nor a day.
+    let others = others.into_iter().filter(|item| !has_map || !matches!(item, Item::Year | Item::Day | Item::Play));
     // There is room for all: ten dials and fifteen others.
     dials.chain([Item::View]).chain(of_map).chain(others).take(MOST_ITEMS).collect()
 }

@@ -34,7 +34,7 @@ hand-some-key = una tecla
 hand-lost = no está
 hand-stuck-button = sigue apretado
 hand-stuck-one-contact = un solo contacto
-hand-stuck-loose = salta sin parar
+hand-stuck-loose = salta
 board-hand-lost = Este mando no responde: { $hand }. Lo demás sigue y se vuelve a probar cada pocos segundos. El sistema dice:
 board-hand-stuck = Algo anda mal con este mando: { $hand }. Dice: { $what }.
 board-hand-back = Este mando responde: { $hand }.
@@ -45,7 +45,7 @@ test-card-red = rojo
 test-card-green = verde
 test-card-blue = azul
 test-card-size = { $width } × { $height }
-test-card-look = La flecha apunta hacia arriba, el anillo es redondo, una línea blanca fina da toda la vuelta y cada color lleva su nombre. Si no, cambie rotation_deg, offset_x_px, blue_first o inverted en el archivo de la placa.
+test-card-look = Flecha hacia arriba, anillo redondo, una línea fina en todo el borde y cada color con su nombre. Si no, cambie rotation_deg, offset_x_px, blue_first o inverted en el archivo de la placa.
 test-card-hands = Mandos
 wiring-foot = Escape termina. Las páginas pasan solas.
 wiring-touch-each = Gire y apriete cada uno. Un anillo quiere decir: aún no dijo nada.
@@ -78,7 +78,7 @@ silent-button =
     .title = Si un botón no dice nada
     .short = ¿Está libre el pin y es ese el gpio_chip? El usuario debe estar en el grupo gpio.
 silent-converter =
-    Gire y mire la barra. Ninguna se mueve: ¿está activo el bus en los ajustes del sistema y es esa la dirección o la selección? Una no se mueve: su cable del medio está suelto. Salta sin parar: el cable del medio está en el aire. No llega al final: cambie low_end_percent o high_end_percent.
+    Gire y mire la barra. Ninguna se mueve: ¿está activo el bus en los ajustes del sistema y es esa la dirección o la selección? Una no se mueve: su cable del medio está suelto. Salta: el cable del medio está en el aire. No llega al final: cambie low_end_percent o high_end_percent.
     .title = Si una perilla con barra no dice nada
     .short = ¿Está activo el bus y está conectado el chip?
 

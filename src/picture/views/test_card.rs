@@ -193,8 +193,15 @@ fn draw_row(canvas: &mut Canvas<'_>, row: &HandRow, place: Rectangle, face: Face
         Mark::Wrong => (theme.ink, theme.lack_ink),
         _ => (theme.ink, theme.water_ink),
     };
+    // A row in one line: smaller rather than cut off.
+    let mut face = face;
+    let both = |face: Face| measure(&row.name, face).width + measure(&row.value, Face::bold(face.px())).width;
+    while both(face) as i32 + layout.gap + 2 > all && face.px() > layout.label.px() {
+        let Some(smaller) = face.smaller() else { break };
+        face = smaller;
+    }
     let value_face = Face::bold(face.px());
-    let value_wide = (measure(&row.value, value_face).width as i32 + 2).min(all * 11 / 20);
+    let value_wide = measure(&row.value, value_face).width as i32 + 2;
     let line_high = face.line_px().min(high);
     let text_top = if row.level.is_some() { y } else { y + (high - line_high) / 2 };
     let name = area(left, text_top, all - value_wide - layout.gap, line_high);

@@ -138,5 +138,5 @@ fn a_stick_is_looked_through_by_name() {
     }
     fs::create_dir(desk.path("folder.zip")).unwrap();
     assert_eq!(bundles_on(&desk.path("")), [desk.path("a.ZIP"), desk.path("b.zip")]);
-    assert_eq!(bundles_on(&desk.path("nowhere")), [PathBuf::new(); 0]);
+    assert!(bundles_on(&desk.path("nowhere")).is_empty());
 }

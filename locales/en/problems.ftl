@@ -307,3 +307,5 @@ problem-cell-empty = The cell “{ $key }” of this row is empty.
     .remedy = Fill it in, or take the row away.
 problem-cell-not-number = “{ $value }” is not a number, in the column “{ $key }”.
     .remedy = Write digits with a decimal point: 12.5.
+problem-exchange-unit = place.toml says “{ $unit }” for “{ $column }”, but the file says “{ $found }”.
+    .remedy = Write what the file says.

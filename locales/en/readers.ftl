@@ -30,8 +30,6 @@ problem-exchange-empty = There is a series without any value.
     .remedy = Ask for the file again, with the years that you need.
 problem-exchange-many = This file has more than { $most } series.
     .remedy = Ask for the series of your valley only.
-problem-exchange-unit = place.toml says “{ $unit }” for “{ $column }”, but the file says “{ $found }”.
-    .remedy = Write what the file says.
 
 ## WaterML
 

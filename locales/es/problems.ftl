@@ -307,3 +307,5 @@ problem-cell-empty = La celda «{ $key }» de esta fila está vacía.
     .remedy = Llénela o quite la fila.
 problem-cell-not-number = «{ $value }» no es un número, en la columna «{ $key }».
     .remedy = Escriba cifras con punto decimal: 12.5.
+problem-exchange-unit = place.toml dice «{ $unit }» para «{ $column }», pero el archivo dice «{ $found }».
+    .remedy = Escriba lo que dice el archivo.

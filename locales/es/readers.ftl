@@ -30,8 +30,6 @@ problem-exchange-empty = Hay una serie sin ningún valor.
     .remedy = Pida otra vez el archivo, con los años que necesita.
 problem-exchange-many = Este archivo tiene más de { $most } series.
     .remedy = Pida solo las series de su valle.
-problem-exchange-unit = place.toml dice «{ $unit }» para «{ $column }», pero el archivo dice «{ $found }».
-    .remedy = Escriba lo que dice el archivo.
 
 ## WaterML
 

@@ -2,9 +2,10 @@
 
 use chrono::{Datelike, Days, NaiveDate};
 
+use crate::water::units::SECONDS_PER_DAY;
+
 /// Years in which a daily record can lie, as for CSV records.
 const YEARS: std::ops::RangeInclusive<i32> = 1750..=2200;
-const SECONDS_PER_DAY: f64 = 86_400.0;
 
 /// An instant as written, without moving it to another zone: the day of a gauge is its local day.
 #[derive(Clone, Copy, Debug, PartialEq)]

@@ -59,7 +59,6 @@ help-handout-sheet = Which sheet of the lesson: work, key
 help-handout-paper = Paper: a4, letter [usual: that of the place]
 help-handout-out = Where to write it: a name that ends in .pdf, .svg or .png [usual: deshielo-handout.pdf]
 help-handout-more = With --lang both the page says everything in English and Spanish, side by side.
-value-lesson = LESSON
 value-sheet = SHEET
 value-paper = PAPER
 

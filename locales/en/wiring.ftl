@@ -64,23 +64,23 @@ silent-screen =
 silent-input-device =
     Is its name in the list of the system (/proc/bus/input/devices)? If not, plug it in again, or look at the overlay that the kernel should load. If the name is there, does the board file say the same? May you read it? The user must be in the group input.
     .title = If a plugged-in hand is silent
-    .short = Plug it in. Is its name right in the board file?
+    .brief = Plug it in. Is its name right in the board file?
 silent-touchscreen =
     Is its name in the list of the system (/proc/bus/input/devices)? If it answers in the wrong place, change left_right_raw and top_bottom_raw. If left and right are up and down, change axes_swapped.
     .title = If touching does nothing
-    .short = Is the touchscreen's name right in the board file?
+    .brief = Is the touchscreen's name right in the board file?
 silent-encoder =
     Turn slowly and watch A and B: both must open and close. One never changes: its wire is loose. Neither does: the middle pin must go to ground. It turns the wrong way: write reversed = true. Two clicks for one step: change edges_per_detent.
     .title = If a knob on pins is silent
-    .short = Are the pins free, and is gpio_chip right? The user must be in the group gpio.
+    .brief = Are the pins free, and is gpio_chip right? The user must be in the group gpio.
 silent-button =
     Press and watch: closed must become open and back. Never closed: one leg goes to the pin, the other to ground, and the legs that belong together are side by side on many buttons. Always closed: the two wires touch.
     .title = If a button is silent
-    .short = Is the pin free, and is gpio_chip right? The user must be in the group gpio.
+    .brief = Is the pin free, and is gpio_chip right? The user must be in the group gpio.
 silent-converter =
     Turn and watch the bar. All stay still: is the bus switched on in the settings of the system, and is the address or chip select right? One stays still: its middle wire is loose. It jumps: the middle wire hangs in the air. It never reaches the end: change low_end_percent or high_end_percent.
     .title = If a knob with a bar is silent
-    .short = Is the bus switched on, and is the chip wired?
+    .brief = Is the bus switched on, and is the chip wired?
 
 ## The table of wires
 

@@ -59,7 +59,6 @@ help-handout-sheet = Cuál hoja de la lección: work (trabajo), key (respuestas)
 help-handout-paper = Papel: a4, letter (carta) [lo usual: el del lugar]
 help-handout-out = Dónde escribirla: un nombre que termine en .pdf, .svg o .png [lo usual: deshielo-handout.pdf]
 help-handout-more = Con --lang both la hoja dice todo en inglés y en español, lado a lado.
-value-lesson = LECCIÓN
 value-sheet = HOJA
 value-paper = PAPEL
 

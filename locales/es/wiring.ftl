@@ -64,23 +64,23 @@ silent-screen =
 silent-input-device =
     ¿Está su nombre en la lista del sistema (/proc/bus/input/devices)? Si no, vuelva a enchufarlo, o revise el overlay que debe cargar el núcleo. Si está, ¿dice lo mismo el archivo de la placa? ¿Tiene permiso de leerlo? El usuario debe estar en el grupo input.
     .title = Si un mando enchufado no dice nada
-    .short = Enchúfelo. ¿Está bien su nombre en el archivo de la placa?
+    .brief = Enchúfelo. ¿Está bien su nombre en el archivo de la placa?
 silent-touchscreen =
     ¿Está su nombre en la lista del sistema (/proc/bus/input/devices)? Si responde en otro lugar, cambie left_right_raw y top_bottom_raw. Si izquierda y derecha son arriba y abajo, cambie axes_swapped.
     .title = Si al tocar no pasa nada
-    .short = ¿Está bien el nombre de la pantalla táctil en el archivo de la placa?
+    .brief = ¿Está bien el nombre de la pantalla táctil en el archivo de la placa?
 silent-encoder =
     Gire despacio y mire A y B: los dos deben abrir y cerrar. Uno nunca cambia: su cable está suelto. Ninguno cambia: la pata del medio debe ir a tierra. Gira al revés: escriba reversed = true. Dos clics por paso: cambie edges_per_detent.
     .title = Si una perilla en los pines no dice nada
-    .short = ¿Están libres los pines y es ese el gpio_chip? El usuario debe estar en el grupo gpio.
+    .brief = ¿Están libres los pines y es ese el gpio_chip? El usuario debe estar en el grupo gpio.
 silent-button =
     Apriete y mire: debe pasar de abierto a cerrado y volver. Nunca cierra: una pata va al pin y la otra a tierra; en muchos botones las patas unidas están lado a lado. Siempre cerrado: los dos cables se tocan.
     .title = Si un botón no dice nada
-    .short = ¿Está libre el pin y es ese el gpio_chip? El usuario debe estar en el grupo gpio.
+    .brief = ¿Está libre el pin y es ese el gpio_chip? El usuario debe estar en el grupo gpio.
 silent-converter =
     Gire y mire la barra. Ninguna se mueve: ¿está activo el bus en los ajustes del sistema y es esa la dirección o la selección? Una no se mueve: su cable del medio está suelto. Salta: el cable del medio está en el aire. No llega al final: cambie low_end_percent o high_end_percent.
     .title = Si una perilla con barra no dice nada
-    .short = ¿Está activo el bus y está conectado el chip?
+    .brief = ¿Está activo el bus y está conectado el chip?
 
 ## La tabla de cables
 

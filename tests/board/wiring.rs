@@ -84,7 +84,7 @@ fn nothing_is_cut_off_in_any_language_at_any_size() {
                 faults.extend(strict.faults().iter().map(|fault| format!("{what} {tag} {wide}x{high}: {fault}")));
             };
             note("colours", &paint(wide, high, |canvas| draw_colours(canvas, &words)).1);
-            for id in ["silent-encoder.short", "silent-button.short", "wiring-stuck", "wiring-touch-each"] {
+            for id in ["silent-encoder.brief", "silent-button.brief", "wiring-stuck", "wiring-touch-each"] {
                 let advice = words.say(id, &[]);
                 let card = HandsCard { rows: &rows, at: 6, advice: &advice };
                 note(id, &paint(wide, high, |canvas| draw_hands(canvas, &card, &Theme::LIGHT, &words)).1);

@@ -200,7 +200,7 @@ fn the_old_answer_stands_until_the_new_one_is_there() {
 }
 
 #[test]
-fn forty_years_leave_the_kiosk_half_of_its_memory() {
+fn forty_years_leave_the_kiosk_seven_of_its_sixteen_megabytes() {
     let ground = Ground::new(valleys::whole_valley(), 40, 1);
     let source = ground.source();
     let mut answers = Answers::new(&source).unwrap();
@@ -212,7 +212,7 @@ fn forty_years_leave_the_kiosk_half_of_its_memory() {
         // Three runs under three weathers are the most that there is.
         let bytes = answers.bytes();
         println!("three runs of 40 years hold {bytes} bytes");
-        assert!((4_000_000..8_000_000).contains(&bytes), "{bytes} bytes");
+        assert!((4_000_000..9_000_000).contains(&bytes), "{bytes} bytes");
     }
 }
 

@@ -4,8 +4,9 @@ mod found;
 mod lessons;
 mod report_json;
 
+pub(super) use lessons::built_in as built_in_lesson;
 #[cfg(feature = "pdf")]
-pub(super) use lessons::{built_in as built_in_lesson, is_lesson};
+pub(super) use lessons::is_lesson;
 
 use std::path::PathBuf;
 

@@ -242,7 +242,7 @@ impl Desk {
         match wrong.and_then(|row| Some((row, hands.get(row.hand)?))) {
             Some((row, hand)) => match &row.state {
                 Some(HandState::Lost(reason)) => {
-                    let todo = words.say(&format!("{}.short", silent_id(hand)), &[]);
+                    let todo = words.say(&format!("{}.brief", silent_id(hand)), &[]);
                     format!("{todo} ({reason})")
                 }
                 Some(HandState::Stuck(_)) => words.say("wiring-stuck", &[]),

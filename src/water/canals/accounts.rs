@@ -85,25 +85,25 @@ impl Stored<'_> {
         let pool_open = shares.pool_share > 0.0 && *self.pool_m3 < shares.pool_capacity_m3;
         let pool_share = if pool_open { shares.pool_share } else { 0.0 };
         let mut weight = pool_share;
-        for i in 0..WIDTH {
+        for (i, open) in open_share.iter_mut().enumerate() {
             let is_open = self.account_m3[i] < shares.capacity_m3[i];
-            open_share[i] = if is_open { shares.share[i] } else { 0.0 };
-            weight += open_share[i];
+            *open = if is_open { shares.share[i] } else { 0.0 };
+            weight += *open;
         }
         if weight <= 0.0 {
             return false;
         }
         let level = amount_m3 / weight;
         let mut overflows = pool_open & (level * pool_share >= shares.pool_capacity_m3 - *self.pool_m3);
-        for i in 0..WIDTH {
+        for (i, open) in open_share.iter().enumerate() {
             let room = shares.capacity_m3[i] - self.account_m3[i];
-            overflows |= (open_share[i] > 0.0) & (level * open_share[i] >= room);
+            overflows |= (*open > 0.0) & (level * open >= room);
         }
         if overflows {
             return false;
         }
-        for i in 0..WIDTH {
-            self.account_m3[i] += level * open_share[i];
+        for (i, open) in open_share.iter().enumerate() {
+            self.account_m3[i] += level * open;
         }
         *self.pool_m3 += level * pool_share;
         true

@@ -106,10 +106,10 @@ impl KioskPlayer {
             None => kiosk = kiosk.left_alone(),
         }
         // A lesson that the command line names goes before one that was under way.
-        if let Some(kept) = guesses.as_ref().filter(|_| settings.place == place && !player.has_lesson()) {
-            if player.take_up(kept, &words) {
-                kiosk.set_lesson(true);
-            }
+        if let Some(kept) = guesses.as_ref().filter(|_| settings.place == place && !player.has_lesson())
+            && player.take_up(kept, &words)
+        {
+            kiosk.set_lesson(true);
         }
         let stamp = player.stamp();
         let system_files = Path::new(SYSTEM_FILES);

@@ -34,7 +34,7 @@ hand-some-key = a key
 hand-lost = not there
 hand-stuck-button = stays down
 hand-stuck-one-contact = one contact only
-hand-stuck-loose = jumps
+hand-stuck-loose = wavers
 board-hand-lost = This hand does not answer: { $hand }. All goes on, and it is tried again every few seconds. The system says:
 board-hand-stuck = Something is wrong with this hand: { $hand }. It says: { $what }.
 board-hand-back = This hand answers: { $hand }.
@@ -78,7 +78,7 @@ silent-button =
     .title = If a button is silent
     .brief = Is the pin free, and is gpio_chip right? The user must be in the group gpio.
 silent-converter =
-    Turn and watch the bar. All stay still: is the bus switched on in the settings of the system, and is the address or chip select right? One stays still: its middle wire is loose. It jumps: the middle wire hangs in the air. It never reaches the end: change low_end_percent or high_end_percent.
+    Turn and watch the bar. All stay still: is the bus switched on in the settings of the system, and is the address or chip select right? One stays still: its middle wire is loose. It wavers: the middle wire hangs in the air. It never reaches the end: change low_end_percent or high_end_percent.
     .title = If a knob with a bar is silent
     .brief = Is the bus switched on, and is the chip wired?
 

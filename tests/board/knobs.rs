@@ -55,8 +55,11 @@ impl Shaft {
     }
 }
 
-/// Turns of so many detents, each edge after a pause and with bounces that together take less than the bounce time.
-fn turns() -> impl Strategy<Value = Vec<(bool, u8, Vec<(u64, Vec<u64>)>)>> {
+/// A turn to the right or not, by so many detents; each edge after a pause, with its bounces, µs.
+type Turn = (bool, u8, Vec<(u64, Vec<u64>)>);
+
+/// Turns of which the bounces of an edge together take less than the bounce time.
+fn turns() -> impl Strategy<Value = Vec<Turn>> {
     let edge = (1_300_u64..20_000, proptest::collection::vec(1_u64..100, 0..9));
     let turn = (any::<bool>(), 1_u8..6, proptest::collection::vec(edge, 24));
     proptest::collection::vec(turn, 1..12)

@@ -43,7 +43,8 @@ fn everything_comes_back_from_a_folder_and_nobody_else_can_read_it() {
 
 #[test]
 fn a_damaged_file_is_set_aside_and_said() {
-    let harm: [(&str, fn(&[u8]) -> Vec<u8>, Damage); 5] = [
+    type Harm = fn(&[u8]) -> Vec<u8>;
+    let harm: [(&str, Harm, Damage); 5] = [
         ("emptied", |_| Vec::new(), Damage::NoSeal),
         ("cut in half", |bytes| bytes[..bytes.len() / 2].to_vec(), Damage::Torn),
         (
@@ -102,7 +103,7 @@ fn a_full_or_read_only_card_is_said_once_and_changes_nothing() {
             assert_eq!(keep.keep_settings(&settings("new")), None, "said once");
         }
         assert_eq!(keep.troubles().collect::<Vec<_>>(), [trouble]);
-        assert_eq!(keep.layer().leavings().into_iter().collect::<Vec<_>>(), [kept.clone()]);
+        assert_eq!(keep.layer().leavings().into_iter().collect::<Vec<_>>(), std::slice::from_ref(&kept));
         // There is room again.
         let mut keep = Keep::new(Disk::with(&kept));
         assert_eq!(keep.settings(), settings("old"));

@@ -62,7 +62,7 @@ silent-screen =
     Oscura: ¿está conectada la luz de fondo y hay 3,3 V en su alimentación? Blanca o gris: revise los cables de reinicio y de datos/órdenes. Revuelta: baje speed_mhz y acorte los cables. No hay ningún /dev/spidev*: active el bus SPI en los ajustes del sistema.
     .title = Si la pantalla no muestra nada
 silent-input-device =
-    ¿Está su nombre en la lista del sistema (/proc/bus/input/devices)? Si no, vuelva a enchufarlo, o revise el overlay que debe cargar el núcleo. Si está, ¿dice lo mismo el archivo de la placa? ¿Tiene permiso de leerlo? El usuario debe estar en el grupo input.
+    ¿Está su nombre en la lista del sistema (/proc/bus/input/devices)? Si no, vuelva a enchufarlo, o revise el overlay que debe cargar el núcleo. Si está, ¿dice lo mismo el archivo de la placa? ¿Tiene permiso de leerlo? La cuenta que usa el programa debe estar en el grupo input.
     .title = Si un mando enchufado no dice nada
     .brief = Enchúfelo. ¿Está bien su nombre en el archivo de la placa?
 silent-touchscreen =
@@ -70,13 +70,13 @@ silent-touchscreen =
     .title = Si al tocar no pasa nada
     .brief = ¿Está bien el nombre de la pantalla táctil en el archivo de la placa?
 silent-encoder =
-    Gire despacio y mire A y B: los dos deben abrir y cerrar. Uno nunca cambia: su cable está suelto. Ninguno cambia: la pata del medio debe ir a tierra. Gira al revés: escriba reversed = true. Dos clics por paso: cambie edges_per_detent.
+    Gire despacio y mire A y B: los dos deben abrir y cerrar. Uno nunca cambia: su cable está suelto. Ninguno cambia: la pata del medio debe ir a tierra. Va al revés: escriba reversed = true. Dos clics por paso: cambie edges_per_detent.
     .title = Si una perilla en los pines no dice nada
-    .brief = ¿Están libres los pines y es ese el gpio_chip? El usuario debe estar en el grupo gpio.
+    .brief = ¿Están libres los pines y es ese el gpio_chip? La cuenta que usa el programa debe estar en el grupo gpio.
 silent-button =
     Apriete y mire: debe pasar de abierto a cerrado y volver. Nunca cierra: una pata va al pin y la otra a tierra; en muchos botones las patas unidas están lado a lado. Siempre cerrado: los dos cables se tocan.
     .title = Si un botón no dice nada
-    .brief = ¿Está libre el pin y es ese el gpio_chip? El usuario debe estar en el grupo gpio.
+    .brief = ¿Está libre el pin y es ese el gpio_chip? La cuenta que usa el programa debe estar en el grupo gpio.
 silent-converter =
     Gire y mire la barra. Ninguna se mueve: ¿está activo el bus en los ajustes del sistema y es esa la dirección o la selección? Una no se mueve: su cable del medio está suelto. Salta: el cable del medio está en el aire. No llega al final: cambie low_end_percent o high_end_percent.
     .title = Si una perilla con barra no dice nada

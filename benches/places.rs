@@ -4,7 +4,7 @@
 //! 4.0 ms for 41 years on a shared server core at baseline x86-64, of which the basin takes 0.58, reservoir, canals and
 //! fields 2.8, the ledger 0.15 and the signs 0.4 to 0.5.
 //!
-//! What bounds it: a day of the works is some 2 900 instructions in about 180 ns. Leaving out a tenth of them gained
+//! What bounds it: a day of the works is some 3 000 instructions in about 180 ns. Leaving out a tenth of them gained
 //! only 3 %, so that it is rather the chain through the day that counts: content, lake, accounts, claims in order of
 //! dates, draws, delivery, root zone, and that again next morning, with a division at most of its links.
 

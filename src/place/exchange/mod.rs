@@ -6,7 +6,7 @@
 //!
 //! Sources: OGC 10-126r4, *OGC WaterML 2.0: Part 1, Timeseries* (2014); OGC 10-092r3, *NetCDF Classic and 64-bit Offset
 //! Format* (2011), appendix grammar; *NetCDF Climate and Forecast (CF) Metadata Conventions* 1.8, chapters 4.4, 7.1, 8.1
-//! and 9. All from memory, and tried on files that an independent library wrote.
+//! and 9. All from memory. NetCDF was tried on files that an independent library wrote, WaterML on one by hand.
 
 mod cf;
 mod clock;

@@ -14,7 +14,7 @@ use crate::session::kiosk::Count;
 
 /// Days that are kept one by one: a year and a little.
 pub const MOST_DAYS: usize = 370;
-/// Languages and lessons that are counted by name on one day; the rest counts under [`OTHERS`].
+/// Languages and lessons that are counted by name on one day; the rest counts under `OTHERS`.
 pub const MOST_NAMES: usize = 6;
 /// Letters of a name that are kept.
 const MOST_LETTERS: usize = 32;

@@ -29,7 +29,7 @@ pub struct StoreTrust {
 }
 
 impl StoreTrust {
-    /// Of two series as long as `calendar`; `None` for fewer than [`FEWEST_DAYS`] days with both.
+    /// Of two series as long as `calendar`; `None` for fewer than `FEWEST_DAYS` days with both.
     pub fn of(calendar: &[CalendarDay], start_month: u8, modelled: &[f64], observed: &[f64]) -> Option<Self> {
         let pairs = || modelled.iter().zip(observed).filter(|(m, o)| !m.is_nan() && !o.is_nan());
         let days = pairs().count();

@@ -7,7 +7,7 @@
 //!
 //! * **Visit**: from a touch until nothing was touched for two minutes (a quarter of an hour while a lesson is under way).
 //!   Shortly before the end it asks whether anyone is there. Then everything goes back to rest.
-//! * **Stroll**: the script of [`stroll`]. A turn, a key or a finger takes over just where it is; a press only takes over.
+//! * **Stroll**: the script of `stroll`. A turn, a key or a finger takes over just where it is; a press only takes over.
 //! * **Night**, only while the clock is believed ([`clock`]): the stroll is dim, and after ten minutes it sleeps, dark and
 //!   nearly without waking. A touch wakes it and does nothing else. Should the clock become doubtful, it wakes.
 //! * **Staff**: three holds in a row, or a finger held in the corner, then a PIN.

@@ -16,8 +16,8 @@
 //!
 //! # What the host does
 //!
-//! It gives every event to [`Led::take`] first, and to the session only where [`Taken::passes`]. It opens a lesson when
-//! [`Taken::open`] asks for one ([`Led::begin`]), and when [`Taken::stands`] says that the instrument has to stand
+//! It gives every event to [`Led::take`] first, and to the session only where [`Taken::pass`]. It opens a lesson when
+//! [`Taken::open`] asks for one ([`Led::begin`]), and when [`Taken::stand`] says that the instrument has to stand
 //! elsewhere, it takes the offer that [`Led::arrange`] makes. What must outlive a power cut is [`Led::kept`], a value
 //! that goes through `serde`; [`Led::take_up`] brings it back.
 
